@@ -1,0 +1,21 @@
+import { defineConfig } from 'astro/config';
+import mdx from '@astrojs/mdx';
+import node from '@astrojs/node';
+import react from '@astrojs/react';
+import tailwind from '@astrojs/tailwind';
+import auth from 'auth-astro';
+
+export default defineConfig({
+  output: 'server',
+  adapter: node({ mode: 'middleware' }),
+  integrations: [react(), mdx(), tailwind({ applyBaseStyles: false }), auth()],
+  // Hosts are checked in server.mjs, which knows APP_ORIGIN; Astro would otherwise lose the port of the
+  // request's URL and refuse every form.
+  security: { checkOrigin: true, allowedDomains: [{}] },
+  trailingSlash: 'ignore',
+  devToolbar: { enabled: false },
+  server: { port: Number(process.env.PORT ?? 4321), host: process.env.HOST ?? '127.0.0.1' },
+  vite: {
+    ssr: { external: ['sqlite3', 'sequelize', 'umzug', '@node-rs/argon2'] },
+  },
+});

@@ -1,0 +1,270 @@
+import { z } from 'zod';
+import { FrontmatterFields, SKILLS } from '../procedure/schema';
+import { REVISION_STATES } from '../revision/types';
+import { ROLES } from '../people/may';
+
+/** What crosses the wire under `/api/v1`. The OpenAPI document is made from these. Dates are ISO 8601 in UTC. */
+
+const Id = z.string().uuid().describe('UUIDv7');
+export const ProcedureNumber = z
+  .string()
+  .regex(/^P-\d{4,6}$/)
+  .describe('For example P-0142');
+export const RevisionLetter = z
+  .string()
+  .regex(/^[A-HJ-NPRT-WY]{1,2}$/)
+  .describe('By ASME Y14.35, for example C');
+
+export const Problem = z
+  .object({
+    type: z.string(),
+    title: z.string(),
+    status: z.number().int(),
+    detail: z.string(),
+    errors: z
+      .array(
+        z.object({ path: z.string(), message: z.string(), line: z.number().optional(), column: z.number().optional() }),
+      )
+      .optional(),
+  })
+  .passthrough()
+  .describe('RFC 9457 problem document');
+
+export const BookRef = z.object({
+  kind: z.enum(['common', 'shop']),
+  shopId: z.string().nullable(),
+  name: z.string().describe('"Common book" or the name of the shop'),
+});
+
+export const UnitSystem = z.enum(['metric', 'inch']);
+
+export const Me = z.object({
+  id: Id,
+  name: z.string(),
+  email: z.string(),
+  units: UnitSystem,
+  shop: z.object({ id: z.string(), name: z.string() }).nullable().describe('The shop the person works in now'),
+  roles: z.array(
+    z.object({
+      in: z.enum(['shop', 'common', 'network']),
+      shopId: z.string().nullable(),
+      name: z.string(),
+      role: z.enum(ROLES),
+    }),
+  ),
+});
+
+export const PersonRef = z.object({ id: z.string(), name: z.string(), shop: z.string().nullable() });
+
+export const RevisionSummary = z.object({
+  letter: RevisionLetter,
+  state: z.enum(REVISION_STATES),
+  hash: z.string().describe('SHA-256 of the canonical text, hex'),
+  sheetCheck: z.string().describe('First 8 hex digits of the hash'),
+  publishedAt: z.string(),
+  reason: z.string(),
+  author: PersonRef,
+  reviewers: z.array(PersonRef),
+});
+
+export const ProcedureSummary = z.object({
+  number: ProcedureNumber,
+  title: z.string(),
+  summary: z.string(),
+  book: BookRef,
+  system: z.string(),
+  engines: z.array(z.string()),
+  minutes: z.number(),
+  skill: z.enum(SKILLS),
+  critical: z.boolean(),
+  holds: z.number().int(),
+  revision: z.object({ letter: RevisionLetter, hash: z.string(), publishedAt: z.string() }),
+});
+
+export const Reference = z.union([
+  z.object({ kind: z.literal('torque'), key: z.string(), pass: z.number().int().optional() }),
+  z.object({ kind: z.enum(['limit', 'part', 'figure']), key: z.string() }),
+  z.object({ kind: z.literal('timer'), key: z.string(), stage: z.enum(['skin-over', 'cure']).optional() }),
+  z.object({ kind: z.literal('worksheet'), worksheet: z.string(), keys: z.array(z.string()) }),
+]);
+
+export const SheetStep = z.object({
+  id: z.string(),
+  number: z.number().int(),
+  title: z.string(),
+  cautions: z.array(z.string()),
+  html: z.string(),
+  holds: z.array(z.string()),
+  references: z.array(Reference),
+  text: z.string(),
+});
+
+export const Sheet = z.object({
+  number: ProcedureNumber,
+  title: z.string(),
+  book: BookRef,
+  revision: RevisionSummary,
+  current: z
+    .object({ letter: RevisionLetter, publishedAt: z.string() })
+    .describe('The revision to work from; the same as `revision` on a current sheet'),
+  earlier: z.number().int().describe('How many revisions stand before this one'),
+  openProposals: z.number().int().describe('Proposals waiting for review on this procedure'),
+  frontmatter: FrontmatterFields,
+  introHtml: z.string(),
+  steps: z.array(SheetStep),
+  source: z.string(),
+});
+
+export const SourceProblem = z.object({
+  line: z.number().int(),
+  column: z.number().int(),
+  message: z.string(),
+  path: z.string().optional(),
+});
+
+export const CheckRequest = z.object({
+  source: z.string(),
+  preview: z.boolean().optional().describe('Also return the rendered steps'),
+});
+export const CheckResult = z.object({
+  ok: z.boolean(),
+  errors: z.array(SourceProblem),
+  notices: z.array(SourceProblem),
+  clamp: z
+    .array(z.object({ key: z.string(), message: z.string() }))
+    .describe('Clamp check of each torque; empty until torques are checked against the fastener'),
+  preview: z.object({ frontmatter: FrontmatterFields, introHtml: z.string(), steps: z.array(SheetStep) }).optional(),
+});
+
+const Reason = z.string().trim().max(4000);
+export const StartProcedure = z.object({
+  book: z.string().describe('"common" or a shop id'),
+  source: z.string(),
+  reason: Reason.default(''),
+});
+export const StartProposal = z.object({ base: RevisionLetter, source: z.string(), reason: Reason.default('') });
+export const SaveProposal = z.object({
+  source: z.string().optional(),
+  reason: Reason.optional(),
+  base: RevisionLetter.optional().describe('Say that the text now stands on this revision'),
+});
+export const GiveReason = z.object({
+  reason: z.string().trim().min(1, 'Write why, so that the author can act on it').max(4000),
+  anchor: z.string().max(120).nullable().default(null).describe('`step:<id>` or the path of a value'),
+});
+
+export const Agreement = z.object({
+  person: PersonRef,
+  at: z.string(),
+  stands: z.boolean().describe('False once the text changed after it'),
+});
+export const Remark = z.object({
+  id: z.string(),
+  kind: z.enum(['returned', 'declined']),
+  person: PersonRef,
+  at: z.string(),
+  text: z.string(),
+  anchor: z.string().nullable(),
+});
+
+export const ProposalSummary = z.object({
+  id: Id,
+  number: ProcedureNumber,
+  title: z.string(),
+  book: BookRef,
+  state: z.enum(REVISION_STATES),
+  version: z.number().int(),
+  base: RevisionLetter.nullable().describe('null for a new procedure'),
+  stale: z.boolean().describe('True where a later revision than the base is published'),
+  author: PersonRef,
+  reason: z.string(),
+  critical: z.boolean(),
+  criticalReasons: z.array(z.string()),
+  agreementsNeeded: z.number().int(),
+  agreements: z.number().int(),
+  createdAt: z.string(),
+  updatedAt: z.string(),
+  proposedAt: z.string().nullable(),
+});
+
+export const Proposal = ProposalSummary.extend({
+  source: z.string(),
+  agreed: z.array(Agreement),
+  remarks: z.array(Remark),
+  currentLetter: RevisionLetter.nullable(),
+  publishedLetter: RevisionLetter.nullable().describe('Set once published'),
+  may: z.object({
+    edit: z.boolean(),
+    submit: z.boolean(),
+    return: z.boolean(),
+    decline: z.boolean(),
+    agree: z.boolean(),
+    publish: z.boolean(),
+  }),
+  whyNot: z.record(z.string()).describe('For an act that is refused: the reason in words'),
+});
+
+const WordRun = z.object({ kind: z.enum(['same', 'removed', 'added']), text: z.string() });
+export const Comparison = z.object({
+  values: z.array(
+    z.object({
+      path: z.string(),
+      list: z.string(),
+      key: z.string().nullable(),
+      kind: z.enum(['added', 'removed', 'changed']),
+      label: z.string(),
+      detail: z.string().nullable(),
+      from: z.string().nullable(),
+      to: z.string().nullable(),
+      percent: z.number().nullable(),
+      critical: z.string().nullable(),
+    }),
+  ),
+  intro: z.array(WordRun),
+  steps: z.array(
+    z.object({
+      id: z.string(),
+      kind: z.enum(['same', 'edited', 'added', 'removed']),
+      moved: z.boolean(),
+      fromNumber: z.number().nullable(),
+      toNumber: z.number().nullable(),
+      title: z.array(WordRun),
+      body: z.array(WordRun),
+      cautions: z.object({ from: z.array(z.string()), to: z.array(z.string()) }),
+      critical: z.string().nullable(),
+    }),
+  ),
+  criticalReasons: z.array(z.string()),
+  identical: z.boolean(),
+});
+
+export const SearchHit = z.object({
+  number: ProcedureNumber,
+  title: z.string(),
+  summary: z.string(),
+  engines: z.array(z.string()),
+  system: z.string(),
+  minutes: z.number(),
+  skill: z.enum(SKILLS),
+  holds: z.number(),
+  letter: RevisionLetter,
+  publishedAt: z.string(),
+  book: z.string(),
+  matched: z
+    .array(z.object({ field: z.string(), text: z.string(), step: z.number().nullable() }))
+    .describe('What matched, in words'),
+});
+
+export type Problem = z.infer<typeof Problem>;
+export type BookRef = z.infer<typeof BookRef>;
+export type UnitSystem = z.infer<typeof UnitSystem>;
+export type Me = z.infer<typeof Me>;
+export type PersonRef = z.infer<typeof PersonRef>;
+export type RevisionSummary = z.infer<typeof RevisionSummary>;
+export type ProcedureSummary = z.infer<typeof ProcedureSummary>;
+export type Sheet = z.infer<typeof Sheet>;
+export type SheetStep = z.infer<typeof SheetStep>;
+export type CheckResult = z.infer<typeof CheckResult>;
+export type ProposalSummary = z.infer<typeof ProposalSummary>;
+export type Proposal = z.infer<typeof Proposal>;
+export type SearchHit = z.infer<typeof SearchHit>;
