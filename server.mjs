@@ -1,0 +1,87 @@
+import { createServer } from 'node:http';
+import { fileURLToPath } from 'node:url';
+import compression from 'compression';
+import sirv from 'sirv';
+
+/**
+ * The production entry. It settles what Astro must not guess: which hosts are ours, what the public
+ * address is, and how much a request may carry. Everything else is Astro's handler.
+ */
+
+try {
+  process.loadEnvFile(fileURLToPath(new URL('.env', import.meta.url)));
+} catch {
+  // No .env: the defaults of .env.example hold.
+}
+
+const port = Number(process.env.PORT ?? 4321);
+const host = process.env.HOST || '127.0.0.1';
+const origin = new URL(process.env.APP_ORIGIN || `http://${host === '0.0.0.0' || host === '::' ? 'localhost' : host}:${port}`);
+const trustedHops = Number(process.env.TRUST_PROXY_HOPS ?? 0);
+/** Largest request body, in bytes. The API refuses earlier, with a problem document of its own. */
+const BODY_LIMIT = 1024 * 1024;
+
+const { handler } = await import('./dist/server/entry.mjs');
+
+const assets = sirv(fileURLToPath(new URL('dist/client', import.meta.url)), {
+  brotli: true,
+  gzip: true,
+  etag: true,
+  setHeaders: (res, path) => {
+    res.setHeader('X-Content-Type-Options', 'nosniff');
+    res.setHeader(
+      'Cache-Control',
+      path.startsWith('/_astro/') ? 'public, max-age=31536000, immutable' : 'public, max-age=3600',
+    );
+  },
+});
+const compress = compression({ threshold: 1024 });
+
+const knownHosts = new Set(
+  process.env.APP_ORIGIN ? [origin.host] : [`localhost:${port}`, `127.0.0.1:${port}`, `[::1]:${port}`, origin.host],
+);
+
+const refuse = (res, status, title, detail) => {
+  const body = JSON.stringify({ type: 'about:blank', title, status, detail });
+  res.writeHead(status, { 'content-type': 'application/problem+json', connection: 'close' });
+  res.end(body);
+};
+
+/** Forwarded headers are believed only as far as the proxies we were told of; the rest is a client's claim. */
+function settleForwarding(req) {
+  const chain = String(req.headers['x-forwarded-for'] ?? '')
+    .split(',')
+    .map((part) => part.trim())
+    .filter(Boolean);
+  for (const name of Object.keys(req.headers)) if (name.startsWith('x-forwarded-') || name === 'forwarded') delete req.headers[name];
+  if (trustedHops > 0 && chain.length >= trustedHops) req.headers['x-forwarded-for'] = chain.at(-trustedHops);
+  if (process.env.APP_ORIGIN) {
+    req.headers['x-forwarded-proto'] = origin.protocol.slice(0, -1);
+    req.headers['x-forwarded-host'] = origin.host;
+  }
+}
+
+const server = createServer((req, res) => {
+  if (!knownHosts.has(req.headers.host ?? '')) return refuse(res, 421, 'Misdirected request', 'This server does not answer for that host.');
+  if (req.headers['transfer-encoding']) return refuse(res, 411, 'Length required', 'Send the body with a Content-Length.');
+  if (Number(req.headers['content-length'] ?? 0) > BODY_LIMIT)
+    return refuse(res, 413, 'Too large', 'A request may carry 1 MB at most.');
+  settleForwarding(req);
+  assets(req, res, () => compress(req, res, () => void handler(req, res)));
+});
+
+server.requestTimeout = 30_000;
+server.listen(port, host, () => {
+  console.log(`Matchmark answers at ${origin.origin}`);
+});
+
+let closing = false;
+const close = () => {
+  if (closing) return;
+  closing = true;
+  server.close(() => process.exit(0));
+  server.closeIdleConnections();
+  setTimeout(() => process.exit(0), 5000).unref();
+};
+process.on('SIGTERM', close);
+process.on('SIGINT', close);
