@@ -16,7 +16,9 @@ try {
 
 const port = Number(process.env.PORT ?? 4321);
 const host = process.env.HOST || '127.0.0.1';
-const origin = new URL(process.env.APP_ORIGIN || `http://${host === '0.0.0.0' || host === '::' ? 'localhost' : host}:${port}`);
+const origin = new URL(
+  process.env.APP_ORIGIN || `http://${host === '0.0.0.0' || host === '::' ? 'localhost' : host}:${port}`,
+);
 const trustedHops = Number(process.env.TRUST_PROXY_HOPS ?? 0);
 /** Largest request body, in bytes. The API refuses earlier, with a problem document of its own. */
 const BODY_LIMIT = 1024 * 1024;
@@ -53,7 +55,8 @@ function settleForwarding(req) {
     .split(',')
     .map((part) => part.trim())
     .filter(Boolean);
-  for (const name of Object.keys(req.headers)) if (name.startsWith('x-forwarded-') || name === 'forwarded') delete req.headers[name];
+  for (const name of Object.keys(req.headers))
+    if (name.startsWith('x-forwarded-') || name === 'forwarded') delete req.headers[name];
   if (trustedHops > 0 && chain.length >= trustedHops) req.headers['x-forwarded-for'] = chain.at(-trustedHops);
   if (process.env.APP_ORIGIN) {
     req.headers['x-forwarded-proto'] = origin.protocol.slice(0, -1);
@@ -62,8 +65,10 @@ function settleForwarding(req) {
 }
 
 const server = createServer((req, res) => {
-  if (!knownHosts.has(req.headers.host ?? '')) return refuse(res, 421, 'Misdirected request', 'This server does not answer for that host.');
-  if (req.headers['transfer-encoding']) return refuse(res, 411, 'Length required', 'Send the body with a Content-Length.');
+  if (!knownHosts.has(req.headers.host ?? ''))
+    return refuse(res, 421, 'Misdirected request', 'This server does not answer for that host.');
+  if (req.headers['transfer-encoding'])
+    return refuse(res, 411, 'Length required', 'Send the body with a Content-Length.');
   if (Number(req.headers['content-length'] ?? 0) > BODY_LIMIT)
     return refuse(res, 413, 'Too large', 'A request may carry 1 MB at most.');
   settleForwarding(req);

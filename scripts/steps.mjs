@@ -50,13 +50,25 @@ export async function install() {
   console.log('Installing the locked packages. This takes a few minutes the first time.');
   const { code } = await run('npm', ['ci', '--no-audit', '--no-fund']);
   if (code !== 0) {
-    console.error('The packages could not be installed. sqlite3 may have to be compiled: that needs python3, make and g++.');
+    console.error(
+      'The packages could not be installed. sqlite3 may have to be compiled: that needs python3, make and g++.',
+    );
     process.exit(code);
   }
   writeFileSync(stamp, wanted);
 }
 
-const BUILT_FROM = ['src', 'db', 'public', 'content', 'astro.config.mjs', 'auth.config.ts', 'tailwind.config.cjs', 'tsconfig.json', 'package-lock.json'];
+const BUILT_FROM = [
+  'src',
+  'db',
+  'public',
+  'content',
+  'astro.config.mjs',
+  'auth.config.ts',
+  'tailwind.config.cjs',
+  'tsconfig.json',
+  'package-lock.json',
+];
 
 /** Builds, unless the build there is was made from exactly these sources. */
 export async function build() {

@@ -27,7 +27,9 @@ const host = env.HOST && !['0.0.0.0', '::'].includes(env.HOST) ? env.HOST : '127
 const probe = `http://${host}:${port}/readyz`;
 const publicHost = env.APP_ORIGIN ? { host: new URL(env.APP_ORIGIN).host } : {};
 for (let tries = 0; tries < 300; tries++) {
-  const ready = await fetch(probe, { headers: publicHost }).then((r) => r.ok).catch(() => false);
+  const ready = await fetch(probe, { headers: publicHost })
+    .then((r) => r.ok)
+    .catch(() => false);
   if (ready) break;
   await new Promise((resolve) => setTimeout(resolve, 200));
 }
