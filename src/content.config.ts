@@ -1,0 +1,35 @@
+import { defineCollection } from 'astro:content';
+import { z } from 'astro/zod';
+import { glob } from 'astro/loaders';
+import { Engine } from '@/domain/procedure/engine';
+import { Frontmatter } from '@/domain/procedure/schema';
+
+/**
+ * What the repository ships. The build fails on a file that breaks its schema. Procedures are only
+ * checked here: at first start they are read as text, parsed without evaluation and kept in the
+ * database, which is the truth from then on.
+ */
+
+const procedures = defineCollection({
+  loader: glob({ pattern: 'p-*.mdx', base: './content/procedures' }),
+  schema: Frontmatter,
+});
+
+const engines = defineCollection({
+  loader: glob({ pattern: '*.yaml', base: './content/engines' }),
+  schema: Engine,
+});
+
+const handbook = defineCollection({
+  loader: glob({ pattern: '*.mdx', base: './content/handbook' }),
+  schema: z
+    .object({
+      title: z.string().min(1).max(90),
+      summary: z.string().min(1).max(300),
+      /** Place in the list of pages, counted from 1. */
+      order: z.number().int().min(1),
+    })
+    .strict(),
+});
+
+export const collections = { procedures, engines, handbook };
