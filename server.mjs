@@ -56,7 +56,7 @@ function settleForwarding(req) {
     .map((part) => part.trim())
     .filter(Boolean);
   for (const name of Object.keys(req.headers))
-    if (name.startsWith('x-forwarded-') || name === 'forwarded') delete req.headers[name];
+    if (name.startsWith('x-forwarded-') || name === 'forwarded') Reflect.deleteProperty(req.headers, name);
   if (trustedHops > 0 && chain.length >= trustedHops) req.headers['x-forwarded-for'] = chain.at(-trustedHops);
   if (process.env.APP_ORIGIN) {
     req.headers['x-forwarded-proto'] = origin.protocol.slice(0, -1);
