@@ -1,0 +1,47 @@
+import { agreementsNeeded } from './rules';
+
+/** What the review desk needs of a proposal to put it in its place. */
+export interface DeskItem {
+  id: string;
+  /** Letter of the revision it changes; null for a new procedure, which nobody works to yet. */
+  base: string | null;
+  criticalReasons: readonly string[];
+  /** When it was sent in, ISO 8601 in UTC. */
+  proposedAt: string;
+  /** How many agreements stand. */
+  agreements: number;
+}
+
+/** 3: a critical change to a sheet in use; 2: a critical new sheet; 1: a sheet in use; 0: a new sheet. */
+export function severity(item: Pick<DeskItem, 'base' | 'criticalReasons'>): 0 | 1 | 2 | 3 {
+  const inUse = item.base !== null;
+  if (item.criticalReasons.length > 0) return inUse ? 3 : 2;
+  return inUse ? 1 : 0;
+}
+
+/** Worst first: by severity, then who has waited longest. A new list; the order is total, so it never flickers. */
+export function deskOrder<T extends DeskItem>(items: readonly T[]): T[] {
+  return [...items].sort(
+    (a, b) =>
+      severity(b) - severity(a) ||
+      Date.parse(a.proposedAt) - Date.parse(b.proposedAt) ||
+      (a.id < b.id ? -1 : a.id > b.id ? 1 : 0),
+  );
+}
+
+const DAY = 86_400_000;
+
+/**
+ * Why a proposal stands where it stands: "Critical: a torque changes: Cover bolt. Waiting 3 days, 1 of 2 agreed."
+ *
+ * @param now ISO 8601 in UTC
+ */
+export function deskReason(item: DeskItem, now: string): string {
+  const [first, ...others] = item.criticalReasons;
+  const more = others.length > 0 ? `, and ${others.length} more` : '';
+  const kind = item.base === null ? 'A new sheet.' : 'An ordinary change to a sheet in use.';
+  const what = first ? `Critical, because ${first}${more}.` : kind;
+  const days = Math.max(0, Math.floor((Date.parse(now) - Date.parse(item.proposedAt)) / DAY));
+  const waiting = days === 0 ? 'Sent in today' : `Waiting ${days} ${days === 1 ? 'day' : 'days'}`;
+  return `${what} ${waiting}, ${item.agreements} of ${agreementsNeeded(item.criticalReasons)} agreed.`;
+}
