@@ -5,7 +5,7 @@ import { ROLES } from '../people/may';
 
 /** What crosses the wire under `/api/v1`. The OpenAPI document is made from these. Dates are ISO 8601 in UTC. */
 
-const Id = z.string().uuid().describe('UUIDv7');
+export const Id = z.string().uuid().describe('UUIDv7');
 export const ProcedureNumber = z
   .string()
   .regex(/^P-\d{4,6}$/)
@@ -136,7 +136,20 @@ export const CheckResult = z.object({
   preview: z.object({ frontmatter: FrontmatterFields, introHtml: z.string(), steps: z.array(SheetStep) }).optional(),
 });
 
-const Reason = z.string().trim().max(4000);
+/** Lists answer `{items, next}`; `next` is the `cursor` of the following page, null on the last. */
+export const ListQuery = z.object({
+  cursor: z.string().max(100).optional().describe('`next` of the page before'),
+  limit: z.coerce.number().int('must be a whole number').min(1).max(200).default(50),
+});
+export const pageOf = <T extends z.ZodTypeAny>(item: T) =>
+  z.object({ items: z.array(item), next: z.string().nullable() });
+
+export const UpdateMe = z
+  .object({ name: z.string().trim().min(1, 'must not be empty').max(90), units: UnitSystem })
+  .partial();
+export const ChangePassword = z.object({ current: z.string().max(200), next: z.string().max(200) });
+
+const Reason = z.string().trim().max(4000, 'must be 4000 characters or fewer');
 export const StartProcedure = z.object({
   book: z.string().describe('"common" or a shop id'),
   source: z.string(),
@@ -204,6 +217,13 @@ export const Proposal = ProposalSummary.extend({
   whyNot: z.record(z.string()).describe('For an act that is refused: the reason in words'),
 });
 
+export const SavedProposal = Proposal.extend({
+  check: CheckResult.describe('What is wrong with the saved text, if anything'),
+});
+export const DeskItem = ProposalSummary.extend({
+  next: z.enum(['agree', 'publish', 'wait']).describe('What I can do now; `wait` where others must act first'),
+});
+
 const WordRun = z.object({ kind: z.enum(['same', 'removed', 'added']), text: z.string() });
 export const Comparison = z.object({
   values: z.array(
@@ -238,6 +258,10 @@ export const Comparison = z.object({
   identical: z.boolean(),
 });
 
+export const CompareQuery = z.object({ from: RevisionLetter, to: RevisionLetter });
+export const RevisionComparison = z.object({ from: RevisionSummary, to: RevisionSummary, comparison: Comparison });
+export const ProposalComparison = z.object({ base: RevisionLetter.nullable(), comparison: Comparison });
+
 export const SearchHit = z.object({
   number: ProcedureNumber,
   title: z.string(),
@@ -267,4 +291,8 @@ export type SheetStep = z.infer<typeof SheetStep>;
 export type CheckResult = z.infer<typeof CheckResult>;
 export type ProposalSummary = z.infer<typeof ProposalSummary>;
 export type Proposal = z.infer<typeof Proposal>;
+export type DeskItem = z.infer<typeof DeskItem>;
+export type SavedProposal = z.infer<typeof SavedProposal>;
+export type ListQuery = z.infer<typeof ListQuery>;
+export type Page<T> = { items: T[]; next: string | null };
 export type SearchHit = z.infer<typeof SearchHit>;

@@ -1,0 +1,38 @@
+import { operation } from '../operation';
+import { ChangePassword, Me, UpdateMe } from '../schemas';
+
+export const readMe = operation({
+  id: 'readMe',
+  method: 'get',
+  path: '/me',
+  area: 'You',
+  summary: 'Who I am, my roles, my shop and my units',
+  reply: Me,
+});
+
+export const updateMe = operation({
+  id: 'updateMe',
+  method: 'patch',
+  path: '/me',
+  area: 'You',
+  summary: 'Change my name or my units',
+  body: UpdateMe,
+  reply: Me,
+});
+
+export const changePassword = operation({
+  id: 'changePassword',
+  method: 'post',
+  path: '/me/password',
+  area: 'You',
+  summary: 'Change my password; every other session ends',
+  body: ChangePassword,
+});
+
+export const signOutEverywhere = operation({
+  id: 'signOutEverywhere',
+  method: 'post',
+  path: '/me/sign-out-everywhere',
+  area: 'You',
+  summary: 'End all my sessions, this one too',
+});
