@@ -1,0 +1,52 @@
+import { Umzug } from 'umzug';
+import { QueryTypes } from 'sequelize';
+import type { Database } from '../database';
+import { tables } from './0001-tables';
+import { rules } from './0002-rules';
+import type { Migration } from './migration';
+
+// A list, not a folder read at run time: it is bundled with the server and runs from scripts alike.
+const MIGRATIONS: readonly Migration[] = [tables, rules];
+
+type Handle = Pick<Database, 'sequelize' | 'write'>;
+
+function migrator({ sequelize }: Handle) {
+  const run = async (statements: readonly string[]) => {
+    for (const statement of statements) await sequelize.query(statement);
+  };
+  return new Umzug({
+    migrations: MIGRATIONS.map(({ name, up, down }) => ({ name, up: () => run(up), down: () => run(down) })),
+    logger: undefined,
+    storage: {
+      async executed() {
+        await sequelize.query('CREATE TABLE IF NOT EXISTS migrations (name TEXT PRIMARY KEY, at TEXT NOT NULL)');
+        const rows = await sequelize.query<{ name: string }>('SELECT name FROM migrations ORDER BY name', {
+          type: QueryTypes.SELECT,
+        });
+        return rows.map((row) => row.name);
+      },
+      async logMigration({ name }) {
+        await sequelize.query('INSERT INTO migrations (name, at) VALUES (:name, :at)', {
+          replacements: { name, at: new Date().toISOString() },
+        });
+      },
+      async unlogMigration({ name }) {
+        await sequelize.query('DELETE FROM migrations WHERE name = :name', { replacements: { name } });
+      },
+    },
+  });
+}
+
+/** Brings the tables up to date: all missing steps, or none if one fails. */
+export async function migrate(db: Handle): Promise<void> {
+  await db.write(async () => {
+    await migrator(db).up();
+  });
+}
+
+/** Takes the tables back to before `name`; data of later steps is lost. */
+export async function migrateDownTo(db: Handle, name: string): Promise<void> {
+  await db.write(async () => {
+    await migrator(db).down({ to: name });
+  });
+}

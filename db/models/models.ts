@@ -1,0 +1,136 @@
+import { DataTypes, type Sequelize } from 'sequelize';
+import { Procedure, Rendering, Revision, SearchDocument } from './book';
+import { flag, id, optionalText, text, times } from './columns';
+import { Membership, Person, Shop } from './people';
+import { AuditEntry, IdempotencyKey, Setting } from './records';
+import { Agreement, Remark } from './review';
+
+const key = { ...text, primaryKey: true };
+const integer = { type: DataTypes.INTEGER, allowNull: false };
+const json = { type: DataTypes.JSON, allowNull: false };
+
+/** Sequelize writes the name of the column into each description, so columns must not share one. */
+const own = <T extends Record<string, object>>(columns: T): T =>
+  Object.fromEntries(Object.entries(columns).map(([name, column]) => [name, { ...column }])) as T;
+
+/**
+ * Binds the models to one connection. Each call makes classes of its own, so that two open databases
+ * (in tests) do not take them from each other. Rules and keys stand in the migrations.
+ */
+export function defineModels(sequelize: Sequelize, now: () => string) {
+  const stamps = times(now);
+  const bind = (modelName: string, tableName: string) => ({ sequelize, modelName, tableName, timestamps: false });
+
+  sequelize.addHook('beforeUpdate', (row) => {
+    if (!row.changed('updatedAt' as never)) row.set('updatedAt' as never, now() as never);
+  });
+  sequelize.addHook('beforeBulkUpdate', (options) => {
+    const bulk = options as unknown as { attributes: Record<string, unknown>; fields: string[] };
+    bulk.attributes['updatedAt'] ??= now();
+    if (!bulk.fields.includes('updatedAt')) bulk.fields.push('updatedAt');
+  });
+
+  return {
+    Shop: class extends Shop {}.init(own({ id, name: text, demonstration: flag, ...stamps }), bind('Shop', 'shops')),
+    Person: class extends Person {}.init(
+      own({
+        id,
+        kind: { ...text, defaultValue: 'person' },
+        email: optionalText,
+        name: text,
+        passwordHash: optionalText,
+        tokenVersion: { ...integer, defaultValue: 1 },
+        units: { ...text, defaultValue: 'metric' },
+        currentShopId: optionalText,
+        demonstration: flag,
+        ...stamps,
+      }),
+      bind('Person', 'people'),
+    ),
+    Membership: class extends Membership {}.init(
+      own({ id, personId: text, scope: text, shopId: optionalText, role: text, ...stamps }),
+      bind('Membership', 'memberships'),
+    ),
+    Procedure: class extends Procedure {}.init(
+      own({
+        id,
+        number: text,
+        bookKind: text,
+        shopId: optionalText,
+        currentRevisionId: optionalText,
+        withdrawnAt: optionalText,
+        ...stamps,
+      }),
+      bind('Procedure', 'procedures'),
+    ),
+    Revision: class extends Revision {}.init(
+      own({
+        id,
+        procedureId: text,
+        letter: optionalText,
+        state: text,
+        parentId: optionalText,
+        source: text,
+        hash: text,
+        head: { type: DataTypes.JSON, allowNull: true },
+        authorId: text,
+        reason: { ...text, defaultValue: '' },
+        critical: flag,
+        criticalReasons: { ...json, defaultValue: [] },
+        version: { ...integer, defaultValue: 1 },
+        everProposed: flag,
+        proposedAt: optionalText,
+        publishedAt: optionalText,
+        ...stamps,
+      }),
+      bind('Revision', 'revisions'),
+    ),
+    Rendering: class extends Rendering {}.init(
+      own({ hash: key, form: integer, json: text, ...stamps }),
+      bind('Rendering', 'renderings'),
+    ),
+    Agreement: class extends Agreement {}.init(
+      own({ id, revisionId: text, personId: text, hash: text, at: text, ...stamps }),
+      bind('Agreement', 'agreements'),
+    ),
+    Remark: class extends Remark {}.init(
+      own({ id, revisionId: text, personId: text, kind: text, text, anchor: optionalText, at: text, ...stamps }),
+      bind('Remark', 'remarks'),
+    ),
+    AuditEntry: class extends AuditEntry {}.init(
+      own({
+        seq: { type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true },
+        at: text,
+        actorId: optionalText,
+        act: text,
+        subjectType: text,
+        subjectId: text,
+        shopId: optionalText,
+        detail: json,
+        previousHash: text,
+        hash: text,
+        ...stamps,
+      }),
+      bind('AuditEntry', 'auditEntries'),
+    ),
+    SearchDocument: class extends SearchDocument {}.init(
+      own({ procedureId: key, book: text, hash: text, json: text, ...stamps }),
+      bind('SearchDocument', 'searchDocuments'),
+    ),
+    Setting: class extends Setting {}.init(own({ key, value: text, ...stamps }), bind('Setting', 'settings')),
+    IdempotencyKey: class extends IdempotencyKey {}.init(
+      own({
+        personId: key,
+        key,
+        request: text,
+        status: integer,
+        headers: { ...json, defaultValue: {} },
+        body: text,
+        ...stamps,
+      }),
+      bind('IdempotencyKey', 'idempotencyKeys'),
+    ),
+  };
+}
+
+export type Models = ReturnType<typeof defineModels>;

@@ -1,0 +1,63 @@
+import { isAbsolute, resolve } from 'node:path';
+import { z } from 'zod';
+
+const empty = (value: unknown) => (value === '' ? undefined : value);
+const set = <T extends z.ZodTypeAny>(schema: T) => z.preprocess(empty, schema);
+
+const Environment = z.object({
+  PORT: set(
+    z.coerce
+      .number({ invalid_type_error: 'PORT must be a number, for example 4321.' })
+      .int('PORT must be a whole number.')
+      .min(0, 'PORT must be 0 or more.')
+      .max(65_535, 'PORT must be 65535 or less.')
+      .default(4321),
+  ),
+  HOST: set(z.string().default('127.0.0.1')),
+  DATA_DIR: set(z.string().default('./data')),
+  CONTENT_DIR: set(z.string().default('./content')),
+  APP_ORIGIN: set(
+    z
+      .string()
+      .url('APP_ORIGIN must be an address with scheme, for example https://book.example.')
+      .refine((value) => URL.canParse(value) && new URL(value).origin === value.replace(/\/$/, ''), {
+        message: 'APP_ORIGIN must be scheme, host and port only, without a path.',
+      })
+      .transform((value) => new URL(value).origin)
+      .optional(),
+  ),
+  DEMO: set(
+    z
+      .enum(['0', '1'], { errorMap: () => ({ message: 'DEMO must be 1, 0 or empty.' }) })
+      .default('0')
+      .transform((value) => value === '1'),
+  ),
+});
+
+export interface Config {
+  port: number;
+  host: string;
+  /** Absolute paths. */
+  dataDir: string;
+  contentDir: string;
+  /** Scheme, host and port that people type; null where the address listened on is used. */
+  origin: string | null;
+  /** The demonstration network is loaded and its people sign in with one press. */
+  demo: boolean;
+}
+
+/** Reads the settings once. Throws an error whose message says, a line each, what to set right. */
+export function readConfig(env: Record<string, string | undefined> = process.env): Config {
+  const read = Environment.safeParse(env);
+  if (!read.success) throw new Error(read.error.issues.map((issue) => issue.message).join('\n'));
+  const { PORT, HOST, DATA_DIR, CONTENT_DIR, APP_ORIGIN, DEMO } = read.data;
+  const absolute = (path: string) => (isAbsolute(path) ? path : resolve(process.cwd(), path));
+  return {
+    port: PORT,
+    host: HOST,
+    dataDir: absolute(DATA_DIR),
+    contentDir: absolute(CONTENT_DIR),
+    origin: APP_ORIGIN ?? null,
+    demo: DEMO,
+  };
+}
