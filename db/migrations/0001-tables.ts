@@ -92,9 +92,10 @@ export const tables: Migration = {
       revisionId TEXT NOT NULL REFERENCES revisions (id),
       personId TEXT NOT NULL REFERENCES people (id),
       hash TEXT NOT NULL,
-      at TEXT NOT NULL,${times},
-      UNIQUE (revisionId, personId, hash)
+      base TEXT,
+      at TEXT NOT NULL,${times}
     )`,
+    `CREATE UNIQUE INDEX agreements_once ON agreements (revisionId, personId, hash, ifnull(base, ''))`,
 
     `CREATE TABLE remarks (
       id TEXT PRIMARY KEY NOT NULL,

@@ -22,8 +22,9 @@ const changed = FROZEN.map((column) => `OLD.${column} IS NOT NEW.${column}`).joi
 
 const isPublished = (row: 'OLD' | 'NEW') => `${row}.state IN ('published', 'superseded')`;
 const byRelease = `(SELECT kind FROM people WHERE id = NEW.authorId) = 'release'`;
-const agreed = `(SELECT count(*) FROM agreements a
-  WHERE a.revisionId = NEW.id AND a.hash = NEW.hash AND a.personId <> NEW.authorId)`;
+const agreed = `(SELECT count(DISTINCT a.personId) FROM agreements a
+  WHERE a.revisionId = NEW.id AND a.hash = NEW.hash AND a.personId <> NEW.authorId
+    AND a.base IS (SELECT letter FROM revisions WHERE id = NEW.parentId))`;
 
 const triggers: Record<string, string> = {
   revisions_published_text_stays: `BEFORE UPDATE ON revisions WHEN ${isPublished('OLD')} AND (${changed})

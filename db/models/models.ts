@@ -90,7 +90,7 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
       bind('Rendering', 'renderings'),
     ),
     Agreement: class extends Agreement {}.init(
-      own({ id, revisionId: text, personId: text, hash: text, at: text, ...stamps }),
+      own({ id, revisionId: text, personId: text, hash: text, base: optionalText, at: text, ...stamps }),
       bind('Agreement', 'agreements'),
     ),
     Remark: class extends Remark {}.init(

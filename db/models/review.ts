@@ -1,11 +1,13 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 
-/** A reviewer's yes to one exact text. It counts while `hash` is still the hash of the revision. */
+/** A reviewer's yes to one exact text on one base. It counts while both are still those of the revision. */
 export class Agreement extends Model<InferAttributes<Agreement>, InferCreationAttributes<Agreement>> {
   declare id: CreationOptional<string>;
   declare revisionId: string;
   declare personId: string;
   declare hash: string;
+  /** Letter of the revision the text was compared with; null for a new procedure. */
+  declare base: CreationOptional<string | null>;
   declare at: string;
   declare createdAt: CreationOptional<string>;
   declare updatedAt: CreationOptional<string>;

@@ -48,7 +48,10 @@ const SHARED = {
 } as const;
 
 function jsonSchema(schema: z.ZodTypeAny, options: object): Record<string, unknown> {
-  const { $schema: _, ...rest } = zodToJsonSchema(schema, { ...SHARED, ...options } as never) as Record<string, unknown>;
+  const { $schema: _, ...rest } = zodToJsonSchema(schema, { ...SHARED, ...options } as never) as Record<
+    string,
+    unknown
+  >;
   return rest;
 }
 

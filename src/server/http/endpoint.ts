@@ -28,8 +28,7 @@ export interface Call<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
 
 /** What a route answers; `NOT_MODIFIED` where the caller holds it already. */
 export type Reply<R extends z.ZodTypeAny> =
-  | { body: z.output<R>; tag?: string; location?: string; headers?: Record<string, string> }
-  | { notModified: string };
+  { body: z.output<R>; tag?: string; location?: string; headers?: Record<string, string> } | { notModified: string };
 
 export type Handler = ((context: APIContext) => Promise<Response>) & { operation: Operation };
 
@@ -43,7 +42,7 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
   const { config } = await app();
   if (changing && !comesFromUs(request, [url.origin, ...(config.origin ? [config.origin] : [])]))
     throw forbidden('This call came from a page of another site.');
-  const { actor } = locals;
+  const { actor } = locals as { actor?: Actor | null };
   if (!actor) throw signedOut();
   await countCall(actor.personId, changing ? 'changing' : 'reading');
 
@@ -83,7 +82,10 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
   return replayed ? { ...kept, headers: { ...kept.headers, 'idempotency-replayed': 'true' } } : kept;
 }
 
-function render<R extends z.ZodTypeAny>(operation: Operation<z.ZodTypeAny, z.ZodTypeAny, z.ZodTypeAny, R>, reply: Reply<R>): Answer {
+function render<R extends z.ZodTypeAny>(
+  operation: Operation<z.ZodTypeAny, z.ZodTypeAny, z.ZodTypeAny, R>,
+  reply: Reply<R>,
+): Answer {
   const shared = { 'cache-control': 'private, no-cache', vary: 'Cookie' };
   if ('notModified' in reply) return { status: 304, headers: { ...shared, etag: reply.notModified }, body: '' };
   const headers = {
@@ -93,7 +95,11 @@ function render<R extends z.ZodTypeAny>(operation: Operation<z.ZodTypeAny, z.Zod
     ...reply.headers,
   };
   if (operation.status === 204) return { status: 204, headers, body: '' };
-  return { status: operation.status, headers: { ...headers, 'content-type': 'application/json' }, body: JSON.stringify(reply.body) };
+  return {
+    status: operation.status,
+    headers: { ...headers, 'content-type': 'application/json' },
+    body: JSON.stringify(reply.body),
+  };
 }
 
 /**
@@ -101,10 +107,12 @@ function render<R extends z.ZodTypeAny>(operation: Operation<z.ZodTypeAny, z.Zod
  * the body (400, 413, 415, 422), `If-Match` (428), `Idempotency-Key`; then `act`, and its refusals as problem
  * documents. A fault that is ours is logged once, with the id that the caller is told.
  */
-export function endpoint<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends z.ZodTypeAny, R extends z.ZodTypeAny>(
-  operation: Operation<P, Q, B, R>,
-  act: (call: Call<P, Q, B>) => Promise<Reply<R>>,
-): Handler {
+export function endpoint<
+  P extends z.ZodTypeAny,
+  Q extends z.ZodTypeAny,
+  B extends z.ZodTypeAny,
+  R extends z.ZodTypeAny,
+>(operation: Operation<P, Q, B, R>, act: (call: Call<P, Q, B>) => Promise<Reply<R>>): Handler {
   const handle = async (context: APIContext) => {
     const requestId = randomUUID();
     try {
@@ -113,7 +121,8 @@ export function endpoint<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B exten
       return new Response(empty ? null : body, { status, headers: { ...headers, 'x-request-id': requestId } });
     } catch (error) {
       const refusal = asRefusal(error);
-      if (refusal.status >= 500) console.error(`${requestId} ${operation.id} ${refusal.status}`, refusal.cause ?? refusal);
+      if (refusal.status >= 500)
+        console.error(`${requestId} ${operation.id} ${refusal.status}`, refusal.cause ?? refusal);
       return problemResponse(refusal, requestId);
     }
   };

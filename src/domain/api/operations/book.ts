@@ -80,7 +80,8 @@ export const checkSource = operation({
   path: '/check',
   area: 'Book',
   summary: 'Check a text; writes nothing',
-  description: 'A text with faults answers 200 with `ok: false` and where they are; one over 64 KB is refused with 422.',
+  description:
+    'A text with faults answers 200 with `ok: false` and where they are; one over 64 KB is refused with 422.',
   body: CheckRequest,
   reply: CheckResult,
 });

@@ -85,8 +85,20 @@ const act = <B extends z.ZodTypeAny = z.ZodUndefined>(
   });
 
 export const submitProposal = act('submitProposal', 'submit', 'Proposals', 'Send my draft to be reviewed');
-export const returnProposal = act('returnProposal', 'return', 'Review', 'Return it to its author, with reasons', GiveReason);
-export const declineProposal = act('declineProposal', 'decline', 'Review', 'Decline it for good, with a reason', GiveReason);
+export const returnProposal = act(
+  'returnProposal',
+  'return',
+  'Review',
+  'Return it to its author, with reasons',
+  GiveReason,
+);
+export const declineProposal = act(
+  'declineProposal',
+  'decline',
+  'Review',
+  'Decline it for good, with a reason',
+  GiveReason,
+);
 export const agreeToProposal = act('agreeToProposal', 'agree', 'Review', 'Agree to the text as it stands');
 export const publishProposal = act(
   'publishProposal',
