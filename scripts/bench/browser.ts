@@ -6,13 +6,11 @@ const ARGS = ['--no-sandbox', '--disable-gpu', '--disable-background-networking'
 const executablePath = process.env.CHROMIUM_PATH ?? '/usr/bin/chromium';
 
 const cookies = (address: string, header: string) =>
-  header
-    .split('; ')
-    .map((pair) => ({
-      name: pair.slice(0, pair.indexOf('=')),
-      value: pair.slice(pair.indexOf('=') + 1),
-      url: address,
-    }));
+  header.split('; ').map((pair) => ({
+    name: pair.slice(0, pair.indexOf('=')),
+    value: pair.slice(pair.indexOf('=') + 1),
+    url: address,
+  }));
 
 /** Bytes of script a page loads, each file compressed with gzip, and the number of files. */
 export async function scriptWeight(address: string, path: string, cookie: string): Promise<number> {

@@ -16,7 +16,7 @@ export async function load(
   const options = { url, headers, connections: 20, duration: seconds };
   await autocannon({ ...options, duration: 2 });
   const result = await autocannon(options);
-  const wanted = result.statusCodeStats?.[String(expected)]?.count ?? 0;
+  const wanted = result.statusCodeStats?.[`${expected}`]?.count ?? 0;
   if (result.errors > 0 || result.timeouts > 0 || wanted < result.requests.total * 0.999)
     throw new Error(`${url} did not answer ${expected} throughout: ${JSON.stringify(result.statusCodeStats)}`);
   return result.requests.average;
