@@ -1,0 +1,61 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { type DeskItem, deskOrder, deskReason, severity } from '@/domain/review/desk';
+
+const item = (id: string, change: Partial<DeskItem> = {}): DeskItem => ({
+  id,
+  base: 'C',
+  criticalReasons: [],
+  proposedAt: '2026-11-28T09:00:00Z',
+  agreements: 0,
+  ...change,
+});
+const TORQUE = ['a torque changes: Cover bolt'];
+
+describe('the order of the review desk', () => {
+  it('puts what can hurt somebody now first, then what has waited longest', () => {
+    const items = [
+      item('new', { base: null }),
+      item('young', { proposedAt: '2026-11-30T09:00:00Z' }),
+      item('old'),
+      item('critical new', { base: null, criticalReasons: TORQUE, proposedAt: '2026-01-01T00:00:00Z' }),
+      item('critical', { criticalReasons: TORQUE, proposedAt: '2026-11-30T10:00:00Z' }),
+    ];
+    expect(deskOrder(items).map(({ id }) => id)).toEqual(['critical', 'critical new', 'old', 'young', 'new']);
+  });
+
+  it('is the same whatever order it was given', () => {
+    const any = fc.record({
+      id: fc.uuid(),
+      base: fc.constantFrom(null, 'A'),
+      criticalReasons: fc.constantFrom([], TORQUE),
+      proposedAt: fc.constantFrom('2026-11-28T09:00:00Z', '2026-11-29T09:00:00Z'),
+      agreements: fc.nat(2),
+    });
+    const lists = fc
+      .uniqueArray(any, { selector: ({ id }) => id })
+      .chain((list) => fc.tuple(fc.constant(list), fc.shuffledSubarray(list, { minLength: list.length })));
+    fc.assert(
+      fc.property(lists, ([list, shuffled]) => {
+        const sorted = deskOrder(list);
+        expect(deskOrder(shuffled)).toEqual(sorted);
+        sorted.slice(1).forEach((next, i) => expect(severity(next)).toBeLessThanOrEqual(severity(sorted[i]!)));
+      }),
+    );
+  });
+
+  it.each<[Partial<DeskItem>, string]>([
+    [{}, 'An ordinary change to a sheet in use. Waiting 3 days, 0 of 1 agreed.'],
+    [{ base: null, proposedAt: '2026-12-01T08:00:00Z' }, 'A new sheet. Sent in today, 0 of 1 agreed.'],
+    [
+      { criticalReasons: TORQUE, agreements: 1, proposedAt: '2026-11-30T08:00:00Z' },
+      'Critical, because a torque changes: Cover bolt. Waiting 1 day, 1 of 2 agreed.',
+    ],
+    [
+      { criticalReasons: [...TORQUE, 'a hold point changes: step 4'] },
+      'Critical, because a torque changes: Cover bolt, and 1 more. Waiting 3 days, 0 of 2 agreed.',
+    ],
+  ])('says why: %o', (change, words) => {
+    expect(deskReason(item('x', change), '2026-12-01T10:00:00Z')).toBe(words);
+  });
+});
