@@ -1,0 +1,160 @@
+import type { Frontmatter } from './schema';
+import { suggestion } from './nearest';
+import { WORKSHEETS } from './worksheets';
+
+/** Attributes of a component as written: literal text only. */
+export type Attributes = Readonly<Record<string, string>>;
+
+export interface AttributeFault {
+  attribute: string;
+  message: string;
+}
+
+/** One component of the closed set: where it stands, what it may carry, what it points at. */
+export interface Component {
+  /** `sentence`: among words. `block`: on its own, directly in a step. `step`: at the top level. */
+  stands: 'sentence' | 'block' | 'step';
+  holds: 'nothing' | 'words' | 'blocks';
+  /** In the order in which they are written. */
+  attributes: Readonly<Record<string, 'required' | 'optional'>>;
+  example: string;
+  /** Whether what it points at exists; runs only on a valid front matter. */
+  faults: (given: Attributes, head: Frontmatter) => AttributeFault[];
+}
+
+const keysOf = (entries: readonly { key: string }[]) => entries.map((e) => e.key);
+
+function missing(
+  entries: readonly { key: string }[],
+  key: string | undefined,
+  list: string,
+  attribute = 'of',
+): AttributeFault[] {
+  if (key === undefined || entries.some((e) => e.key === key)) return [];
+  return [{ attribute, message: `"${key}" is not among the ${list}. ${suggestion(key, keysOf(entries))}` }];
+}
+
+function torqueFaults(given: Attributes, head: Frontmatter): AttributeFault[] {
+  const torque = head.torques.find((t) => t.key === given['of']);
+  const pass = given['pass'];
+  if (!torque || pass === undefined) return missing(head.torques, given['of'], 'torques');
+  const passes = torque.passes?.length ?? 0;
+  if (/^[1-9]\d?$/.test(pass) && Number(pass) <= passes) return [];
+  const there =
+    passes === 0
+      ? 'has no passes; leave pass out for the final torque'
+      : `has ${passes === 1 ? 'one pass' : `passes 1 to ${passes}`} before the final torque`;
+  return [{ attribute: 'pass', message: `Pass "${pass}" does not exist: ${torque.name} ${there}.` }];
+}
+
+export const STAGES = { 'skin-over': 'skinOver', cure: 'cure' } as const;
+export type Stage = keyof typeof STAGES;
+export const isStage = (text: string | undefined): text is Stage => text !== undefined && Object.hasOwn(STAGES, text);
+
+function timerFaults(given: Attributes, head: Frontmatter): AttributeFault[] {
+  const { of, stage } = given;
+  const supply = head.supplies.find((s) => s.key === of);
+  if (stage === undefined) {
+    if (supply && !head.timers.some((t) => t.key === of))
+      return [
+        { attribute: 'of', message: `"${of}" is a supply: say which of its times, stage="skin-over" or stage="cure".` },
+      ];
+    return missing(head.timers, of, 'timers');
+  }
+  if (!isStage(stage))
+    return [{ attribute: 'stage', message: `Stage "${stage}" does not exist. Write skin-over or cure.` }];
+  if (!supply) return missing(head.supplies, of, 'supplies');
+  if (supply[STAGES[stage]] !== undefined) return [];
+  return [{ attribute: 'stage', message: `${supply.name} has no ${stage} time. Write it in the supplies first.` }];
+}
+
+/** Keys that a worksheet judges against, in order. */
+export const worksheetKeys = (of: string | undefined) => (of ?? '').split(/\s+/).filter(Boolean);
+
+function worksheetFaults(given: Attributes, head: Frontmatter): AttributeFault[] {
+  const kind = given['kind'] ?? '';
+  const keys = worksheetKeys(given['of']);
+  if (!Object.hasOwn(WORKSHEETS, kind))
+    return [
+      { attribute: 'kind', message: `There is no worksheet "${kind}". ${suggestion(kind, Object.keys(WORKSHEETS))}` },
+    ];
+  if (kind === 'readings' && keys.length === 0)
+    return [
+      {
+        attribute: 'of',
+        message: 'A worksheet of readings names the limits to read, for example of="end-float preload".',
+      },
+    ];
+  const twice = keys.find((key, i) => keys.indexOf(key) !== i);
+  if (twice) return [{ attribute: 'of', message: `"${twice}" is named twice in this worksheet.` }];
+  return keys.flatMap((key) => missing(head.limits, key, 'limits'));
+}
+
+export const COMPONENTS: Readonly<Record<string, Component>> = {
+  Step: {
+    stands: 'step',
+    holds: 'blocks',
+    attributes: { id: 'required', title: 'required' },
+    example: '<Step id="draw-down" title="Draw the cover down">',
+    faults: () => [],
+  },
+  Caution: {
+    stands: 'block',
+    holds: 'nothing',
+    attributes: { of: 'required' },
+    example: '<Caution of="hot-oil" />',
+    faults: (given, head) => missing(head.cautions, given['of'], 'cautions'),
+  },
+  Torque: {
+    stands: 'sentence',
+    holds: 'nothing',
+    attributes: { of: 'required', pass: 'optional' },
+    example: '<Torque of="cover-bolt" />',
+    faults: torqueFaults,
+  },
+  Limit: {
+    stands: 'sentence',
+    holds: 'nothing',
+    attributes: { of: 'required' },
+    example: '<Limit of="oil-level" />',
+    faults: (given, head) => missing(head.limits, given['of'], 'limits'),
+  },
+  Part: {
+    stands: 'sentence',
+    holds: 'nothing',
+    attributes: { of: 'required' },
+    example: '<Part of="cover-gasket" />',
+    faults: (given, head) => missing(head.parts, given['of'], 'parts'),
+  },
+  Timer: {
+    stands: 'sentence',
+    holds: 'nothing',
+    attributes: { of: 'required', stage: 'optional' },
+    example: '<Timer of="soak" />',
+    faults: timerFaults,
+  },
+  Figure: {
+    stands: 'block',
+    holds: 'nothing',
+    attributes: { of: 'required' },
+    example: '<Figure of="underside" />',
+    faults: (given, head) => missing(head.figures, given['of'], 'figures'),
+  },
+  Worksheet: {
+    stands: 'block',
+    holds: 'nothing',
+    attributes: { kind: 'required', of: 'optional' },
+    example: '<Worksheet kind="readings" of="end-float" />',
+    faults: worksheetFaults,
+  },
+  Hold: {
+    stands: 'block',
+    holds: 'words',
+    attributes: {},
+    example: '<Hold>A senior technician checks the last pass.</Hold>',
+    faults: () => [],
+  },
+};
+
+export const componentOf = (name: string | null): Component | undefined =>
+  name !== null && Object.hasOwn(COMPONENTS, name) ? COMPONENTS[name] : undefined;

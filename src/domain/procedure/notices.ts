@@ -1,0 +1,125 @@
+import type { Nodes, RootContent } from 'mdast';
+import type { DraftBody } from './body';
+import { elementsIn, given } from './references';
+import { problem } from './problems';
+import { figuresInProse } from './proseFigures';
+import type { PlaceOf } from './frontmatter';
+import type { Frontmatter } from './schema';
+import type { SourceProblem } from './types';
+
+/** What a reading leaves for the check. */
+export interface Noticed {
+  frontmatter: Frontmatter;
+  placeOf: PlaceOf;
+  body: DraftBody;
+}
+
+type Rule = (read: Noticed) => SourceProblem[];
+
+const allNodes = ({ intro, steps }: DraftBody): RootContent[] => [...intro, ...steps.flatMap((s) => s.children)];
+
+function keysUsed(body: DraftBody, ...names: string[]): Set<string> {
+  return new Set(
+    elementsIn(allNodes(body))
+      .filter((e) => names.includes(e.name ?? ''))
+      .flatMap((e) => (given(e)['of'] ?? '').split(/\s+/)),
+  );
+}
+
+/** A value that no step uses is either forgotten in the steps or left over in the front matter. */
+const unused: Rule = ({ frontmatter, placeOf, body }) => {
+  const uses = {
+    torques: [keysUsed(body, 'Torque'), 'Torque'],
+    limits: [keysUsed(body, 'Limit', 'Worksheet'), 'Limit'],
+    timers: [keysUsed(body, 'Timer'), 'Timer'],
+    figures: [keysUsed(body, 'Figure'), 'Figure'],
+  } as const;
+  return (Object.keys(uses) as (keyof typeof uses)[]).flatMap((list) => {
+    const [used, word] = uses[list];
+    return frontmatter[list].flatMap((entry, i) => {
+      if (used.has(entry.key)) return [];
+      const called = 'name' in entry ? entry.name : entry.caption;
+      return [problem(placeOf([list, i, 'key']), `${word} ${i + 1} (${called}) is used in no step.`, `${list}.${i}`)];
+    });
+  });
+};
+
+const cautionsNowhere: Rule = ({ frontmatter, placeOf, body }) => {
+  const used = new Set(body.steps.flatMap((s) => s.cautions));
+  return frontmatter.cautions.flatMap((caution, i) =>
+    used.has(caution.key)
+      ? []
+      : [
+          problem(
+            placeOf(['cautions', i, 'key']),
+            `Caution ${i + 1} (${caution.hazard}) stands before no step. Put it before the step it guards.`,
+            `cautions.${i}`,
+          ),
+        ],
+  );
+};
+
+/** Every value says where it comes from, or that it says nothing. */
+const withoutSource: Rule = ({ frontmatter, placeOf }) =>
+  (['torques', 'limits'] as const).flatMap((list) =>
+    frontmatter[list].flatMap((entry, i) =>
+      entry.source
+        ? []
+        : [
+            problem(
+              placeOf([list, i, 'key']),
+              `${list === 'torques' ? 'Torque' : 'Limit'} ${i + 1} (${entry.name}) names no source. Say where the value comes from.`,
+              `${list}.${i}.source`,
+            ),
+          ],
+    ),
+  );
+
+const untimedSupplies: Rule = ({ frontmatter, placeOf, body }) => {
+  const timed = new Set(
+    elementsIn(allNodes(body))
+      .filter((e) => e.name === 'Timer')
+      .map((e) => `${given(e)['of'] ?? ''} ${given(e)['stage'] ?? ''}`),
+  );
+  return frontmatter.supplies.flatMap((supply, i) =>
+    supply.cure === undefined || timed.has(`${supply.key} cure`)
+      ? []
+      : [
+          problem(
+            placeOf(['supplies', i, 'cure']),
+            `Supply ${i + 1} (${supply.name}) has a cure time, but no step waits for it: <Timer of="${supply.key}" stage="cure" />.`,
+            `supplies.${i}.cure`,
+          ),
+        ],
+  );
+};
+
+const emptySteps: Rule = ({ body }) =>
+  body.steps.flatMap((step, i) =>
+    step.children.length
+      ? []
+      : [problem(step.place, `Step ${i + 1} (${step.title}) has a title and no words.`, `steps.${i}.body`)],
+  );
+
+function writtenOut(nodes: readonly Nodes[], path: string): SourceProblem[] {
+  return nodes.flatMap((node): SourceProblem[] => {
+    if (node.type !== 'text') return 'children' in node ? writtenOut(node.children, path) : [];
+    return figuresInProse(node.value).map(({ text, component, list }) =>
+      problem(
+        node.position?.start,
+        `"${text}" is written out here. Where hands act on it, put it under ${list} and write <${component} of="…" />, so that it stands in one place.`,
+        path,
+      ),
+    );
+  });
+}
+
+const figuresWrittenOut: Rule = ({ body }) => [
+  ...writtenOut(body.intro, 'intro'),
+  ...body.steps.flatMap((step, i) => writtenOut(step.children, `steps.${i}.body`)),
+];
+
+const RULES: readonly Rule[] = [unused, cautionsNowhere, withoutSource, untimedSupplies, emptySteps, figuresWrittenOut];
+
+/** What a reviewer should look at in a text that is otherwise in order. */
+export const noticesOf = (read: Noticed): SourceProblem[] => RULES.flatMap((rule) => rule(read));
