@@ -1,6 +1,9 @@
-import type { AuthConfig } from '@auth/core';
+import { authConfig } from '@/server/accounts/authConfig';
+import { readConfig } from '@/server/config';
+import { readSecret } from '@/server/secret';
 
-// Read by auth-astro. Its own types do not pass a strict check, so they are not imported here.
-export default { prefix: '/api/auth', providers: [], secret: process.env.AUTH_SECRET ?? '' } satisfies AuthConfig & {
-  prefix: string;
-};
+const config = readConfig();
+
+// Read by auth-astro, which keeps it for the life of the process. Its own types do not pass a strict check,
+// so they are not imported here.
+export default authConfig(config, readSecret(config.dataDir));

@@ -1,0 +1,54 @@
+import { defineMiddleware, sequence } from 'astro:middleware';
+import { readSession } from '@/server/accounts/session';
+import { isSecure, sessionCookieName } from '@/server/accounts/session';
+import { fromAddress } from '@/server/accounts/tries';
+import { NOBODY, whoIs } from '@/server/accounts/whoIs';
+import { rememberFailedSignIn, sentForm } from '@/server/front/failedSignIn';
+import { withHeaders } from '@/server/front/headers';
+import { isApi, isOpen, needsNoBook } from '@/server/front/openPaths';
+import { refusalResponse } from '@/server/front/refusalResponse';
+import { asRefusal, signedOut } from '@/server/refusal';
+import { startOnce } from '@/server/start';
+
+const headers = defineMiddleware(async (_context, next) => withHeaders(await next(), import.meta.env.DEV));
+
+/** Turns a thrown refusal into a problem document for the API and into an error page for a reader. */
+const refusals = defineMiddleware(async (context, next) => {
+  try {
+    return await next();
+  } catch (error) {
+    const refusal = asRefusal(error);
+    if (refusal.status >= 500) console.error(refusal.cause);
+    if (isApi(context.url.pathname)) return refusalResponse(refusal);
+    context.locals.refusal = refusal;
+    const page = await context.rewrite(`/${[403, 404].includes(refusal.status) ? refusal.status : 500}`);
+    return new Response(page.body, {
+      status: refusal.status,
+      headers: { ...refusal.headers, ...Object.fromEntries(page.headers) },
+    });
+  }
+});
+
+/** Finds out who asks, and turns away whoever must sign in first: every path that is not named open. */
+const guard = defineMiddleware(async (context, next) => {
+  const { locals, url, cookies } = context;
+  locals.actor ??= NOBODY;
+  locals.person ??= null;
+  if (needsNoBook(url.pathname)) return next();
+  const { config } = await startOnce();
+  const session = await readSession(cookies.get(sessionCookieName(isSecure(config.origin)))?.value);
+  const who = session && (await whoIs(session));
+  if (who) Object.assign(locals, { actor: who.actor, person: who.me });
+  if (who || isOpen(url.pathname)) return next();
+  if (isApi(url.pathname)) throw signedOut();
+  const to = context.request.method === 'GET' ? url.pathname + url.search : '/';
+  return context.redirect(to === '/' ? '/sign-in' : `/sign-in?to=${encodeURIComponent(to)}`, 303);
+});
+
+const signIn = defineMiddleware(async ({ request, url, clientAddress }, next) => {
+  if (request.method !== 'POST' || !url.pathname.startsWith('/api/auth/callback/')) return next();
+  const form = await sentForm(request);
+  return rememberFailedSignIn(await fromAddress(clientAddress, () => next()), form, url);
+});
+
+export const onRequest = sequence(headers, refusals, guard, signIn);
