@@ -1,12 +1,11 @@
 import { defineMiddleware, sequence } from 'astro:middleware';
-import { readSession } from '@/server/accounts/session';
-import { isSecure, sessionCookieName } from '@/server/accounts/session';
+import { isSecure, readSession, sessionCookieName } from '@/server/accounts/session';
 import { fromAddress } from '@/server/accounts/tries';
 import { NOBODY, whoIs } from '@/server/accounts/whoIs';
 import { rememberFailedSignIn, sentForm } from '@/server/front/failedSignIn';
 import { withHeaders } from '@/server/front/headers';
 import { isApi, isOpen, needsNoBook } from '@/server/front/openPaths';
-import { refusalResponse } from '@/server/front/refusalResponse';
+import { problemResponse } from '@/server/http/problem';
 import { asRefusal, signedOut } from '@/server/refusal';
 import { startOnce } from '@/server/start';
 
@@ -19,7 +18,7 @@ const refusals = defineMiddleware(async (context, next) => {
   } catch (error) {
     const refusal = asRefusal(error);
     if (refusal.status >= 500) console.error(refusal.cause);
-    if (isApi(context.url.pathname)) return refusalResponse(refusal);
+    if (isApi(context.url.pathname)) return problemResponse(refusal, crypto.randomUUID());
     context.locals.refusal = refusal;
     const page = await context.rewrite(`/${[403, 404].includes(refusal.status) ? refusal.status : 500}`);
     return new Response(page.body, {

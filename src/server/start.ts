@@ -1,5 +1,8 @@
 import { join } from 'node:path';
 import { openDatabase } from '@db/connect';
+import { DEMONSTRATION_PASSWORD } from '@db/seeders/demonstration';
+import { seedNetwork } from '@db/seeders/seedNetwork';
+import { hashPassword } from './accounts/passwords';
 import { now } from './clock';
 import { readConfig, type Config } from './config';
 import { openOnce, within, type App } from './context';
@@ -10,7 +13,9 @@ export async function start(config: Config): Promise<App> {
   const secret = readSecret(config.dataDir);
   const db = await openDatabase(join(config.dataDir, 'matchmark.sqlite'), { now });
   const running: App = { config, db, secret };
-  await within(running, async () => {});
+  await within(running, async () => {
+    if (config.demo) await seedNetwork(db, () => hashPassword(DEMONSTRATION_PASSWORD));
+  });
   return running;
 }
 
