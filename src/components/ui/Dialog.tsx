@@ -1,0 +1,44 @@
+import { useEffect, useId, useRef, type ReactNode } from 'react';
+
+/**
+ * A question that must be answered before going on, in the browser's own dialog: focus stays inside, Escape
+ * closes, focus returns to what opened it.
+ */
+export function Dialog({
+  open,
+  title,
+  onClose,
+  actions,
+  children,
+}: {
+  open: boolean;
+  title: string;
+  onClose: () => void;
+  /** Buttons, the main one first. */
+  actions: ReactNode;
+  children: ReactNode;
+}) {
+  const dialog = useRef<HTMLDialogElement>(null);
+  const titleId = useId();
+  useEffect(() => {
+    const element = dialog.current;
+    if (open && !element?.open) element?.showModal();
+    if (!open && element?.open) element.close();
+  }, [open]);
+  return (
+    <dialog
+      ref={dialog}
+      aria-labelledby={titleId}
+      onClose={onClose}
+      className="frame m-auto max-h-[90vh] w-[min(36rem,calc(100vw-2rem))] overflow-auto p-0 text-ink backdrop:bg-pit/60"
+    >
+      <div className="framed-sections">
+        <h2 id={titleId} className="px-6 py-4 text-lead">
+          {title}
+        </h2>
+        <div className="flex flex-col gap-4 px-6 py-5">{children}</div>
+        <div className="flex flex-wrap gap-2.5 px-6 py-4">{actions}</div>
+      </div>
+    </dialog>
+  );
+}

@@ -1,0 +1,50 @@
+import type { ReactNode } from 'react';
+import { classes } from './classes';
+
+/** What every field has besides its control. */
+export interface FieldWords {
+  /** Says what to enter; always visible. */
+  label: ReactNode;
+  /** The HTML name; the id too, unless one is given. */
+  name: string;
+  id?: string;
+  hint?: ReactNode;
+  /** What is wrong and what to do about it. */
+  error?: string | undefined;
+  /** Classes of the whole field, for its place in a layout. */
+  fieldClass?: string;
+}
+
+/** Ids and ARIA attributes that tie a control to its label, hint and error. */
+export function tie({ name, id = name, hint, error }: FieldWords) {
+  const describedBy = classes(hint ? `${id}-hint` : null, error ? `${id}-error` : null);
+  return {
+    id,
+    name,
+    'aria-describedby': describedBy || undefined,
+    'aria-invalid': error ? true : undefined,
+  };
+}
+
+/** Label above, hint under it, the control, and the error right beside what it speaks of. */
+export function FieldShell({ children, ...words }: FieldWords & { children: ReactNode }) {
+  const { id } = tie(words);
+  return (
+    <div className={classes('flex min-w-0 flex-col gap-1.5', words.fieldClass)}>
+      <label htmlFor={id} className="font-medium">
+        {words.label}
+      </label>
+      {words.hint && (
+        <p id={`${id}-hint`} className="-mt-1 text-small text-ink-2">
+          {words.hint}
+        </p>
+      )}
+      {children}
+      {words.error && (
+        <p id={`${id}-error`} className="border-l-[8px] border-ink pl-2.5 font-medium leading-snug">
+          {words.error}
+        </p>
+      )}
+    </div>
+  );
+}
