@@ -28,8 +28,8 @@ module.exports = {
       notice: '#0057b8',
     },
     fontFamily: {
-      serif: ['Merriweather', 'Georgia', 'serif'],
-      sans: ['"Barlow Semi Condensed"', '"Arial Narrow"', 'Arial', 'sans-serif'],
+      serif: ['Merriweather', '"Merriweather fallback"', 'Georgia', 'serif'],
+      sans: ['"Barlow Semi Condensed"', '"Barlow fallback"', '"Arial Narrow"', 'sans-serif'],
     },
     fontSize: pxScale({
       small: [14.5, '1.4'],

@@ -1,0 +1,56 @@
+import { Button } from '@/components/ui/Button';
+import { UnitsSwitch } from './UnitsSwitch';
+import { counted } from './words';
+
+/** Id of the form that starts a proposal; a step's own button submits it with `step`. */
+export const PROPOSE_FORM = 'propose';
+
+/** What can be done with a sheet. A bar under the head; on a phone it stays at the bottom of the screen. */
+export function Actions({
+  number,
+  propose,
+  units,
+  openProposals = 0,
+}: {
+  number: string;
+  /** The person may propose a change. */
+  propose: boolean;
+  units: 'metric' | 'inch';
+  openProposals?: number;
+}) {
+  return (
+    <div className="actions-bar print:hidden">
+      {propose && (
+        <form id={PROPOSE_FORM} method="post" action={`/procedures/${number}/propose`} className="max-sm:flex-1">
+          <Button type="submit" kind="main" className="max-sm:w-full max-sm:px-2">
+            Propose a change
+          </Button>
+        </form>
+      )}
+      <Button data-print data-needs-script="" className="max-sm:px-3">
+        Print<span className="max-sm:sr-only"> the sheet</span>
+      </Button>
+      {openProposals > 0 && (
+        <p className="text-ink-2 max-sm:hidden">{counted(openProposals, 'proposed change')} waiting for review</p>
+      )}
+      <div className="sm:ml-auto">
+        <UnitsSwitch units={units} back={`/procedures/${number}`} />
+      </div>
+    </div>
+  );
+}
+
+/** Starts a proposal at one step. Belongs to the form in `Actions`. */
+export const ProposeStep = ({ step, number }: { step: string; number: number }) => (
+  <Button
+    type="submit"
+    form={PROPOSE_FORM}
+    name="step"
+    value={step}
+    kind="quiet"
+    className="propose-step -ml-2 mt-1 text-small font-medium print:hidden"
+    aria-label={`Propose a change to step ${number}`}
+  >
+    Change this step
+  </Button>
+);

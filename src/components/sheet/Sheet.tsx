@@ -1,0 +1,57 @@
+import type { ReactNode } from 'react';
+import type { RenderedProcedure, RenderedStep } from '@/domain/procedure/types';
+import { Contents } from './Contents';
+import type { EngineName } from './engineNames';
+import { Head } from './Head';
+import { Prep } from './Prep';
+import { Sources } from './Sources';
+import { Step } from './Step';
+import { RunningHead, type TitleBlockFacts } from './TitleBlock';
+
+/**
+ * A whole sheet, as read, previewed and printed. `notice` stands above everything, `actions` under the head,
+ * `afterStep` at the end of a step's words.
+ */
+export function Sheet({
+  procedure,
+  facts,
+  engines,
+  notice,
+  actions,
+  afterStep,
+}: {
+  procedure: RenderedProcedure;
+  facts: TitleBlockFacts;
+  engines: readonly EngineName[];
+  notice?: ReactNode;
+  actions?: ReactNode;
+  afterStep?: (step: RenderedStep) => ReactNode;
+}) {
+  const { frontmatter, steps, introHtml } = procedure;
+  return (
+    <article className="printed-sheet">
+      <RunningHead facts={facts} title={frontmatter.title} />
+      <div className="printed-body frame framed-sections">
+        {notice}
+        <Head
+          frontmatter={frontmatter}
+          facts={facts}
+          engines={engines}
+          holds={steps.reduce((sum, step) => sum + step.holds.length, 0)}
+        />
+        {actions}
+        <Prep frontmatter={frontmatter} />
+        {steps.length > 0 && <Contents steps={steps} />}
+        {introHtml && (
+          <div className="prose-step px-4 py-5 sm:px-9" dangerouslySetInnerHTML={{ __html: introHtml }} />
+        )}
+        <div className="steps">
+          {steps.map((step) => (
+            <Step key={step.id} step={step} frontmatter={frontmatter} after={afterStep?.(step)} />
+          ))}
+        </div>
+        <Sources sources={frontmatter.sources} />
+      </div>
+    </article>
+  );
+}

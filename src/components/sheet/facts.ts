@@ -1,0 +1,21 @@
+import { dayOf } from '@/components/ui/day';
+import type { Sheet } from '@/domain/api/schemas';
+import type { TitleBlockFacts } from './TitleBlock';
+import { counted } from './words';
+
+/** What the title block of a published sheet says. */
+export function factsOf({ number, revision, current, earlier }: Sheet): TitleBlockFacts {
+  return {
+    number,
+    letter: revision.letter,
+    standing: revision.letter === current.letter ? 'current' : 'superseded',
+    published: dayOf(revision.publishedAt),
+    writtenBy: revision.author.name,
+    reviewedBy: revision.reviewers.map(({ name }) => name).join(', ') || 'Nobody named',
+    sheetCheck: revision.sheetCheck,
+    history: {
+      href: `/procedures/${number}/revisions`,
+      text: earlier > 0 ? counted(earlier, 'earlier revision') : 'First revision',
+    },
+  };
+}
