@@ -1,5 +1,7 @@
+import { may, type Actor } from '@/domain/people/may';
+
 /** The rooms of the house, in the order the navigation shows them. */
-export const PLACES = [
+const PLACES = [
   { key: 'look-up', name: 'Look up', href: '/' },
   { key: 'proposals', name: 'Proposals', href: '/proposals' },
   { key: 'review-desk', name: 'Review desk', href: '/review-desk' },
@@ -7,18 +9,30 @@ export const PLACES = [
 ] as const;
 export type Place = (typeof PLACES)[number]['key'];
 
-interface RoleHeld {
-  in: 'shop' | 'common' | 'network';
-  shopId: string | null;
-  role: string;
-}
+/** Whether somebody may propose anywhere: to the common book, or to a book of a shop they are in. */
+const mayPropose = (actor: Actor) =>
+  may(actor, 'propose', { book: { kind: 'common' } }).ok ||
+  actor.memberships.some(
+    (m) => m.in === 'shop' && may(actor, 'propose', { book: { kind: 'shop', shopId: m.shopId } }).ok,
+  );
 
 /**
- * The places a person may use. Whether a senior technician or an owner has a review desk depends on their shop having
- * one editor only, which the desk itself knows: they are shown the way, and the desk says what it holds for them.
+ * The places a person may use.
+ *
+ * @param shopsWithOneEditor ids of shops whose senior technicians and owner stand in for a second editor
  */
-export function placesFor(roles: readonly RoleHeld[]) {
-  const reviews = roles.some(({ role }) => ['editor', 'senior', 'owner'].includes(role));
-  const writes = roles.some(({ role }) => role !== 'apprentice' && role !== 'steward');
-  return PLACES.filter(({ key }) => (key === 'proposals' ? writes : key === 'review-desk' ? reviews : true));
+export function placesFor(actor: Actor, shopsWithOneEditor: readonly string[]) {
+  const open: Record<Place, boolean> = {
+    'look-up': true,
+    proposals: mayPropose(actor),
+    'review-desk': may(actor, 'seeReviewDesk', { shopsWithOneEditor }).ok,
+    handbook: true,
+  };
+  return PLACES.filter(({ key }) => open[key]);
+}
+
+/** "Rowan Achterberg" is RA. */
+export function initialsOf(name: string): string {
+  const words = name.trim().split(/\s+/);
+  return [words[0], words.length > 1 ? words.at(-1) : ''].map((word) => word?.charAt(0).toUpperCase() ?? '').join('');
 }

@@ -28,7 +28,9 @@ export function Actions({
         </form>
       )}
       <Button data-print data-needs-script="" className="max-sm:px-3">
-        Print<span className="max-sm:sr-only"> the sheet</span>
+        <span>
+          Print<span className="max-sm:sr-only"> the sheet</span>
+        </span>
       </Button>
       {openProposals > 0 && (
         <p className="text-ink-2 max-sm:hidden">{counted(openProposals, 'proposed change')} waiting for review</p>
@@ -48,9 +50,9 @@ export const ProposeStep = ({ step, number }: { step: string; number: number }) 
     name="step"
     value={step}
     kind="quiet"
-    className="propose-step -ml-2 mt-1 text-small font-medium print:hidden"
-    aria-label={`Propose a change to step ${number}`}
+    className="propose-step text-small font-medium print:hidden"
+    aria-label={`Change step ${number}`}
   >
-    Change this step
+    Change
   </Button>
 );

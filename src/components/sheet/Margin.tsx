@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import type { Frontmatter, Limit, Timer, Torque } from '@/domain/procedure/schema';
 import type { Reference } from '@/domain/procedure/types';
-import { limitText, threadText, timerText, torqueText } from '@/domain/procedure/values';
+import { durationText, limitText, threadText, torqueText } from '@/domain/procedure/values';
 import { OrderDrawing } from './OrderDrawing';
 import { BigValue, OtherUnits, Value } from './Value';
 import { counted, passWord } from './words';
@@ -14,15 +14,29 @@ const Block = ({ name, detail, children }: { name: string; detail?: string; chil
   </div>
 );
 
-const Line = ({ children }: { children: ReactNode }) => <p className="text-small leading-snug">{children}</p>;
+const Line = ({ children }: { children: ReactNode }) => <p className="leading-snug">{children}</p>;
 
 /** Where a value comes from, or that nobody has said. */
 const Origin = ({ source, frontmatter }: { source?: string; frontmatter: Frontmatter }) => {
   const found = frontmatter.sources.find(({ key }) => key === source);
-  return <Line>{found ? <span className="text-ink-2">Source: {found.title}</span> : <b className="font-semibold">No source stated</b>}</Line>;
+  return found ? (
+    <p className="mt-0.5 text-small leading-snug text-ink-2">Source: {found.title}</p>
+  ) : (
+    <p className="mt-0.5 text-small font-semibold leading-snug">No source stated</p>
+  );
 };
 
-function TorqueBlock({ torque, passes, final, f }: { torque: Torque; passes: number[]; final: boolean; f: Frontmatter }) {
+function TorqueBlock({
+  torque,
+  passes,
+  final,
+  f,
+}: {
+  torque: Torque;
+  passes: number[];
+  final: boolean;
+  f: Frontmatter;
+}) {
   const all = torque.passes?.map((_, i) => i + 1) ?? [];
   // A step that stops at a pass shows that pass large; the final value is for the step that reaches it.
   const [shown] = final ? [] : passes;
@@ -45,12 +59,6 @@ function TorqueBlock({ torque, passes, final, f }: { torque: Torque; passes: num
               {passWord(pass)} <Value text={torqueText(torque, { pass })} />
             </Line>
           ))}
-        {final && torque.angles && (
-          <Line>
-            Then turn {torque.angles.map((angle) => `${angle}°`).join(', then ')}
-            {torque.angleTolerance !== undefined && ` (each ±${torque.angleTolerance}°)`}
-          </Line>
-        )}
         {torque.note && <Line>{torque.note}</Line>}
         <Origin source={torque.source} frontmatter={f} />
       </div>
@@ -78,7 +86,7 @@ function LimitBlock({ limit, f }: { limit: Limit; f: Frontmatter }) {
 }
 
 const TimerBlock = ({ name, minutes, note }: Pick<Timer, 'name' | 'minutes' | 'note'>) => {
-  const text = timerText({ minutes });
+  const text = durationText(minutes);
   return (
     <Block name={name}>
       <BigValue text={{ metric: text, inch: text }} />
@@ -110,7 +118,11 @@ function timerOf(reference: Extract<Reference, { kind: 'timer' }>, f: Frontmatte
   const supply = f.supplies.find(({ key }) => key === reference.key);
   const minutes = reference.stage === 'cure' ? supply?.cure : supply?.skinOver;
   if (!supply || minutes === undefined) return null;
-  return { name: `${supply.name}, ${reference.stage === 'cure' ? 'full cure' : 'skins over in'}`, minutes };
+  return {
+    name: `${supply.name}, ${reference.stage === 'cure' ? 'full cure' : 'skins over in'}`,
+    minutes,
+    note: undefined,
+  };
 }
 
 /** One block for each thing the step points at, a torque's passes gathered under its final value. */
@@ -125,7 +137,9 @@ function blocks(references: readonly Reference[], f: Frontmatter): ReactNode[] {
         const torque = f.torques.find(({ key }) => key === reference.key);
         const uses = references.flatMap((r) => (r.kind === 'torque' && r.key === reference.key ? [r.pass] : []));
         const passes = uses.filter((pass) => pass !== undefined);
-        return torque ? [<TorqueBlock key={id} torque={torque} passes={passes} final={uses.includes(undefined)} f={f} />] : [];
+        return torque
+          ? [<TorqueBlock key={id} torque={torque} passes={passes} final={uses.includes(undefined)} f={f} />]
+          : [];
       }
       case 'limit': {
         const limit = f.limits.find(({ key }) => key === reference.key);
@@ -133,11 +147,28 @@ function blocks(references: readonly Reference[], f: Frontmatter): ReactNode[] {
       }
       case 'timer': {
         const timer = timerOf(reference, f);
-        return timer ? [<TimerBlock key={id + (reference.stage ?? '')} {...timer} />] : [];
+        return timer
+          ? [
+              <TimerBlock
+                key={id + (reference.stage ?? '')}
+                name={timer.name}
+                minutes={timer.minutes}
+                note={timer.note}
+              />,
+            ]
+          : [];
       }
       case 'part': {
         const part = f.parts.find(({ key }) => key === reference.key);
-        return part ? [<Block key={id} name={part.name} detail={[part.number, counted(part.quantity, 'piece')].filter(Boolean).join(', ')} />] : [];
+        return part
+          ? [
+              <Block
+                key={id}
+                name={part.name}
+                detail={[part.number, counted(part.quantity, 'piece')].filter(Boolean).join(', ')}
+              />,
+            ]
+          : [];
       }
       case 'worksheet':
         return [<Readings key={id} keys={reference.keys} f={f} />];

@@ -1,5 +1,5 @@
 import type { Frontmatter, Part, Supply } from '@/domain/procedure/schema';
-import { timerText } from '@/domain/procedure/values';
+import { durationText } from '@/domain/procedure/values';
 import { Checkbox } from '@/components/ui/Checkbox';
 import type { ReactNode } from 'react';
 import { SignalPanel, worstFirst } from './SignalPanel';
@@ -7,8 +7,8 @@ import { SignalPanel, worstFirst } from './SignalPanel';
 const partDetail = (part: Part) => [part.number, part.action, part.note].filter(Boolean).join(', ');
 const supplyDetail = (supply: Supply) =>
   [
-    supply.skinOver === undefined ? null : `skins over in ${timerText({ minutes: supply.skinOver })}`,
-    supply.cure === undefined ? null : `full cure ${timerText({ minutes: supply.cure })}`,
+    supply.skinOver === undefined ? null : `skins over in ${durationText(supply.skinOver)}`,
+    supply.cure === undefined ? null : `full cure ${durationText(supply.cure)}`,
     supply.note,
   ]
     .filter(Boolean)
@@ -26,9 +26,7 @@ const Item = ({ name, detail, quantity }: { name: string; detail?: string; quant
           {detail && <span className="block text-small leading-snug text-ink-2">{detail}</span>}
         </>
       }
-      after={
-        quantity === undefined ? undefined : <b className="text-[1.0625rem] font-semibold text-ink">{quantity}</b>
-      }
+      after={quantity === undefined ? undefined : <b className="text-[1.0625rem] font-semibold text-ink">{quantity}</b>}
     />
   </li>
 );
@@ -50,13 +48,12 @@ export function Prep({ frontmatter: f }: { frontmatter: Frontmatter }) {
           <Item key={part.key} name={part.name} detail={partDetail(part)} quantity={part.quantity} />
         ))}
       </List>
-      <List title="Tools and supplies" empty={!f.tools.length && !f.supplies.length && 'Nothing beyond the usual bench.'}>
+      <List
+        title="Tools and supplies"
+        empty={!f.tools.length && !f.supplies.length && 'Nothing beyond the usual bench.'}
+      >
         {f.tools.map((tool) => (
-          <Item
-            key={tool.key}
-            name={tool.range ? `${tool.name}, ${tool.range}` : tool.name}
-            detail={tool.note}
-          />
+          <Item key={tool.key} name={tool.range ? `${tool.name}, ${tool.range}` : tool.name} detail={tool.note} />
         ))}
         {f.supplies.map((supply) => (
           <Item key={supply.key} name={supply.name} detail={supplyDetail(supply)} />

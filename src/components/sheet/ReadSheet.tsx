@@ -47,7 +47,7 @@ export function ReadSheet({
       engines={namesOf(sheet.frontmatter.engines, engines)}
       notice={current ? undefined : <Superseded sheet={sheet} />}
       actions={<Actions number={sheet.number} propose={propose} units={units} openProposals={sheet.openProposals} />}
-      afterStep={propose ? (step) => <ProposeStep step={step.id} number={step.number} /> : undefined}
+      stepAct={propose ? (step) => <ProposeStep step={step.id} number={step.number} /> : undefined}
     />
   );
 }

@@ -10,7 +10,7 @@ import { RunningHead, type TitleBlockFacts } from './TitleBlock';
 
 /**
  * A whole sheet, as read, previewed and printed. `notice` stands above everything, `actions` under the head,
- * `afterStep` at the end of a step's words.
+ * `stepAct` is each step's own button.
  */
 export function Sheet({
   procedure,
@@ -18,39 +18,41 @@ export function Sheet({
   engines,
   notice,
   actions,
-  afterStep,
+  stepAct,
 }: {
   procedure: RenderedProcedure;
   facts: TitleBlockFacts;
   engines: readonly EngineName[];
   notice?: ReactNode;
   actions?: ReactNode;
-  afterStep?: (step: RenderedStep) => ReactNode;
+  stepAct?: (step: RenderedStep) => ReactNode;
 }) {
   const { frontmatter, steps, introHtml } = procedure;
   return (
     <article className="printed-sheet">
       <RunningHead facts={facts} title={frontmatter.title} />
-      <div className="printed-body frame framed-sections">
-        {notice}
-        <Head
-          frontmatter={frontmatter}
-          facts={facts}
-          engines={engines}
-          holds={steps.reduce((sum, step) => sum + step.holds.length, 0)}
-        />
-        {actions}
-        <Prep frontmatter={frontmatter} />
-        {steps.length > 0 && <Contents steps={steps} />}
-        {introHtml && (
-          <div className="prose-step px-4 py-5 sm:px-9" dangerouslySetInnerHTML={{ __html: introHtml }} />
-        )}
-        <div className="steps">
-          {steps.map((step) => (
-            <Step key={step.id} step={step} frontmatter={frontmatter} after={afterStep?.(step)} />
-          ))}
+      <div className="printed-body">
+        <div className="leaf framed-sections">
+          {notice}
+          <Head
+            frontmatter={frontmatter}
+            facts={facts}
+            engines={engines}
+            holds={steps.reduce((sum, step) => sum + step.holds.length, 0)}
+          />
+          {actions}
+          <Prep frontmatter={frontmatter} />
+          {steps.length > 0 && <Contents steps={steps} />}
+          {introHtml && (
+            <div className="prose-step px-4 py-5 sm:px-9" dangerouslySetInnerHTML={{ __html: introHtml }} />
+          )}
+          <div className="steps">
+            {steps.map((step) => (
+              <Step key={step.id} step={step} frontmatter={frontmatter} act={stepAct?.(step)} />
+            ))}
+          </div>
+          <Sources sources={frontmatter.sources} />
         </div>
-        <Sources sources={frontmatter.sources} />
       </div>
     </article>
   );

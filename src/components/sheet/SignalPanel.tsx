@@ -48,10 +48,13 @@ export function SignalPanel({ caution, shape = 'panel' }: { caution: Caution; sh
     <div
       role="note"
       aria-label={`${caution.signal}: ${caution.hazard}`}
-      className={classes('break-inside-avoid bg-white', shape === 'band' && 'sm:grid sm:grid-cols-[9.5rem_minmax(0,1fr)]')}
+      className={classes(
+        'break-inside-avoid bg-white',
+        shape === 'band' && 'sm:grid sm:grid-cols-[9.5rem_minmax(0,1fr)]',
+      )}
     >
       <SignalWord signal={caution.signal} className={shape === 'band' ? 'sm:items-start sm:py-3 sm:pl-5' : ''} />
-      <p className={classes('px-3 leading-snug', shape === 'band' ? 'max-w-[78ch] py-3 sm:px-5' : 'pb-3 pt-2')}>
+      <p className={classes('px-3 leading-snug', shape === 'band' ? 'max-w-[100ch] py-3 sm:px-5' : 'pb-3 pt-2')}>
         <strong className="font-semibold">{text.hurts}</strong> {text.avoid}
       </p>
     </div>

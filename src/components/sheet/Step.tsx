@@ -14,19 +14,19 @@ export const Hold = ({ text }: { text: string }) => (
 
 /**
  * One step: cautions across the sheet, then mark, words and margin. On a narrow screen the margin folds in under the
- * words. `after` stands at the end of the words.
+ * words. `act` is a button for this step, under its mark.
  */
 export function Step({
   step,
   frontmatter,
   anchors = true,
-  after,
+  act,
 }: {
   step: RenderedStep;
   frontmatter: Frontmatter;
   /** Ids and self-links `#step-<id>`; off where two texts stand on one page. */
   anchors?: boolean;
-  after?: ReactNode;
+  act?: ReactNode;
 }) {
   const cautions = step.cautions.flatMap((key) => frontmatter.cautions.filter((caution) => caution.key === key));
   const margin = <Margin references={step.references} frontmatter={frontmatter} />;
@@ -57,8 +57,8 @@ export function Step({
           {step.holds.map((text) => (
             <Hold key={text} text={text} />
           ))}
-          {after}
         </div>
+        {act && <div className="step-act">{act}</div>}
       </div>
     </section>
   );

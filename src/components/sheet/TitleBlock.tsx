@@ -29,10 +29,12 @@ const Fact = ({ name, className, children }: { name: string; className?: string;
 /** The corner of the drawing: which sheet this is, and who answers for it. */
 export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
   return (
-    <dl className="grid grid-cols-3 content-stretch [&>*:nth-child(3n)]:border-r-0 [&>*:nth-last-child(-n+3)]:border-b-0">
+    <dl className="grid grid-cols-3 content-stretch [&>*:nth-child(3n)]:border-r-0 [&>*:nth-last-child(-n+2)]:border-b-0">
       <Fact name="Number">{facts.number}</Fact>
       <Fact name="Revision">
-        {facts.letter && <span className="mr-1.5 font-serif text-[1.75rem] font-bold leading-none">{facts.letter}</span>}
+        {facts.letter && (
+          <span className="mr-1.5 font-serif text-[1.75rem] font-bold leading-none">{facts.letter}</span>
+        )}
         <span className="inline-block text-small font-medium text-ink-2">{facts.standing}</span>
       </Fact>
       <Fact name="Published">{facts.published}</Fact>

@@ -13,20 +13,22 @@ export const Value = ({ text }: { text: BothUnits }) =>
 
 /** The value in the units the reader did not choose, for a line underneath. */
 export const OtherUnits = ({ text }: { text: BothUnits }) => (
-  <Value text={{ metric: text.inch, inch: text.metric }} />
+  <span className="text-ink-2">
+    <Value text={{ metric: text.inch, inch: text.metric }} />
+  </span>
 );
 
 /** What hands act on comes first and largest: "10" of "10 ±1 N·m", "0.03 to 0.06" of "0.03 to 0.06 mm". */
-const LEADING = /^((?:at (?:least|most) )?)([−-]?[\d.,]+(?: to [−-]?[\d.,]+)?)(.*)$/;
+const LEADING = /^(−?[\d.\u202f]+(?: to −?[\d.\u202f]+)?)([^,]*)(?:, (.*))?$/;
 
 function Big({ text }: { text: string }) {
-  const [, before = '', number = '', after = ''] = LEADING.exec(text) ?? [];
+  const [, number, rest, turns] = LEADING.exec(text) ?? [];
   if (!number) return <>{text}</>;
   return (
     <>
-      {before && <span className="text-lead font-medium">{before}</span>}
-      {number}
-      <span className="text-lead font-medium">{after}</span>
+      <span className={number.includes(' to ') ? 'text-title' : undefined}>{number}</span>
+      <span className="text-lead font-medium">{rest}</span>
+      {turns && <span className="block text-lead font-semibold">{turns}</span>}
     </>
   );
 }

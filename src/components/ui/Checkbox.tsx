@@ -11,7 +11,10 @@ export function Checkbox({
 }: InputHTMLAttributes<HTMLInputElement> & { label: ReactNode; after?: ReactNode; ref?: Ref<HTMLInputElement> }) {
   return (
     <label
-      className={classes('grid min-h-touch cursor-pointer grid-cols-[1.25rem_1fr_auto] items-center gap-2.5', className)}
+      className={classes(
+        'grid min-h-touch cursor-pointer grid-cols-[1.25rem_1fr_auto] items-center gap-2.5',
+        className,
+      )}
     >
       <input
         {...input}

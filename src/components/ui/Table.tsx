@@ -70,7 +70,10 @@ const SortLink = ({ column }: { column: Column }) => (
 );
 
 export const Row = ({ children, className }: { children: ReactNode; className?: string }) => (
-  <tr role="row" className={classes('border-b border-hair align-top last:border-0 max-sm:block max-sm:py-3', className)}>
+  <tr
+    role="row"
+    className={classes('border-b border-hair align-top last:border-0 max-sm:block max-sm:py-3', className)}
+  >
     {children}
   </tr>
 );

@@ -13,8 +13,7 @@ export function TextArea({
   className,
   ref,
   ...area
-}: FieldWords &
-  Omit<TextareaHTMLAttributes<HTMLTextAreaElement>, 'name' | 'id'> & { ref?: Ref<HTMLTextAreaElement> }) {
+}: FieldWords & Omit<TextareaHTMLAttributes<HTMLTextAreaElement>, 'name' | 'id'> & { ref?: Ref<HTMLTextAreaElement> }) {
   const words = { label, name, id, hint, error, fieldClass };
   return (
     <FieldShell {...words}>

@@ -1,0 +1,30 @@
+/** A sheet's small comforts: units in place, links to steps, print. Each works as a plain link or form without it. */
+
+for (const form of document.querySelectorAll<HTMLFormElement>('form[data-units-switch]'))
+  form.addEventListener('submit', (event) => {
+    const pressed = event.submitter;
+    if (!(pressed instanceof HTMLButtonElement)) return;
+    event.preventDefault();
+    const units = pressed.value;
+    document.documentElement.dataset.units = units;
+    for (const button of form.querySelectorAll('button'))
+      button.setAttribute('aria-pressed', String(button.value === units));
+    // Kept in the profile too. Where that fails the page still shows them, and the next page asks again.
+    void fetch(form.action, { method: 'POST', body: new URLSearchParams({ units }), redirect: 'manual' }).catch(
+      () => {},
+    );
+  });
+
+for (const link of document.querySelectorAll<HTMLAnchorElement>('a[data-copy-link]'))
+  link.addEventListener('click', () => {
+    const said = document.querySelector('[data-said]');
+    void navigator.clipboard
+      ?.writeText(link.href)
+      .then(() => {
+        if (said) said.textContent = 'Link copied';
+        setTimeout(() => said && (said.textContent = ''), 2500);
+      })
+      .catch(() => {});
+  });
+
+for (const button of document.querySelectorAll('[data-print]')) button.addEventListener('click', () => print());
