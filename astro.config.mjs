@@ -4,6 +4,7 @@ import node from '@astrojs/node';
 import react from '@astrojs/react';
 import tailwind from '@astrojs/tailwind';
 import auth from 'auth-astro';
+import { parseWorker } from './scripts/parseWorkerPlugin.mjs';
 
 export default defineConfig({
   output: 'server',
@@ -16,6 +17,7 @@ export default defineConfig({
   devToolbar: { enabled: false },
   server: { port: Number(process.env.PORT ?? 4321), host: process.env.HOST ?? '127.0.0.1' },
   vite: {
+    plugins: [parseWorker()],
     ssr: { external: ['sqlite3', 'sequelize', 'umzug', '@node-rs/argon2'] },
   },
 });

@@ -4,7 +4,6 @@
  * (CVE-2021-42574 shows the trick on program text).
  */
 const FORBIDDEN: readonly { what: string; pattern: RegExp }[] = [
-   
   { what: 'a control character', pattern: /[\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f-\u009f]/ },
   { what: 'a mark that turns the direction of writing', pattern: /[\u061c\u200e\u200f\u202a-\u202e\u2066-\u2069]/ },
   { what: 'a broken character', pattern: /\p{Surrogate}/u },

@@ -14,7 +14,7 @@ const KINDS: Partial<Record<string, string>> = {
 };
 
 function wrongType(expected: string, received: string, data: unknown): string {
-  if (received === 'undefined') return 'is missing';
+  if (received === 'undefined') return expected === 'array' ? 'are missing' : 'is missing';
   if (received === 'null') return 'is empty: fill it in or remove the line';
   if (expected === 'string' && (received === 'number' || received === 'boolean'))
     return `must be text: put it in quotes, "${String(data)}"`;

@@ -6,7 +6,6 @@ const HELP =
  * one slash; everything else must be https, without a name or password in it.
  */
 export function linkFault(url: string): string | null {
-   
   if (url === '' || /[\s\\\u0000-\u001f\u007f]/.test(url)) return `This address cannot be used. ${HELP}`;
   if (/^\/(?!\/)/.test(url)) return null;
   if (!/^https:\/\/[^/]/i.test(url)) return HELP;

@@ -1,0 +1,120 @@
+import type { Worker } from 'node:worker_threads';
+import type { Parsed } from '@/domain/procedure/types';
+import { Refusal } from '../refusal';
+import { READY, startThread } from './parseThread';
+
+interface Options {
+  /** Program of the thread. */
+  url: URL;
+  /** Milliseconds a single text may take, once the thread runs, before the thread is ended. */
+  limit: number;
+  /** Milliseconds the thread may take to start. */
+  startLimit: number;
+  /** Texts that may wait for the thread. */
+  places: number;
+}
+
+interface Waiting {
+  source: string;
+  answer: (parsed: Parsed) => void;
+}
+
+const TOO_LONG =
+  'This text takes too long to read. Look for very long tables, deep lists or brackets without end, and write it plainer.';
+const BROKE = 'This text could not be read. Write it plainer, or divide it into two procedures.';
+
+const refused = (message: string): Parsed => ({ ok: false, errors: [{ line: 1, column: 1, message }] });
+
+const busy = () =>
+  new Refusal(503, 'busy', 'Busy', 'Too many texts are being checked. Nothing was saved; try again in a moment.', {
+    headers: { 'Retry-After': '2' },
+  });
+
+/**
+ * A parser in a thread of its own. Texts are taken one after the other; one that runs into `limit` ends the
+ * thread and is refused in a sentence, and the next text gets a new thread.
+ */
+export class ParseQueue {
+  readonly #options: Options;
+  readonly #waiting: Waiting[] = [];
+  #current: Waiting | null = null;
+  #thread: Worker | null = null;
+  #isReady = false;
+  #timer: NodeJS.Timeout | undefined;
+
+  constructor(options: Options) {
+    this.#options = options;
+  }
+
+  /** The parsed text, or a refusal in its errors. Rejects with a 503 refusal when too many texts wait. */
+  parse(source: string): Promise<Parsed> {
+    if (this.#waiting.length >= this.#options.places) return Promise.reject(busy());
+    return new Promise((answer) => {
+      this.#waiting.push({ source, answer });
+      this.#next();
+    });
+  }
+
+  /** Starts the thread ahead of the first text, which would otherwise wait for it. */
+  start(): void {
+    this.#thread ??= this.#start();
+    if (!this.#current) this.#thread.unref();
+  }
+
+  /** Ends the thread. Texts that still wait are refused. */
+  async close(): Promise<void> {
+    this.#waiting.splice(0).forEach(({ answer }) => answer(refused(BROKE)));
+    await this.#end(BROKE);
+  }
+
+  #next(): void {
+    if (this.#current || this.#waiting.length === 0) return;
+    this.#current = this.#waiting.shift() ?? null;
+    const thread = (this.#thread ??= this.#start());
+    // While somebody waits for an answer the process must not end.
+    thread.ref();
+    if (this.#isReady) this.#ask();
+    else this.#timer = setTimeout(() => void this.#end(BROKE), this.#options.startLimit);
+  }
+
+  #start(): Worker {
+    const thread = startThread(this.#options.url);
+    thread.on('message', (message: Parsed | typeof READY) => {
+      if (message === READY) {
+        this.#isReady = true;
+        this.#ask();
+      } else this.#finish(message);
+    });
+    thread.on('error', () => void this.#end(BROKE));
+    thread.on('exit', () => void this.#end(BROKE));
+    return thread;
+  }
+
+  #ask(): void {
+    clearTimeout(this.#timer);
+    if (!this.#current) return;
+    this.#timer = setTimeout(() => void this.#end(TOO_LONG), this.#options.limit);
+    this.#thread?.postMessage(this.#current.source);
+  }
+
+  #finish(parsed: Parsed): void {
+    clearTimeout(this.#timer);
+    const done = this.#current;
+    this.#current = null;
+    this.#thread?.unref();
+    done?.answer(parsed);
+    this.#next();
+  }
+
+  async #end(because: string): Promise<void> {
+    const thread = this.#thread;
+    this.#thread = null;
+    this.#isReady = false;
+    thread?.removeAllListeners();
+    // A thread that is being ended may still report; nobody waits for it any more.
+    thread?.on('error', () => undefined);
+    const ended = thread?.terminate();
+    if (this.#current) this.#finish(refused(because));
+    await ended;
+  }
+}
