@@ -1,0 +1,101 @@
+import { z } from 'zod';
+import { fold, wordsOf } from './words';
+
+/**
+ * What the trade calls one thing. The files in `content/vocabulary` hold groups of names that mean the same to
+ * somebody who is looking something up; a query in any of them finds the sheets that use any other.
+ */
+
+const term = z
+  .string()
+  .trim()
+  .min(2, 'must have at least two characters')
+  .max(60, 'must be 60 characters or fewer')
+  .refine((text) => wordsOf(text).length > 0, 'must contain a word');
+
+export const VocabularyGroup = z
+  .object({
+    /** Names of one thing, the one the book prefers first. */
+    terms: z.array(term).min(1).max(20),
+    /** How it is often mistyped; understood in a query, never shown. */
+    misspelt: z.array(term).max(20).optional(),
+    /** Where the words belong or what they must not be mixed up with. */
+    note: z.string().trim().min(1).max(200).optional(),
+  })
+  .strict()
+  .refine((group) => group.terms.length + (group.misspelt?.length ?? 0) > 1, 'must join at least two words');
+
+export const VocabularyFile = z
+  .object({
+    /** What the file gathers, for example "Cylinder head and valve gear". */
+    title: z.string().trim().min(1).max(90),
+    groups: z.array(VocabularyGroup).min(1),
+  })
+  .strict();
+
+export type VocabularyGroup = z.infer<typeof VocabularyGroup>;
+export type VocabularyFile = z.infer<typeof VocabularyFile>;
+
+/** Groups met at a place in a text: `length` words from there on name each of `groups`. */
+export interface Meeting {
+  length: number;
+  groups: readonly number[];
+}
+
+const MOST_COMPLETIONS = 3;
+
+/** The groups made ready for looking up by folded words. A group's number is its place in the list given. */
+export class Phrases {
+  readonly #groups: readonly VocabularyGroup[];
+  readonly #byPhrase = new Map<string, number[]>();
+  readonly #sorted: string[];
+  readonly #longest: number;
+
+  constructor(groups: readonly VocabularyGroup[]) {
+    this.#groups = groups;
+    let longest = 1;
+    groups.forEach((group, at) => {
+      for (const text of [...group.terms, ...(group.misspelt ?? [])]) {
+        const words = wordsOf(text).map((word) => fold(word.text));
+        longest = Math.max(longest, words.length);
+        const known = this.#byPhrase.get(words.join(' '));
+        if (!known) this.#byPhrase.set(words.join(' '), [at]);
+        else if (!known.includes(at)) known.push(at);
+      }
+    });
+    this.#longest = longest;
+    this.#sorted = [...this.#byPhrase.keys()].sort();
+  }
+
+  /** The names of a group as a reader sees them. */
+  names(group: number): string[] {
+    return this.#groups[group]?.terms ?? [];
+  }
+
+  /** Every phrase that begins at `at`, longest first. `words` are folded. */
+  startingAt(words: readonly string[], at: number): Meeting[] {
+    const met: Meeting[] = [];
+    for (let length = Math.min(this.#longest, words.length - at); length > 0; length -= 1) {
+      const groups = this.#byPhrase.get(words.slice(at, at + length).join(' '));
+      if (groups) met.push({ length, groups });
+    }
+    return met;
+  }
+
+  /** Groups with a phrase that goes on from `typed` ("rocker cov"); none where too many could be meant. */
+  completing(typed: string): number[] {
+    let low = 0;
+    let high = this.#sorted.length;
+    while (low < high) {
+      const middle = (low + high) >> 1;
+      if ((this.#sorted[middle] ?? '') < typed) low = middle + 1;
+      else high = middle;
+    }
+    const groups = new Set<number>();
+    for (let i = low; this.#sorted[i]?.startsWith(typed); i += 1) {
+      for (const group of this.#byPhrase.get(this.#sorted[i] ?? '') ?? []) groups.add(group);
+      if (groups.size > MOST_COMPLETIONS) return [];
+    }
+    return [...groups];
+  }
+}

@@ -1,0 +1,52 @@
+/** Words of a text, with the places they stand at, so that what matched can be marked. */
+export interface Word {
+  /** Small letters without accents; digits keep their point: "m6", "1.5", "4102". */
+  text: string;
+  start: number;
+  end: number;
+}
+
+const WORD = /\d+(?:[.,]\d+)+|[\p{L}\p{N}]+(?:['’]s\b)?/gu;
+
+/** Small letters without accents. Keeps the length of the text, so that places in one are places in the other. */
+export function plain(text: string): string {
+  const folded = text.normalize('NFD').replace(/\p{M}+/gu, '').toLowerCase();
+  return folded.length === text.length ? folded : text.toLowerCase().length === text.length ? text.toLowerCase() : text;
+}
+
+export function wordsOf(text: string): Word[] {
+  const words: Word[] = [];
+  for (const match of plain(text).matchAll(WORD)) {
+    const start = match.index;
+    words.push({ text: match[0].replace(/['’]s$/, '').replace(',', '.'), start, end: start + match[0].length });
+  }
+  return words;
+}
+
+/**
+ * One form for singular and plural. Only plurals: cutting more would break a search while the word is being
+ * typed, because "timin" does not begin with the stem of "timing".
+ */
+export function fold(word: string): string {
+  if (word.length < 4 || !word.endsWith('s') || /(ss|us|is)$/.test(word)) return word;
+  if (word.endsWith('ies') && word.length > 4) return `${word.slice(0, -3)}y`;
+  if (/(sh|ch|x|z|ss)es$/.test(word)) return word.slice(0, -2);
+  return word.slice(0, -1);
+}
+
+/** What is left of a word without the ending that makes it another part of speech; null where nothing sensible is. */
+export function stemOf(word: string): string | null {
+  const match = /^(.{3,}?)(ing|ed|al|ation|ment|er|or|e)$/.exec(word);
+  const stem = match?.[1];
+  if (!stem) return null;
+  return /([bdgmnprt])\1$/.test(stem) ? stem.slice(0, -1) : stem;
+}
+
+/** Words that say nothing about which sheet is meant. */
+const EMPTY_WORDS = new Set(
+  'a an and are at be by can do does for from how i if in into is it its my of on or our so than that the their them then there these this to under up what when where which with you your'.split(
+    ' ',
+  ),
+);
+
+export const saysNothing = (word: string): boolean => EMPTY_WORDS.has(word);
