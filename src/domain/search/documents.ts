@@ -122,9 +122,7 @@ export function searchDocument(rendered: RenderedProcedure, meta: SearchMeta): S
             ['cures', supply.cure],
           ] as const
         ).flatMap(([what, minutes]) =>
-          minutes === undefined
-            ? []
-            : [{ name: `${supply.name} ${what}`, minutes, step: stepOf('timer', supply.key) }],
+          minutes === undefined ? [] : [{ name: `${supply.name} ${what}`, minutes, step: stepOf('timer', supply.key) }],
         ),
       ),
     ],

@@ -6,11 +6,15 @@ export interface Word {
   end: number;
 }
 
-const WORD = /\d+(?:[.,]\d+)+|[\p{L}\p{N}]+(?:['’]s\b)?/gu;
+/** A part number is its letters and its digits, so that "TN-4102", "TN 4102" and "tn4102" are the same two words. */
+const WORD = /\d+(?:[.,]\d+)+|\p{L}{1,4}(?=\d{3})|[\p{L}\p{N}]+(?:['’]s\b)?/gu;
 
 /** Small letters without accents. Keeps the length of the text, so that places in one are places in the other. */
 export function plain(text: string): string {
-  const folded = text.normalize('NFD').replace(/\p{M}+/gu, '').toLowerCase();
+  const folded = text
+    .normalize('NFD')
+    .replace(/\p{M}+/gu, '')
+    .toLowerCase();
   return folded.length === text.length ? folded : text.toLowerCase().length === text.length ? text.toLowerCase() : text;
 }
 

@@ -1,0 +1,174 @@
+import { SYSTEMS } from '../procedure/schema';
+import type { SearchDocument } from './documents';
+import { bestValues, explain, type Matched } from './explain';
+import { type Facets, type Filters, NO_FILTERS, sift } from './filters';
+import { sayQuantity } from './quantities';
+import { type Answer, answerAsked, either, together } from './match';
+import { Postings } from './postings';
+import { type Query, readQuery } from './query';
+import { best, rank, type Ranked } from './ranking';
+import { createTokens } from './tokens';
+import { type UnitSystem, ValueIndex } from './values';
+import { Phrases, type VocabularyGroup } from './vocabulary';
+
+/** An engine as far as search knows it. */
+export interface SearchEngine {
+  key: string;
+  name: string;
+  aliases: string[];
+}
+
+/** All that search works on; what the server sends and the page keeps. */
+export interface SearchBook {
+  documents: SearchDocument[];
+  vocabulary: VocabularyGroup[];
+  engines: SearchEngine[];
+}
+
+export type SearchHit = Pick<
+  SearchDocument,
+  | 'number'
+  | 'title'
+  | 'summary'
+  | 'engines'
+  | 'system'
+  | 'minutes'
+  | 'skill'
+  | 'holds'
+  | 'letter'
+  | 'publishedAt'
+  | 'book'
+> & { matched: Matched[] };
+
+export interface SearchAnswer {
+  hits: SearchHit[];
+  /** How many sheets the query and the filters leave; `hits` may be fewer. */
+  total: number;
+  /** True where nothing held all of the query and `hits` are only near it. */
+  near: boolean;
+  readAs: { quantities: string[]; synonyms: string[][] };
+  facets: Facets;
+}
+
+export interface SearchOptions {
+  /** How many hits to return with what matched. */
+  limit?: number;
+  units?: UnitSystem;
+}
+
+export interface Search {
+  query(text: string, filters?: Filters, options?: SearchOptions): SearchAnswer;
+}
+
+/** Longer queries say nothing more and only cost time. */
+export const LONGEST_QUERY = 200;
+const MOST_ASKED = 12;
+const REMEMBERED = 32;
+
+/** What is searched, with how much it says about what a sheet is for. */
+const FIELDS: [boost: number, of: (document: SearchDocument, engineName: (key: string) => string) => string[]][] = [
+  [6, (d) => [d.title]],
+  [
+    2.5,
+    (d) => [
+      ...d.parts.map((part) => (part.number ? `${part.name} ${part.number}` : part.name)),
+      ...d.torques.map((torque) => `${torque.name} ${torque.thread}`),
+      ...d.limits.map((limit) => limit.name),
+    ],
+  ],
+  [2, (d, engineName) => [d.summary, SYSTEMS[d.system], ...d.engines.map(engineName)]],
+  [1, (d) => [...d.steps, ...d.tools, ...d.timers.map((timer) => timer.name)]],
+];
+
+const answers = ({ scores }: Answer): boolean => scores.some((score) => score > 0);
+
+/** All of it, else all of it with slips and other endings, else any of it. */
+function findText(postings: Postings, query: Query): { answer: Answer | null; near: boolean } {
+  const asked = query.asked.slice(0, MOST_ASKED);
+  if (asked.length === 0) return { answer: null, near: false };
+  const strict = asked.map((one) => answerAsked(postings, one, 'strict'));
+  const all = together(postings, strict);
+  if (answers(all)) return { answer: all, near: false };
+  const loose = asked.map((one) => answerAsked(postings, one, 'loose'));
+  const allLoose = together(postings, loose);
+  if (answers(allLoose)) return { answer: allLoose, near: false };
+  return { answer: either(postings, loose), near: true };
+}
+
+/** Keeps the last few answers: going back a letter, or setting a filter, costs nothing. */
+function remember<T>(make: (key: string) => T): (key: string) => T {
+  const kept = new Map<string, T>();
+  return (key) => {
+    const known = kept.get(key);
+    const value = known ?? make(key);
+    kept.delete(key);
+    kept.set(key, value);
+    const [oldest] = kept.keys();
+    if (kept.size > REMEMBERED && oldest !== undefined) kept.delete(oldest);
+    return value;
+  };
+}
+
+/** Search over a book. Pure and the same on the server and in the page, so that both rank alike. */
+export function createSearch({ documents, vocabulary, engines }: SearchBook): Search {
+  const phrases = new Phrases([...vocabulary, ...engines.map(({ name, aliases }) => ({ terms: [name, ...aliases] }))]);
+  const tokensOf = createTokens(phrases);
+  const byKey = new Map(engines.map((engine) => [engine.key, engine]));
+  const engineName = (key: string): string => byKey.get(key)?.name ?? key;
+  const postings = new Postings(
+    documents.length,
+    FIELDS.map(([boost, of]) => ({
+      boost,
+      tokens: documents.map((document) => of(document, engineName).flatMap((text) => tokensOf(text))),
+    })),
+  );
+  const values = new ValueIndex(documents);
+  const engineTokens = new Set(engines.flatMap(({ name }) => [...tokensOf(name)]));
+
+  const rankOnce = remember((text): Ranked => {
+    const query = readQuery(text, phrases);
+    return rank({
+      documents,
+      query,
+      found: findText(postings, query),
+      values: values.find(query.quantities),
+      tokensOf,
+    });
+  });
+
+  const synonymsOf = ({ asked }: Query): string[][] =>
+    asked.flatMap(({ groups, completing }) =>
+      [...groups, ...completing].map((group) =>
+        group < vocabulary.length ? phrases.names(group) : phrases.names(group).slice(0, 1),
+      ),
+    );
+
+  return {
+    query(text, filters = NO_FILTERS, { limit = 20, units = 'metric' } = {}) {
+      const ranked = rankOnce(text.slice(0, LONGEST_QUERY));
+      const { query, near } = ranked;
+      const { kept, facets } = sift(documents, ranked.scores, filters);
+      const first = best(kept, limit, ranked, (at) => tokensOf(documents[at]?.title ?? ''));
+      return {
+        total: kept.length,
+        near,
+        facets,
+        readAs: {
+          quantities: query.quantities.map((quantity) => sayQuantity(quantity, units)),
+          synonyms: synonymsOf(query),
+        },
+        hits: first.map((at): SearchHit => {
+          const document = documents[at] as SearchDocument;
+          const { number, title, summary, system, minutes, skill, holds, letter, publishedAt, book } = document;
+          const told = bestValues(ranked.values.get(at) ?? [], query.quantities);
+          const matched = explain(document, ranked.terms, engineTokens, told, { phrases, tokensOf, units });
+          return {
+            ...{ number, title, summary, system, minutes, skill, holds, letter, publishedAt, book },
+            engines: document.engines,
+            matched,
+          };
+        }),
+      };
+    },
+  };
+}

@@ -1,0 +1,126 @@
+import { SYSTEMS } from '../procedure/schema';
+import type { SearchDocument } from './documents';
+import type { ReadQuantity } from './quantities';
+import { groupToken } from './tokens';
+import { sayValue, type UnitSystem, type ValueMatch } from './values';
+import type { Phrases } from './vocabulary';
+import { fold, wordsOf } from './words';
+
+/** What matched, in words, and where in those words: `marks` are [start, end) places in `text`. */
+export interface Matched {
+  field: 'title' | 'summary' | 'number' | 'torque' | 'limit' | 'timer' | 'part' | 'tool' | 'step' | 'system' | 'text';
+  text: string;
+  step: number | null;
+  marks: [number, number][];
+}
+
+/** Places of `text` that any of the matched tokens stand at, in order, touching ones joined. */
+export function marksIn(text: string, matched: ReadonlySet<string>, phrases: Phrases): [number, number][] {
+  const words = wordsOf(text);
+  const folded = words.map((word) => fold(word.text));
+  const hit = words.map(() => false);
+  folded.forEach((word, at) => {
+    if (matched.has(word)) hit[at] = true;
+    for (const { length, groups } of phrases.startingAt(folded, at))
+      if (groups.some((group) => matched.has(groupToken(group)))) hit.fill(true, at, at + length);
+  });
+  const marks: [number, number][] = [];
+  words.forEach((word, at) => {
+    if (!hit[at]) return;
+    const last = marks.at(-1);
+    if (last && hit[at - 1] && /^[\s-]*$/.test(text.slice(last[1], word.start))) last[1] = word.end;
+    else marks.push([word.start, word.end]);
+  });
+  return marks;
+}
+
+interface Line {
+  field: Matched['field'];
+  text: string;
+  step: number | null;
+}
+
+function linesOf(document: SearchDocument): Line[] {
+  const at = (step: number | null): string => (step === null ? '' : `, step ${step}`);
+  return [
+    ...document.parts.map((part): Line => ({
+      field: 'part',
+      text: part.number ? `${part.name}, ${part.number}` : part.name,
+      step: null,
+    })),
+    ...document.torques.map((torque): Line => ({
+      field: 'torque',
+      text: `${torque.name}, ${torque.thread}${at(torque.step)}`,
+      step: torque.step,
+    })),
+    ...document.limits.map((limit): Line => ({ field: 'limit', text: limit.name + at(limit.step), step: limit.step })),
+    ...document.steps.map((title, i): Line => ({ field: 'step', text: `Step ${i + 1}: ${title}`, step: i + 1 })),
+    ...document.tools.map((tool): Line => ({ field: 'tool', text: tool, step: null })),
+    { field: 'system', text: SYSTEMS[document.system], step: null },
+  ];
+}
+
+const MOST_VALUES = 2;
+const MOST_LINES = 2;
+
+/**
+ * Why a sheet is on the list, for the reader: the value that was asked for with what it is for, marked words of the
+ * title and the summary, then the lines that account for what those do not.
+ *
+ * @param matched tokens of the index that the query met in this document
+ * @param told tokens that need no line of their own, such as the engine's name, which the row shows anyway
+ */
+export function explain(
+  document: SearchDocument,
+  matched: ReadonlySet<string>,
+  told: ReadonlySet<string>,
+  values: readonly ValueMatch[],
+  tools: { phrases: Phrases; tokensOf: (text: string) => readonly string[]; units: UnitSystem },
+): Matched[] {
+  const marked = (field: Matched['field'], text: string, step: number | null): Matched => ({
+    field,
+    text,
+    step,
+    marks: marksIn(text, matched, tools.phrases),
+  });
+  const head = [marked('title', document.title, null), marked('summary', document.summary, null)];
+  const open = new Set([...matched].filter((token) => !told.has(token)));
+  const cross = (text: string): number => {
+    let crossed = 0;
+    for (const token of tools.tokensOf(text)) if (open.delete(token)) crossed += 1;
+    return crossed;
+  };
+  const out = head.filter((line) => line.marks.length > 0);
+  for (const line of head) cross(line.text);
+
+  for (const match of values.slice(0, MOST_VALUES)) {
+    const { value, rest, step } = sayValue(document, match, tools.units);
+    const line = marked(match.kind, `${value} ${rest}`, step);
+    const after = line.marks.filter(([start]) => start > value.length);
+    out.push({ ...line, marks: [[0, value.length], ...after] });
+    cross(rest);
+  }
+
+  const lines = open.size > 0 ? linesOf(document) : [];
+  for (let i = 0; i < MOST_LINES && open.size > 0; i += 1) {
+    const best = lines
+      .map((line) => ({ line, counts: tools.tokensOf(line.text).filter((token) => open.has(token)).length }))
+      .reduce<{ line: Line | null; counts: number }>((a, b) => (b.counts > a.counts ? b : a), {
+        line: null,
+        counts: 0,
+      });
+    if (!best.line) break;
+    cross(best.line.text);
+    out.push(marked(best.line.field, best.line.text, best.line.step));
+  }
+  return out;
+}
+
+/** Values in the order they are told: those that answer most first, then the closest. */
+export function bestValues(matches: readonly ValueMatch[], quantities: readonly ReadQuantity[]): ValueMatch[] {
+  return [...matches]
+    .sort(
+      (a, b) => Math.min(b.answers, quantities.length) - Math.min(a.answers, quantities.length) || b.score - a.score,
+    )
+    .filter((match, i, all) => i === 0 || match.answers === all[0]?.answers);
+}

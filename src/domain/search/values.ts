@@ -1,0 +1,224 @@
+import { convert, quantityOf, type Unit } from '../measure/convert';
+import { formatMeasure, inBothUnits, withUnit } from '../measure/format';
+import type { MeasuredQuantity } from '../measure/quantities';
+import type { SearchDocument, SearchLimit, SearchTorque } from './documents';
+import { agreement, type ReadMeasure, type ReadQuantity } from './quantities';
+
+/** Every number of the book's sheets, ordered by size, so that a measure finds its sheets without reading them all. */
+
+export type UnitSystem = 'metric' | 'inch';
+
+interface Entry {
+  /** Place of the document in the list the index was made from. */
+  document: number;
+  kind: 'torque' | 'limit' | 'timer';
+  /** Place in the document's own list of that kind. */
+  at: number;
+  value: number;
+  unit: Unit;
+  /** Final values count for more than a pass on the way there. */
+  weight: number;
+}
+
+/** A value of a sheet that answers the query, best of its document. */
+export interface ValueMatch {
+  kind: Entry['kind'];
+  at: number;
+  /** The number that agreed, in `unit`; null where only the thread was asked for. */
+  value: number | null;
+  unit: Unit;
+  /** 0 to 1 a quantity asked for, summed. */
+  score: number;
+  /** How many of the quantities asked for it answers. */
+  answers: number;
+}
+
+/** The unit that values of one quantity are compared in. Mass flow has its own: it cannot become volume flow. */
+const BASE: Partial<Record<MeasuredQuantity, Unit>> = {
+  length: 'mm',
+  torque: 'N·m',
+  force: 'N',
+  pressure: 'kPa',
+  temperature: '°C',
+  volume: 'mL',
+  time: 'min',
+  voltage: 'V',
+  resistance: 'Ω',
+  mass: 'g',
+};
+
+function inBase(value: number, unit: Unit): { key: string; value: number } | null {
+  const quantity = quantityOf(unit);
+  const base = quantity === 'flow' ? (unit === 'lb/h' || unit === 'g/s' ? 'g/s' : 'cc/min') : (BASE[quantity] ?? unit);
+  const converted = convert(value, unit, base);
+  return converted.ok ? { key: base, value: converted.value } : null;
+}
+
+const THREAD_END = /^(?:×|$)/;
+/** "M6" asks for any pitch, "M6×1.0" for that one. */
+const sameThread = (asked: string, thread: string): boolean =>
+  thread.toLowerCase().startsWith(asked.toLowerCase()) && THREAD_END.test(thread.slice(asked.length));
+
+function entriesOf(document: SearchDocument, at: number): Entry[] {
+  const entry = (kind: Entry['kind'], i: number, value: number, unit: Unit, weight: number): Entry => ({
+    document: at,
+    kind,
+    at: i,
+    value,
+    unit,
+    weight,
+  });
+  return [
+    ...document.torques.flatMap((torque, i) => [
+      entry('torque', i, torque.nm, 'N·m', 1),
+      ...torque.passes.map((pass) => entry('torque', i, pass, 'N·m', 0.6)),
+      ...torque.angles.map((angle) => entry('torque', i, angle, '°', 1)),
+    ]),
+    ...document.limits.flatMap((limit, i) =>
+      [limit.min, limit.nominal, limit.max].flatMap((value) =>
+        value === null || limit.unit === null ? [] : [entry('limit', i, value, limit.unit as Unit, 0.9)],
+      ),
+    ),
+    ...document.timers.map((timer, i) => entry('timer', i, timer.minutes, 'min', 0.7)),
+  ];
+}
+
+export class ValueIndex {
+  readonly #byUnit = new Map<string, { value: number; entry: Entry }[]>();
+  readonly #documents: readonly SearchDocument[];
+
+  constructor(documents: readonly SearchDocument[]) {
+    this.#documents = documents;
+    documents.forEach((document, at) => {
+      for (const entry of entriesOf(document, at)) {
+        const based = inBase(entry.value, entry.unit);
+        if (!based) continue;
+        const row = this.#byUnit.get(based.key) ?? [];
+        row.push({ value: based.value, entry });
+        this.#byUnit.set(based.key, row);
+      }
+    });
+    for (const row of this.#byUnit.values()) row.sort((a, b) => a.value - b.value);
+  }
+
+  /**
+   * The values that answer at least one of the quantities, by document. One value that answers two ("10 N·m", "M6") beats two
+   * values that answer one each.
+   */
+  find(quantities: readonly ReadQuantity[]): Map<number, ValueMatch[]> {
+    const found = new Map<number, Map<string, ValueMatch>>();
+    const add = (document: number, match: ValueMatch): void => {
+      const of = found.get(document) ?? new Map<string, ValueMatch>();
+      found.set(document, of);
+      const key = `${match.kind}${match.at}`;
+      const known = of.get(key);
+      if (!known) of.set(key, match);
+      else if (match.value !== null && known.value !== null) {
+        if (match.score > known.score) of.set(key, match);
+      } else
+        of.set(key, {
+          ...known,
+          value: known.value ?? match.value,
+          unit: known.value === null ? match.unit : known.unit,
+          score: known.score + match.score,
+          answers: known.answers + match.answers,
+        });
+    };
+    for (const quantity of quantities) {
+      if (quantity.kind === 'thread') this.#threads(quantity.thread, add);
+      else this.#measures(quantity, add);
+    }
+    return new Map([...found].map(([document, matches]) => [document, [...matches.values()]]));
+  }
+
+  #threads(thread: string, add: (document: number, match: ValueMatch) => void): void {
+    this.#documents.forEach((document, at) => {
+      document.torques.forEach((torque, i) => {
+        if (sameThread(thread, torque.thread))
+          add(at, { kind: 'torque', at: i, value: null, unit: 'N·m', score: 0.7, answers: 1 });
+      });
+    });
+  }
+
+  #measures(read: ReadMeasure, add: (document: number, match: ValueMatch) => void): void {
+    const least = inBase(read.low - read.halfDigit, read.unit);
+    const most = inBase(read.high + read.halfDigit, read.unit);
+    if (!most) return;
+    const row = this.#byUnit.get(most.key) ?? [];
+    // A little wider than any agreement can reach; `agreement` decides.
+    const reach = 0.05 * Math.abs(most.value);
+    const from = (least?.value ?? 0) - reach;
+    let low = 0;
+    let high = row.length;
+    while (low < high) {
+      const middle = (low + high) >> 1;
+      if ((row[middle]?.value ?? 0) < from) low = middle + 1;
+      else high = middle;
+    }
+    for (let i = low; i < row.length; i += 1) {
+      const candidate = row[i];
+      if (!candidate || candidate.value > most.value + reach) break;
+      const { entry } = candidate;
+      const score = entry.weight * agreement(read, entry.value, entry.unit);
+      if (score > 0)
+        add(entry.document, {
+          kind: entry.kind,
+          at: entry.at,
+          value: entry.value,
+          unit: entry.unit,
+          score,
+          answers: 1,
+        });
+    }
+  }
+}
+
+/** What the value is called on its sheet: "Cover bolt". */
+export function nameOf(document: SearchDocument, match: ValueMatch): string {
+  const list = { torque: document.torques, limit: document.limits, timer: document.timers }[match.kind];
+  return list[match.at]?.name ?? '';
+}
+
+const atStep = (step: number | null): string => (step === null ? '' : `, step ${step}`);
+const lower = (name: string): string =>
+  /^\p{Lu}\p{Ll}/u.test(name) ? name.charAt(0).toLowerCase() + name.slice(1) : name;
+
+function sayTorque(torque: SearchTorque, match: ValueMatch, units: UnitSystem): { value: string; rest: string } {
+  const shown = match.value ?? torque.nm;
+  const value = match.unit === '°' ? `${shown}°` : formatMeasure(shown, 'N·m')[units];
+  const pass = torque.passes.indexOf(shown);
+  const way = match.unit === '°' ? 'turn of ' : pass >= 0 && shown !== torque.nm ? `pass ${pass + 1} of ` : '';
+  const places = torque.count === 1 ? '1 place' : `${torque.count} places`;
+  return { value, rest: `${way}${lower(torque.name)}, ${torque.thread}, ${places}${atStep(torque.step)}` };
+}
+
+function sayLimit(limit: SearchLimit, units: UnitSystem): string {
+  const { min, nominal, max } = limit;
+  const unit = limit.unit as Unit;
+  const ends = min !== null && max !== null ? [min, max] : [min ?? max ?? nominal ?? 0];
+  const texts = inBothUnits(ends, unit)[units];
+  const text = withUnit(texts.numbers.join(' to '), texts.unit);
+  if (min !== null && max !== null) return text;
+  if (min !== null) return `at least ${text}`;
+  return max !== null ? `at most ${text}` : text;
+}
+
+/** A match in words: the value for the eye, then what it is for. */
+export function sayValue(
+  document: SearchDocument,
+  match: ValueMatch,
+  units: UnitSystem,
+): { value: string; rest: string; step: number | null } {
+  if (match.kind === 'torque') {
+    const torque = document.torques[match.at];
+    if (torque) return { ...sayTorque(torque, match, units), step: torque.step };
+  }
+  if (match.kind === 'limit') {
+    const limit = document.limits[match.at];
+    if (limit) return { value: sayLimit(limit, units), rest: lower(limit.name) + atStep(limit.step), step: limit.step };
+  }
+  const timer = document.timers[match.at];
+  const minutes = timer?.minutes ?? 0;
+  const value = minutes >= 60 && minutes % 60 === 0 ? `${minutes / 60} h` : `${minutes} min`;
+  return { value, rest: lower(timer?.name ?? '') + atStep(timer?.step ?? null), step: timer?.step ?? null };
+}
