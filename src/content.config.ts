@@ -3,6 +3,7 @@ import { z } from 'astro/zod';
 import { glob } from 'astro/loaders';
 import { Engine } from '@/domain/procedure/engine';
 import { Frontmatter } from '@/domain/procedure/schema';
+import { VocabularyFile } from '@/domain/search/vocabulary';
 
 /**
  * What the repository ships. The build fails on a file that breaks its schema. Procedures are only
@@ -20,6 +21,11 @@ const engines = defineCollection({
   schema: Engine,
 });
 
+const vocabulary = defineCollection({
+  loader: glob({ pattern: '*.yaml', base: './content/vocabulary' }),
+  schema: VocabularyFile,
+});
+
 const handbook = defineCollection({
   loader: glob({ pattern: '*.mdx', base: './content/handbook' }),
   schema: z
@@ -32,4 +38,4 @@ const handbook = defineCollection({
     .strict(),
 });
 
-export const collections = { procedures, engines, handbook };
+export const collections = { procedures, engines, vocabulary, handbook };

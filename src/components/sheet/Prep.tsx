@@ -4,15 +4,19 @@ import { Checkbox } from '@/components/ui/Checkbox';
 import type { ReactNode } from 'react';
 import { SignalPanel, worstFirst } from './SignalPanel';
 
-const partDetail = (part: Part) => [part.number, part.action, part.note].filter(Boolean).join(', ');
+/** Short facts with commas between them; a note is a sentence of its own. */
+const detailOf = (facts: (string | undefined)[], note: string | undefined) =>
+  [facts.filter(Boolean).join(', '), note].filter(Boolean).join('. ');
+
+const partDetail = (part: Part) => detailOf([part.number, part.action], part.note);
 const supplyDetail = (supply: Supply) =>
-  [
-    supply.skinOver === undefined ? null : `skins over in ${durationText(supply.skinOver)}`,
-    supply.cure === undefined ? null : `full cure ${durationText(supply.cure)}`,
+  detailOf(
+    [
+      supply.skinOver === undefined ? undefined : `skins over in ${durationText(supply.skinOver)}`,
+      supply.cure === undefined ? undefined : `full cure ${durationText(supply.cure)}`,
+    ],
     supply.note,
-  ]
-    .filter(Boolean)
-    .join(', ');
+  );
 
 /** One thing to lay out, to tick off with pen or finger. The tick is not kept. */
 const Item = ({ name, detail, quantity }: { name: string; detail?: string; quantity?: number }) => (

@@ -49,7 +49,9 @@ function figure(key: string, head: Frontmatter): HastElement[] {
 }
 
 function reading(limit: Limit): HastElement {
-  const name: (HastElement | string)[] = limit.condition ? [limit.name, h('small', {}, limit.condition)] : [limit.name];
+  const name: (HastElement | string)[] = limit.condition
+    ? [limit.name, ' ', h('small', {}, limit.condition)]
+    : [limit.name];
   const value = valueSpan({ kind: 'limit', key: limit.key }, limitText(limit));
   return h('tr', {}, h('th', { scope: 'row' }, ...name), h('td', {}, value), h('td', {}));
 }
