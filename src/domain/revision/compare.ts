@@ -1,0 +1,36 @@
+import type { Procedure } from '../procedure/types';
+import { bodyText } from './bodyText';
+import { compareSteps } from './compareSteps';
+import { compareValues } from './compareValues';
+import { inOrder, sheetReasons } from './critical';
+import type { Comparison } from './types';
+import { compareWords } from './words';
+
+/**
+ * What a proposal does at the bench: values with their names and units, steps followed by their id, and words. Pure and
+ * the same everywhere; a few milliseconds for two texts of 300 lines.
+ *
+ * @param from the base; null for a new procedure, which is compared with a blank sheet
+ */
+export function compareProcedures(from: Procedure | null, to: Procedure): Comparison {
+  const values = compareValues(from?.frontmatter ?? null, to.frontmatter);
+  const steps = compareSteps(from, to);
+  const intro = compareWords(from ? bodyText(from.intro, from.frontmatter) : '', bodyText(to.intro, to.frontmatter));
+  const identical =
+    from !== null &&
+    values.length === 0 &&
+    from.intro === to.intro &&
+    steps.every(({ change }) => change.kind === 'same' && !change.moved);
+  const reasons = [
+    ...values.map(({ reason }) => reason),
+    ...steps.flatMap((step) => step.reasons),
+    ...sheetReasons(from?.frontmatter ?? null, to.frontmatter),
+  ];
+  return {
+    values: values.map(({ change }) => change),
+    intro,
+    steps: steps.map(({ change }) => change),
+    criticalReasons: identical ? [] : inOrder(reasons),
+    identical,
+  };
+}

@@ -1,0 +1,83 @@
+import type { Procedure, Step } from '../procedure/types';
+import { bodyText } from './bodyText';
+import { inOrder, type Reason, stepReasons } from './critical';
+import type { StepChange } from './types';
+import { compareWords } from './words';
+
+export interface StepDifference {
+  change: StepChange;
+  reasons: Reason[];
+}
+
+/** Places of a longest rising run in `numbers`; what is not in it has moved. */
+export function longestRising(numbers: readonly number[]): Set<number> {
+  const ends: number[] = [];
+  const before: number[] = [];
+  numbers.forEach((number, i) => {
+    let low = 0;
+    let high = ends.length;
+    while (low < high) {
+      const middle = (low + high) >> 1;
+      if ((numbers[ends[middle] ?? 0] ?? 0) < number) low = middle + 1;
+      else high = middle;
+    }
+    before[i] = low > 0 ? (ends[low - 1] ?? -1) : -1;
+    ends[low] = i;
+  });
+  const kept = new Set<number>();
+  for (let i = ends.at(-1) ?? -1; i >= 0; i = before[i] ?? -1) kept.add(i);
+  return kept;
+}
+
+const sameStep = (a: Step, b: Step) =>
+  a.title === b.title && a.body === b.body && a.cautions.join(' ') === b.cautions.join(' ');
+
+function stepChange(
+  from: { procedure: Procedure; step: Step; number: number } | null,
+  to: { procedure: Procedure; step: Step; number: number } | null,
+  moved: boolean,
+): StepDifference {
+  const text = (side: typeof from) => (side ? bodyText(side.step.body, side.procedure.frontmatter) : '');
+  const title = compareWords(from?.step.title ?? '', to?.step.title ?? '');
+  const body = compareWords(text(from), text(to));
+  // A step whose words are the same is still edited where a value that it points at has changed.
+  const same = from && to && sameStep(from.step, to.step) && body.every(({ kind }) => kind === 'same');
+  const reasons = from ? stepReasons(from.step, to?.step ?? null, from.procedure.frontmatter) : [];
+  return {
+    reasons,
+    change: {
+      id: (to ?? from)?.step.id ?? '',
+      kind: same ? 'same' : from && to ? 'edited' : to ? 'added' : 'removed',
+      moved,
+      fromNumber: from?.number ?? null,
+      toNumber: to?.number ?? null,
+      title,
+      body,
+      cautions: { from: from?.step.cautions ?? [], to: to?.step.cautions ?? [] },
+      critical: inOrder(reasons)[0] ?? null,
+    },
+  };
+}
+
+/** Steps followed by their id, in the order of the new text; a removed step stands after the one that it followed. */
+export function compareSteps(from: Procedure | null, to: Procedure): StepDifference[] {
+  const old = new Map((from?.steps ?? []).map((step, i) => [step.id, { procedure: from ?? to, step, number: i + 1 }]));
+  const kept = new Set(to.steps.map(({ id }) => id));
+  const shared = to.steps.flatMap(({ id }) => old.get(id) ?? []);
+  const inPlace = longestRising(shared.map(({ number }) => number));
+  const stays = new Set([...inPlace].flatMap((i) => shared[i]?.step.id ?? []));
+
+  const out = to.steps.map((step, i) => {
+    const before = old.get(step.id) ?? null;
+    return stepChange(before, { procedure: to, step, number: i + 1 }, before !== null && !stays.has(step.id));
+  });
+  let followed: string | null = null;
+  for (const side of old.values()) {
+    if (!kept.has(side.step.id)) {
+      const after = out.findIndex(({ change }) => change.id === followed);
+      out.splice(after + 1, 0, stepChange(side, null, false));
+    }
+    followed = side.step.id;
+  }
+  return out;
+}
