@@ -6,7 +6,8 @@ import { rememberFailedSignIn, sentForm } from '@/server/front/failedSignIn';
 import { withHeaders } from '@/server/front/headers';
 import { isApi, isOpen, needsNoBook } from '@/server/front/openPaths';
 import { problemResponse } from '@/server/http/problem';
-import { asRefusal, signedOut } from '@/server/refusal';
+import { comesFromUs } from '@/server/http/origin';
+import { asRefusal, forbidden, signedOut } from '@/server/refusal';
 import { startOnce } from '@/server/start';
 
 const headers = defineMiddleware(async (_context, next) => withHeaders(await next(), import.meta.env.DEV));
@@ -35,6 +36,8 @@ const guard = defineMiddleware(async (context, next) => {
   locals.person ??= null;
   if (needsNoBook(url.pathname)) return next();
   const { config } = await startOnce();
+  if (!comesFromUs(context.request, [url.origin, ...(config.origin ? [config.origin] : [])]))
+    throw forbidden('This was asked for by a page of another site.');
   const session = await readSession(cookies.get(sessionCookieName(isSecure(config.origin)))?.value);
   const who = session && (await whoIs(session));
   if (who) Object.assign(locals, { actor: who.actor, person: who.me });

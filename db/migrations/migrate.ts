@@ -44,6 +44,13 @@ export async function migrate(db: Handle): Promise<void> {
   });
 }
 
+/** Whether every step has been made; only reads. */
+export async function isMigrated(db: Pick<Database, 'read'>): Promise<boolean> {
+  const rows = await db.read<{ name: string }>('SELECT name FROM migrations');
+  const made = new Set(rows.map((row) => row.name));
+  return MIGRATIONS.every(({ name }) => made.has(name));
+}
+
 /** Takes the tables back to before `name`; data of later steps is lost. */
 export async function migrateDownTo(db: Handle, name: string): Promise<void> {
   await db.write(async () => {

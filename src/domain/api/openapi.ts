@@ -55,7 +55,7 @@ function jsonSchema(schema: z.ZodTypeAny, options: object): Record<string, unkno
   return rest;
 }
 
-function parameters({ params, query, ifMatch, tagged, method }: Operation) {
+function parameters({ params, query, ifMatch, tag, method }: Operation) {
   const shapes: [string, z.ZodTypeAny][] = [
     ['path', params],
     ['query', query],
@@ -80,7 +80,7 @@ function parameters({ params, query, ifMatch, tagged, method }: Operation) {
   });
   if (ifMatch !== 'ignored')
     listed.push(header('If-Match', 'The version that the change is based on, for example "3"', ifMatch === 'required'));
-  if (method === 'get' && tagged) listed.push(header('If-None-Match', 'Answers 304 where nothing changed'));
+  if (tag === 'content') listed.push(header('If-None-Match', 'Answers 304 where nothing changed'));
   if (method !== 'get')
     listed.push(header('Idempotency-Key', 'The same key with the same call answers what it first answered, for a day'));
   return listed;
@@ -110,7 +110,7 @@ function describe(op: Operation, refOf: (schema: z.ZodTypeAny) => object) {
   const json = (schema: z.ZodTypeAny) => ({ 'application/json': { schema: refOf(schema) } });
   const success = {
     description: op.summary,
-    ...(op.tagged ? { headers: { ETag: { schema: { type: 'string' } } } } : {}),
+    ...(op.tag !== 'none' ? { headers: { ETag: { schema: { type: 'string' } } } } : {}),
     ...(isEmpty(op.reply) ? {} : { content: json(op.reply) }),
   };
   const refused = refusals(op).map((status) => [
@@ -129,7 +129,7 @@ function describe(op: Operation, refOf: (schema: z.ZodTypeAny) => object) {
     ...(isEmpty(op.body) ? {} : { requestBody: { required: true, content: json(op.body) } }),
     responses: {
       [op.status]: success,
-      ...(op.method === 'get' && op.tagged ? { 304: { description: 'Nothing changed' } } : {}),
+      ...(op.tag === 'content' ? { 304: { description: 'Nothing changed' } } : {}),
       ...Object.fromEntries(refused),
     },
   };
@@ -156,7 +156,7 @@ export function openApiDocument(version: string) {
     paths,
     components: {
       schemas: whole['components/schemas'],
-      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'authjs.session-token' } },
+      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'matchmark.session' } },
     },
   };
 }

@@ -28,8 +28,8 @@ export interface Operation<
   /** Status of success; 204 answers nothing. */
   status: 200 | 201 | 204;
   reply: Reply;
-  /** The answer carries an ETag. */
-  tagged: boolean;
+  /** What the ETag of the answer stands for: the version that `If-Match` names, or the whole content, which can be 304. */
+  tag: 'none' | 'version' | 'content';
   /** Whether the call looks at `If-Match`, and whether it insists on it. */
   ifMatch: 'ignored' | 'accepted' | 'required';
   /** Statuses it may refuse with beyond those that follow from its shape. */
@@ -45,7 +45,7 @@ interface Given<P, Q, B, R> extends Pick<Operation, 'id' | 'method' | 'path' | '
   body?: B;
   status?: Operation['status'];
   reply?: R;
-  tagged?: boolean;
+  tag?: Operation['tag'];
   ifMatch?: Operation['ifMatch'];
   refuses?: readonly number[];
 }
@@ -59,7 +59,7 @@ export function operation<
 >(given: Given<P, Q, B, R>): Operation<P, Q, B, R> {
   return {
     status: given.reply ? 200 : 204,
-    tagged: false,
+    tag: 'none',
     ifMatch: 'ignored',
     refuses: [],
     ...given,

@@ -42,8 +42,8 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
   const { config } = await app();
   if (changing && !comesFromUs(request, [url.origin, ...(config.origin ? [config.origin] : [])]))
     throw forbidden('This call came from a page of another site.');
-  const { actor } = locals as { actor?: Actor | null };
-  if (!actor) throw signedOut();
+  const { actor } = locals as { actor?: Actor };
+  if (!actor?.personId) throw signedOut();
   await countCall(actor.personId, changing ? 'changing' : 'reading');
 
   const params = operation.params.safeParse(context.params);

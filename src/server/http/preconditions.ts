@@ -5,12 +5,12 @@ const tags = (header: string) => header.split(',').map((tag) => tag.trim().repla
 
 /**
  * The version a caller believes to be current, from `If-Match`.
- * null without the header or with `*`; -1, which no version equals, for a tag that is none of ours.
+ * null without the header or with `*`; -1, which no version equals, for anything but one tag of ours.
  */
 export function expectedVersion(headers: Headers): number | null {
   const header = headers.get('if-match');
   if (header === null || header.trim() === '*') return null;
-  const found = /^"(\d{1,9})"$/.exec(tags(header)[0] ?? '');
+  const found = /^(?:W\/)?"(\d{1,9})"$/.exec(header.trim());
   return found ? Number(found[1]) : -1;
 }
 

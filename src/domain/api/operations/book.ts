@@ -38,7 +38,7 @@ export const readProcedure = operation({
   summary: 'The current sheet',
   params: OfProcedure,
   reply: Sheet,
-  tagged: true,
+  tag: 'content',
 });
 
 export const listRevisions = operation({
@@ -60,7 +60,7 @@ export const readRevision = operation({
   summary: 'The sheet at one revision; `current` names the one to work from',
   params: OfRevision,
   reply: Sheet,
-  tagged: true,
+  tag: 'content',
 });
 
 export const compareRevisions = operation({
@@ -96,7 +96,7 @@ export const startProcedure = operation({
   body: StartProcedure,
   status: 201,
   reply: Proposal,
-  tagged: true,
+  tag: 'version',
 });
 
 export const startProposal = operation({
@@ -111,6 +111,6 @@ export const startProposal = operation({
   body: StartProposal,
   status: 201,
   reply: Proposal,
-  tagged: true,
+  tag: 'version',
   refuses: [409, 422],
 });

@@ -33,7 +33,7 @@ export const readProposal = operation({
   summary: 'A proposal, what was said of it and what I may do with it',
   params: OfProposal,
   reply: Proposal,
-  tagged: true,
+  tag: 'version',
 });
 
 export const saveProposal = operation({
@@ -47,7 +47,7 @@ export const saveProposal = operation({
   params: OfProposal,
   body: SaveProposal,
   reply: SavedProposal,
-  tagged: true,
+  tag: 'version',
   ifMatch: 'required',
   refuses: [409],
 });
@@ -79,7 +79,7 @@ const act = <B extends z.ZodTypeAny = z.ZodUndefined>(
     params: OfProposal,
     ...(body ? { body } : {}),
     reply: Proposal,
-    tagged: true,
+    tag: 'version',
     ifMatch: 'accepted',
     refuses: [409, 422],
   });
