@@ -1,0 +1,33 @@
+import type { Actor } from '@/domain/people/may';
+import { appendAudit } from '../audit/append';
+import { app } from '../context';
+import { Refusal } from '../refusal';
+import { guard, readableProposal } from './guard';
+
+/** Throws away a draft that was never sent in; the number of a procedure that was never more than that is free again. */
+export async function discardDraft(actor: Actor, id: string, version: number | null = null): Promise<void> {
+  const { db } = await app();
+  await db.write(async () => {
+    const proposal = await readableProposal(actor, id);
+    guard({ act: 'edit' }, actor, proposal, version);
+    if (proposal.facts.everProposed)
+      throw new Refusal(
+        409,
+        'conflict',
+        'Not as things stand',
+        'This proposal was sent in once, so it stays in the record. Leave it, or send it in again.',
+      );
+    const { Procedure, Revision } = db.models;
+    await Revision.destroy({ where: { id } });
+    const { procedureId } = proposal;
+    if ((await Revision.count({ where: { procedureId } })) === 0)
+      await Procedure.destroy({ where: { id: procedureId } });
+    await appendAudit({
+      actorId: actor.personId,
+      act: 'proposal.discarded',
+      subject: { type: 'revision', id },
+      shopId: proposal.shopId,
+      detail: { number: proposal.number, hash: proposal.hash },
+    });
+  });
+}

@@ -1,0 +1,54 @@
+import { may, type Actor } from '@/domain/people/may';
+import { decide, type Decision, type ProposalAct } from '@/domain/review/decide';
+import { isStale, staleWords, subjectOf, type ProposalFacts } from '@/domain/review/rules';
+import { forbidden, invalid, notFound, Refusal, stale } from '../refusal';
+import { loadProposal, type Loaded } from './proposals';
+
+type Accepted = Extract<Decision, { ok: true }>;
+
+/** The proposal, if this person may read it; 404 for an unknown and an unseen one alike. */
+export async function readableProposal(actor: Actor, id: string): Promise<Loaded> {
+  const found = await loadProposal(id);
+  if (!found || !may(actor, 'readProposal', subjectOf(found.facts)).ok) throw notFound();
+  return found;
+}
+
+/** What a caller who lost a race needs to go on: nothing of theirs was stored, nothing of the other's was touched. */
+const standing = ({ version, state, base, current }: Loaded) => ({ version, state, base, current });
+
+/** Refuses 409 where the caller's version is not the one that stands. null says nothing and passes. */
+export function expectVersion(proposal: Loaded, version: number | null): void {
+  if (version === null || version === proposal.version) return;
+  throw stale(
+    'This proposal was changed elsewhere after you opened it. Nothing was overwritten and nothing you typed was lost: open it again, compare, and save once more.',
+    standing(proposal),
+  );
+}
+
+/** A published letter that the text does not stand on is a lost race, told with the letter that won it. */
+export const staleBase = (facts: Pick<ProposalFacts, 'base' | 'current'>, extra: Record<string, unknown> = {}) =>
+  stale(`${staleWords(facts)} Nothing was lost.`, { base: facts.base, current: facts.current, ...extra });
+
+/**
+ * Asks the rules of review. Refuses 404 and 403 first, then 409 for another version, then what the rules
+ * themselves say: 422 for something left out, 409 for a base, a state or agreements that do not allow it.
+ */
+export function guard(
+  what: ProposalAct,
+  actor: Actor,
+  proposal: Loaded,
+  version: number | null,
+  facts: ProposalFacts = proposal.facts,
+): Accepted {
+  const decision = decide(what, actor, facts);
+  if (!decision.ok && decision.kind === 'hidden') throw notFound();
+  if (!decision.ok && decision.kind === 'forbidden') throw forbidden(decision.why);
+  expectVersion(proposal, version);
+  if (decision.ok) return decision;
+  if (decision.kind === 'invalid') {
+    const path = facts.identical && facts.reason.trim() ? 'source' : 'reason';
+    throw invalid(decision.why, [{ path, message: decision.why }]);
+  }
+  if (isStale(facts) && decision.why === staleWords(facts)) throw staleBase(facts, standing(proposal));
+  throw new Refusal(409, 'conflict', 'Not as things stand', decision.why, { extra: standing(proposal) });
+}

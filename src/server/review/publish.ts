@@ -1,0 +1,43 @@
+import type { Proposal } from '@/domain/api/schemas';
+import type { Actor } from '@/domain/people/may';
+import { nextLetter } from '@/domain/revision/letters';
+import { appendAudit } from '../audit/append';
+import { indexRevision } from '../book/indexRevision';
+import { readRendering } from '../book/rendering';
+import { now } from '../clock';
+import { app } from '../context';
+import { recordAgreement } from './agree';
+import { guard, readableProposal } from './guard';
+import { readProposal } from './readProposal';
+
+/**
+ * Publishes a proposal: it gets the next letter and is the sheet to work from, the one before it is
+ * superseded, and search knows its words; all of it is stored or nothing is. Whoever publishes agrees by
+ * that. Of two who publish on the same base at once, one gets 409.
+ */
+export async function publish(actor: Actor, id: string, version: number | null = null): Promise<Proposal> {
+  // Made when the text was sent in; asked for here so that nothing is parsed while others wait to write.
+  const before = await readableProposal(actor, id);
+  const rendered = await readRendering(before);
+  const { db } = await app();
+  await db.write(async () => {
+    const proposal = await readableProposal(actor, id);
+    const { given, state } = guard({ act: 'publish' }, actor, proposal, version ?? before.version);
+    if (given) await recordAgreement(proposal, given);
+    const { Procedure, Revision } = db.models;
+    const letter = nextLetter(proposal.current);
+    if (proposal.currentRevisionId)
+      await Revision.update({ state: 'superseded' }, { where: { id: proposal.currentRevisionId } });
+    await Revision.update({ state, letter, publishedAt: now(), version: proposal.version + 1 }, { where: { id } });
+    await Procedure.update({ currentRevisionId: id }, { where: { id: proposal.procedureId } });
+    await indexRevision(proposal.procedureId, rendered);
+    await appendAudit({
+      actorId: actor.personId,
+      act: 'revision.published',
+      subject: { type: 'revision', id },
+      shopId: proposal.shopId,
+      detail: { number: proposal.number, letter, hash: proposal.hash, supersedes: proposal.current },
+    });
+  });
+  return readProposal(actor, id);
+}

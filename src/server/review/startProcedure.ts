@@ -1,0 +1,60 @@
+import type { Proposal } from '@/domain/api/schemas';
+import { may, type Actor, type Book } from '@/domain/people/may';
+import { appendAudit } from '../audit/append';
+import { refuseOverlong } from '../book/check';
+import { app } from '../context';
+import { forbidden, notFound } from '../refusal';
+import { columnsOf, refuseUnreadable, weigh } from './draftText';
+import { readProposal } from './readProposal';
+
+export interface NewProcedure {
+  /** "common" or the id of a shop. */
+  book: string;
+  source: string;
+  reason: string;
+}
+
+/** The number after the highest of the network, whoever may see that one. */
+async function nextNumber(): Promise<string> {
+  const { db } = await app();
+  const [row] = await db.read<{ highest: number | null }>(
+    'SELECT max(CAST(substr(number, 3) AS INTEGER)) AS highest FROM procedures',
+  );
+  return `P-${String((row?.highest ?? 0) + 1).padStart(4, '0')}`;
+}
+
+/**
+ * Starts a draft of a new procedure under the next free number, unseen by others until it is sent in.
+ * Refuses 404 a book that is unknown or not theirs, 403 without a role that proposes, 422 a text that
+ * cannot be read (nothing is stored).
+ */
+export async function startProcedure(actor: Actor, { book: name, source, reason }: NewProcedure): Promise<Proposal> {
+  const book: Book = name === 'common' ? { kind: 'common' } : { kind: 'shop', shopId: name };
+  const permission = may(actor, 'propose', { book });
+  if (!permission.ok) throw permission.visible ? forbidden(permission.why) : notFound();
+  refuseOverlong(source);
+  const text = await weigh(source, null);
+  refuseUnreadable(text.parsed);
+  const { db } = await app();
+  const shopId = book.kind === 'shop' ? book.shopId : null;
+  const id = await db.write(async () => {
+    const number = await nextNumber();
+    const procedure = await db.models.Procedure.create({ number, bookKind: book.kind, shopId });
+    const draft = await db.models.Revision.create({
+      procedureId: procedure.id,
+      state: 'draft',
+      authorId: actor.personId,
+      reason,
+      ...columnsOf(text),
+    });
+    await appendAudit({
+      actorId: actor.personId,
+      act: 'proposal.started',
+      subject: { type: 'revision', id: draft.id },
+      shopId,
+      detail: { number, base: null },
+    });
+    return draft.id;
+  });
+  return readProposal(actor, id);
+}
