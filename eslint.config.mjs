@@ -24,7 +24,8 @@ export default ts.config(
   ...ts.configs.strict,
   ...astro.configs.recommended,
   ...astro.configs['jsx-a11y-strict'],
-  { files: ['**/*.tsx'], ...a11y.flatConfigs.strict },
+  // eslint-plugin-astro brings its own copy of the jsx-a11y plugin for every file, so only the rules are added here.
+  { files: ['**/*.tsx'], rules: a11y.flatConfigs.strict.rules },
   { files: ['**/*.tsx'], plugins: { 'react-hooks': hooks }, rules: hooks.configs.recommended.rules },
   {
     rules: {

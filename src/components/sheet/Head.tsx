@@ -18,7 +18,7 @@ export function Head({
   return (
     <div className="sheet-head grid lg:grid-cols-[minmax(0,1fr)_27rem]">
       <div className="px-4 py-6 sm:px-9 sm:py-7">
-        <h1 className="max-w-[22ch] text-[1.8125rem] leading-[1.18] tracking-[-0.015em] sm:text-display">{f.title}</h1>
+        <h1 className="max-w-[26ch] text-[1.8125rem] leading-[1.18] tracking-[-0.015em] sm:text-display">{f.title}</h1>
         <p className="mt-3 max-w-prose font-serif text-prose">{f.summary}</p>
         <ul className="mt-4 flex flex-wrap gap-x-6 gap-y-1 font-medium text-ink-2 [&_b]:font-semibold [&_b]:text-ink">
           {engines.map((engine) => (

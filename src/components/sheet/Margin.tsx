@@ -95,23 +95,6 @@ const TimerBlock = ({ name, minutes, note }: Pick<Timer, 'name' | 'minutes' | 'n
   );
 };
 
-/** Lines to write readings on: the printed sheet's place for them. */
-const Readings = ({ keys, f }: { keys: string[]; f: Frontmatter }) => (
-  <Block name="Write down">
-    <ul className="mt-1">
-      {keys.map((key) => {
-        const limit = f.limits.find((one) => one.key === key);
-        return limit ? (
-          <li key={key} className="flex items-end gap-2 pt-1.5 text-small">
-            <span className="leading-snug">{limit.name}</span>
-            <span className="min-w-14 flex-1 border-b border-ink" />
-          </li>
-        ) : null;
-      })}
-    </ul>
-  </Block>
-);
-
 function timerOf(reference: Extract<Reference, { kind: 'timer' }>, f: Frontmatter) {
   const timer = f.timers.find(({ key }) => key === reference.key);
   if (timer) return timer;
@@ -129,7 +112,9 @@ function timerOf(reference: Extract<Reference, { kind: 'timer' }>, f: Frontmatte
 function blocks(references: readonly Reference[], f: Frontmatter): ReactNode[] {
   const done = new Set<string>();
   return references.flatMap((reference) => {
-    const id = reference.kind === 'worksheet' ? reference.keys.join() : `${reference.kind}:${reference.key}`;
+    // The words show these themselves: a drawing, and a table to write readings in.
+    if (reference.kind === 'worksheet' || reference.kind === 'figure') return [];
+    const id = `${reference.kind}:${reference.key}`;
     if (done.has(id) && reference.kind !== 'timer') return [];
     done.add(id);
     switch (reference.kind) {
@@ -170,15 +155,11 @@ function blocks(references: readonly Reference[], f: Frontmatter): ReactNode[] {
             ]
           : [];
       }
-      case 'worksheet':
-        return [<Readings key={id} keys={reference.keys} f={f} />];
-      case 'figure':
-        return [];
     }
   });
 }
 
-/** What a step needs beside its words: values, parts, places to write. Empty where it needs nothing. */
+/** What a step needs beside its words: values, times and parts. Empty where it needs nothing. */
 export function Margin({ references, frontmatter }: { references: readonly Reference[]; frontmatter: Frontmatter }) {
   const shown = blocks(references, frontmatter);
   return shown.length ? <div className="flex flex-col gap-5">{shown}</div> : null;

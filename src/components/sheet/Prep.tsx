@@ -4,9 +4,11 @@ import { Checkbox } from '@/components/ui/Checkbox';
 import type { ReactNode } from 'react';
 import { SignalPanel, worstFirst } from './SignalPanel';
 
-/** Short facts with commas between them; a note is a sentence of its own. */
-const detailOf = (facts: (string | undefined)[], note: string | undefined) =>
-  [facts.filter(Boolean).join(', '), note].filter(Boolean).join('. ');
+/** Short facts with commas between them, begun like a sentence; a note is a sentence of its own. */
+function detailOf(facts: (string | undefined)[], note: string | undefined): string {
+  const told = [facts.filter(Boolean).join(', '), note].filter(Boolean).join('. ');
+  return told.charAt(0).toUpperCase() + told.slice(1);
+}
 
 const partDetail = (part: Part) => detailOf([part.number, part.action], part.note);
 const supplyDetail = (supply: Supply) =>
@@ -23,7 +25,8 @@ const Item = ({ name, detail, quantity }: { name: string; detail?: string; quant
   <li className="break-inside-avoid border-t border-hair first:border-0">
     <Checkbox
       autoComplete="off"
-      className="items-start py-2.5 [&>input]:mt-[3px]"
+      top
+      className="py-2.5"
       label={
         <>
           {name}

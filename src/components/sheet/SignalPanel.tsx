@@ -54,7 +54,7 @@ export function SignalPanel({ caution, shape = 'panel' }: { caution: Caution; sh
       )}
     >
       <SignalWord signal={caution.signal} className={shape === 'band' ? 'sm:items-start sm:py-3 sm:pl-5' : ''} />
-      <p className={classes('px-3 leading-snug', shape === 'band' ? 'max-w-[100ch] py-3 sm:px-5' : 'pb-3 pt-2')}>
+      <p className={classes('px-3 leading-snug', shape === 'band' ? 'max-w-[125ch] py-3 sm:px-5' : 'pb-3 pt-2')}>
         <strong className="font-semibold">{text.hurts}</strong> {text.avoid}
       </p>
     </div>

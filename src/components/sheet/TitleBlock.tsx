@@ -29,7 +29,7 @@ const Fact = ({ name, className, children }: { name: string; className?: string;
 /** The corner of the drawing: which sheet this is, and who answers for it. */
 export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
   return (
-    <dl className="grid grid-cols-3 content-stretch [&>*:nth-child(3n)]:border-r-0 [&>*:nth-last-child(-n+2)]:border-b-0">
+    <dl className="grid h-full auto-rows-[minmax(3.6rem,auto)] grid-cols-3 [&>*:nth-child(3n)]:border-r-0 [&>*:nth-last-child(-n+2)]:border-b-0">
       <Fact name="Number">{facts.number}</Fact>
       <Fact name="Revision">
         {facts.letter && (

@@ -18,17 +18,22 @@ export const OtherUnits = ({ text }: { text: BothUnits }) => (
   </span>
 );
 
-/** What hands act on comes first and largest: "10" of "10 ±1 N·m", "0.03 to 0.06" of "0.03 to 0.06 mm". */
-const LEADING = /^(−?[\d.\u202f]+(?: to −?[\d.\u202f]+)?)([^,]*)(?:, (.*))?$/;
+const NUMBER = '−?[\\d.\\u202f]+';
+/** "10 ±1 N·m", "0.03 to 0.06 mm", "40 N·m, then 90°": number, the rest of it, what follows. */
+const LEADING = new RegExp(`^(${NUMBER}(?: to ${NUMBER})?)([^,]*)(?:, (.*))?$`);
+/** "132.00 (131.80 or more) mm": nominal, range, unit. */
+const AROUND = new RegExp(`^(${NUMBER}) \\((.+)\\)(.*)$`);
 
+/** What hands act on comes first and largest; its unit and the rest follow smaller. */
 function Big({ text }: { text: string }) {
-  const [, number, rest, turns] = LEADING.exec(text) ?? [];
-  if (!number) return <>{text}</>;
+  const [, nominal, range, unit] = AROUND.exec(text) ?? [];
+  const [, number = nominal, rest = unit, more = range] = nominal ? [] : (LEADING.exec(text) ?? []);
+  if (!number) return <span className="block text-[1.5rem] leading-tight">{text}</span>;
   return (
     <>
       <span className={number.includes(' to ') ? 'text-title' : undefined}>{number}</span>
       <span className="text-lead font-medium">{rest}</span>
-      {turns && <span className="block text-lead font-semibold">{turns}</span>}
+      {more && <span className="block text-lead font-semibold">{more}</span>}
     </>
   );
 }

@@ -1,18 +1,28 @@
 import type { InputHTMLAttributes, ReactNode, Ref } from 'react';
 import { classes } from './classes';
 
-/** A box to tick, its whole line being the target. `after` stands at the line's end, for a count. */
+/**
+ * A box to tick, its whole line being the target. `after` stands at the line's end, for a count;
+ * `top` keeps the box at the first line of a long label.
+ */
 export function Checkbox({
   label,
   after,
+  top = false,
   className,
   ref,
   ...input
-}: InputHTMLAttributes<HTMLInputElement> & { label: ReactNode; after?: ReactNode; ref?: Ref<HTMLInputElement> }) {
+}: InputHTMLAttributes<HTMLInputElement> & {
+  label: ReactNode;
+  after?: ReactNode;
+  top?: boolean;
+  ref?: Ref<HTMLInputElement>;
+}) {
   return (
     <label
       className={classes(
-        'grid min-h-touch cursor-pointer grid-cols-[1.25rem_1fr_auto] items-center gap-2.5',
+        'grid min-h-touch cursor-pointer grid-cols-[1.25rem_1fr_auto] gap-2.5',
+        top ? '[&>input]:mt-[3px]' : 'items-center',
         className,
       )}
     >

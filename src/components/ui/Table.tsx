@@ -13,7 +13,7 @@ export interface Column {
 
 /**
  * A list to scan. `children` are `<Row>`s of `<Cell>`s in the order of `columns`. On a narrow screen each row
- * becomes a block with the column's name before each value; the explicit roles keep it a table for ears.
+ * becomes a block with the column's name before each value; browsers still tell it as a table.
  */
 export function Table({
   caption,
@@ -26,14 +26,14 @@ export function Table({
   children: ReactNode;
 }) {
   return (
-    <table role="table" className="w-full border-collapse text-left max-sm:block">
+    <table className="w-full border-collapse text-left max-sm:block">
       <caption className="sr-only">{caption}</caption>
-      <thead role="rowgroup" className="max-sm:sr-only">
-        <tr role="row" className="border-b-frame border-ink">
+      <thead className="max-sm:sr-only">
+        <tr className="border-b-frame border-ink">
           {columns.map((column) => (
             <th
               key={column.key}
-              role="columnheader"
+
               scope="col"
               aria-sort={column.sorted}
               className={classes(
@@ -46,9 +46,7 @@ export function Table({
           ))}
         </tr>
       </thead>
-      <tbody role="rowgroup" className="max-sm:block">
-        {children}
-      </tbody>
+      <tbody className="max-sm:block">{children}</tbody>
     </table>
   );
 }
@@ -70,10 +68,7 @@ const SortLink = ({ column }: { column: Column }) => (
 );
 
 export const Row = ({ children, className }: { children: ReactNode; className?: string }) => (
-  <tr
-    role="row"
-    className={classes('border-b border-hair align-top last:border-0 max-sm:block max-sm:py-3', className)}
-  >
+  <tr className={classes('border-b border-hair align-top last:border-0 max-sm:block max-sm:py-3', className)}>
     {children}
   </tr>
 );
@@ -89,7 +84,7 @@ export function Cell({
   return (
     <td
       {...rest}
-      role="cell"
+
       data-label={label}
       className={classes(
         'px-3 py-3 first:pl-0 last:pr-0',
