@@ -8,8 +8,10 @@ import { Writable } from 'node:stream';
 import { text } from 'node:stream/consumers';
 import { parseArgs } from 'node:util';
 import { createFirstSteward } from '@/server/accounts/firstSteward';
-import { startOnce } from '@/server/start';
+import { readConfig } from '@/server/config';
+import { useApp } from '@/server/context';
 import { Refusal } from '@/server/refusal';
+import { openBook } from '@/server/start';
 
 const { values: given } = parseArgs({
   options: { name: { type: 'string' }, email: { type: 'string' }, password: { type: 'string' } },
@@ -35,7 +37,8 @@ const name = given.name ?? (await ask('Name'));
 const email = given.email ?? (await ask('E-mail address'));
 const password = given.password ?? (await ask('Password, 10 characters or more', true));
 
-const { db } = await startOnce();
+const running = await openBook(readConfig());
+useApp(running);
 try {
   await createFirstSteward({ name, email, password });
   console.log(`Made ${name} the steward of this network. Sign in with ${email}.`);
@@ -44,5 +47,5 @@ try {
   console.error([error.detail, ...(error.errors ?? []).map(({ path, message }) => `  ${path}: ${message}`)].join('\n'));
   process.exitCode = 1;
 } finally {
-  await db.close();
+  await running.db.close();
 }

@@ -3,19 +3,33 @@ import { openDatabase } from '@db/connect';
 import { DEMONSTRATION_PASSWORD } from '@db/seeders/demonstration';
 import { seedNetwork } from '@db/seeders/seedNetwork';
 import { hashPassword } from './accounts/passwords';
+import { importContent } from './book/importContent';
+import { startParsing } from './book/parsing';
 import { now } from './clock';
 import { readConfig, type Config } from './config';
 import { openOnce, within, type App } from './context';
 import { readSecret } from './secret';
 
-/** Opens the book under `config.dataDir`: makes the secret, migrates, and brings the content in. */
-export async function start(config: Config): Promise<App> {
+/** Opens the book under `config.dataDir`, making it and its secret where they are missing; brings nothing in. */
+export async function openBook(config: Config): Promise<App> {
   const secret = readSecret(config.dataDir);
-  const db = await openDatabase(join(config.dataDir, 'matchmark.sqlite'), { now });
-  const running: App = { config, db, secret };
-  await within(running, async () => {
-    if (config.demo) await seedNetwork(db, () => hashPassword(DEMONSTRATION_PASSWORD));
-  });
+  return { config, secret, db: await openDatabase(join(config.dataDir, 'matchmark.sqlite'), { now }) };
+}
+
+/** Opens the book and brings in what this release ships and, where asked for, the demonstration network. */
+export async function start(config: Config): Promise<App> {
+  startParsing();
+  const running = await openBook(config);
+  try {
+    await within(running, async () => {
+      const { problems } = await importContent();
+      for (const { file, message } of problems) console.warn(`${file} was left out of the book. ${message}`);
+      if (config.demo) await seedNetwork(running.db, () => hashPassword(DEMONSTRATION_PASSWORD));
+    });
+  } catch (error) {
+    await running.db.close();
+    throw error;
+  }
   return running;
 }
 
