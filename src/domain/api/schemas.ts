@@ -145,7 +145,10 @@ export const pageOf = <T extends z.ZodTypeAny>(item: T) =>
   z.object({ items: z.array(item), next: z.string().nullable() });
 
 export const UpdateMe = z
-  .object({ name: z.string().trim().min(1, 'must not be empty').max(80, 'must be 80 characters or fewer'), units: UnitSystem })
+  .object({
+    name: z.string().trim().min(1, 'must not be empty').max(80, 'must be 80 characters or fewer'),
+    units: UnitSystem,
+  })
   .partial();
 export const ChangePassword = z.object({ current: z.string().max(200), next: z.string().max(200) });
 

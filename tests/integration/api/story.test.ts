@@ -93,6 +93,8 @@ it('starts a new procedure under the next number, unseen until it is published',
   const at = `/proposals/${started.body.id as string}`;
   await call(technician, 'POST', `${at}/submit`);
   expect((await call(who('pier.editor'), 'GET', at)).status).toBe(404);
+  // A new sheet brings its torque with it, so it needs a second pair of eyes.
+  await call(who('north.owner'), 'POST', `${at}/agree`);
   const published = await call(who('north.editor'), 'POST', `${at}/publish`);
   expect(published.body).toMatchObject({ state: 'published', publishedLetter: 'A' });
   expect((await call(who('north.apprentice'), 'GET', '/procedures/P-0143')).status).toBe(200);
