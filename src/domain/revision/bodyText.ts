@@ -2,35 +2,7 @@ import { isStage, worksheetKeys } from '../procedure/components';
 import type { Frontmatter } from '../procedure/schema';
 import { limitText, partText, stageText, timerText, torqueText } from '../procedure/values';
 import { WORKSHEETS, type WorksheetKind } from '../procedure/worksheets';
-
-/**
- * Canonical body text read without a parser. Canonical components are regular: one line, double quotes, attributes in
- * a fixed order. Code spans and escaped marks come first in the pattern, so that `<Torque …>` shown as code, which
- * puts no value before anybody, is not taken for one.
- */
-const COMPONENTS =
-  /(`+)(?!`)[\s\S]*?[^`]\1(?!`)|\\[\s\S]|<([A-Z][A-Za-z]*)((?: [a-z]+="[^"]*")*)(?: \/>|>([\s\S]*?)<\/\2>)/g;
-
-interface Found {
-  name: string;
-  given: Partial<Record<string, string>>;
-  inside: string;
-}
-
-const ENTITIES: Record<string, string> = { '&quot;': '"', '&amp;': '&', '&lt;': '<', '&gt;': '>' };
-
-function attributes(text: string): Partial<Record<string, string>> {
-  const given: Partial<Record<string, string>> = Object.create(null);
-  for (const [, name = '', value = ''] of text.matchAll(/([a-z]+)="([^"]*)"/g))
-    given[name] = value.replace(/&(?:quot|amp|lt|gt);/g, (entity) => ENTITIES[entity] ?? entity);
-  return given;
-}
-
-function replaceComponents(body: string, make: (found: Found) => string | null): string {
-  return body.replace(COMPONENTS, (whole, _ticks, name: string | undefined, text = '', inside = '') =>
-    name === undefined ? whole : (make({ name, given: attributes(text), inside }) ?? whole),
-  );
-}
+import { type Found, replaceComponents } from './components';
 
 const PASS_WORDS = ['first pass', 'second pass', 'third pass', 'fourth pass', 'fifth pass', 'sixth pass'];
 export const passWords = (pass: number): string => PASS_WORDS[pass - 1] ?? `pass ${pass}`;

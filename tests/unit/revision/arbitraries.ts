@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { Frontmatter, type FrontmatterInput } from '@/domain/procedure/schema';
+import { Frontmatter } from '@/domain/procedure/schema';
 import type { Procedure, Step } from '@/domain/procedure/types';
 
 /** Random procedures that the schema accepts, small enough that two of them often share keys and steps. */
@@ -63,7 +63,7 @@ export const frontmatter: fc.Arbitrary<Frontmatter> = fc
     cautions: keyed(caution),
     timers: keyed(timer),
   })
-  .map((input: FrontmatterInput) => Frontmatter.parse(JSON.parse(JSON.stringify(input))));
+  .map((input) => Frontmatter.parse(JSON.parse(JSON.stringify(input))));
 
 const sentence = fc
   .array(
