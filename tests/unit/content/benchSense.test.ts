@@ -74,7 +74,7 @@ describe('torques', () => {
     const circles = torques.flatMap(({ at, t }) => {
       const places = t.order?.map((n) => t.positions?.[n - 1] ?? [0, 0]) ?? [];
       const middle = [0, 1].map((axis) => places.reduce((sum, p) => sum + (p[axis] ?? 0), 0) / places.length);
-      const turned = places.map(([x, y]) => ({ x: x - (middle[0] ?? 0), y: y - (middle[1] ?? 0) }));
+      const turned = places.map(([x = NaN, y = NaN]) => ({ x: x - (middle[0] ?? 0), y: y - (middle[1] ?? 0) }));
       const far = turned.map(({ x, y }) => Math.hypot(x, y));
       const isCircle = far.length >= 6 && far.length % 2 === 0 && Math.max(...far) - Math.min(...far) < 1;
       return isCircle ? [{ at, turned, radius: far[0] ?? 0 }] : [];
