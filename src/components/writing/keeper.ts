@@ -1,0 +1,207 @@
+import type { Proposal } from '@/domain/api/schemas';
+import { sizeProblem } from '@/domain/procedure/bounds';
+import { Refused } from './api';
+import type { Held, Words } from './heldCopy';
+
+/** How it stands with the words on the screen. */
+export type Keeping =
+  | { kind: 'kept'; at: number | null }
+  | { kind: 'waiting' }
+  | { kind: 'keeping' }
+  /** Tried again by itself; `why` says what stands in the way. */
+  | { kind: 'unreachable'; why: string; onDevice: boolean }
+  /** Not tried again before something changes. */
+  | { kind: 'refused'; why: string; onDevice: boolean }
+  /** Saved elsewhere meanwhile; the author chooses. */
+  | { kind: 'stale'; theirs: Proposal };
+
+export interface Surroundings {
+  save: (words: Words, version: number, keepalive: boolean) => Promise<{ version: number }>;
+  readTheirs: () => Promise<Proposal>;
+  held: { write: (held: Held) => boolean; clear: () => void };
+  now: () => number;
+  /** Calls back after so many milliseconds; returns how to call it off. */
+  later: (act: () => void, ms: number) => () => void;
+}
+
+const PAUSE = 1000;
+const FIRST_RETRY = 3000;
+const LAST_RETRY = 60_000;
+
+const same = (a: Words, b: Words) => a.source === b.source && a.reason === b.reason;
+
+/**
+ * Keeps a draft: on this device at once, on the server after a pause in typing. One save is under way at a time, each
+ * on the version that the one before it returned. Knows nothing of the screen.
+ */
+export class Keeper {
+  private wanted: Words;
+  private listeners = new Set<() => void>();
+  private stopWaiting: (() => void) | null = null;
+  private running: Promise<void> | null = null;
+  private retry = FIRST_RETRY;
+  private onDevice = true;
+  state: Keeping = { kind: 'kept', at: null };
+
+  constructor(
+    private kept: Words,
+    public version: number,
+    private readonly around: Surroundings,
+  ) {
+    this.wanted = kept;
+  }
+
+  subscribe = (listener: () => void) => {
+    this.listeners.add(listener);
+    return () => this.listeners.delete(listener);
+  };
+  snapshot = () => this.state;
+
+  private become(state: Keeping) {
+    this.state = state;
+    for (const listener of this.listeners) listener();
+  }
+
+  private pending = () => !same(this.wanted, this.kept);
+
+  /** True where closing the page could lose something that this device does not hold either. */
+  get atRisk(): boolean {
+    return this.pending() || this.running !== null;
+  }
+
+  change(words: Words): void {
+    if (same(words, this.wanted)) return;
+    this.wanted = words;
+    if (this.state.kind === 'stale') {
+      this.hold();
+      return;
+    }
+    if (!this.pending() && !this.running) {
+      this.settle();
+      return;
+    }
+    this.hold();
+    if (!this.running) this.become({ kind: 'waiting' });
+    this.schedule(PAUSE);
+  }
+
+  private hold() {
+    this.onDevice = this.around.held.write({ ...this.wanted, version: this.version, at: this.around.now() });
+  }
+
+  private settle() {
+    this.stopWaiting?.();
+    this.stopWaiting = null;
+    this.retry = FIRST_RETRY;
+    this.around.held.clear();
+    this.become({ kind: 'kept', at: this.around.now() });
+  }
+
+  private schedule(ms: number) {
+    this.stopWaiting?.();
+    this.stopWaiting = this.around.later(() => void this.flush(), ms);
+  }
+
+  /** Saves now what is not saved yet. True once the server has every word. */
+  async flush({ keepalive = false } = {}): Promise<boolean> {
+    this.stopWaiting?.();
+    this.stopWaiting = null;
+    while (this.running) await this.running;
+    if (this.state.kind === 'stale') return false;
+    if (!this.pending()) return true;
+    this.running = this.send(keepalive).finally(() => (this.running = null));
+    await this.running;
+    const { kind } = this.state as Keeping;
+    if (kind !== 'waiting') return kind === 'kept';
+    return this.flush({ keepalive });
+  }
+
+  private async send(keepalive: boolean): Promise<void> {
+    const sent = this.wanted;
+    const large = sizeProblem(sent.source);
+    if (large) {
+      this.become({ kind: 'refused', why: large.message, onDevice: this.onDevice });
+      return;
+    }
+    this.become({ kind: 'keeping' });
+    try {
+      this.take(sent, (await this.around.save(sent, this.version, keepalive)).version);
+    } catch (error) {
+      await this.failed(error, sent);
+    }
+  }
+
+  private take(sent: Words, version: number) {
+    this.version = version;
+    this.kept = sent;
+    if (this.pending()) {
+      this.hold();
+      this.become({ kind: 'waiting' });
+    } else this.settle();
+  }
+
+  private async failed(error: unknown, sent: Words): Promise<void> {
+    const { onDevice } = this;
+    if (!(error instanceof Refused)) return this.tryLater('no network');
+    if (error.status === 401) return this.tryLater('you are signed out. Sign in again in another tab');
+    if (error.status === 429 || error.status >= 500) return this.tryLater('the book is busy');
+    if (error.status !== 409 || typeof error.problem['version'] !== 'number') {
+      this.become({ kind: 'refused', why: error.message, onDevice });
+      return;
+    }
+    try {
+      const theirs = await this.around.readTheirs();
+      // Our own save arrived, only its answer did not.
+      if (theirs.source === sent.source && theirs.reason === sent.reason) this.take(sent, theirs.version);
+      else if (!theirs.may.edit)
+        this.become({ kind: 'refused', why: theirs.whyNot['edit'] ?? error.message, onDevice });
+      else this.become({ kind: 'stale', theirs });
+    } catch {
+      this.tryLater('no network');
+    }
+  }
+
+  private tryLater(why: string) {
+    this.become({ kind: 'unreachable', why, onDevice: this.onDevice });
+    this.schedule(this.retry);
+    this.retry = Math.min(this.retry * 2, LAST_RETRY);
+  }
+
+  /** Says that words held on this device stand on another version than the server's. */
+  found(words: Words, theirs: Proposal) {
+    this.wanted = words;
+    this.version = theirs.version;
+    this.become({ kind: 'stale', theirs });
+  }
+
+  /** Goes on from what was saved elsewhere; returns the words that are set aside, so that they can be put back. */
+  takeTheirs(): { set: Words; aside: Words } | null {
+    if (this.state.kind !== 'stale') return null;
+    const { source, reason, version } = this.state.theirs;
+    const aside = this.wanted;
+    this.version = version;
+    this.kept = this.wanted = { source, reason };
+    this.settle();
+    return { set: this.kept, aside };
+  }
+
+  /** Saves the words on the screen over what was saved elsewhere. */
+  keepMine(): Promise<boolean> {
+    if (this.state.kind === 'stale') {
+      const { source, reason, version } = this.state.theirs;
+      this.version = version;
+      this.kept = { source, reason };
+      this.become({ kind: 'waiting' });
+    }
+    return this.flush();
+  }
+
+  /** Another call changed the draft on the server and returned its version. */
+  moved(version: number) {
+    this.version = version;
+  }
+
+  dispose() {
+    this.stopWaiting?.();
+  }
+}
