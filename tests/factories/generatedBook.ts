@@ -100,7 +100,7 @@ export function generatedDocuments(count: number, seed = 1): SearchDocument[] {
         const min = round(next() * 0.5 + 0.02, 0.01);
         const max = round(min + 0.02 + next() * 0.2, 0.01);
         const name = upper(`${part()} clearance`);
-        return { name, quantity: 'length', unit: 'mm', min, nominal: null, max, step: step() };
+        return { name, quantity: 'length', unit: 'mm', min, nominal: null, max, resolution: 0.01, step: step() };
       }),
       timers: few(0, 1, () => ({
         name: pick(['Soak', 'Sealant cures', 'Wait for oil to drain']),

@@ -54,6 +54,8 @@ export interface SearchLimit {
   min: number | null;
   nominal: number | null;
   max: number | null;
+  /** Of the tool it is read with, in `unit`; values are shown to it. */
+  resolution: number | null;
   step: number | null;
 }
 
@@ -82,8 +84,8 @@ const points = (reference: Reference, kind: 'torque' | 'limit' | 'timer', key: s
 };
 
 function limitOf(limit: Limit, step: number | null): SearchLimit {
-  const { name, quantity, unit = null, min = null, nominal = null, max = null } = limit;
-  return { name, quantity, unit, min, nominal, max, step };
+  const { name, quantity, unit = null, min = null, nominal = null, max = null, resolution = null } = limit;
+  return { name, quantity, unit, min, nominal, max, resolution, step };
 }
 
 /** The search document of a published revision. */

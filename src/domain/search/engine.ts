@@ -1,9 +1,9 @@
 import { SYSTEMS } from '../procedure/schema';
 import type { SearchDocument } from './documents';
 import { bestValues, explain, type Matched } from './explain';
-import { type Facets, type Filters, NO_FILTERS, sift } from './filters';
+import { type Facets, type Filters, NO_FILTERS, Sieve } from './filters';
 import { sayQuantity } from './quantities';
-import { type Answer, answerAsked, either, together } from './match';
+import { type Answer, answerAsked, mostly, together } from './match';
 import { Postings } from './postings';
 import { type Query, readQuery } from './query';
 import { best, rank, type Ranked } from './ranking';
@@ -66,7 +66,7 @@ const MOST_ASKED = 12;
 const REMEMBERED = 32;
 
 /** What is searched, with how much it says about what a sheet is for. */
-const FIELDS: [boost: number, of: (document: SearchDocument, engineName: (key: string) => string) => string[]][] = [
+const FIELDS: [boost: number, of: (document: SearchDocument, engineNames: (key: string) => string[]) => string[]][] = [
   [6, (d) => [d.title]],
   [
     2.5,
@@ -76,13 +76,13 @@ const FIELDS: [boost: number, of: (document: SearchDocument, engineName: (key: s
       ...d.limits.map((limit) => limit.name),
     ],
   ],
-  [2, (d, engineName) => [d.summary, SYSTEMS[d.system], ...d.engines.map(engineName)]],
+  [2, (d, engineNames) => [d.summary, SYSTEMS[d.system], d.skill, ...d.engines.flatMap(engineNames)]],
   [1, (d) => [...d.steps, ...d.tools, ...d.timers.map((timer) => timer.name)]],
 ];
 
 const answers = ({ scores }: Answer): boolean => scores.some((score) => score > 0);
 
-/** All of it, else all of it with slips and other endings, else any of it. */
+/** All of it, else all of it with slips and other endings, else at least half of it. */
 function findText(postings: Postings, query: Query): { answer: Answer | null; near: boolean } {
   const asked = query.asked.slice(0, MOST_ASKED);
   if (asked.length === 0) return { answer: null, near: false };
@@ -92,7 +92,7 @@ function findText(postings: Postings, query: Query): { answer: Answer | null; ne
   const loose = asked.map((one) => answerAsked(postings, one, 'loose'));
   const allLoose = together(postings, loose);
   if (answers(allLoose)) return { answer: allLoose, near: false };
-  return { answer: either(postings, loose), near: true };
+  return { answer: mostly(postings, loose), near: true };
 }
 
 /** Keeps the last few answers: going back a letter, or setting a filter, costs nothing. */
@@ -109,24 +109,34 @@ function remember<T>(make: (key: string) => T): (key: string) => T {
   };
 }
 
+/** "Tarn T18F" is also called "T18F": a type with a digit in it needs no maker. */
+const namesOf = (name: string): string[] => [name, ...name.split(' ').filter((word) => /\p{L}\d|\d\p{L}/u.test(word))];
+
 /** Search over a book. Pure and the same on the server and in the page, so that both rank alike. */
 export function createSearch({ documents, vocabulary, engines }: SearchBook): Search {
-  const phrases = new Phrases([...vocabulary, ...engines.map(({ name, aliases }) => ({ terms: [name, ...aliases] }))]);
+  const phrases = new Phrases([
+    ...vocabulary,
+    ...engines.map(({ name, aliases }) => ({ terms: [...namesOf(name), ...aliases] })),
+  ]);
   const tokensOf = createTokens(phrases);
   const byKey = new Map(engines.map((engine) => [engine.key, engine]));
-  const engineName = (key: string): string => byKey.get(key)?.name ?? key;
+  const engineNames = (key: string): string[] => {
+    const engine = byKey.get(key);
+    return engine ? [engine.name, ...engine.aliases] : [key];
+  };
   const postings = new Postings(
     documents.length,
     FIELDS.map(([boost, of]) => ({
       boost,
-      tokens: documents.map((document) => of(document, engineName).flatMap((text) => tokensOf(text))),
+      tokens: documents.map((document) => of(document, engineNames).flatMap((text) => tokensOf(text))),
     })),
   );
   const values = new ValueIndex(documents);
-  const engineTokens = new Set(engines.flatMap(({ name }) => [...tokensOf(name)]));
+  const sieve = new Sieve(documents);
+  const engineTokens = new Set(engines.flatMap(({ key }) => engineNames(key).flatMap(tokensOf)));
 
   const rankOnce = remember((text): Ranked => {
-    const query = readQuery(text, phrases);
+    const query = readQuery(text, phrases, (word) => postings.has(word));
     return rank({
       documents,
       query,
@@ -138,7 +148,7 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
 
   const synonymsOf = ({ asked }: Query): string[][] =>
     asked.flatMap(({ groups, completing }) =>
-      [...groups, ...completing].map((group) =>
+      (groups.length > 0 ? groups : completing).map((group) =>
         group < vocabulary.length ? phrases.names(group) : phrases.names(group).slice(0, 1),
       ),
     );
@@ -147,7 +157,7 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
     query(text, filters = NO_FILTERS, { limit = 20, units = 'metric' } = {}) {
       const ranked = rankOnce(text.slice(0, LONGEST_QUERY));
       const { query, near } = ranked;
-      const { kept, facets } = sift(documents, ranked.scores, filters);
+      const { kept, facets } = sieve.sift(ranked.scores, filters);
       const first = best(kept, limit, ranked, (at) => tokensOf(documents[at]?.title ?? ''));
       return {
         total: kept.length,
@@ -160,7 +170,7 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
         hits: first.map((at): SearchHit => {
           const document = documents[at] as SearchDocument;
           const { number, title, summary, system, minutes, skill, holds, letter, publishedAt, book } = document;
-          const told = bestValues(ranked.values.get(at) ?? [], query.quantities);
+          const told = bestValues(document, ranked.values.get(at) ?? [], ranked.terms, tokensOf);
           const matched = explain(document, ranked.terms, engineTokens, told, { phrases, tokensOf, units });
           return {
             ...{ number, title, summary, system, minutes, skill, holds, letter, publishedAt, book },

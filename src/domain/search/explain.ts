@@ -1,10 +1,9 @@
 import { SYSTEMS } from '../procedure/schema';
 import type { SearchDocument } from './documents';
-import type { ReadQuantity } from './quantities';
 import { groupToken } from './tokens';
-import { sayValue, type UnitSystem, type ValueMatch } from './values';
+import { nameOf, sayValue, type UnitSystem, type ValueMatch } from './values';
 import type { Phrases } from './vocabulary';
-import { fold, wordsOf } from './words';
+import { fold, wordRuns } from './words';
 
 /** What matched, in words, and where in those words: `marks` are [start, end) places in `text`. */
 export interface Matched {
@@ -16,21 +15,21 @@ export interface Matched {
 
 /** Places of `text` that any of the matched tokens stand at, in order, touching ones joined. */
 export function marksIn(text: string, matched: ReadonlySet<string>, phrases: Phrases): [number, number][] {
-  const words = wordsOf(text);
-  const folded = words.map((word) => fold(word.text));
-  const hit = words.map(() => false);
-  folded.forEach((word, at) => {
-    if (matched.has(word)) hit[at] = true;
-    for (const { length, groups } of phrases.startingAt(folded, at))
-      if (groups.some((group) => matched.has(groupToken(group)))) hit.fill(true, at, at + length);
-  });
   const marks: [number, number][] = [];
-  words.forEach((word, at) => {
-    if (!hit[at]) return;
-    const last = marks.at(-1);
-    if (last && hit[at - 1] && /^[\s-]*$/.test(text.slice(last[1], word.start))) last[1] = word.end;
-    else marks.push([word.start, word.end]);
-  });
+  for (const run of wordRuns(text)) {
+    const folded = run.map((word) => fold(word.text));
+    const hit = folded.map((word) => matched.has(word));
+    folded.forEach((_, at) => {
+      for (const { length, groups } of phrases.startingAt(folded, at))
+        if (groups.some((group) => matched.has(groupToken(group)))) hit.fill(true, at, at + length);
+    });
+    run.forEach((word, at) => {
+      if (!hit[at]) return;
+      const last = marks.at(-1);
+      if (last && hit[at - 1]) last[1] = word.end;
+      else marks.push([word.start, word.end]);
+    });
+  }
   return marks;
 }
 
@@ -116,11 +115,22 @@ export function explain(
   return out;
 }
 
-/** Values in the order they are told: those that answer most first, then the closest. */
-export function bestValues(matches: readonly ValueMatch[], quantities: readonly ReadQuantity[]): ValueMatch[] {
-  return [...matches]
-    .sort(
-      (a, b) => Math.min(b.answers, quantities.length) - Math.min(a.answers, quantities.length) || b.score - a.score,
-    )
-    .filter((match, i, all) => i === 0 || match.answers === all[0]?.answers);
+/**
+ * The values worth telling: those that answer most of the quantities and whose own name was asked for too, the closest first.
+ *
+ * @param wanted tokens of the query
+ */
+export function bestValues(
+  document: SearchDocument,
+  matches: readonly ValueMatch[],
+  wanted: ReadonlySet<string>,
+  tokensOf: (text: string) => readonly string[],
+): ValueMatch[] {
+  const ranked = matches
+    .map((match) => ({
+      match,
+      rank: match.answers + (tokensOf(nameOf(document, match)).some((token) => wanted.has(token)) ? 0.5 : 0),
+    }))
+    .sort((a, b) => b.rank - a.rank || b.match.score - a.match.score);
+  return ranked.filter(({ rank }) => rank === ranked[0]?.rank).map(({ match }) => match);
 }

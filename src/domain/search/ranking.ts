@@ -33,8 +33,12 @@ const NUMBER_COUNTS = 20;
 const digitsOf = (number: string): string => number.replace(/^P-0*/, '');
 
 /** How well the values of a sheet answer, 0 to about 2: the best one, more where its own name was asked for too. */
-function worthOf(document: SearchDocument, matches: readonly ValueMatch[], { query, tokensOf }: Given): number {
-  const wanted = new Set(query.asked.flatMap((one) => [...one.words, ...one.groups.map(groupToken)]));
+function worthOf(
+  document: SearchDocument,
+  matches: readonly ValueMatch[],
+  { query, tokensOf }: Given,
+  wanted: ReadonlySet<string>,
+): number {
   return matches.reduce((best, match) => {
     const named = wanted.size > 0 && tokensOf(nameOf(document, match)).some((token) => wanted.has(token));
     return Math.max(best, match.score / query.quantities.length + (named ? NAME_COUNTS : 0));
@@ -47,7 +51,8 @@ function addValues(scores: Float32Array, given: Given): boolean {
   const inWords = query.asked.length > 0;
   const places = [...values.keys()];
   const both = inWords ? places.filter((at) => (scores[at] as number) > 0) : places;
-  const worth = (at: number): number => worthOf(documents[at] as SearchDocument, values.get(at) ?? [], given);
+  const wanted = new Set(query.asked.flatMap((one) => [...one.words, ...one.groups.map(groupToken)]));
+  const worth = (at: number): number => worthOf(documents[at] as SearchDocument, values.get(at) ?? [], given, wanted);
   if (both.length === 0) {
     for (const at of places) scores[at] = worth(at);
     return inWords;

@@ -1,5 +1,5 @@
 import type { Phrases } from './vocabulary';
-import { fold, saysNothing, wordsOf } from './words';
+import { fold, saysNothing, wordRuns } from './words';
 
 /** The token that stands for a vocabulary group. No word can look like it. */
 export const groupToken = (group: number): string => `~${group}`;
@@ -12,11 +12,14 @@ export const isGroupToken = (token: string): boolean => token.startsWith('~');
 export function createTokens(phrases: Phrases): (text: string) => readonly string[] {
   const known = new Map<string, readonly string[]>();
   const read = (text: string): readonly string[] => {
-    const folded = wordsOf(text).map((word) => fold(word.text));
-    const tokens = folded.filter((word) => !saysNothing(word));
-    folded.forEach((_, at) => {
-      for (const { groups } of phrases.startingAt(folded, at)) tokens.push(...groups.map(groupToken));
-    });
+    const tokens: string[] = [];
+    for (const run of wordRuns(text)) {
+      const folded = run.map((word) => fold(word.text));
+      folded.forEach((word, at) => {
+        if (!saysNothing(word)) tokens.push(word);
+        for (const { groups } of phrases.startingAt(folded, at)) tokens.push(...groups.map(groupToken));
+      });
+    }
     return tokens;
   };
   // Names of parts, tools and steps come back in many sheets; each is read once.

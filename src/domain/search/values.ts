@@ -192,15 +192,19 @@ function sayTorque(torque: SearchTorque, match: ValueMatch, units: UnitSystem): 
   return { value, rest: `${way}${lower(torque.name)}, ${torque.thread}, ${places}${atStep(torque.step)}` };
 }
 
-function sayLimit(limit: SearchLimit, units: UnitSystem): string {
-  const { min, nominal, max } = limit;
+function sayLimit(limit: SearchLimit, value: number | null, units: UnitSystem): { value: string; rest: string } {
+  const { min, nominal, max, resolution } = limit;
   const unit = limit.unit as Unit;
-  const ends = min !== null && max !== null ? [min, max] : [min ?? max ?? nominal ?? 0];
-  const texts = inBothUnits(ends, unit)[units];
-  const text = withUnit(texts.numbers.join(' to '), texts.unit);
-  if (min !== null && max !== null) return text;
-  if (min !== null) return `at least ${text}`;
-  return max !== null ? `at most ${text}` : text;
+  const say = (...ends: number[]): string => {
+    const texts = inBothUnits(ends, unit, resolution ?? undefined)[units];
+    return withUnit(texts.numbers.join(' to '), texts.unit);
+  };
+  const span = min !== null && max !== null ? say(min, max) : '';
+  const rest = lower(limit.name);
+  if (nominal !== null && (value === nominal || !span))
+    return { value: say(nominal), rest: span ? `${rest}, ${span}` : rest };
+  if (span) return { value: span, rest };
+  return min !== null ? { value: `at least ${say(min)}`, rest } : { value: `at most ${say(max ?? 0)}`, rest };
 }
 
 /** A match in words: the value for the eye, then what it is for. */
@@ -215,7 +219,10 @@ export function sayValue(
   }
   if (match.kind === 'limit') {
     const limit = document.limits[match.at];
-    if (limit) return { value: sayLimit(limit, units), rest: lower(limit.name) + atStep(limit.step), step: limit.step };
+    if (limit) {
+      const { value, rest } = sayLimit(limit, match.value, units);
+      return { value, rest: rest + atStep(limit.step), step: limit.step };
+    }
   }
   const timer = document.timers[match.at];
   const minutes = timer?.minutes ?? 0;

@@ -49,21 +49,21 @@ export class Phrases {
   readonly #groups: readonly VocabularyGroup[];
   readonly #byPhrase = new Map<string, number[]>();
   readonly #sorted: string[];
-  readonly #longest: number;
+  /** How many words the longest phrase has that begins with a word; most words begin none. */
+  readonly #longest = new Map<string, number>();
 
   constructor(groups: readonly VocabularyGroup[]) {
     this.#groups = groups;
-    let longest = 1;
     groups.forEach((group, at) => {
       for (const text of [...group.terms, ...(group.misspelt ?? [])]) {
         const words = wordsOf(text).map((word) => fold(word.text));
-        longest = Math.max(longest, words.length);
+        const first = words[0] ?? '';
+        this.#longest.set(first, Math.max(this.#longest.get(first) ?? 0, words.length));
         const known = this.#byPhrase.get(words.join(' '));
         if (!known) this.#byPhrase.set(words.join(' '), [at]);
         else if (!known.includes(at)) known.push(at);
       }
     });
-    this.#longest = longest;
     this.#sorted = [...this.#byPhrase.keys()].sort();
   }
 
@@ -75,7 +75,8 @@ export class Phrases {
   /** Every phrase that begins at `at`, longest first. `words` are folded. */
   startingAt(words: readonly string[], at: number): Meeting[] {
     const met: Meeting[] = [];
-    for (let length = Math.min(this.#longest, words.length - at); length > 0; length -= 1) {
+    const longest = this.#longest.get(words[at] ?? '') ?? 0;
+    for (let length = Math.min(longest, words.length - at); length > 0; length -= 1) {
       const groups = this.#byPhrase.get(words.slice(at, at + length).join(' '));
       if (groups) met.push({ length, groups });
     }

@@ -27,6 +27,19 @@ export function wordsOf(text: string): Word[] {
   return words;
 }
 
+/** Words that stand together, cut where the text pauses: "cam, cover" names no cam cover. */
+export function wordRuns(text: string): Word[][] {
+  const runs: Word[][] = [];
+  let end = -1;
+  for (const word of wordsOf(text)) {
+    const run = runs.at(-1);
+    if (run && !/[,;:.()!?]/.test(text.slice(end, word.start))) run.push(word);
+    else runs.push([word]);
+    end = word.end;
+  }
+  return runs;
+}
+
 /**
  * One form for singular and plural. Only plurals: cutting more would break a search while the word is being
  * typed, because "timin" does not begin with the stem of "timing".
