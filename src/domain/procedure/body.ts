@@ -1,6 +1,7 @@
-import type { PhrasingContent, Root, RootContent } from 'mdast';
+import type { Root, RootContent } from 'mdast';
 import type { MdxJsxFlowElement, MdxJsxTextElement } from 'mdast-util-mdx-jsx';
 import { componentOf } from './components';
+import { gathered, lifted } from './arrange';
 import { cleanElement, elementNode, paragraph, passage, report, words, type Checking } from './passage';
 import { tidyWords } from './phrasing';
 import { START, type Place } from './problems';
@@ -26,57 +27,17 @@ export interface DraftBody {
 const MOST_STEPS = 200;
 const LONGEST_TITLE = 90;
 
-const standsAlone = (node: PhrasingContent): node is MdxJsxTextElement =>
-  node.type === 'mdxJsxTextElement' && ['block', 'step'].includes(componentOf(node.name)?.stands ?? '');
-const isBlank = (node: PhrasingContent) => node.type === 'text' && node.value.trim() === '';
-
-/**
- * Components that stand on their own, taken out of the paragraph that Markdown puts them in when
- * they are written on one line. A paragraph that mixes them with words stays, and is reported later.
- */
-function lifted(nodes: readonly RootContent[]): RootContent[] {
-  return nodes.flatMap((node): RootContent[] => {
-    if (node.type !== 'paragraph' || !node.children.some(standsAlone)) return [node];
-    if (!node.children.every((child) => standsAlone(child) || isBlank(child))) return [node];
-    return node.children.filter(standsAlone).map((child): MdxJsxFlowElement => {
-      const { name, attributes } = child;
-      const inside = child.children;
-      const children = inside.length
-        ? [{ type: 'paragraph' as const, children: inside, ...(child.position && { position: child.position }) }]
-        : [];
-      return {
-        type: 'mdxJsxFlowElement',
-        name,
-        attributes,
-        children,
-        ...(child.position && { position: child.position }),
-      };
-    });
-  });
-}
-
-/** A value alone on a line in the middle of a wrapped sentence would tear the sentence apart. */
-function reportTorn(nodes: readonly RootContent[], c: Checking): void {
-  nodes.forEach((node, i) => {
-    if (node.type !== 'mdxJsxFlowElement' || componentOf(node.name)?.stands !== 'sentence') return;
-    const before = nodes[i - 1];
-    const after = nodes[i + 1];
-    const touches =
-      (before?.type === 'paragraph' && before.position?.end.line === (node.position?.start.line ?? 0) - 1) ||
-      (after?.type === 'paragraph' && after.position?.start.line === (node.position?.end.line ?? 0) + 1);
-    if (touches)
-      report(c, node.position?.start, `${node.name} stands inside a sentence. Write it on the same line as its words.`);
-  });
-}
+const EMPTY_HOLD = 'This hold point says nothing. Write what must be checked, and by whom.';
 
 function hold(node: MdxJsxFlowElement, c: Checking): RootContent[] {
   if (!cleanElement(node, c)) return [];
   const [only, ...more] = node.children;
   const start = node.position?.start;
-  if (!only) return report(c, start, 'This hold point says nothing. Write what must be checked, and by whom.') ?? [];
+  if (!only) return report(c, start, EMPTY_HOLD) ?? [];
   if (more.length || only.type !== 'paragraph')
     return report(c, start, 'A hold point is one sentence or two, without lists, tables or blank lines.') ?? [];
   const children = tidyWords(words(only.children, c));
+  if (children.length === 0) return report(c, start, EMPTY_HOLD) ?? [];
   const element: MdxJsxTextElement = { ...elementNode('mdxJsxTextElement', 'Hold', {}, node), children };
   return [{ type: 'paragraph', children: [element], ...(node.position && { position: node.position }) }];
 }
@@ -127,8 +88,7 @@ function readStep(
   }
   const cautions = [...ahead];
   const children: RootContent[] = [];
-  const inside = lifted(node.children);
-  reportTorn(inside, c);
+  const inside = gathered(lifted(node.children), c);
   for (const child of inside) {
     const start = child.position?.start;
     if (isNamed(child, 'Step'))
@@ -156,8 +116,8 @@ export function readBody(root: Root, head: Frontmatter | null): DraftBody {
   const steps: DraftStep[] = [];
   let ahead: string[] = [];
   let lastCaution: Place | undefined;
-  const top = lifted(root.children.slice(root.children[0]?.type === 'yaml' ? 1 : 0));
-  reportTorn(top, { head, problems, path: 'intro' });
+  const nodes = root.children.slice(root.children[0]?.type === 'yaml' ? 1 : 0);
+  const top = gathered(lifted(nodes), { problems, path: 'intro' });
   for (const node of top) {
     const c: Checking = { head, problems, path: steps.length ? `steps.${steps.length - 1}.body` : 'intro' };
     const start = node.position?.start;

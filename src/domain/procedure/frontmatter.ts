@@ -39,7 +39,16 @@ function placesOf(
   return { placeOf, at };
 }
 
-/** What YAML allows and a procedure does not: aliases, anchors, tags, and numbers that are none. */
+/** Larger or finer than anything that is measured in a shop; such numbers also lose digits when converted. */
+function numberFault(value: number): string | null {
+  if (!Number.isFinite(value)) return 'This is no number that can be measured. Write a plain number.';
+  if (Math.abs(value) > 1e9) return 'This number is larger than anything that is measured here.';
+  return Number(value.toFixed(6)) === value
+    ? null
+    : 'This number has more than six decimals. Round it to what can be measured.';
+}
+
+/** What YAML allows and a procedure does not: aliases, anchors, tags, and numbers that nobody can measure. */
 function refused(document: Document, at: (offset: number) => Place): SourceProblem[] {
   const errors: SourceProblem[] = [];
   visit(document, {
@@ -54,9 +63,10 @@ function refused(document: Document, at: (offset: number) => Place): SourceProbl
         );
       else if (node.tag && node.tag.startsWith('!') === true)
         errors.push(problem(place, 'A value that starts with ! needs quotes.'));
-      else if (isScalar(node) && typeof node.value === 'number' && !Number.isFinite(node.value))
-        errors.push(problem(place, 'This is no number that can be measured. Write a plain number.'));
-      else if (isScalar(node) && typeof node.value === 'string') {
+      else if (isScalar(node) && typeof node.value === 'number') {
+        const fault = numberFault(node.value);
+        if (fault) errors.push(problem(place, fault));
+      } else if (isScalar(node) && typeof node.value === 'string') {
         const found = forbiddenCharacter(node.value.replace(/\n/g, ' '));
         if (found) errors.push(problem(place, forbiddenSentence(found.what)));
       }

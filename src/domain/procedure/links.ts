@@ -1,3 +1,5 @@
+import type { Link } from 'mdast';
+
 const HELP =
   'A link goes to an address that starts with https:// or to a path of this book, such as /handbook/signal-words.';
 
@@ -15,4 +17,18 @@ export function linkFault(url: string): string | null {
   } catch {
     return `This address is not complete. ${HELP}`;
   }
+}
+
+/**
+ * The words of an address that was only written, not made a link by hand (GFM autolink literals: `www.`,
+ * `http://`, e-mail), where it may not be linked to; null for every other link. Such an address stays plain text.
+ */
+export function plainAddress(link: Link): string | null {
+  const [only, ...more] = link.children;
+  if (only?.type !== 'text' || more.length || linkFault(link.url) === null) return null;
+  const { start, end } = link.position ?? {};
+  const written =
+    start?.offset === undefined || end?.offset === undefined ? only.value.length : end.offset - start.offset;
+  const isLiteral = [only.value, `mailto:${only.value}`, `http://${only.value}`].includes(link.url);
+  return isLiteral && written === only.value.length ? only.value : null;
 }

@@ -1,5 +1,5 @@
 import type { Root, RootContent } from 'mdast';
-import { mdxExpressionFromMarkdown } from 'mdast-util-mdx-expression';
+import { mdxExpressionFromMarkdown, mdxExpressionToMarkdown } from 'mdast-util-mdx-expression';
 import { mdxJsxFromMarkdown, mdxJsxToMarkdown } from 'mdast-util-mdx-jsx';
 import { mdxExpression } from 'micromark-extension-mdx-expression';
 import { mdxJsx } from 'micromark-extension-mdx-jsx';
@@ -18,13 +18,25 @@ function componentsAsData(this: Processor) {
   const data = this.data();
   (data.micromarkExtensions ??= []).push(mdxJsx(), mdxExpression(), mdxMd());
   (data.fromMarkdownExtensions ??= []).push(mdxJsxFromMarkdown(), mdxExpressionFromMarkdown());
-  (data.toMarkdownExtensions ??= []).push(mdxJsxToMarkdown({ printWidth: Infinity, quote: '"' }));
+  (data.toMarkdownExtensions ??= []).push(
+    mdxJsxToMarkdown({ printWidth: Infinity, quote: '"' }),
+    mdxExpressionToMarkdown(),
+  );
+}
+
+/**
+ * remark-gfm looks for addresses a second time, in the finished text, where an escaped one can no longer be told
+ * from a plain one; the text would then not come back as it was written. The first time, in the syntax, is enough.
+ */
+function addressesOnce(this: Processor) {
+  for (const extension of (this.data().fromMarkdownExtensions ?? []).flat()) delete extension.transforms;
 }
 
 const processor = unified()
   .use(remarkParse)
   .use(remarkFrontmatter, ['yaml'])
   .use(remarkGfm, { singleTilde: false, tablePipeAlign: false })
+  .use(addressesOnce)
   .use(componentsAsData)
   .use(remarkStringify, {
     bullet: '-',

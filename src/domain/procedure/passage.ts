@@ -2,8 +2,9 @@ import type { Link, List, ListItem, Paragraph, PhrasingContent, RootContent, Tab
 import { readAttributes, type Element } from './attributes';
 import { forbiddenCharacter, forbiddenSentence } from './characters';
 import { componentOf, COMPONENTS, type Attributes } from './components';
-import { linkFault } from './links';
+import { linkFault, plainAddress } from './links';
 import { nearest } from './nearest';
+import { gathered } from './arrange';
 import { tidyInside, tidyWords } from './phrasing';
 import { problem, type Place } from './problems';
 import { refusal } from './refusals';
@@ -59,6 +60,8 @@ function checkedText(node: Text, c: Checking): PhrasingContent[] {
 
 function checkedLink(node: Link, c: Checking, inside: readonly string[]): PhrasingContent[] {
   const start = node.position?.start;
+  const plain = plainAddress(node);
+  if (plain !== null) return checkedText({ type: 'text', value: plain, ...keepPlace(node) }, c);
   const fault = linkFault(node.url);
   if (fault) report(c, start, fault);
   if (node.title)
@@ -69,14 +72,20 @@ function checkedLink(node: Link, c: Checking, inside: readonly string[]): Phrasi
   return [{ type: 'link', url: node.url, children, ...keepPlace(node) }];
 }
 
-function sentenceElement(element: Element, c: Checking): PhrasingContent[] {
-  const component = componentOf(element.name);
-  if (component && component.stands !== 'sentence') {
+function misplaced(element: Element, c: Checking): void {
+  if (!componentOf(element.name)) cleanElement(element, c);
+  else
     report(
       c,
       element.position?.start,
       `${element.name} stands on its own: put it on a line by itself, with a blank line before and after, and not inside a list, a quotation or a table.`,
     );
+}
+
+function sentenceElement(element: Element, c: Checking): PhrasingContent[] {
+  const component = componentOf(element.name);
+  if (component && component.stands !== 'sentence') {
+    misplaced(element, c);
     return [];
   }
   const clean = cleanElement(element, c);
@@ -96,9 +105,9 @@ export function words(
       case 'break':
         return [{ type: 'break' }];
       case 'inlineCode': {
-        const found = forbiddenCharacter(node.value);
+        const found = forbiddenCharacter(node.value.replace(/\n/g, ' '));
         if (found) report(c, node.position?.start, forbiddenSentence(found.what));
-        return [{ type: 'inlineCode', value: node.value, ...keepPlace(node) }];
+        return [{ type: 'inlineCode', value: node.value.replace(/\n/g, ' '), ...keepPlace(node) }];
       }
       case 'emphasis':
       case 'strong': {
@@ -164,7 +173,7 @@ export function paragraph(node: Paragraph, c: Checking): Paragraph[] {
 
 /** Paragraphs, lists, quotations and tables, checked and cleaned; anything else is reported and left out. */
 export function passage(nodes: readonly RootContent[], c: Checking): RootContent[] {
-  return nodes.flatMap((node): RootContent[] => {
+  return gathered(nodes, c).flatMap((node): RootContent[] => {
     switch (node.type) {
       case 'paragraph':
         return paragraph(node, c);
@@ -178,11 +187,10 @@ export function passage(nodes: readonly RootContent[], c: Checking): RootContent
       }
       case 'table':
         return table(node, c);
-      case 'mdxJsxFlowElement': {
-        // A value alone on its line, as in a list of parts: a paragraph of one component.
-        const children = sentenceElement(node, c);
-        return children.length ? [{ type: 'paragraph', children, ...keepPlace(node) }] : [];
-      }
+      case 'mdxJsxFlowElement':
+        // Only what stands on its own is left here by `gathered`; it has no place in a list or a quotation.
+        misplaced(node, c);
+        return [];
       default:
         report(c, node.position?.start, refusal(node.type));
         return [];

@@ -20,8 +20,8 @@ function trimmed(nodes: PhrasingContent[]): PhrasingContent[] {
     .map((node, i) => {
       if (!isText(node)) return node;
       let { value } = node;
-      if (i === 0 || nodes[i - 1]?.type === 'break') value = value.replace(/^ /, '');
-      if (i === last || nodes[i + 1]?.type === 'break') value = value.replace(/ $/, '');
+      if (i === 0 || nodes[i - 1]?.type === 'break') value = value.trimStart();
+      if (i === last || nodes[i + 1]?.type === 'break') value = value.trimEnd();
       return { ...node, value };
     })
     .filter((node) => !isText(node) || node.value !== '');

@@ -27,10 +27,17 @@ const SENTENCES: readonly { when: (t: Thrown) => boolean; say: (t: Thrown) => st
     },
   },
   {
+    when: (t) => t.ruleId === 'end-tag-mismatch' && /`<\//.test(t.reason ?? ''),
+    say: (t) => {
+      const name = /`<\/([^>`]*)>`/.exec(t.reason ?? '')?.[1] || 'the component';
+      return `Here ${name} is closed among words. Put </${name}> on a line of its own.`;
+    },
+  },
+  {
     when: (t) => t.ruleId === 'end-tag-mismatch',
     say: (t) => {
-      const name = /`<([^>`]*)>`/.exec(t.reason ?? '')?.[1] || 'A component';
-      return `${name} is opened and not closed. Put <${name}> and </${name}> on lines of their own, or both on one line.`;
+      const name = /`<([^>`]*)>`/.exec(t.reason ?? '')?.[1] || 'Step';
+      return `<${name}> is opened and not closed. Put <${name}> and </${name}> on lines of their own, or both on one line.`;
     },
   },
   {
