@@ -28,6 +28,8 @@ export interface Sent {
 export interface Answered {
   status: number;
   headers: Headers;
+  /** Cookies that the route set, by name. */
+  cookies: Record<string, string>;
   // Tests look into the body as they go; what it must hold is what they assert.
   // eslint-disable-next-line @typescript-eslint/no-explicit-any
   body: any;
@@ -47,10 +49,12 @@ export async function call(as: Member | null, method: string, path: string, sent
     ...(raw === undefined ? {} : { body: raw, duplex: 'half' }),
   } as RequestInit);
   const who = as && (await signedIn(as));
+  const cookies: Record<string, string> = {};
   const context = {
     request,
     url,
     params: Object.fromEntries(found.names.map((name, i) => [name, decodeURIComponent(values[i] ?? '')])),
+    cookies: { set: (name: string, value: string) => void (cookies[name] = value) },
     locals: { actor: who?.actor ?? NOBODY, person: who?.me ?? null },
   } as unknown as APIContext;
   const module = await found.load();
@@ -58,5 +62,5 @@ export async function call(as: Member | null, method: string, path: string, sent
   if (!handler) throw new Error(`${found.path} has no handler for ${method}`);
   const response = await handler(context);
   const body = await response.text();
-  return { status: response.status, headers: response.headers, body: body === '' ? null : JSON.parse(body) };
+  return { status: response.status, headers: response.headers, cookies, body: body === '' ? null : JSON.parse(body) };
 }

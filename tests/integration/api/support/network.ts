@@ -94,7 +94,9 @@ export async function publishFirst(number: string, { shopId = null as string | n
 }
 
 export async function signedIn(person: Member) {
-  const who = await whoIs({ personId: person.id, tokenVersion: 1 });
+  const { db } = await app();
+  const row = await db.models.Person.findByPk(person.id);
+  const who = await whoIs({ personId: person.id, tokenVersion: row?.tokenVersion ?? 0 });
   if (!who) throw new Error(`${person.name} cannot sign in.`);
   return who;
 }

@@ -1,0 +1,69 @@
+import { beforeEach, expect, it } from 'vitest';
+import { openTestBook } from '../../setup/database';
+import { hashPassword, verifyPassword } from '@/server/accounts/passwords';
+import { readSession } from '@/server/accounts/session';
+import { app } from '@/server/context';
+import { call } from './support/call';
+import { makeNetwork, type Member, type Network } from './support/network';
+
+let network: Network;
+const who = (name: string): Member => network.people[name]!;
+
+beforeEach(async () => {
+  await openTestBook();
+  network = await makeNetwork();
+});
+
+it('says who I am, with my roles and my shop', async () => {
+  expect((await call(who('north.senior'), 'GET', '/me')).body).toMatchObject({
+    name: 'north senior',
+    units: 'metric',
+    shop: { id: network.north, name: 'Test shop north' },
+    roles: [{ in: 'shop', shopId: network.north, role: 'senior', name: 'Test shop north' }],
+  });
+});
+
+it('changes my name and my units, one at a time or both', async () => {
+  const person = who('north.senior');
+  expect((await call(person, 'PATCH', '/me', { body: { units: 'inch' } })).body).toMatchObject({ units: 'inch' });
+  await call(person, 'PATCH', '/me', { body: { name: '  Another Name ' } });
+  expect((await call(person, 'GET', '/me')).body).toMatchObject({ name: 'Another Name', units: 'inch' });
+});
+
+it.each([
+  [{ units: 'cubits' }, 'units', 'must be one of metric, inch'],
+  [{ name: '   ' }, 'name', 'must not be empty'],
+  [{ name: 7 }, 'name', 'must be text'],
+])('refuses %j', async (body, path, message) => {
+  const answer = await call(who('north.senior'), 'PATCH', '/me', { body });
+  expect(answer).toMatchObject({ status: 422, body: { errors: [{ path, message }] } });
+});
+
+it('changes my password, ends my other sessions and gives this one a new cookie', async () => {
+  const person = who('north.senior');
+  const { db } = await app();
+  const row = (await db.models.Person.findByPk(person.id))!;
+  await row.update({ passwordHash: await hashPassword('the first password') });
+  const wrong = await call(person, 'POST', '/me/password', {
+    body: { current: 'another', next: 'the second password' },
+  });
+  expect(wrong).toMatchObject({ status: 422, body: { errors: [{ path: 'current' }] }, cookies: {} });
+  const changed = await call(person, 'POST', '/me/password', {
+    body: { current: 'the first password', next: 'the second password' },
+  });
+  expect(changed).toMatchObject({ status: 204, body: null });
+  await row.reload();
+  expect(await verifyPassword(row.passwordHash!, 'the second password')).toBe(true);
+  expect(await readSession(Object.values(changed.cookies)[0])).toMatchObject({
+    personId: person.id,
+    tokenVersion: row.tokenVersion,
+  });
+  expect(row.tokenVersion).toBe(2);
+});
+
+it('signs me out everywhere', async () => {
+  const person = who('north.senior');
+  expect((await call(person, 'POST', '/me/sign-out-everywhere')).status).toBe(204);
+  const { db } = await app();
+  expect((await db.models.Person.findByPk(person.id))!.tokenVersion).toBe(2);
+});
