@@ -69,6 +69,7 @@ export async function openDatabase(file: string, { now = isoNow }: OpenOptions =
   const sequelize = connection(file);
   const models = defineModels(sequelize, now);
   const oneAtATime = turnstile();
+  let closed = false;
 
   const db: Database = {
     sequelize,
@@ -89,7 +90,11 @@ export async function openDatabase(file: string, { now = isoNow }: OpenOptions =
         throw storageFault(error);
       }
     },
-    close: () => sequelize.close(),
+    close: async () => {
+      // Sequelize fails when it is closed twice, and a caller that cleans up need not know who came first.
+      if (!closed) await sequelize.close();
+      closed = true;
+    },
   };
 
   try {

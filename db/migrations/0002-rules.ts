@@ -36,7 +36,7 @@ const triggers: Record<string, string> = {
       OR (NEW.state IN ('published', 'declined', 'returned') AND OLD.state <> 'proposed'))
     |A revision cannot go from its state to that one`,
   revisions_publish_needs_agreement: `BEFORE UPDATE OF state ON revisions
-    WHEN NEW.state = 'published' AND OLD.state <> 'published'
+    WHEN NEW.state = 'published' AND OLD.state = 'proposed'
       AND ${agreed} < CASE WHEN NEW.critical = 1 THEN 2 ELSE 1 END
     |A revision is published only with the agreements it needs`,
   revisions_born_published: `BEFORE INSERT ON revisions WHEN ${isPublished('NEW')} AND NOT ${byRelease}

@@ -45,6 +45,7 @@ export function fileName(number: string, title: string): string {
     .normalize('NFKD')
     .toLowerCase()
     .replace(/\p{M}/gu, '')
+    .replaceAll('ß', 'ss')
     .split(/[^a-z0-9]+/)
     .filter(Boolean);
   const slug = words.join('-').slice(0, 60).replace(/-$/, '');
