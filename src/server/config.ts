@@ -23,6 +23,7 @@ const Environment = z.object({
       .refine((value) => URL.canParse(value) && new URL(value).origin === value.replace(/\/$/, ''), {
         message: 'APP_ORIGIN must be scheme, host and port only, without a path.',
       })
+      .refine((value) => /^https?:/.test(value), 'APP_ORIGIN must begin with http:// or https://.')
       .transform((value) => new URL(value).origin)
       .optional(),
   ),

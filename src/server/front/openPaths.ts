@@ -12,9 +12,11 @@ const OPEN_PATHS = new Set([
 ]);
 const OPEN_FOLDERS = ['/api/auth/', '/_astro/', '/fonts/', '/figures/'];
 
+// Nothing open has an escape or a dot folder in its name; whoever sends one hopes that it is read in two ways.
 export const isOpen = (path: string): boolean =>
-  OPEN_PATHS.has(path.length > 1 ? path.replace(/\/$/, '') : path) ||
-  OPEN_FOLDERS.some((folder) => path.startsWith(folder));
+  !/%|\/\./.test(path) &&
+  (OPEN_PATHS.has(path.length > 1 ? path.replace(/\/$/, '') : path) ||
+    OPEN_FOLDERS.some((folder) => path.startsWith(folder)));
 
 /** These must answer while the book cannot be opened, or without opening it. */
 export const needsNoBook = (path: string): boolean => path === '/healthz' || path.startsWith('/_astro/');
