@@ -5,6 +5,7 @@ import { NOBODY, whoIs } from '@/server/accounts/whoIs';
 import { rememberFailedSignIn, sentForm } from '@/server/front/failedSignIn';
 import { withHeaders } from '@/server/front/headers';
 import { isApi, isOpen, needsNoBook } from '@/server/front/openPaths';
+import { keptSheet } from '@/server/front/sheetCache';
 import { problemResponse } from '@/server/http/problem';
 import { comesFromUs } from '@/server/http/origin';
 import { asRefusal, forbidden, signedOut } from '@/server/refusal';
@@ -53,4 +54,9 @@ const signIn = defineMiddleware(async ({ request, url, clientAddress }, next) =>
   return rememberFailedSignIn(await fromAddress(clientAddress, () => next()), form, url);
 });
 
-export const onRequest = sequence(headers, refusals, guard, signIn);
+/** Sheets are read far more often than anything else: sends them as they were made, while nothing about them changed. */
+const sheets = defineMiddleware(async ({ request, url, locals }, next) =>
+  locals.person ? ((await keptSheet(request, url, locals.actor, locals.person, () => next())) ?? next()) : next(),
+);
+
+export const onRequest = sequence(headers, refusals, guard, signIn, sheets);
