@@ -18,16 +18,16 @@ const MINUS = '\u2212';
 const GROUP = '\u202f';
 
 /**
- * A number as it is printed: a true minus, a point, thin groups from five digits on, never an exponent.
+ * A number as it is printed: a true minus, a point, thin groups from five digits on, no exponent
+ * (below 10^21, far beyond what a sheet may state).
  *
  * @param decimals places after the point; as many as the number has where left out
  */
 export function formatNumber(value: number, decimals?: number): string {
   if (!Number.isFinite(value)) throw new RangeError('The value to show must be a number.');
   const places = Math.min(decimals ?? decimalsOf(value), 20);
-  const [whole = '0', fraction] = roundTo(Math.abs(value), 10 ** -places)
-    .toFixed(places)
-    .split('.');
+  const rounded = decimals === undefined ? Math.abs(value) : roundTo(Math.abs(value), 10 ** -places);
+  const [whole = '0', fraction] = rounded.toFixed(places).split('.');
   const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, GROUP) : whole;
   const text = fraction ? `${grouped}.${fraction}` : grouped;
   return value < 0 && /[1-9]/.test(text) ? MINUS + text : text;

@@ -22,6 +22,8 @@ export function roundTo(value: number, resolution: number): number {
   if (!(resolution > 0) || !Number.isFinite(resolution))
     throw new RangeError('The resolution to round to must be more than zero.');
   const steps = Math.abs(value) / resolution;
+  // So many steps are finer than the number itself can tell apart; there is nothing to round.
+  if (steps > 2 ** 48) return value;
   const whole = Math.floor(steps * (1 + 4 * Number.EPSILON) + 0.5);
   const magnitude = Number((whole * resolution).toFixed(Math.min(100, decimalsOf(resolution))));
   return magnitude === 0 ? 0 : Math.sign(value) * magnitude;

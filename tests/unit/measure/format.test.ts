@@ -19,6 +19,22 @@ describe('formatNumber', () => {
     expect(formatNumber(value, places)).toBe(text);
   });
 
+  it('shows a number with all its digits where no places are asked for', () => {
+    const number = fc.oneof(fc.double({ min: -1e9, max: 1e9, noNaN: true }), fc.constantFrom(0.1234567890123456, 1e9));
+    fc.assert(
+      fc.property(number, (value) => {
+        fc.pre(value === 0 || Math.abs(value) > 1e-4);
+        expect(
+          Number(
+            formatNumber(value)
+              .replace(/\u202f/g, '')
+              .replace('−', '-'),
+          ),
+        ).toBe(value + 0);
+      }),
+    );
+  });
+
   it('refuses what is no number', () => {
     expect(() => formatNumber(NaN)).toThrow('The value to show must be a number.');
   });
