@@ -1,6 +1,7 @@
 import { Auth } from '@auth/core';
 import { app } from '../context';
 import { AUTH_PREFIX, authConfig } from './authConfig';
+import { isSecure, sessionCookieName } from './session';
 
 /**
  * The token that a form posting to `/api/auth/callback/credentials` or `/api/auth/signout` must carry as
@@ -24,4 +25,15 @@ export function signInProblem(url: URL): string | null {
   return url.searchParams.get('code') === 'too-many'
     ? 'Too many wrong passwords. Wait a quarter of an hour, then try again.'
     : 'The e-mail address and the password do not belong together.';
+}
+
+/** Why somebody who was signed in is asked again; null for a fresh visitor. */
+export async function endedNotice(url: URL, cookies: { has(name: string): boolean }): Promise<string | null> {
+  const ended = url.searchParams.get('ended');
+  if (ended === 'here') return 'Signed out.';
+  if (ended === 'everywhere') return 'Signed out everywhere.';
+  const { config } = await app();
+  return cookies.has(sessionCookieName(isSecure(config.origin)))
+    ? 'Your session has ended. Sign in again to go on.'
+    : null;
 }

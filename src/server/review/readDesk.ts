@@ -8,7 +8,7 @@ import { forbidden } from '../refusal';
 import { loadProposals, type Loaded } from './proposals';
 import { summaryOf } from './view';
 
-async function shopsWithOneEditor(): Promise<string[]> {
+export async function shopsWithOneEditor(): Promise<string[]> {
   const { db } = await app();
   const rows = await db.read<{ shopId: string }>(
     `SELECT shopId FROM memberships WHERE scope = 'shop' AND role = 'editor'

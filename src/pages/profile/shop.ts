@@ -1,0 +1,9 @@
+import type { APIRoute } from 'astro';
+import { setCurrentShop } from '@/server/accounts/profile';
+
+/** The shop a person with several works in from now on. */
+export const POST: APIRoute = async ({ request, locals, redirect }) => {
+  const form = await request.formData();
+  await setCurrentShop(locals.actor, String(form.get('shop') ?? ''));
+  return redirect('/', 303);
+};
