@@ -45,19 +45,23 @@ const HOSTILE: Record<string, string> = {
 it.each(Object.keys(HOSTILE))('%s: refused with line and column in time, while others are answered', async (name) => {
   const source = HOSTILE[name]!;
   const began = performance.now();
-  const refusing = call(who('north.senior'), 'POST', '/procedures/P-0142/proposals', {
-    body: { base: 'A', source },
-  }).then((answer) => ({ answer, took: performance.now() - began }));
-  const asked = performance.now();
-  const other = await call(who('north.apprentice'), 'GET', '/procedures/P-0142');
-  const otherTook = performance.now() - asked;
-  const { answer, took } = await refusing;
-  expect(other.status).toBe(200);
+  let took = 0;
+  const refusing = call(who('north.senior'), 'POST', '/procedures/P-0142/proposals', { body: { base: 'A', source } });
+  void refusing.then(() => (took = performance.now() - began));
+  const others: number[] = [];
+  while (took === 0) {
+    const asked = performance.now();
+    expect((await call(who('north.apprentice'), 'GET', '/procedures/P-0142')).status).toBe(200);
+    others.push(performance.now() - asked);
+  }
+  const answer = await refusing;
   expect(answer.status).toBe(422);
   const [first] = answer.body.errors;
   expect(first).toMatchObject({ line: expect.any(Number), column: expect.any(Number) });
   expect(first.message).toMatch(/^.{8,300}$/s);
   expect(took).toBeLessThan(2000);
-  expect(otherTook).toBeLessThan(200);
+  // A parser in the way would hold everybody up for as long as it runs; a busy machine holds up one now and then.
+  expect(Math.min(...others)).toBeLessThan(200);
+  expect(Math.max(...others)).toBeLessThan(1500);
   expect(({} as { polluted?: boolean }).polluted).toBeUndefined();
 });
