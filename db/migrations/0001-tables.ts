@@ -127,7 +127,7 @@ export const tables: Migration = {
       hash TEXT NOT NULL,
       json TEXT NOT NULL CHECK (json_valid(json)),${times}
     )`,
-    `CREATE INDEX searchDocuments_by_book ON searchDocuments (book)`,
+    `CREATE INDEX searchDocuments_by_book ON searchDocuments (book, updatedAt)`,
     `CREATE VIRTUAL TABLE searchWords USING fts5 (procedureId UNINDEXED, words, tokenize = 'unicode61 remove_diacritics 2', prefix = '2 3')`,
 
     `CREATE TABLE settings (key TEXT PRIMARY KEY NOT NULL, value TEXT NOT NULL,${times})`,

@@ -6,7 +6,7 @@ import { sayQuantity } from './quantities';
 import { type Answer, answerAsked, mostly, together } from './match';
 import { Postings } from './postings';
 import { type Query, readQuery } from './query';
-import { best, rank, type Ranked } from './ranking';
+import { best, rank, type Ranked, withProse } from './ranking';
 import { createTokens } from './tokens';
 import { type UnitSystem, ValueIndex } from './values';
 import { Phrases, type VocabularyGroup } from './vocabulary';
@@ -54,14 +54,27 @@ export interface SearchOptions {
   /** How many hits to return with what matched. */
   limit?: number;
   units?: UnitSystem;
+  /** Sheets found in their prose, by number, best first: they follow what is found without it. */
+  inProse?: ReadonlyMap<string, Matched>;
+}
+
+/** One thing asked for, as words that each may stand for it, for a search of prose. */
+export interface Wording {
+  /** Any of these names; each may be several words. */
+  anyOf: string[];
+  /** True where the last word may go on. */
+  unfinished: boolean;
 }
 
 export interface Search {
+  /** What is asked for besides measures and numbers, in every wording. */
+  wordings(text: string): Wording[];
   query(text: string, filters?: Filters, options?: SearchOptions): SearchAnswer;
 }
 
 /** Longer queries say nothing more and only cost time. */
 export const LONGEST_QUERY = 200;
+const NO_PROSE: ReadonlyMap<string, Matched> = new Map();
 const MOST_ASKED = 12;
 const REMEMBERED = 32;
 
@@ -146,6 +159,7 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
     });
   });
 
+  const placeOf = new Map(documents.map((document, at) => [document.number, at]));
   const synonymsOf = ({ asked }: Query): string[][] =>
     asked.flatMap(({ groups, completing }) =>
       (groups.length > 0 ? groups : completing).map((group) =>
@@ -154,8 +168,13 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
     );
 
   return {
-    query(text, filters = NO_FILTERS, { limit = 20, units = 'metric' } = {}) {
-      const ranked = rankOnce(text.slice(0, LONGEST_QUERY));
+    wordings: (text) =>
+      rankOnce(text.slice(0, LONGEST_QUERY)).query.asked.map(({ groups, words, unfinished }) => ({
+        anyOf: [words.join(' '), ...groups.flatMap((group) => phrases.names(group))],
+        unfinished: unfinished && groups.length === 0,
+      })),
+    query(text, filters = NO_FILTERS, { limit = 20, units = 'metric', inProse = NO_PROSE } = {}) {
+      const ranked = withProse(rankOnce(text.slice(0, LONGEST_QUERY)), inProse, placeOf);
       const { query, near } = ranked;
       const { kept, facets } = sieve.sift(ranked.scores, filters);
       const first = best(kept, limit, ranked, (at) => tokensOf(documents[at]?.title ?? ''));
@@ -172,10 +191,11 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
           const { number, title, summary, system, minutes, skill, holds, letter, publishedAt, book } = document;
           const told = bestValues(document, ranked.values.get(at) ?? [], ranked.terms, tokensOf);
           const matched = explain(document, ranked.terms, engineTokens, told, { phrases, tokensOf, units });
+          const prose = ranked.proseOnly.has(at) ? inProse.get(number) : undefined;
           return {
             ...{ number, title, summary, system, minutes, skill, holds, letter, publishedAt, book },
             engines: document.engines,
-            matched,
+            matched: prose ? [...matched, prose] : matched,
           };
         }),
       };

@@ -7,7 +7,7 @@ import { fold, wordRuns } from './words';
 
 /** What matched, in words, and where in those words: `marks` are [start, end) places in `text`. */
 export interface Matched {
-  field: 'title' | 'summary' | 'number' | 'torque' | 'limit' | 'timer' | 'part' | 'tool' | 'step' | 'system' | 'text';
+  field: 'title' | 'summary' | 'torque' | 'limit' | 'timer' | 'part' | 'tool' | 'step' | 'system' | 'text';
   text: string;
   step: number | null;
   marks: [number, number][];

@@ -94,6 +94,31 @@ export function rank(given: Given): Ranked {
   return { query, scores, terms, values, near };
 }
 
+/** Below any score that words or values give. */
+const PROSE_COUNTS = 1e-6;
+
+/**
+ * Adds sheets whose prose holds all that was asked for. They follow the sheets found without it, and take the place of those
+ * that only come near.
+ *
+ * @param inProse numbers of sheets, best first
+ */
+export function withProse(
+  ranked: Ranked,
+  inProse: ReadonlyMap<string, unknown>,
+  placeOf: ReadonlyMap<string, number>,
+): Ranked & { proseOnly: ReadonlySet<number> } {
+  const proseOnly = new Set<number>();
+  const places = [...inProse.keys()].flatMap((number) => placeOf.get(number) ?? []);
+  const scores = ranked.near && places.length > 0 ? new Float32Array(ranked.scores.length) : ranked.scores.slice();
+  places.forEach((at, i) => {
+    if (scores[at] !== 0) return;
+    proseOnly.add(at);
+    scores[at] = PROSE_COUNTS / (i + 1);
+  });
+  return { ...ranked, scores, proseOnly, near: ranked.near && places.length === 0 };
+}
+
 /** Share of what was asked for that stands in the title, and share of the title that was asked for. */
 function inTitle(title: readonly string[], asked: readonly Asked[]): { met: number; covered: number } {
   const tokens = new Set(title);

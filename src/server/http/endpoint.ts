@@ -28,7 +28,13 @@ export interface Call<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
 
 /** What a route answers; `NOT_MODIFIED` where the caller holds it already. */
 export type Reply<R extends z.ZodTypeAny> =
-  { body: z.output<R>; tag?: string; location?: string; headers?: Record<string, string> } | { notModified: string };
+  | { body: z.output<R>; tag?: string; location?: string; headers?: Record<string, string> }
+  | { notModified: string }
+  /** JSON that is kept as bytes, compressed already. */
+  | { bytes: Uint8Array<ArrayBuffer>; encoding: string; tag: string };
+
+/** What goes out: text, or bytes as they are. */
+type Outgoing = Omit<Answer, 'body'> & { body: string | Uint8Array<ArrayBuffer> };
 
 export type Handler = ((context: APIContext) => Promise<Response>) & { operation: Operation };
 
@@ -36,7 +42,7 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
   operation: Operation<P, Q, B, R>,
   act: (call: Call<P, Q, B>) => Promise<Reply<R>>,
   context: APIContext,
-): Promise<Answer> {
+): Promise<Outgoing> {
   const { request, url, locals } = context;
   const changing = operation.method !== 'get';
   const { config } = await app();
@@ -58,7 +64,7 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
   if (operation.ifMatch === 'required' && !request.headers.has('if-match'))
     throw preconditionRequired('Send If-Match with the version that you read, for example If-Match: "3".');
 
-  const answer = async (): Promise<Answer> =>
+  const answer = async (): Promise<Outgoing> =>
     render(
       operation,
       await act({
@@ -77,7 +83,10 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
     actor.personId,
     key,
     requestPrint(request.method, url.pathname, json.text),
-    answer,
+    async () => {
+      const given = await answer();
+      return { ...given, body: String(given.body) };
+    },
   );
   return replayed ? { ...kept, headers: { ...kept.headers, 'idempotency-replayed': 'true' } } : kept;
 }
@@ -85,9 +94,18 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
 function render<R extends z.ZodTypeAny>(
   operation: Operation<z.ZodTypeAny, z.ZodTypeAny, z.ZodTypeAny, R>,
   reply: Reply<R>,
-): Answer {
+): Outgoing {
   const shared = { 'cache-control': 'private, no-cache', vary: 'Cookie' };
   if ('notModified' in reply) return { status: 304, headers: { ...shared, etag: reply.notModified }, body: '' };
+  if ('bytes' in reply) {
+    const { bytes, encoding, tag } = reply;
+    const coded: Record<string, string> = encoding === 'identity' ? {} : { 'content-encoding': encoding };
+    return {
+      status: operation.status,
+      headers: { ...shared, vary: 'Cookie, Accept-Encoding', etag: tag, 'content-type': 'application/json', ...coded },
+      body: bytes,
+    };
+  }
   const headers = {
     ...shared,
     ...(reply.tag ? { etag: reply.tag } : {}),
