@@ -3,11 +3,12 @@ import { openDatabase } from '@db/connect';
 import { DEMONSTRATION_PASSWORD } from '@db/seeders/demonstration';
 import { seedNetwork } from '@db/seeders/seedNetwork';
 import { hashPassword } from './accounts/passwords';
-import { importContent } from './book/importContent';
+import { importContent, type Imported } from './book/importContent';
 import { startParsing } from './book/parsing';
-import { now } from './clock';
+import { atTime, now } from './clock';
 import { readConfig, type Config } from './config';
 import { openOnce, within, type App } from './context';
+import { daysAgo, FIRST_ISSUE, seedHistory } from './demo/seedHistory';
 import { readSecret } from './secret';
 
 /** Opens the book under `config.dataDir`, making it and its secret where they are missing; brings nothing in. */
@@ -22,15 +23,23 @@ export async function start(config: Config): Promise<App> {
   const running = await openBook(config);
   try {
     await within(running, async () => {
-      const { problems } = await importContent();
+      const { problems } = await importing(running);
       for (const { file, message } of problems) console.warn(`${file} was left out of the book. ${message}`);
-      if (config.demo) await seedNetwork(running.db, () => hashPassword(DEMONSTRATION_PASSWORD));
+      if (!config.demo) return;
+      await seedNetwork(running.db, () => hashPassword(DEMONSTRATION_PASSWORD));
+      await seedHistory();
     });
   } catch (error) {
     await running.db.close();
     throw error;
   }
   return running;
+}
+
+/** The demonstration's book was issued a while ago, so that its history lies between then and today. */
+async function importing({ config, db }: App): Promise<Imported> {
+  const isNew = (await db.models.Procedure.count()) === 0;
+  return config.demo && isNew ? atTime(daysAgo(FIRST_ISSUE), importContent) : importContent();
 }
 
 /** The running application, started by the first caller with the settings of the environment. */

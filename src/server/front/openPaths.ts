@@ -19,6 +19,7 @@ export const isOpen = (path: string): boolean =>
     OPEN_FOLDERS.some((folder) => path.startsWith(folder)));
 
 /** These must answer while the book cannot be opened, or without opening it. */
-export const needsNoBook = (path: string): boolean => path === '/healthz' || path.startsWith('/_astro/');
+export const needsNoBook = (path: string): boolean =>
+  path === '/healthz' || (isOpen(path) && path.startsWith('/_astro/'));
 
 export const isApi = (path: string): boolean => path === '/api' || path.startsWith('/api/');
