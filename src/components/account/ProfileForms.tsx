@@ -48,7 +48,9 @@ function Section({
         {children}
         {error && <Notice live="alert">{error}</Notice>}
         <div className="flex flex-wrap items-center gap-4">
-          <Button type="submit">{button}</Button>
+          <Button type="submit" kind={name === 'profile' ? 'main' : 'plain'}>
+            {button}
+          </Button>
           {saved && (
             <p role="status" className="font-medium">
               {saved}

@@ -47,8 +47,8 @@ export function History({ number, revisions }: { number: string; revisions: read
             </Cell>
             <Cell label="Written by">{revision.author.name}</Cell>
             <Cell label="Reviewed by">{revision.reviewers.map(({ name }) => name).join(', ') || 'Nobody named'}</Cell>
-            <Cell label="Reason" className="max-w-prose font-serif text-[0.9375rem] italic">
-              {revision.reason || 'None given'}
+            <Cell label="Reason" className="max-w-prose">
+              <span className="font-serif text-[0.9375rem] italic">{revision.reason || 'None given'}</span>
             </Cell>
             {several && (
               <>

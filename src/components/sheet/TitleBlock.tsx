@@ -62,7 +62,10 @@ export const RunningHead = ({ facts, title }: { facts: TitleBlockFacts; title: s
       {(
         [
           ['Number', facts.number],
-          ['Revision', facts.letter ?? facts.standing],
+          [
+            'Revision',
+            facts.standing === 'current' ? facts.letter : [facts.letter, facts.standing].filter(Boolean).join(', '),
+          ],
           ['Published', facts.published],
           ['Written by', facts.writtenBy],
           ['Reviewed by', facts.reviewedBy],

@@ -5,17 +5,18 @@ import { counted } from './words';
 
 /** What the title block of a published sheet says. */
 export function factsOf({ number, revision, current, earlier }: Sheet): TitleBlockFacts {
+  const isCurrent = revision.letter === current.letter;
   return {
     number,
     letter: revision.letter,
-    standing: revision.letter === current.letter ? 'current' : 'superseded',
+    standing: isCurrent ? 'current' : 'superseded',
     published: dayOf(revision.publishedAt),
     writtenBy: revision.author.name,
     reviewedBy: revision.reviewers.map(({ name }) => name).join(', ') || 'Nobody named',
     sheetCheck: revision.sheetCheck,
     history: {
       href: `/procedures/${number}/revisions`,
-      text: earlier > 0 ? counted(earlier, 'earlier revision') : 'First revision',
+      text: earlier > 0 ? counted(earlier, 'earlier revision') : isCurrent ? 'First revision' : 'Every revision',
     },
   };
 }
