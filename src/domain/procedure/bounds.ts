@@ -18,7 +18,7 @@ export const BOUNDS = {
   markers: 1_200,
   markupInBlock: 250,
   markup: 4_000,
-  pipes: 3_000,
+  pipes: 1_500,
   headNesting: 12,
   headSeparators: 6_000,
   treeDepth: 24,
@@ -106,7 +106,7 @@ function bodyProblem({ lines, headLines }: SourceLines): SourceProblem | null {
       );
     if (markup > BOUNDS.markup) return problem(at, 'The text has more than 4,000 formatting signs. Write it plainer.');
     pipes += line.split('|').length - 1;
-    if (pipes > BOUNDS.pipes) return problem(at, 'The tables are too large: more than 3,000 cells up to here.');
+    if (pipes > BOUNDS.pipes) return problem(at, 'The tables are too large: more than 1,500 cells up to here.');
   }
   return null;
 }

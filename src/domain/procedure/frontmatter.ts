@@ -6,10 +6,13 @@ import { Frontmatter } from './schema';
 import type { SourceProblem } from './types';
 
 /** Where the value at a path stands in the text; for a missing one, where its parent stands. */
-export type PlaceOf = (path: readonly (string | number)[]) => Place;
+export type PlaceOf = (path: readonly (string | number)[], part?: 'value' | 'name') => Place;
 
 export type FrontmatterRead =
   { ok: true; frontmatter: Frontmatter; placeOf: PlaceOf } | { ok: false; errors: SourceProblem[] };
+
+/** A value to point at; an empty one has no width, and a list of fields starts where its first field does. */
+const isFilled = (value: unknown) => (isScalar(value) && value.value !== null) || isSeq(value);
 
 function placesOf(
   document: Document,
@@ -20,13 +23,13 @@ function placesOf(
     const { line, col } = lines.linePos(offset);
     return { line: line + before, column: Math.max(1, col) };
   };
-  const placeOf: PlaceOf = (path) => {
+  const placeOf: PlaceOf = (path, part = 'value') => {
     for (let length = path.length; length > 0; length -= 1) {
       const parent = document.getIn(path.slice(0, length - 1), true);
       const last = path[length - 1];
       if (isMap(parent)) {
         const pair = parent.items.find((item) => isScalar(item.key) && item.key.value === last);
-        const node = pair && (isScalar(pair.value) || isSeq(pair.value) ? pair.value : pair.key);
+        const node = part === 'value' && isFilled(pair?.value) ? pair?.value : pair?.key;
         const range = (node as { range?: [number, number, number] } | undefined)?.range;
         if (range) return at(range[0]);
       } else if (isSeq(parent)) {

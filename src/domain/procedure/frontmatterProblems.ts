@@ -2,7 +2,7 @@ import type { ZodErrorMap, ZodIssue } from 'zod';
 import { ENTRY_FIELDS, ENTRY_WORDS, HEAD_FIELDS, isListName } from './fields';
 import type { PlaceOf } from './frontmatter';
 import { nearest } from './nearest';
-import { problem } from './problems';
+import { MOST_SHOWN, problem } from './problems';
 import type { SourceProblem } from './types';
 
 const KINDS: Partial<Record<string, string>> = {
@@ -97,9 +97,9 @@ function unknownField(path: readonly (string | number)[], name: string, value: u
 export function fieldProblems(issues: readonly ZodIssue[], value: unknown, placeOf: PlaceOf): SourceProblem[] {
   return issues.flatMap((issue) => {
     if (issue.code === 'unrecognized_keys')
-      return issue.keys.map((name) => {
+      return issue.keys.slice(0, MOST_SHOWN).map((name) => {
         const path = [...issue.path, name];
-        return problem(placeOf(path), unknownField(issue.path, name, value), path.join('.'));
+        return problem(placeOf(path, 'name'), unknownField(issue.path, name, value), path.join('.'));
       });
     return [problem(placeOf(issue.path), sentence(issue.path, issue.message, value), issue.path.join('.'))];
   });

@@ -1,7 +1,7 @@
 import type { SourceProblem } from './types';
 
 /** As many as a person can act on; a hostile text must not answer with a million of them. */
-const MOST_SHOWN = 50;
+export const MOST_SHOWN = 50;
 
 /** A place in the text; unified gives it on every node. Lines and columns count from 1. */
 export interface Place {

@@ -1,6 +1,8 @@
 /** Values that are written out in prose, where a component should stand. */
 
 const NUMBER = String.raw`\d+(?:[.,]\d+)?`;
+/** "in" is a unit only behind decimals: "0.012 in", but "turn bolt 4 in". */
+const DECIMAL_INCHES = String.raw`(?<=\d[.,]\d+[\s\u00a0]?)in`;
 /** "10 mm socket" names a tool, not a value to work to. */
 const NAMES_A_TOOL = String.raw`(?![\s-]*(?:socket|spanner|wrench|hex|allen|drill|bit|punch|hose|key|ring|deep|nut|feeler))`;
 
@@ -11,7 +13,7 @@ const KINDS: readonly { units: string; component: string; list: string }[] = [
     list: 'torques',
   },
   {
-    units: String.raw`mm|µm|μm|thou|cm|inch(?:es)?|in\b(?=[.,;)]|$)|kPa|MPa|bar|psi|°C|°F`,
+    units: String.raw`${DECIMAL_INCHES}|mm|µm|μm|thou|cm|inch(?:es)?|kPa|MPa|bar|psi|°C|°F`,
     component: 'Limit',
     list: 'limits',
   },

@@ -65,13 +65,26 @@ const SENTENCES: readonly { when: (t: Thrown) => boolean; say: (t: Thrown) => st
   },
 ];
 
+/** Where the reader should look: at the tag that was opened, which the parser names only in its words. */
+function placeOf({ reason = '', place }: Thrown): Place | undefined {
+  const opened = /^Expected a closing tag for `[^`]*` \((\d+):(\d+)/.exec(reason);
+  if (opened) return { line: Number(opened[1]), column: Number(opened[2]) };
+  return place && 'start' in place ? place.start : place;
+}
+
 /** A thrown syntax error as a sentence at its place; anything else is thrown on. */
 export function syntaxProblem(thrown: unknown, source: SourceLines): SourceProblem {
   if (thrown instanceof RangeError)
     return problem(START, 'The text is nested too deeply to be read. Write it flatter.');
+  // The parser's own assertions, which only its development build checks, fire where tags and underlines cross.
+  if (thrown instanceof Error && thrown.name === 'Assertion')
+    return problem(
+      START,
+      'Components and other signs cross each other. Put every <Step> and </Step> on a line of its own.',
+    );
   if (!(thrown instanceof Error) || !('ruleId' in thrown)) throw thrown;
   const message = thrown as Thrown;
-  const place = message.place && 'start' in message.place ? message.place.start : message.place;
+  const place = placeOf(message);
   const say = SENTENCES.find(({ when }) => when(message))?.say ?? (() => 'The text cannot be read from here on.');
   return problem(place, say(message), place && pathOfLine(source, place.line));
 }

@@ -12,7 +12,7 @@ const nastyWord = fc.constantFrom(
 ); // prettier-ignore
 
 const FORBIDDEN =
-  /[\u0000-\u001f\u007f-\u009f\u061c\u200e\u200f\u2028-\u202e\u2066-\u2069\ufeff\ufff9-\uffff]|\p{Surrogate}/gu; // eslint-disable-line no-control-regex
+  /[\u0000-\u001f\u007f-\u009f\u061c\u200e\u200f\u2028-\u202e\u2066-\u2069\ufeff\ufff9-\uffff]|\p{Surrogate}/gu;
 
 const clean = (text: string, most: number) =>
   text.replace(FORBIDDEN, '').replace(/\s+/g, ' ').slice(0, most).replace(FORBIDDEN, '').trim();
