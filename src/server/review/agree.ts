@@ -1,24 +1,18 @@
 import type { Proposal } from '@/domain/api/schemas';
 import type { Actor } from '@/domain/people/may';
 import type { Agreement } from '@/domain/review/rules';
-import { appendAudit } from '../audit/append';
 import { now } from '../clock';
 import { app } from '../context';
 import { guard, readableProposal } from './guard';
 import type { Loaded } from './proposals';
 import { readProposal } from './readProposal';
+import { record } from './record';
 
 /** Stores an agreement that the rules have accepted. Call it inside a `write`. */
 export async function recordAgreement(proposal: Loaded, { personId, hash, base }: Agreement): Promise<void> {
   const { db } = await app();
   await db.models.Agreement.create({ revisionId: proposal.id, personId, hash, base, at: now() });
-  await appendAudit({
-    actorId: personId,
-    act: 'proposal.agreed',
-    subject: { type: 'revision', id: proposal.id },
-    shopId: proposal.shopId,
-    detail: { number: proposal.number, hash, base },
-  });
+  await record({ personId }, 'proposal.agreed', proposal, { hash, base });
 }
 
 /** Agrees to the text as it stands, on the base it stands on; when either changes the agreement no longer counts. */

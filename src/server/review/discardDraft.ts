@@ -1,8 +1,8 @@
 import type { Actor } from '@/domain/people/may';
-import { appendAudit } from '../audit/append';
 import { app } from '../context';
 import { Refusal } from '../refusal';
 import { guard, readableProposal } from './guard';
+import { record } from './record';
 
 /** Throws away a draft that was never sent in; the number of a procedure that was never more than that is free again. */
 export async function discardDraft(actor: Actor, id: string, version: number | null = null): Promise<void> {
@@ -22,12 +22,6 @@ export async function discardDraft(actor: Actor, id: string, version: number | n
     const { procedureId } = proposal;
     if ((await Revision.count({ where: { procedureId } })) === 0)
       await Procedure.destroy({ where: { id: procedureId } });
-    await appendAudit({
-      actorId: actor.personId,
-      act: 'proposal.discarded',
-      subject: { type: 'revision', id },
-      shopId: proposal.shopId,
-      detail: { number: proposal.number, hash: proposal.hash },
-    });
+    await record(actor, 'proposal.discarded', proposal, { hash: proposal.hash });
   });
 }

@@ -1,10 +1,10 @@
 import type { Proposal } from '@/domain/api/schemas';
 import type { Actor } from '@/domain/people/may';
-import { appendAudit } from '../audit/append';
 import { now } from '../clock';
 import { app } from '../context';
 import { guard, readableProposal } from './guard';
 import { readProposal } from './readProposal';
+import { record } from './record';
 
 /** Why, and where: `step:<id>`, the path of a value, or null for the whole. */
 export interface GivenReason {
@@ -36,13 +36,7 @@ async function giveBack(
       at: now(),
     });
     await db.models.Revision.update({ state, version: proposal.version + 1 }, { where: { id } });
-    await appendAudit({
-      actorId: actor.personId,
-      act: `proposal.${kind}`,
-      subject: { type: 'revision', id },
-      shopId: proposal.shopId,
-      detail: { number: proposal.number, hash: proposal.hash, reason: reason.trim(), anchor },
-    });
+    await record(actor, `proposal.${kind}`, proposal, { hash: proposal.hash, reason: reason.trim(), anchor });
   });
   return readProposal(actor, id);
 }

@@ -1,7 +1,6 @@
 import type { Proposal } from '@/domain/api/schemas';
 import type { Actor } from '@/domain/people/may';
 import { nextLetter } from '@/domain/revision/letters';
-import { appendAudit } from '../audit/append';
 import { indexRevision } from '../book/indexRevision';
 import { readRendering } from '../book/rendering';
 import { now } from '../clock';
@@ -9,6 +8,7 @@ import { app } from '../context';
 import { recordAgreement } from './agree';
 import { guard, readableProposal } from './guard';
 import { readProposal } from './readProposal';
+import { record } from './record';
 
 /**
  * Publishes a proposal: it gets the next letter and is the sheet to work from, the one before it is
@@ -31,13 +31,7 @@ export async function publish(actor: Actor, id: string, version: number | null =
     await Revision.update({ state, letter, publishedAt: now(), version: proposal.version + 1 }, { where: { id } });
     await Procedure.update({ currentRevisionId: id }, { where: { id: proposal.procedureId } });
     await indexRevision(proposal.procedureId, rendered);
-    await appendAudit({
-      actorId: actor.personId,
-      act: 'revision.published',
-      subject: { type: 'revision', id },
-      shopId: proposal.shopId,
-      detail: { number: proposal.number, letter, hash: proposal.hash, supersedes: proposal.current },
-    });
+    await record(actor, 'revision.published', proposal, { letter, hash: proposal.hash, supersedes: proposal.current });
   });
   return readProposal(actor, id);
 }

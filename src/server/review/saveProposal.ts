@@ -1,6 +1,5 @@
 import type { SavedProposal } from '@/domain/api/schemas';
 import type { Actor } from '@/domain/people/may';
-import { appendAudit } from '../audit/append';
 import { checkResult, refuseOverlong } from '../book/check';
 import { app } from '../context';
 import { invalid } from '../refusal';
@@ -8,6 +7,7 @@ import { columnsOf, weigh } from './draftText';
 import { guard, readableProposal, staleBase } from './guard';
 import type { Loaded } from './proposals';
 import { readProposal } from './readProposal';
+import { record } from './record';
 
 /** What is left out stays as it is. */
 export interface Saved {
@@ -59,13 +59,7 @@ export async function saveProposal(
       { ...columnsOf(text), parentId, reason, version: proposal.version + 1 },
       { where: { id } },
     );
-    await appendAudit({
-      actorId: actor.personId,
-      act: 'proposal.saved',
-      subject: { type: 'revision', id },
-      shopId: proposal.shopId,
-      detail: { number: proposal.number, version: proposal.version + 1, hash: text.hash },
-    });
+    await record(actor, 'proposal.saved', proposal, { version: proposal.version + 1, hash: text.hash });
   });
   return { ...(await readProposal(actor, id)), check: checkResult(text.parsed) };
 }

@@ -1,10 +1,10 @@
 import type { Proposal } from '@/domain/api/schemas';
 import { may, type Actor, type Book } from '@/domain/people/may';
-import { appendAudit } from '../audit/append';
 import { refuseOverlong } from '../book/check';
 import { app } from '../context';
 import { forbidden, notFound } from '../refusal';
-import { columnsOf, refuseUnreadable, weigh } from './draftText';
+import { refuseUnreadable, weigh } from './draftText';
+import { makeDraft } from './makeDraft';
 import { readProposal } from './readProposal';
 
 export interface NewProcedure {
@@ -40,21 +40,7 @@ export async function startProcedure(actor: Actor, { book: name, source, reason 
   const id = await db.write(async () => {
     const number = await nextNumber();
     const procedure = await db.models.Procedure.create({ number, bookKind: book.kind, shopId });
-    const draft = await db.models.Revision.create({
-      procedureId: procedure.id,
-      state: 'draft',
-      authorId: actor.personId,
-      reason,
-      ...columnsOf(text),
-    });
-    await appendAudit({
-      actorId: actor.personId,
-      act: 'proposal.started',
-      subject: { type: 'revision', id: draft.id },
-      shopId,
-      detail: { number, base: null },
-    });
-    return draft.id;
+    return makeDraft(actor, { procedureId: procedure.id, number, shopId, on: null, text, reason });
   });
   return readProposal(actor, id);
 }

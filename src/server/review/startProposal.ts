@@ -1,14 +1,14 @@
 import type { Proposal } from '@/domain/api/schemas';
 import { may, type Actor } from '@/domain/people/may';
-import { appendAudit } from '../audit/append';
 import { bookOf, type BookRow } from '../book/columns';
 import { refuseOverlong } from '../book/check';
 import { readable } from '../book/locate';
 import { hashOf } from '../book/parsed';
 import { app } from '../context';
 import { forbidden, invalid } from '../refusal';
-import { columnsOf, refuseUnreadable, weigh } from './draftText';
+import { refuseUnreadable, weigh } from './draftText';
 import { staleBase } from './guard';
+import { makeDraft } from './makeDraft';
 import { readProposal } from './readProposal';
 
 export interface Change {
@@ -58,22 +58,7 @@ export async function startProposal(actor: Actor, number: string, { base, source
     const same = { procedureId, parentId: currentId, authorId: actor.personId, state: 'draft', hash: hashOf(source) };
     const twin = await db.models.Revision.findOne({ where: { ...same, everProposed: false } });
     if (twin) return twin.id;
-    const draft = await db.models.Revision.create({
-      procedureId,
-      parentId: currentId,
-      state: 'draft',
-      authorId: actor.personId,
-      reason,
-      ...columnsOf(text),
-    });
-    await appendAudit({
-      actorId: actor.personId,
-      act: 'proposal.started',
-      subject: { type: 'revision', id: draft.id },
-      shopId,
-      detail: { number, base },
-    });
-    return draft.id;
+    return makeDraft(actor, { procedureId, number, shopId, on: { id: currentId, letter: base }, text, reason });
   });
   return readProposal(actor, id);
 }

@@ -1,7 +1,6 @@
 import type { Proposal } from '@/domain/api/schemas';
 import type { Actor } from '@/domain/people/may';
 import type { ProposalFacts } from '@/domain/review/rules';
-import { appendAudit } from '../audit/append';
 import { keepRendering } from '../book/rendering';
 import { now } from '../clock';
 import { app } from '../context';
@@ -9,6 +8,7 @@ import { columnsOf, settleText, type Weighed } from './draftText';
 import { guard, readableProposal } from './guard';
 import type { Loaded } from './proposals';
 import { readProposal } from './readProposal';
+import { record } from './record';
 
 /** The facts as they will be once the text is settled. */
 const settled = ({ facts }: Loaded, text: Weighed): ProposalFacts => ({
@@ -36,12 +36,10 @@ export async function submit(actor: Actor, id: string, version: number | null = 
       { where: { id } },
     );
     await keepRendering(text.hash, rendered);
-    await appendAudit({
-      actorId: actor.personId,
-      act: 'proposal.submitted',
-      subject: { type: 'revision', id },
-      shopId: proposal.shopId,
-      detail: { number: proposal.number, base: proposal.base, hash: text.hash, critical: text.critical },
+    await record(actor, 'proposal.submitted', proposal, {
+      base: proposal.base,
+      hash: text.hash,
+      critical: text.critical,
     });
   });
   return readProposal(actor, id);

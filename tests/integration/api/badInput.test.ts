@@ -1,19 +1,13 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest';
-import { openTestBook } from '../../setup/database';
 import { PER_MINUTE } from '@/server/http/rateLimit';
 import { call, type Sent } from './support/call';
-import { makeNetwork, publishFirst, type Member, type Network } from './support/network';
+import { publishFirst } from './support/network';
 import { text } from './support/text';
+import { useNetwork } from './support/useNetwork';
 
-let network: Network;
-const who = (name: string): Member => network.people[name]!;
+const { who, shop } = useNetwork();
 
-beforeEach(async () => {
-  await openTestBook();
-  network = await makeNetwork();
-  await publishFirst('P-0142');
-  await publishFirst('P-0500', { shopId: network.north });
-});
+beforeEach(() => publishFirst('P-0500', { shopId: shop('north') }));
 
 const json = { 'content-type': 'application/json' };
 const unknownId = '0190a000-0000-7000-8000-000000000000';

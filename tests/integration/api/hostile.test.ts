@@ -1,17 +1,12 @@
 import { afterAll, beforeEach, expect, it } from 'vitest';
-import { openTestBook } from '../../setup/database';
 import { stopParsing } from '@/server/book/parsing';
 import { call } from './support/call';
-import { makeNetwork, publishFirst, type Member, type Network } from './support/network';
 import { text } from './support/text';
+import { useNetwork } from './support/useNetwork';
 
-let network: Network;
-const who = (name: string): Member => network.people[name]!;
+const { who } = useNetwork();
 
 beforeEach(async () => {
-  await openTestBook();
-  network = await makeNetwork();
-  await publishFirst('P-0142');
   // The thread runs and the routes are loaded before the clock does.
   await call(who('north.senior'), 'POST', '/procedures/P-0142/proposals', { body: { base: 'A', source: 'x' } });
   await call(who('north.apprentice'), 'GET', '/procedures/P-0142');

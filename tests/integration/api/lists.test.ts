@@ -1,18 +1,11 @@
-import { beforeEach, describe, expect, it } from 'vitest';
-import { openTestBook } from '../../setup/database';
+import { describe, expect, it } from 'vitest';
 import { call } from './support/call';
-import { makeNetwork, publishFirst, type Member, type Network } from './support/network';
+import { publishFirst, type Member } from './support/network';
 import { waiting } from './support/review';
 import { text } from './support/text';
+import { useNetwork } from './support/useNetwork';
 
-let network: Network;
-const who = (name: string): Member => network.people[name]!;
-
-beforeEach(async () => {
-  await openTestBook();
-  network = await makeNetwork();
-  await publishFirst('P-0142');
-});
+const { who, shop } = useNetwork();
 
 /** Follows `next` to the end. */
 async function pages(as: Member, path: string, limit: number, keyOf: (item: never) => string): Promise<string[][]> {
@@ -29,7 +22,7 @@ async function pages(as: Member, path: string, limit: number, keyOf: (item: neve
 describe('lists', () => {
   it('gives the procedures page by page, each once, by number and not by its text', async () => {
     for (const number of ['P-0009', 'P-10000', 'P-9999']) await publishFirst(number);
-    await publishFirst('P-0143', { shopId: network.north });
+    await publishFirst('P-0143', { shopId: shop('north') });
     const numbers = (as: Member) => pages(as, '/procedures', 2, (item: { number: string }) => item.number);
     expect(await numbers(who('north.apprentice'))).toEqual([['P-0009', 'P-0142'], ['P-0143', 'P-9999'], ['P-10000']]);
     expect(await numbers(who('steward'))).toEqual([
@@ -55,11 +48,11 @@ describe('lists', () => {
   });
 
   it('gives the desk worst first, without my own and without what I may not judge', async () => {
-    await publishFirst('P-0500', { shopId: network.north });
+    await publishFirst('P-0500', { shopId: shop('north') });
     const ordinary = await waiting(who('north.senior'), 'P-0142', { word: 'dry' });
     const critical = await waiting(who('north.senior'), 'P-0142', { nm: 12 });
     const own = await waiting(who('common.editor'), 'P-0142', { nm: 13 });
-    const shop = await waiting(who('north.technician'), 'P-0500', { nm: 12 });
+    const inShop = await waiting(who('north.technician'), 'P-0500', { nm: 12 });
     const desk = async (name: string) =>
       (await call(who(name), 'GET', '/review-desk')).body.items.map((i: { id: string; next: string }) => [
         i.id,
@@ -74,7 +67,7 @@ describe('lists', () => {
       [own.id, 'agree'],
       [ordinary.id, 'publish'],
     ]);
-    expect(await desk('north.owner')).toEqual([[shop.id, 'agree']]);
+    expect(await desk('north.owner')).toEqual([[inShop.id, 'agree']]);
     await call(who('common.editor2'), 'POST', `/proposals/${critical.id}/agree`);
     expect(await desk('common.editor')).toEqual([
       [critical.id, 'publish'],

@@ -1,25 +1,18 @@
-import { beforeEach, expect, it } from 'vitest';
-import { openTestBook } from '../../setup/database';
+import { expect, it } from 'vitest';
 import { hashPassword, verifyPassword } from '@/server/accounts/passwords';
 import { readSession } from '@/server/accounts/session';
 import { app } from '@/server/context';
 import { call } from './support/call';
-import { makeNetwork, type Member, type Network } from './support/network';
+import { useNetwork } from './support/useNetwork';
 
-let network: Network;
-const who = (name: string): Member => network.people[name]!;
-
-beforeEach(async () => {
-  await openTestBook();
-  network = await makeNetwork();
-});
+const { who, shop } = useNetwork();
 
 it('says who I am, with my roles and my shop', async () => {
   expect((await call(who('north.senior'), 'GET', '/me')).body).toMatchObject({
     name: 'north senior',
     units: 'metric',
-    shop: { id: network.north, name: 'Test shop north' },
-    roles: [{ in: 'shop', shopId: network.north, role: 'senior', name: 'Test shop north' }],
+    shop: { id: shop('north'), name: 'Test shop north' },
+    roles: [{ in: 'shop', shopId: shop('north'), role: 'senior', name: 'Test shop north' }],
   });
 });
 

@@ -1,20 +1,13 @@
-import { beforeEach, describe, expect, it } from 'vitest';
-import { openTestBook } from '../../setup/database';
+import { describe, expect, it } from 'vitest';
 import { app } from '@/server/context';
 import { verifyAudit } from '@/server/audit/verify';
 import { call } from './support/call';
-import { makeNetwork, publishFirst, type Member, type Network } from './support/network';
+import { type Member } from './support/network';
 import { agreed, waiting } from './support/review';
 import { text } from './support/text';
+import { useNetwork } from './support/useNetwork';
 
-let network: Network;
-const who = (name: string): Member => network.people[name]!;
-
-beforeEach(async () => {
-  await openTestBook();
-  network = await makeNetwork();
-  await publishFirst('P-0142');
-});
+const { who } = useNetwork();
 
 const start = (as: Member, change: Parameters<typeof text>[0], reason = 'A reason') =>
   call(as, 'POST', '/procedures/P-0142/proposals', { body: { base: 'A', source: text(change), reason } });

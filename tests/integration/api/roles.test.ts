@@ -1,9 +1,9 @@
 import { beforeEach, describe, expect, it } from 'vitest';
-import { openTestBook } from '../../setup/database';
 import { call } from './support/call';
-import { makeNetwork, publishFirst, type Member, type Network } from './support/network';
+import { publishFirst, type Member } from './support/network';
 import { waiting } from './support/review';
 import { text } from './support/text';
+import { useNetwork } from './support/useNetwork';
 
 // PRODUCT: who may do what, in the common book and in a shop's own. The author of the proposals is the
 // technician of the shop north, and each shop has one editor.
@@ -46,8 +46,8 @@ const EXPECTED: Record<'common' | 'shop', Record<string, string>> = {
   },
 };
 
-let network: Network;
-const who = (name: string): Member => network.people[name]!;
+const { who, shop } = useNetwork();
+beforeEach(() => publishFirst('P-0500', { shopId: shop('north') }));
 
 /** A fresh proposal for each cell, so that no cell depends on the one before it. */
 async function cell(act: string, person: Member, number: string, book: string): Promise<number> {
@@ -89,30 +89,17 @@ async function cell(act: string, person: Member, number: string, book: string): 
 let published = 0;
 
 describe.each(Object.keys(EXPECTED) as (keyof typeof EXPECTED)[])('%s book', (kind) => {
-  beforeEach(async () => {
-    await openTestBook();
-    network = await makeNetwork();
-    await publishFirst('P-0142', { shopId: kind === 'common' ? null : network.north });
-  });
-
   it.each(Object.keys(EXPECTED[kind]))('%s', async (act) => {
     const wanted = EXPECTED[kind][act]!.replaceAll('|', ' ').trim().split(/\s+/).map(Number);
     expect(wanted).toHaveLength(PEOPLE.length);
-    const book = kind === 'common' ? 'common' : network.north;
+    const [book, number] = kind === 'common' ? ['common', 'P-0142'] : [shop('north'), 'P-0500'];
     const got: Record<string, number> = {};
-    for (const name of PEOPLE) got[name] = await cell(act, who(name), 'P-0142', book);
+    for (const name of PEOPLE) got[name] = await cell(act, who(name), number, book);
     expect(got).toEqual(Object.fromEntries(PEOPLE.map((name, i) => [name, wanted[i]])));
   });
 });
 
 describe('nobody reviews their own', () => {
-  beforeEach(async () => {
-    await openTestBook();
-    network = await makeNetwork();
-    await publishFirst('P-0142');
-    await publishFirst('P-0500', { shopId: network.north });
-  });
-
   it.each([
     ['an editor of the common book', 'common.editor', 'P-0142'],
     ["a shop's editor", 'north.editor', 'P-0500'],

@@ -1,22 +1,14 @@
 import { join } from 'node:path';
 import sqlite3 from 'sqlite3';
-import { beforeEach, describe, expect, it, vi } from 'vitest';
-import { openTestBook } from '../../setup/database';
+import { describe, expect, it, vi } from 'vitest';
 import { verifyAudit } from '@/server/audit/verify';
 import { app } from '@/server/context';
 import { call } from './support/call';
-import { makeNetwork, publishFirst, type Member, type Network } from './support/network';
 import { waiting } from './support/review';
 import { text } from './support/text';
+import { useNetwork } from './support/useNetwork';
 
-let network: Network;
-const who = (name: string): Member => network.people[name]!;
-
-beforeEach(async () => {
-  await openTestBook();
-  network = await makeNetwork();
-  await publishFirst('P-0142');
-});
+const { who } = useNetwork();
 
 /** Every row that a proposal or its publication touches. */
 async function everything() {

@@ -1,18 +1,11 @@
-import { beforeEach, expect, it } from 'vitest';
-import { openTestBook } from '../../setup/database';
+import { expect, it } from 'vitest';
 import { verifyAudit } from '@/server/audit/verify';
 import { call } from './support/call';
-import { makeNetwork, publishFirst, type Member, type Network } from './support/network';
+import { type Member } from './support/network';
 import { text } from './support/text';
+import { useNetwork } from './support/useNetwork';
 
-let network: Network;
-const who = (name: string): Member => network.people[name]!;
-
-beforeEach(async () => {
-  await openTestBook();
-  network = await makeNetwork();
-  await publishFirst('P-0142');
-});
+const { who, shop } = useNetwork();
 
 it('goes from a proposal over a return and two agreements to the sheet that everybody works from', async () => {
   const senior = who('north.senior');
@@ -86,7 +79,7 @@ it('goes from a proposal over a return and two agreements to the sheet that ever
 it('starts a new procedure under the next number, unseen until it is published', async () => {
   const technician = who('north.technician');
   const started = await call(technician, 'POST', '/procedures', {
-    body: { book: network.north, source: text({ title: 'Fit the test pump' }), reason: 'We had none' },
+    body: { book: shop('north'), source: text({ title: 'Fit the test pump' }), reason: 'We had none' },
   });
   expect(started).toMatchObject({ status: 201, body: { number: 'P-0143', base: null, state: 'draft', version: 1 } });
   expect((await call(technician, 'GET', '/procedures/P-0143')).status).toBe(404);
