@@ -11,6 +11,7 @@ interface Asked {
   method?: string;
   cookie?: string;
   headers?: Record<string, string>;
+  body?: URLSearchParams;
   /** The page or endpoint behind. */
   page?: (locals: Locals) => Response | Promise<Response>;
 }
@@ -19,14 +20,14 @@ beforeEach(async () => {
   await openTestBook();
 });
 
-async function ask(path: string, { method = 'GET', cookie, headers = {}, page }: Asked = {}) {
+async function ask(path: string, { method = 'GET', cookie, headers = {}, body = undefined, page }: Asked = {}) {
   const url = new URL(path, 'http://book.test');
   const locals = {} as Locals;
   let reached = false;
   const context = {
     url,
     locals,
-    request: new Request(url, { method, headers }),
+    request: new Request(url, { method, headers, ...(body ? { body } : {}) }),
     clientAddress: '192.0.2.1',
     cookies: { get: (name: string) => (name === sessionCookieName(false) && cookie ? { value: cookie } : undefined) },
     redirect: (to: string, status: number) => new Response(null, { status, headers: { location: to } }),
@@ -120,6 +121,24 @@ describe('whoever is signed in', () => {
     expect(response.status).toBe(404);
     expect(await response.text()).toBe('rewritten to /404');
   });
+});
+
+test('a failed sign-in comes back with where the person was going, and what they typed in a cookie, not in the address', async () => {
+  const sent = (callbackUrl: string) =>
+    ask('/api/auth/callback/credentials', {
+      method: 'POST',
+      body: new URLSearchParams({ email: 'some body@test.example', password: 'wrong', callbackUrl }),
+      page: () => Response.redirect('http://book.test/sign-in?error=CredentialsSignin&code=wrong'),
+    });
+  const { response } = await sent('http://book.test/procedures/P-0142');
+  expect(response.status).toBe(303);
+  expect(response.headers.get('location')).toBe(
+    '/sign-in?error=CredentialsSignin&code=wrong&to=%2Fprocedures%2FP-0142',
+  );
+  expect(response.headers.get('set-cookie')).toMatch(
+    /^matchmark\.typed=some%20body%40test\.example; Path=\/sign-in;.*HttpOnly/,
+  );
+  expect((await sent('https://other.test/')).response.headers.get('location')).not.toContain('to=');
 });
 
 test('every answer forbids framing, sniffing and other sites, and is kept by this browser only', async () => {

@@ -174,6 +174,18 @@ describe('a session', () => {
   });
 });
 
+test('where the address is https the cookie is sent over it only, and one given before is not taken', async () => {
+  const plain = (await newSession({ personId, tokenVersion: 1 })).value;
+  useApp({ ...running, config: { ...running.config, origin: 'https://book.example' } });
+  const { name, value, options } = await newSession({ personId, tokenVersion: 1 });
+  expect(name).toBe('__Secure-matchmark.session');
+  expect(options).toMatchObject({ secure: true, httpOnly: true, sameSite: 'lax' });
+  expect(await readSession(value)).toMatchObject({ personId });
+  expect(await readSession(plain)).toBeNull();
+  const config = authConfig({ ...running.config, origin: 'https://book.example' }, running.secret);
+  expect(config.cookies.sessionToken).toEqual({ name, options });
+});
+
 describe('the profile', () => {
   test('takes a name and units, and says which field is wrong', async () => {
     await saveProfile(actor(), { name: '  New Name ', units: 'inch' });
