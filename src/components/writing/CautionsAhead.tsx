@@ -1,0 +1,105 @@
+import { useController } from 'react-hook-form';
+import { SignalWord } from '@/components/sheet/SignalPanel';
+import { Button } from '@/components/ui/Button';
+import type { Caution } from '@/domain/procedure/schema';
+import { entryName } from '@/domain/writing/draft';
+import { problemAt } from '@/domain/writing/problems';
+import { useDesk, useDraftForm } from './desk';
+import { Menu, MenuItem } from './Menu';
+import { NewEntry } from './NewEntry';
+import { fieldId } from './places';
+import { useEntries } from './useEntries';
+
+const SIGNALS = ['DANGER', 'WARNING', 'CAUTION', 'NOTICE'];
+const isSignal = (text: string | undefined): text is Caution['signal'] => SIGNALS.includes(text ?? '');
+
+/** The cautions that stand ahead of a step, in their order, and a way to put another one there. */
+export function CautionsAhead({ index }: { index: number }) {
+  const { draft, problems, choose } = useDesk();
+  const { control } = useDraftForm();
+  const path = `steps.${index}.cautions` as const;
+  const { field } = useController({ control, name: path });
+  const { add } = useEntries('cautions');
+  const ahead = Array.isArray(field.value) ? (field.value as string[]) : [];
+  const others = draft.cautions.filter((caution) => !ahead.includes(caution['key'] ?? ''));
+  const error = problemAt(problems, path);
+  return (
+    <section
+      id={fieldId(path)}
+      tabIndex={-1}
+      aria-label="Cautions ahead of this step"
+      className="flex flex-col gap-1.5"
+    >
+      <h3 className="font-sans font-medium">Cautions ahead of it</h3>
+      {ahead.length > 0 && (
+        <ol className="divide-y divide-ink border-frame border-ink">
+          {ahead.map((key, at) => {
+            const caution = draft.cautions.find((one) => one['key'] === key);
+            const signal = caution?.['signal'];
+            const name = caution ? entryName('cautions', caution) : `${key} (not among the cautions)`;
+            return (
+              <li key={key} className="grid items-stretch bg-white sm:grid-cols-[8rem_minmax(0,1fr)_auto]">
+                {isSignal(signal) ? <SignalWord signal={signal} /> : <span className="px-3 py-2">No signal word</span>}
+                <a href="#cautions" className="self-center px-3 py-2 text-ink">
+                  {name}
+                </a>
+                <span className="flex">
+                  {at > 0 && (
+                    <Button
+                      kind="quiet"
+                      className="text-small"
+                      aria-label={`Move up: ${name}`}
+                      onClick={() => field.onChange(ahead.toSpliced(at - 1, 2, key, ahead[at - 1] ?? ''))}
+                    >
+                      Up
+                    </Button>
+                  )}
+                  <Button
+                    kind="quiet"
+                    className="text-small"
+                    aria-label={`Take away: ${name}`}
+                    onClick={() => field.onChange(ahead.filter((other) => other !== key))}
+                  >
+                    Take away
+                  </Button>
+                </span>
+              </li>
+            );
+          })}
+        </ol>
+      )}
+      {error && <p className="border-l-[8px] border-ink pl-2.5 font-medium leading-snug">{error}</p>}
+      <div>
+        <Menu label="Caution">
+          {(close) => (
+            <>
+              {others.map((caution) => (
+                <MenuItem
+                  key={caution['key']}
+                  detail={caution['signal'] ?? ''}
+                  onChoose={() => {
+                    close();
+                    field.onChange([...ahead, caution['key'] ?? '']);
+                  }}
+                >
+                  {entryName('cautions', caution)}
+                </MenuItem>
+              ))}
+              <div className="px-3.5 py-2">
+                <NewEntry
+                  list="cautions"
+                  onAdd={(name) => {
+                    const key = add(name);
+                    close();
+                    field.onChange([...ahead, key]);
+                    choose({ list: 'cautions' });
+                  }}
+                />
+              </div>
+            </>
+          )}
+        </Menu>
+      </div>
+    </section>
+  );
+}

@@ -1,0 +1,96 @@
+import type { SourceProblem } from '@/domain/procedure/types';
+import type { Comparison } from '@/domain/revision/types';
+import { useDesk } from './desk';
+import { StepPreview } from './StepPreview';
+import type { Checked } from './useCheck';
+import { needsOf } from './useNeeds';
+
+const Title = ({ children }: { children: string }) => <h2 className="mb-1.5 text-[1rem]">{children}</h2>;
+
+function WillNeed({ changes, base }: { changes: Comparison | undefined; base: string | null }) {
+  if (!changes) return <p className="text-ink-2">Shown once every value can be read.</p>;
+  if (changes.identical) return <p>Nothing differs from revision {base} yet.</p>;
+  const { editors, reasons } = needsOf(changes);
+  if (editors === 1) return <p>One editor. No torque, limit, caution, hold point or part is changed or taken away.</p>;
+  return (
+    <>
+      <p>Two editors, because</p>
+      <ul className="ml-4 list-[square] marker:text-petrol">
+        {reasons.slice(0, 6).map((reason) => (
+          <li key={reason}>{reason}</li>
+        ))}
+        {reasons.length > 6 && <li>and {reasons.length - 6} more</li>}
+      </ul>
+    </>
+  );
+}
+
+/** Sentences with the way to the field that each speaks of. */
+function Problems({ problems }: { problems: readonly SourceProblem[] }) {
+  const { goTo } = useDesk();
+  return (
+    <ul className="flex flex-col gap-2">
+      {problems.slice(0, 12).map((p) => (
+        <li key={`${p.path} ${p.line} ${p.message}`}>
+          {p.path ? (
+            <button
+              type="button"
+              className="text-left leading-snug text-ink underline decoration-rule underline-offset-[3px] hover:decoration-ink"
+              onClick={() => goTo(p.path ?? '')}
+            >
+              {p.message}
+            </button>
+          ) : (
+            p.message
+          )}
+        </li>
+      ))}
+      {problems.length > 12 && <li>and {problems.length - 12} more</li>}
+    </ul>
+  );
+}
+
+function Check({ checked }: { checked: Checked }) {
+  const { draft } = useDesk();
+  const { problems, notices, checking, failed } = checked;
+  if (problems.length > 0)
+    return (
+      <div className="heavy-edge px-3.5 py-2.5">
+        <p className="mb-1.5 font-semibold">{problems.length} to mend before it can be proposed</p>
+        <Problems problems={problems} />
+      </div>
+    );
+  if (failed) return <p>{failed}</p>;
+  return (
+    <>
+      <p>
+        {draft.steps.length} steps, every value can be read.{' '}
+        {notices.length === 0 && !checking && 'Cautions stand before their steps. Nothing missing.'}
+      </p>
+      {notices.length > 0 && (
+        <div className="mt-2">
+          <p className="mb-1.5 font-semibold">Worth a look, and no obstacle</p>
+          <Problems problems={notices} />
+        </div>
+      )}
+    </>
+  );
+}
+
+/** The margin of the desk: what the change will need, what is wrong with it, how the step will read. */
+export function Checks({ checked, changes }: { checked: Checked; changes: Comparison | undefined }) {
+  const { baseLetter } = useDesk();
+  return (
+    <div className="flex flex-col gap-6 leading-snug">
+      <section>
+        <Title>This will need</Title>
+        <WillNeed changes={changes} base={baseLetter} />
+      </section>
+      <section aria-busy={checked.checking}>
+        <Title>Check</Title>
+        <Check checked={checked} />
+      </section>
+      <StepPreview checked={checked} />
+    </div>
+  );
+}

@@ -1,0 +1,177 @@
+import { Button } from '@/components/ui/Button';
+import { Notice } from '@/components/ui/Notice';
+import type { Proposal } from '@/domain/api/schemas';
+import type { Comparison } from '@/domain/revision/types';
+import { sourceOf } from '@/domain/writing/readDraft';
+import { Checks } from './Checks';
+import { useDesk } from './desk';
+import { DeskHead } from './DeskHead';
+import { Elsewhere } from './Elsewhere';
+import type { Keeping } from './keeper';
+import { Middle } from './Middle';
+import { Rail, RailChoice } from './Rail';
+import { MIDDLE } from './RailLink';
+import { ReasonField } from './ReasonField';
+import { Returned } from './Returned';
+import { StaleBase } from './StaleBase';
+import { TextMode } from './TextMode';
+import type { Checked } from './useCheck';
+import type { Refusal } from './useProposing';
+import type { Standing } from './WritingDesk';
+
+interface Props {
+  proposal: Proposal;
+  current: Standing | null;
+  state: Keeping;
+  checked: Checked;
+  changes: Comparison | undefined;
+  refusal: Refusal | null;
+  pending: boolean;
+  undo: { said: string; act: (() => void) | null } | null;
+  onUndone: () => void;
+  onPropose: () => void;
+  onRebase: (letter: string) => Promise<string | null>;
+  /** The text on the screen. */
+  mine: string;
+  /** The text while it is edited as text; null in the form. */
+  text: string | null;
+  onText: (text: string) => void;
+  onForm: () => void;
+  onTheirs: () => void;
+  onMine: () => void;
+}
+
+function UndoLine({ undo, onUndone }: Pick<Props, 'undo' | 'onUndone'>) {
+  return (
+    <div role="status">
+      {undo && (
+        <p className="mb-5 flex flex-wrap items-center gap-x-4 border-y border-rule bg-wash px-4 py-1">
+          <span className="min-w-0 flex-1 py-2">{undo.said}</span>
+          {undo.act && (
+            <Button
+              kind="quiet"
+              onClick={() => {
+                undo.act?.();
+                onUndone();
+              }}
+            >
+              Undo
+            </Button>
+          )}
+          <Button kind="quiet" aria-label="Close this line" onClick={onUndone}>
+            Close
+          </Button>
+        </p>
+      )}
+    </div>
+  );
+}
+
+function Refused({ refusal }: { refusal: Refusal | null }) {
+  const { goTo } = useDesk();
+  if (!refusal) return null;
+  return (
+    <Notice live="alert" title="Not proposed" className="mb-5">
+      <p>{refusal.detail}</p>
+      {refusal.errors.map(({ path, message }) => (
+        <p key={`${path} ${message}`}>
+          {path ? (
+            <button type="button" className="text-left underline underline-offset-[3px]" onClick={() => goTo(path)}>
+              {message}
+            </button>
+          ) : (
+            message
+          )}
+        </p>
+      ))}
+    </Notice>
+  );
+}
+
+/** Where everything of the desk stands: head, notices, rail, the chosen thing, the margin of checks. */
+export function DeskFrame(props: Props) {
+  const { proposal, current, state, checked, changes, text, mine } = props;
+  const { draft, place, choose, tried, baseLetter } = useDesk();
+  const lastStep = draft.steps[0];
+  const title = text === null ? draft.title.trim() || 'Untitled' : proposal.title;
+  const seeing = place === 'changes';
+  return (
+    <div className="leaf writing">
+      <DeskHead
+        title={baseLetter ? `${title}, changing ${baseLetter}` : `${title}, a new procedure`}
+        state={state}
+        opened={Date.parse(proposal.updatedAt)}
+        changes={seeing}
+        onChanges={() => choose(seeing ? (lastStep ? { step: lastStep.id } : 'sheet') : 'changes')}
+        onPropose={props.onPropose}
+        pending={props.pending}
+      />
+      <div className="framed-sections writing-notices">
+        {state.kind === 'stale' && (
+          <Elsewhere theirs={state.theirs} mine={mine} onTheirs={props.onTheirs} onMine={props.onMine} />
+        )}
+        {current && (
+          <StaleBase
+            number={proposal.number}
+            base={baseLetter}
+            current={current}
+            mine={mine}
+            onRebase={() => props.onRebase(current.letter)}
+          />
+        )}
+        <Returned />
+      </div>
+      {text === null && (
+        <div className="writing-choice">
+          <RailChoice />
+        </div>
+      )}
+      <div className={text === null ? 'writing-columns' : 'writing-columns writing-as-text'}>
+        {text === null && (
+          <div className="writing-rail">
+            <Rail />
+          </div>
+        )}
+        <section id={MIDDLE} tabIndex={-1} aria-label="What is being written" className="writing-middle">
+          <Refused refusal={props.refusal} />
+          <UndoLine undo={props.undo} onUndone={props.onUndone} />
+          {text === null || seeing ? (
+            <Middle changes={changes} id={proposal.id} />
+          ) : (
+            <TextMode text={text} onText={props.onText} checked={checked} />
+          )}
+          <div className="mt-7 border-t border-rule pt-5">
+            <ReasonField
+              error={tried && !draft.reason.trim() ? 'Write why it is better: the editor decides by it.' : undefined}
+            />
+          </div>
+          <p className="mt-4 text-small text-ink-2">
+            {text === null ? (
+              <button
+                type="button"
+                className="inline-flex min-h-touch items-center underline underline-offset-[3px]"
+                onClick={() => props.onText(sourceOf(draft))}
+              >
+                Edit the whole sheet as text
+              </button>
+            ) : (
+              <button
+                type="button"
+                disabled={checked.problems.length > 0}
+                className="inline-flex min-h-touch items-center underline underline-offset-[3px] disabled:no-underline"
+                onClick={props.onForm}
+              >
+                {checked.problems.length > 0
+                  ? 'Mend what is listed, and the text can be edited in the form again'
+                  : 'Edit it in the form'}
+              </button>
+            )}
+          </p>
+        </section>
+        <aside aria-label="Checks" className="writing-checks">
+          <Checks checked={checked} changes={changes} />
+        </aside>
+      </div>
+    </div>
+  );
+}

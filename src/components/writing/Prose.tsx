@@ -1,0 +1,77 @@
+import { useId, useLayoutEffect, useRef, type ReactNode, type RefObject } from 'react';
+import { FieldShell, tie } from '@/components/ui/FieldShell';
+import { insertAt, inserted, type Piece } from '@/domain/writing/insert';
+import { useBox } from './useBox';
+
+const TAG = /(<\/?[A-Z][A-Za-z]*(?:\s[^<>]*)?>)/;
+
+/** Puts a component where the caret of a text area stands, so that the browser's own undo takes it out again. */
+export function insertInto(area: HTMLTextAreaElement, piece: Piece): void {
+  const caret = { text: area.value, start: area.selectionStart, end: area.selectionEnd };
+  const insertion = insertAt(caret, piece);
+  area.focus();
+  // The old way of editing is the only one that joins the undo history; where it is gone, the value is set.
+  if (!document.execCommand('insertText', false, insertion.replacement)) {
+    const set = Object.getOwnPropertyDescriptor(HTMLTextAreaElement.prototype, 'value')?.set;
+    set?.call(area, inserted(caret, insertion));
+    area.dispatchEvent(new Event('input', { bubbles: true }));
+  }
+  area.setSelectionRange(insertion.start, insertion.end);
+}
+
+/**
+ * Prose with components among the words. A copy of the text lies under the area with its components on a wash, which
+ * also gives the area its height.
+ */
+export function Prose({
+  path,
+  label,
+  hint,
+  area,
+  least = '9.5rem',
+}: {
+  path: string;
+  label: ReactNode;
+  hint?: ReactNode;
+  area?: RefObject<HTMLTextAreaElement | null>;
+  least?: string;
+}) {
+  const { id, value, set, onBlur, error } = useBox(path);
+  const own = useRef<HTMLTextAreaElement>(null);
+  const ref = area ?? own;
+  const under = useId();
+  const words = { label, hint, name: path, id, error };
+  useLayoutEffect(() => {
+    // A scroll bar of the area would break its lines elsewhere than the copy does.
+    if (ref.current) ref.current.scrollTop = 0;
+  }, [value, ref]);
+  return (
+    <FieldShell {...words}>
+      <div className="prose-edit" style={{ minHeight: least }}>
+        <div id={under} aria-hidden="true" className="prose-edit-copy">
+          {value.split(TAG).map((piece, i) =>
+            i % 2 === 1 ? (
+              <mark key={i} className={/^<\/?(Hold|Figure|Worksheet)\b/.test(piece) ? 'tag tag-block' : 'tag'}>
+                {piece}
+              </mark>
+            ) : (
+              piece
+            ),
+          )}
+          {/* A line end at the very end takes a line of its own in an area, and none in a block. */}
+          {'\u200b'}
+        </div>
+        <textarea
+          {...tie(words)}
+          ref={ref}
+          value={value}
+          autoComplete="off"
+          spellCheck
+          className="prose-edit-area"
+          onChange={(event) => set(event.target.value)}
+          onBlur={onBlur}
+        />
+      </div>
+    </FieldShell>
+  );
+}

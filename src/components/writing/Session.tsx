@@ -1,0 +1,135 @@
+import { useDeferredValue, useMemo, useState } from 'react';
+import { FormProvider, useForm, useWatch } from 'react-hook-form';
+import { plainLines } from '@/domain/procedure/source';
+import type { Draft } from '@/domain/writing/draft';
+import { procedureOf } from '@/domain/writing/procedureOf';
+import { emptyDraft, readDraft, sourceOf } from '@/domain/writing/readDraft';
+import { DeskContext, type Desk } from './desk';
+import { DeskFrame } from './DeskFrame';
+import type { Words } from './heldCopy';
+import { fieldId, placeOfProblem } from './places';
+import { useCheck } from './useCheck';
+import { useKeepUp } from './useKeepUp';
+import { useKeeping } from './useKeeping';
+import { useChanges } from './useNeeds';
+import { focusSoon, usePlace } from './usePlace';
+import { useProposing } from './useProposing';
+import type { WritingProps } from './WritingDesk';
+import { REASON_ID } from './ReasonField';
+
+/** One sitting at the desk: the form, what keeps it, what checks it, and what may be done with it. */
+export function Session({ proposal, source, base, current, engines, drawings }: WritingProps) {
+  const [first] = useState(() => {
+    const draft = readDraft(source, proposal.reason);
+    return { draft: draft ?? { ...emptyDraft(), reason: proposal.reason }, text: draft ? null : source };
+  });
+  const form = useForm<Draft>({ defaultValues: first.draft });
+  const [text, setText] = useState(first.text);
+  const draft = useWatch({ control: form.control }) as Draft;
+  const late = useDeferredValue(draft);
+  const procedure = useMemo(() => (text === null ? procedureOf(late) : null), [late, text]);
+  const words = useMemo<Words>(() => ({ source: text ?? sourceOf(late), reason: late.reason }), [late, text]);
+  const baseDraft = useMemo(() => (base ? readDraft(base.source) : null), [base]);
+  const baseProcedure = useMemo(() => baseDraft && procedureOf(baseDraft), [baseDraft]);
+
+  const [undo, setUndo] = useState<{ said: string; act: (() => void) | null } | null>(null);
+  const load = (next: Words) => {
+    const read = readDraft(next.source, next.reason);
+    if (read) form.reset(read);
+    else form.setValue('reason', next.reason);
+    setText(read ? null : next.source);
+  };
+  const latest = (): Words => ({ source: text ?? sourceOf(form.getValues()), reason: form.getValues('reason') });
+  const { keeper, state } = useKeeping(
+    proposal,
+    { source: plainLines(first.text ?? sourceOf(first.draft)), reason: proposal.reason },
+    latest,
+    (found) => {
+      load(found);
+      setUndo({ said: 'Words that were held on this device are back on the screen.', act: null });
+    },
+  );
+  useKeepUp(keeper, words);
+
+  const checked = useCheck(words.source, procedure);
+  const sound = procedure !== null && !checked.problems.some((p) => !/^(steps|intro)/.test(p.path ?? ''));
+  const changes = useChanges(words.source, baseProcedure, sound ? procedure : null);
+  const { place, choose } = usePlace(draft);
+  const [tried, setTried] = useState(false);
+  const { pending, refusal, setRefusal, propose, rebase } = useProposing(proposal.id, keeper);
+
+  const goTo = (path: string) => {
+    setTried(true);
+    choose(placeOfProblem(path, draft));
+    const parts = path.split('.');
+    focusSoon(
+      fieldId(path),
+      parts.map((_, i) => fieldId(parts.slice(0, parts.length - i).join('.'))).concat('writing-middle'),
+    );
+  };
+  const ask = () => {
+    setTried(true);
+    const [fault] = checked.problems;
+    if (fault) {
+      setRefusal({ detail: 'Something is to mend before it can be proposed.', errors: [] });
+      if (fault.path) goTo(fault.path);
+    } else if (!form.getValues('reason').trim()) focusSoon(REASON_ID);
+    else {
+      keeper.change(latest());
+      void propose();
+    }
+  };
+
+  const desk: Desk = {
+    draft,
+    base: baseDraft,
+    baseLetter: base?.letter ?? null,
+    engines,
+    drawings,
+    problems: checked.problems,
+    remarks: proposal.state === 'returned' ? proposal.remarks.filter((remark) => remark.kind === 'returned') : [],
+    tried,
+    place,
+    choose,
+    goTo,
+    focusSoon,
+    offerUndo: (said, act) => setUndo({ said, act }),
+  };
+  return (
+    <FormProvider {...form}>
+      <DeskContext value={desk}>
+        <DeskFrame
+          proposal={proposal}
+          current={current}
+          state={state}
+          checked={checked}
+          changes={changes}
+          refusal={refusal}
+          pending={pending}
+          undo={undo}
+          onUndone={() => setUndo(null)}
+          onPropose={ask}
+          onRebase={rebase}
+          mine={words.source}
+          text={text}
+          onText={setText}
+          onForm={() => {
+            const read = readDraft(text ?? '', draft.reason);
+            if (read) load({ source: text ?? '', reason: draft.reason });
+            else void keeper.flush().then((kept) => kept && location.reload());
+          }}
+          onTheirs={() => {
+            const taken = keeper.takeTheirs();
+            if (!taken) return;
+            load(taken.set);
+            setUndo({
+              said: 'The text of the other tab is on the screen. Yours is set aside.',
+              act: () => load(taken.aside),
+            });
+          }}
+          onMine={() => void keeper.keepMine()}
+        />
+      </DeskContext>
+    </FormProvider>
+  );
+}

@@ -1,0 +1,48 @@
+import { createContext, use } from 'react';
+import { useFormContext } from 'react-hook-form';
+import type { z } from 'zod';
+import type { Remark } from '@/domain/api/schemas';
+import type { SourceProblem } from '@/domain/procedure/types';
+import type { Draft } from '@/domain/writing/draft';
+import type { Place } from './places';
+
+/** A drawing that the book has, with the words it was given where it was used first. */
+export interface Drawing {
+  file: string;
+  alt: string;
+  caption: string;
+}
+
+/** What every part of the desk shares besides the form itself. */
+export interface Desk {
+  /** The whole draft as it stands. */
+  draft: Draft;
+  /** The revision that it stands on, as a draft; null for a new procedure. */
+  base: Draft | null;
+  baseLetter: string | null;
+  engines: readonly { key: string; name: string }[];
+  drawings: readonly Drawing[];
+  problems: readonly SourceProblem[];
+  /** Why it was returned; empty unless it was. */
+  remarks: readonly z.infer<typeof Remark>[];
+  /** The author asked what is wrong, so every field says it, touched or not. */
+  tried: boolean;
+  place: Place;
+  choose: (place: Place) => void;
+  /** Goes to the field at a problem's path. */
+  goTo: (path: string) => void;
+  /** Puts the caret into the field with this id as soon as it is on the screen. */
+  focusSoon: (id: string) => void;
+  /** Says what was deleted and offers to bring it back. */
+  offerUndo: (said: string, undo: () => void) => void;
+}
+
+export const DeskContext = createContext<Desk | null>(null);
+
+export function useDesk(): Desk {
+  const desk = use(DeskContext);
+  if (!desk) throw new Error('Outside of the writing desk.');
+  return desk;
+}
+
+export const useDraftForm = () => useFormContext<Draft>();

@@ -1,0 +1,38 @@
+import type { Keeping } from './keeper';
+
+/** "20 seconds ago". Both in milliseconds since 1970. */
+export function ago(at: number, now: number): string {
+  const seconds = Math.max(0, Math.round((now - at) / 1000));
+  if (seconds < 5) return 'just now';
+  if (seconds < 60) return `${seconds < 10 ? seconds : Math.floor(seconds / 10) * 10} seconds ago`;
+  const minutes = Math.floor(seconds / 60);
+  if (minutes < 60) return minutes === 1 ? 'a minute ago' : `${minutes} minutes ago`;
+  const hours = Math.floor(minutes / 60);
+  if (hours < 48) return hours === 1 ? 'an hour ago' : `${hours} hours ago`;
+  return `${Math.floor(hours / 24)} days ago`;
+}
+
+const held = (onDevice: boolean) =>
+  onDevice ? 'Your words are held on this device.' : 'This device cannot hold them: keep this page open.';
+
+/**
+ * How it stands with the draft, in a sentence.
+ *
+ * @param opened when the draft was last saved before this page was opened
+ * @param now null before the page knows the time
+ */
+export function keepingWords(state: Keeping, opened: number, now: number | null): string {
+  switch (state.kind) {
+    case 'kept':
+      return now === null ? 'Draft kept' : `Draft kept ${ago(state.at ?? opened, now)}`;
+    case 'waiting':
+    case 'keeping':
+      return 'Keeping the draft';
+    case 'unreachable':
+      return `Not kept: ${state.why}. ${held(state.onDevice)}`;
+    case 'refused':
+      return `Not kept: ${state.why.replace(/\.$/, '')}. ${held(state.onDevice)}`;
+    case 'stale':
+      return 'Not kept: it was changed in another tab.';
+  }
+}

@@ -1,0 +1,10 @@
+import { useEffect } from 'react';
+import type { Words } from './heldCopy';
+import type { Keeper } from './keeper';
+
+/** Tells the keeper of every change on the screen. */
+export function useKeepUp(keeper: Keeper, words: Words): void {
+  useEffect(() => {
+    keeper.change(words);
+  }, [keeper, words]);
+}
