@@ -13,16 +13,21 @@ import { useEntries } from './useEntries';
 const SIGNALS = ['DANGER', 'WARNING', 'CAUTION', 'NOTICE'];
 const isSignal = (text: string | undefined): text is Caution['signal'] => SIGNALS.includes(text ?? '');
 
+/** Keys of the cautions ahead of a step. */
+function useAhead(index: number) {
+  const { control } = useDraftForm();
+  const { field } = useController({ control, name: `steps.${index}.cautions` });
+  const ahead: string[] = Array.isArray(field.value) ? field.value : [];
+  return { ahead, set: (keys: string[]) => field.onChange(keys) };
+}
+
 /** The cautions that stand ahead of a step, in their order, and a way to put another one there. */
 export function CautionsAhead({ index }: { index: number }) {
-  const { draft, problems, choose } = useDesk();
-  const { control } = useDraftForm();
+  const { draft, problems } = useDesk();
   const path = `steps.${index}.cautions` as const;
-  const { field } = useController({ control, name: path });
-  const { add } = useEntries('cautions');
-  const ahead = Array.isArray(field.value) ? (field.value as string[]) : [];
-  const others = draft.cautions.filter((caution) => !ahead.includes(caution['key'] ?? ''));
+  const { ahead, set } = useAhead(index);
   const error = problemAt(problems, path);
+  if (ahead.length === 0 && !error) return null;
   return (
     <section
       id={fieldId(path)}
@@ -49,7 +54,7 @@ export function CautionsAhead({ index }: { index: number }) {
                       kind="quiet"
                       className="text-small"
                       aria-label={`Move up: ${name}`}
-                      onClick={() => field.onChange(ahead.toSpliced(at - 1, 2, key, ahead[at - 1] ?? ''))}
+                      onClick={() => set(ahead.toSpliced(at - 1, 2, key, ahead[at - 1] ?? ''))}
                     >
                       Up
                     </Button>
@@ -58,7 +63,7 @@ export function CautionsAhead({ index }: { index: number }) {
                     kind="quiet"
                     className="text-small"
                     aria-label={`Take away: ${name}`}
-                    onClick={() => field.onChange(ahead.filter((other) => other !== key))}
+                    onClick={() => set(ahead.filter((other) => other !== key))}
                   >
                     Take away
                   </Button>
@@ -69,37 +74,45 @@ export function CautionsAhead({ index }: { index: number }) {
         </ol>
       )}
       {error && <p className="border-l-[8px] border-ink pl-2.5 font-medium leading-snug">{error}</p>}
-      <div>
-        <Menu label="Caution">
-          {(close) => (
-            <>
-              {others.map((caution) => (
-                <MenuItem
-                  key={caution['key']}
-                  detail={caution['signal'] ?? ''}
-                  onChoose={() => {
-                    close();
-                    field.onChange([...ahead, caution['key'] ?? '']);
-                  }}
-                >
-                  {entryName('cautions', caution)}
-                </MenuItem>
-              ))}
-              <div className="px-3.5 py-2">
-                <NewEntry
-                  list="cautions"
-                  onAdd={(name) => {
-                    const key = add(name);
-                    close();
-                    field.onChange([...ahead, key]);
-                    choose({ list: 'cautions' });
-                  }}
-                />
-              </div>
-            </>
-          )}
-        </Menu>
-      </div>
     </section>
+  );
+}
+
+/** Puts another of the sheet's cautions, or a new one, ahead of a step. */
+export function CautionMenu({ index }: { index: number }) {
+  const { draft, choose } = useDesk();
+  const { ahead, set } = useAhead(index);
+  const { add } = useEntries('cautions');
+  const others = draft.cautions.filter((caution) => !ahead.includes(caution['key'] ?? ''));
+  return (
+    <Menu label="Caution">
+      {(close) => (
+        <>
+          {others.map((caution) => (
+            <MenuItem
+              key={caution['key']}
+              detail={caution['signal'] ?? ''}
+              onChoose={() => {
+                close();
+                set([...ahead, caution['key'] ?? '']);
+              }}
+            >
+              {entryName('cautions', caution)}
+            </MenuItem>
+          ))}
+          <div className="px-3.5 py-2" data-item={others.length === 0 ? '' : undefined} tabIndex={-1}>
+            <NewEntry
+              list="cautions"
+              onAdd={(name) => {
+                const key = add(name);
+                close();
+                set([...ahead, key]);
+                choose({ list: 'cautions' });
+              }}
+            />
+          </div>
+        </>
+      )}
+    </Menu>
   );
 }

@@ -40,7 +40,11 @@ export function Cell({ list, index, entry, column }: { list: ListName; index: nu
   return (
     <>
       {options ? (
-        <select {...shared} className={classes(shared.className, 'pr-1')} onChange={(event) => set(event.target.value)}>
+        <select
+          {...shared}
+          className={classes(shared.className, '!pl-1.5 !pr-1')}
+          onChange={(event) => set(event.target.value)}
+        >
           {(column.blank !== undefined || value === '') && <option value="">{column.blank ?? 'Choose'}</option>}
           {options.map((option) => (
             <option key={option.value} value={option.value}>
@@ -49,6 +53,14 @@ export function Cell({ list, index, entry, column }: { list: ListName; index: nu
           ))}
           {value !== '' && !options.some((option) => option.value === value) && <option value={value}>{value}</option>}
         </select>
+      ) : column.wraps ? (
+        <textarea
+          {...shared}
+          rows={1}
+          autoComplete="off"
+          className={classes(shared.className, 'block resize-none [field-sizing:content]')}
+          onChange={(event) => set(event.target.value.replace(/\s*\n\s*/g, ' '))}
+        />
       ) : (
         <input
           {...shared}

@@ -1,9 +1,11 @@
 import { Fragment } from 'react';
+import { SignalPanel } from '@/components/sheet/SignalPanel';
 import { classes } from '@/components/ui/classes';
-import { entryName, type ListName } from '@/domain/writing/draft';
+import { entryName, type Entry, type ListName } from '@/domain/writing/draft';
+import { SIGNAL_WORDS } from '@/domain/procedure/schema';
 import { usesInWords } from '@/domain/writing/uses';
 import { Cell } from './Cell';
-import { COLUMNS, type Column } from './columns';
+import { columnsFor, type Column } from './columns';
 import { DeleteEntry } from './DeleteEntry';
 import { useDesk } from './desk';
 import { ChoiceBox, LongBox, TextBox } from './fields';
@@ -19,7 +21,7 @@ function Standing({ list, entryKey }: { list: ListName; entryKey: string }) {
   const quiet = list === 'tools' || (list === 'supplies' && !uses) || (list === 'parts' && !uses);
   return (
     <span className="text-small text-ink-2">
-      {[fresh && 'New', uses ? `used in ${uses}` : !quiet && 'not used yet'].filter(Boolean).join(', ')}
+      {[fresh && 'New.', uses ? `Used in ${uses}.` : !quiet && 'Not used yet.'].filter(Boolean).join(' ')}
     </span>
   );
 }
@@ -28,23 +30,43 @@ function Beneath({ path, column, list, index }: { path: string; column: Column; 
   const { draft } = useDesk();
   const entry = draft[list][index] ?? {};
   const shared = { path, label: column.label, hint: column.hint };
-  if (column.options) return <ChoiceBox {...shared} options={column.options(entry, draft)} blank={column.blank} />;
+  if (column.options)
+    return (
+      <ChoiceBox
+        {...shared}
+        options={column.options(entry, draft)}
+        blank={column.blank}
+        fieldClass={list === 'limits' ? 'sm:col-span-4' : 'sm:col-span-2'}
+      />
+    );
   return column.long ? (
-    <LongBox {...shared} fieldClass="sm:col-span-full" />
+    <LongBox {...shared} rows={1} fieldClass="sm:col-span-full" />
   ) : (
-    <TextBox {...shared} {...(column.short ? { fieldClass: 'max-w-48' } : {})} />
+    <TextBox {...shared} fieldClass={'sm:col-span-2'} />
+  );
+}
+
+/** The caution as it will stand ahead of its step. */
+function CautionBand({ entry }: { entry: Entry }) {
+  const { signal, hazard = '', harm = '', avoid = '' } = entry;
+  const known = SIGNAL_WORDS.find((word) => word === signal);
+  if (!known) return null;
+  return (
+    <div className="border-frame border-b-0 border-ink">
+      <SignalPanel caution={{ key: entry['key'] ?? '', signal: known, hazard, harm, avoid }} shape="band" />
+    </div>
   );
 }
 
 /** Every entry of a list: what is compared most in a row, the rest with its label underneath. */
 export function EntryTable({ list }: { list: Exclude<ListName, 'figures'> }) {
   const { draft } = useDesk();
-  const columns = COLUMNS[list];
-  const row = columns.filter((column) => column.width);
-  const beneath = columns.filter((column) => !column.width);
   const entries = draft[list];
   return entries.map((entry, index) => {
     const key = entry['key'] ?? '';
+    const columns = columnsFor(list, entry);
+    const row = columns.filter((column) => column.width);
+    const beneath = columns.filter((column) => !column.width);
     return (
       <section
         key={`${key}:${index}`}
@@ -53,6 +75,7 @@ export function EntryTable({ list }: { list: Exclude<ListName, 'figures'> }) {
         aria-label={`${LIST_NAMES[list]}, ${index + 1}: ${entryName(list, entry)}`}
         className="mb-6"
       >
+        {list === 'cautions' && <CautionBand entry={entry} />}
         {row.length > 0 && (
           <div
             className="value-grid border-frame border-ink"
@@ -71,20 +94,20 @@ export function EntryTable({ list }: { list: Exclude<ListName, 'figures'> }) {
         <RowProblems list={list} index={index} fields={row.map(({ field }) => field)} />
         <div
           className={classes(
-            'grid gap-4 border-x border-b border-rule bg-sheet px-4 pb-4 pt-3 sm:grid-cols-2',
+            'grid gap-x-5 gap-y-4 border-x border-b border-rule bg-sheet px-4 pb-2 pt-3 sm:grid-cols-6',
             row.length === 0 && 'border-t border-t-rule',
           )}
         >
           {beneath.map((column) => (
             <Fragment key={column.field}>
-              {list === 'torques' && column.field === 'source' && <TorqueMore index={index} entry={entry} />}
+              {list === 'torques' && column.field === 'note' && <TorqueMore index={index} entry={entry} />}
               <Beneath path={`${list}.${index}.${column.field}`} column={column} list={list} index={index} />
             </Fragment>
           ))}
-          <p className="flex items-center justify-between gap-4 sm:col-span-full">
+          <div className="flex items-center justify-between gap-4 sm:col-span-full">
             <Standing list={list} entryKey={key} />
             <DeleteEntry list={list} entry={entry} />
-          </p>
+          </div>
         </div>
       </section>
     );

@@ -63,10 +63,10 @@ export function Figures() {
             hint="For somebody who cannot see it."
             rows={4}
           />
-          <p className="flex items-center justify-between gap-4">
-            <span className="text-small text-ink-2">{uses ? `used in ${uses}` : 'not used yet'}</span>
+          <div className="flex items-center justify-between gap-4">
+            <span className="text-small text-ink-2">{uses ? `Used in ${uses}.` : 'Not used yet.'}</span>
             <DeleteEntry list="figures" entry={figure} />
-          </p>
+          </div>
         </div>
       </section>
     );

@@ -1,8 +1,9 @@
-import { useState, type RefObject } from 'react';
+import { Fragment, useState, type RefObject } from 'react';
 import { Button } from '@/components/ui/Button';
 import { Checkbox } from '@/components/ui/Checkbox';
 import { entryName, type ListName } from '@/domain/writing/draft';
 import type { Piece } from '@/domain/writing/insert';
+import { CautionMenu } from './CautionsAhead';
 import { CHOICES, HOLD, PIECE_OF, readingsOf, worksheets, type Choice } from './choices';
 import { useDesk } from './desk';
 import { Menu, MenuItem } from './Menu';
@@ -104,8 +105,12 @@ function WorksheetMenu({ put, close }: { put: (piece: Piece) => void; close: () 
   );
 }
 
-/** Buttons under a step's words that put values, drawings and holds in at the caret. */
-export function InsertRow({ area, steps = true }: { area: RefObject<HTMLTextAreaElement | null>; steps?: boolean }) {
+/**
+ * Buttons under the words that put values, drawings and holds in at the caret, and cautions ahead of the step.
+ *
+ * @param step index of the step; none in the introduction, which has no holds, worksheets or cautions
+ */
+export function InsertRow({ area, step }: { area: RefObject<HTMLTextAreaElement | null>; step?: number }) {
   const { draft } = useDesk();
   const put = (piece: Piece) => {
     if (area.current) insertInto(area.current, piece);
@@ -113,11 +118,14 @@ export function InsertRow({ area, steps = true }: { area: RefObject<HTMLTextArea
   return (
     <div role="group" aria-label="Put in at the caret" className="flex flex-wrap gap-2">
       {CHOICES.map(({ label, list, choices }) => (
-        <Menu key={label} label={label}>
-          {(close) => <ChoiceMenu label={label} list={list} choices={choices(draft)} put={put} close={close} />}
-        </Menu>
+        <Fragment key={label}>
+          <Menu label={label}>
+            {(close) => <ChoiceMenu label={label} list={list} choices={choices(draft)} put={put} close={close} />}
+          </Menu>
+          {label === 'Limit' && step !== undefined && <CautionMenu index={step} />}
+        </Fragment>
       ))}
-      {steps && (
+      {step !== undefined && (
         <>
           <button
             type="button"

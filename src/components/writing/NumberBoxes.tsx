@@ -64,7 +64,7 @@ export function NumberBoxes({
         )}
         {boxes.length > 0 && (
           <Button kind="quiet" className="text-small" onClick={() => set(joinBoxes(boxes.slice(0, -1)))}>
-            Take the last one out
+            Remove the last
           </Button>
         )}
       </div>

@@ -59,7 +59,7 @@ export function PlainWriting({
           name="source"
           defaultValue={refused?.source ?? source}
           rows={30}
-          className="whitespace-pre font-sans text-base"
+          className="whitespace-pre !font-sans !text-base"
         />
         <TextArea
           label="Why this is better, for the editor"

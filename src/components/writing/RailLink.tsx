@@ -34,7 +34,7 @@ export function RailLink({
         href={hashOfPlace(to)}
         aria-current={on ? 'true' : undefined}
         onClick={() => focusSoon(MIDDLE)}
-        className="grid min-h-[40px] min-w-0 flex-1 grid-cols-[1.75rem_minmax(0,1fr)] items-center py-1.5 pr-3.5 text-ink no-underline hover:underline"
+        className="grid min-h-[40px] min-w-0 flex-1 grid-cols-[1.75rem_minmax(0,1fr)] items-start py-2 pr-3.5 text-ink no-underline hover:underline"
       >
         <span className={on ? undefined : 'text-ink-2'}>{number}</span>
         <span>

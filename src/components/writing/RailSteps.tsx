@@ -44,7 +44,7 @@ function RailStep({ step, index, faults }: { step: Step; index: number; faults: 
             {...attributes}
             {...listeners}
             aria-label={`Move step ${index + 1}: ${step.title || 'no title yet'}`}
-            className="grid h-full min-h-[40px] w-9 shrink-0 cursor-grab touch-none place-items-center text-ink-2 hover:bg-wash active:cursor-grabbing"
+            className="grid min-h-[40px] w-9 shrink-0 cursor-grab touch-none content-start justify-items-center pt-[0.85rem] text-ink-2 hover:bg-wash active:cursor-grabbing"
           >
             <Grip />
           </button>

@@ -82,7 +82,7 @@ export function SheetFields() {
           hint="Before the first step: when this job is done, and why."
           area={area}
         />
-        <InsertRow area={area} steps={false} />
+        <InsertRow area={area} />
       </div>
     </div>
   );

@@ -48,7 +48,7 @@ export function StepEditor({ index }: { index: number }) {
       <CautionsAhead index={index} />
       <div className="flex flex-col gap-2.5">
         <Prose path={`steps.${index}.body`} label="How" area={area} />
-        <InsertRow area={area} />
+        <InsertRow area={area} step={index} />
       </div>
       <ValuesBehind body={step.body} />
       <div className="-mx-2 flex flex-wrap gap-x-2">

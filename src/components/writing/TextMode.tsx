@@ -29,7 +29,7 @@ export function TextMode({
         value={text}
         rows={28}
         spellCheck={false}
-        className="whitespace-pre font-sans text-base leading-normal"
+        className="whitespace-pre !font-sans !text-base leading-normal"
         onChange={(event) => onText(event.target.value)}
       />
       {checked.problems.length > 0 && (

@@ -1,7 +1,7 @@
 import { OrderDrawing } from '@/components/sheet/OrderDrawing';
 import { TextArea } from '@/components/ui/TextArea';
 import type { Torque } from '@/domain/procedure/schema';
-import type { Entry } from '@/domain/writing/draft';
+import { boxesOf, type Entry } from '@/domain/writing/draft';
 import { readNumbers } from '@/domain/writing/numbers';
 import { TextBox } from './fields';
 import { NumberBoxes } from './NumberBoxes';
@@ -28,58 +28,61 @@ export function TorqueMore({ index, entry }: { index: number; entry: Entry }) {
   const path = `torques.${index}`;
   const places = useBox(`${path}.positions`);
   const torque = drawable(entry);
+  const turns = boxesOf(entry['angles']).length > 0 || Boolean(entry['angleTolerance']);
   return (
     <>
-      <NumberBoxes
-        list="torques"
-        index={index}
-        entry={entry}
-        field="passes"
-        label="Passes before the final torque"
-        one="pass"
-        unit="N·m"
-        most={6}
-      />
-      <NumberBoxes
-        list="torques"
-        index={index}
-        entry={entry}
-        field="angles"
-        label="Turns after the final torque"
-        one="turn"
-        unit="degrees"
-        most={4}
-      />
-      <TextBox path={`${path}.angleTolerance`} label="± on each turn, degrees" fieldClass="max-w-48" />
-      <div className="grid gap-4 @lg:grid-cols-[minmax(0,1fr)_minmax(0,1fr)] sm:col-span-full sm:grid-cols-2">
-        <div className="flex flex-col gap-4">
-          <TextArea
-            label="Where the bolts stand"
-            hint="One bolt a line, seen from its head: mm to the right, mm down. Bolt 1 first."
-            name={`${path}.positions`}
-            id={places.id}
-            value={places.value}
-            error={places.error}
-            rows={6}
-            placeholder={'0 0\n80 0\n80 60\n0 60'}
-            className="font-sans text-base"
-            onChange={(event) => places.set(event.target.value)}
-            onBlur={places.onBlur}
-          />
-          <TextBox
-            path={`${path}.order`}
-            label="Tightening order"
-            hint="Bolt numbers, the first to be tightened first."
-          />
-        </div>
-        {torque ? (
-          <OrderDrawing torque={torque} />
-        ) : (
-          <p className="self-center text-ink-2">
-            With a place for every bolt the order is drawn here, as the sheet will show it.
-          </p>
-        )}
+      <div className="flex flex-wrap gap-x-10 gap-y-4 sm:col-span-full">
+        <NumberBoxes
+          list="torques"
+          index={index}
+          entry={entry}
+          field="passes"
+          label="Passes before the final torque"
+          one="pass"
+          unit="N·m"
+          most={6}
+        />
+        <NumberBoxes
+          list="torques"
+          index={index}
+          entry={entry}
+          field="angles"
+          label="Turns after the final torque"
+          one="turn"
+          unit="degrees"
+          most={4}
+        />
+        {turns && <TextBox path={`${path}.angleTolerance`} label="± on each turn, degrees" fieldClass="w-44" />}
       </div>
+      <details open={Boolean(entry['positions'] || entry['order'])} className="sm:col-span-full">
+        <summary className="inline-flex min-h-touch cursor-pointer items-center font-medium underline decoration-rule underline-offset-[3px]">
+          Where the bolts stand, and the order they are tightened in
+        </summary>
+        <div className="grid gap-5 pt-1 sm:grid-cols-2">
+          <div className="flex flex-col gap-4">
+            <TextArea
+              label="Places"
+              hint="One bolt a line, seen from its head: mm to the right, mm down. Bolt 1 first."
+              name={`${path}.positions`}
+              id={places.id}
+              value={places.value}
+              error={places.error}
+              rows={6}
+              className="!font-sans !text-base"
+              onChange={(event) => places.set(event.target.value)}
+              onBlur={places.onBlur}
+            />
+            <TextBox path={`${path}.order`} label="Order" hint="Bolt numbers, the first to be tightened first." />
+          </div>
+          {torque ? (
+            <OrderDrawing torque={torque} />
+          ) : (
+            <p className="self-center text-ink-2">
+              With a place for every bolt the order is drawn here, as the sheet will show it.
+            </p>
+          )}
+        </div>
+      </details>
     </>
   );
 }

@@ -12,9 +12,13 @@ export interface Column {
   /** Numbers and short codes; the rest is words. */
   short?: boolean;
   long?: boolean;
+  /** Words in the row that may need more than one line. */
+  wraps?: boolean;
   hint?: string;
   /** Words of the blank choice, where the field may stay empty. */
   blank?: string;
+  /** Where it does not belong, it is left out unless something stands in it. */
+  belongs?: (entry: Entry) => boolean;
   options?: (entry: Entry, draft: Draft) => Option[];
 }
 
@@ -32,6 +36,9 @@ const sources = (_: Entry, draft: Draft): Option[] =>
 const units = (entry: Entry): Option[] =>
   named(UNITS_BY_QUANTITY[entry['quantity'] as keyof typeof UNITS_BY_QUANTITY] ?? []);
 
+const measured = (entry: Entry) => entry['quantity'] !== 'finding';
+const isFinding = (entry: Entry) => entry['quantity'] === 'finding';
+
 const SOURCE: Column = {
   field: 'source',
   label: 'Where the value comes from',
@@ -39,7 +46,7 @@ const SOURCE: Column = {
   blank: 'No source stated',
 };
 const NOTE: Column = { field: 'note', label: 'Note', long: true };
-const NAME: Column = { field: 'name', label: 'Name', width: '1.6fr' };
+const NAME: Column = { field: 'name', label: 'Name', width: '1.6fr', wraps: true };
 
 const QUANTITY_WORDS = { share: 'share (%)', count: 'count', finding: 'finding, no number', ratio: 'ratio (:1)' };
 const KIND_WORDS = {
@@ -53,9 +60,9 @@ const KIND_WORDS = {
 /** The fields of each list in the order in which they are typed. `figures` has an editor of its own. */
 export const COLUMNS: Record<Exclude<ListName, 'figures'>, readonly Column[]> = {
   torques: [
-    { field: 'name', label: 'Fastener', width: '1.7fr' },
+    { field: 'name', label: 'Fastener', width: '1.7fr', wraps: true },
     { field: 'thread', label: 'Thread', width: '0.8fr', short: true, hint: 'M6, 1/4-20 UNC or G 1/4' },
-    { field: 'pitch', label: 'Pitch, mm', width: '0.7fr', short: true },
+    { field: 'pitch', label: 'Pitch', hint: 'In mm', width: '0.7fr', short: true },
     { field: 'class', label: 'Class', width: '0.7fr', short: true, hint: '8.8, or SAE 5' },
     { field: 'nm', label: 'N·m', width: '0.75fr', short: true },
     { field: 'tolerance', label: '± N·m', width: '0.65fr', short: true },
@@ -66,20 +73,20 @@ export const COLUMNS: Record<Exclude<ListName, 'figures'>, readonly Column[]> = 
     NOTE,
   ],
   limits: [
-    { field: 'name', label: 'What is measured', width: '2fr' },
+    { field: 'name', label: 'What is measured', width: '2.2fr', wraps: true },
     { field: 'quantity', label: 'Quantity', width: '1.2fr', options: fixed(QUANTITIES, QUANTITY_WORDS) },
-    { field: 'unit', label: 'Unit', width: '0.9fr', options: units, blank: 'none' },
-    { field: 'min', label: 'Least', width: '0.7fr', short: true },
-    { field: 'nominal', label: 'Nominal', width: '0.75fr', short: true },
-    { field: 'max', label: 'Most', width: '0.7fr', short: true },
-    { field: 'resolution', label: 'The tool reads to', short: true, hint: 'In the same unit' },
-    { field: 'expect', label: 'Finding without a number', hint: 'For example: none allowed' },
-    { field: 'condition', label: 'Measured in which state', hint: 'For example: cold, cap torqued', long: true },
+    { field: 'unit', belongs: measured, label: 'Unit', width: '0.9fr', options: units, blank: 'none' },
+    { field: 'min', belongs: measured, label: 'Least', width: '0.7fr', short: true },
+    { field: 'nominal', belongs: measured, label: 'Nominal', width: '0.75fr', short: true },
+    { field: 'max', belongs: measured, label: 'Most', width: '0.7fr', short: true },
+    { field: 'resolution', belongs: measured, label: 'The tool reads to, same unit', short: true },
+    { field: 'expect', belongs: isFinding, label: 'What must be found' },
     SOURCE,
+    { field: 'condition', label: 'Measured in which state', hint: 'For example: cold, cap torqued', long: true },
     NOTE,
   ],
   timers: [
-    { field: 'name', label: 'What is waited for', width: '2fr' },
+    { field: 'name', label: 'What is waited for', width: '2fr', wraps: true },
     { field: 'kind', label: 'Kind', width: '1fr', options: fixed(TIMER_KINDS) },
     { field: 'minutes', label: 'Minutes', width: '0.7fr', short: true },
     NOTE,
@@ -100,12 +107,12 @@ export const COLUMNS: Record<Exclude<ListName, 'figures'>, readonly Column[]> = 
   ],
   cautions: [
     { field: 'signal', label: 'Signal word', options: fixed(SIGNAL_WORDS) },
-    { field: 'hazard', label: 'What can hurt', hint: 'Hot oil and hot metal' },
-    { field: 'harm', label: 'What it does', hint: 'burn skin at once' },
+    { field: 'hazard', label: 'What can hurt', long: true },
+    { field: 'harm', label: 'What it does', long: true },
     { field: 'avoid', label: 'What to do about it', long: true },
   ],
   sources: [
-    { field: 'title', label: 'Source', width: '1.8fr' },
+    { field: 'title', label: 'Source', width: '1.8fr', wraps: true },
     { field: 'kind', label: 'Kind', width: '1.1fr', options: fixed(SOURCE_KINDS, KIND_WORDS) },
     { field: 'detail', label: 'Detail', long: true, hint: 'Page, date, or which engines it was proved on' },
   ],
@@ -133,3 +140,7 @@ export const STARTS_WITH: Partial<Record<ListName, Entry>> = {
   cautions: { signal: 'CAUTION' },
   sources: { kind: 'maker' },
 };
+
+/** The columns that an entry shows. */
+export const columnsFor = (list: Exclude<ListName, 'figures'>, entry: Entry): Column[] =>
+  COLUMNS[list].filter((column) => !column.belongs || column.belongs(entry) || Boolean(entry[column.field]?.trim()));

@@ -41,7 +41,7 @@ export function LongBox({ path, rows = 2, ...words }: BoxProps & { rows?: number
       value={value}
       rows={rows}
       autoComplete="off"
-      className="font-sans text-base"
+      className="long-box !font-sans !text-base"
       onChange={(event) => set(event.target.value.replace(/\s*\n\s*/g, ' '))}
       onBlur={onBlur}
     />

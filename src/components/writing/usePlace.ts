@@ -32,6 +32,8 @@ export function focusSoon(id: string, otherwise: readonly string[] = [], tries =
       if (tries > 0) focusSoon(id, otherwise, tries - 1);
       return;
     }
+    // A field inside a closed fold cannot take the caret.
+    found.closest('details')?.setAttribute('open', '');
     found.focus({ preventScroll: true });
     found.scrollIntoView({ block: 'nearest' });
   });

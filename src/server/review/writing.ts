@@ -1,10 +1,12 @@
-import type { Proposal } from '@/domain/api/schemas';
-import type { Actor } from '@/domain/people/may';
-import { readDraft } from '@/domain/writing/readDraft';
+import type { Me, Proposal } from '@/domain/api/schemas';
+import { may, type Actor, type Book } from '@/domain/people/may';
+import { BLANK_PROCEDURE } from '@/domain/procedure/blank';
+import { readDraft, sourceOf } from '@/domain/writing/readDraft';
 import { parsedText } from '../book/parsed';
 import { readSheet } from '../book/sheet';
 import { app } from '../context';
 import { readProposal } from './readProposal';
+import { startProcedure } from './startProcedure';
 import { startProposal } from './startProposal';
 
 /** A published text that a draft is set against. */
@@ -63,4 +65,27 @@ export async function openDraft(actor: Actor, number: string): Promise<string> {
     reason: '',
   });
   return id;
+}
+
+/** The books that somebody may write a new procedure for, as `startProcedure` names them. */
+export function booksFor(actor: Actor, person: Me): { book: string; name: string }[] {
+  const shops = new Map(
+    person.roles.flatMap(({ in: scope, shopId, name }) =>
+      scope === 'shop' && shopId ? [[shopId, name] as const] : [],
+    ),
+  );
+  const allowed = (book: Book) => may(actor, 'propose', { book }).ok;
+  return [
+    ...(allowed({ kind: 'common' }) ? [{ book: 'common', name: 'The common book, for every shop' }] : []),
+    ...[...shops].flatMap(([shopId, name]) =>
+      allowed({ kind: 'shop', shopId }) ? [{ book: shopId, name: `${name}, for this shop only` }] : [],
+    ),
+  ];
+}
+
+/** Begins a new procedure from the blank, under its own title. Returns the draft's id; refuses as `startProcedure` does. */
+export async function beginProcedure(actor: Actor, book: string, title: string): Promise<string> {
+  const blank = readDraft(BLANK_PROCEDURE);
+  const source = blank ? sourceOf({ ...blank, title: title.trim() || blank.title }) : BLANK_PROCEDURE;
+  return (await startProcedure(actor, { book, source, reason: '' })).id;
 }
