@@ -1,3 +1,5 @@
+import { forgetAll } from '@/components/search/kept';
+
 /** What the frame of every page does beyond HTML. Nothing here is needed to read, search or save. */
 
 const typing = (target: EventTarget | null) =>
@@ -34,6 +36,7 @@ document.addEventListener('submit', (event) => {
     return;
   }
   form.dataset.sent = '';
+  if (new URL(form.action).pathname === '/sign-out') forgetAll();
   event.submitter?.setAttribute('data-pending', '');
 });
 addEventListener('pageshow', (event) => {

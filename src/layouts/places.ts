@@ -10,7 +10,7 @@ const PLACES = [
 export type Place = (typeof PLACES)[number]['key'];
 
 /** Whether somebody may propose anywhere: to the common book, or to a book of a shop they are in. */
-const mayPropose = (actor: Actor) =>
+export const mayPropose = (actor: Actor) =>
   may(actor, 'propose', { book: { kind: 'common' } }).ok ||
   actor.memberships.some(
     (m) => m.in === 'shop' && may(actor, 'propose', { book: { kind: 'shop', shopId: m.shopId } }).ok,

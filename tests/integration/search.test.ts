@@ -58,6 +58,11 @@ describe('search over the API', () => {
     expect(prose.text.slice(start, end)).toBe('woollen');
   });
 
+  it('does not add sheets for their prose where a measure was asked for that they do not have', async () => {
+    expect(numbers(await call(who('north.apprentice'), 'GET', '/search?q=12+Nm+woollen'))).toEqual(['P-0150']);
+    expect((await call(who('north.apprentice'), 'GET', '/search?q=12+Nm+woollen')).body.near).toBe(true);
+  });
+
   it('reads operators of the text index as words', async () => {
     for (const q of [
       '"',

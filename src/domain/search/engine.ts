@@ -67,7 +67,7 @@ export interface Wording {
 }
 
 export interface Search {
-  /** What is asked for besides measures and numbers, in every wording. */
+  /** What is asked for, in every wording; nothing where a measure is asked for, which prose is not searched for. */
   wordings(text: string): Wording[];
   query(text: string, filters?: Filters, options?: SearchOptions): SearchAnswer;
 }
@@ -168,11 +168,14 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
     );
 
   return {
-    wordings: (text) =>
-      rankOnce(text.slice(0, LONGEST_QUERY)).query.asked.map(({ groups, words, unfinished }) => ({
+    wordings(text) {
+      const { quantities, asked } = rankOnce(text.slice(0, LONGEST_QUERY)).query;
+      if (quantities.length > 0) return [];
+      return asked.map(({ groups, words, unfinished }) => ({
         anyOf: [words.join(' '), ...groups.flatMap((group) => phrases.names(group))],
         unfinished: unfinished && groups.length === 0,
-      })),
+      }));
+    },
     query(text, filters = NO_FILTERS, { limit = 20, units = 'metric', inProse = NO_PROSE } = {}) {
       const ranked = withProse(rankOnce(text.slice(0, LONGEST_QUERY)), inProse, placeOf);
       const { query, near } = ranked;

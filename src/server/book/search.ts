@@ -3,18 +3,33 @@ import { LRUCache } from 'lru-cache';
 import type { Actor } from '@/domain/people/may';
 import { packBook } from '@/domain/search/columns';
 import type { SearchDocument } from '@/domain/search/documents';
-import { createSearch, type Search, type SearchAnswer, type SearchOptions } from '@/domain/search/engine';
-import type { Filters } from '@/domain/search/filters';
+import {
+  createSearch,
+  type Search,
+  type SearchAnswer,
+  type SearchEngine,
+  type SearchOptions,
+} from '@/domain/search/engine';
+import type { Facets, Filters } from '@/domain/search/filters';
+import { type Suggestion, suggestions } from '@/domain/search/suggest';
 import { app } from '../context';
 import { Compressed } from './compressed';
 import { readableBooks } from './readable';
 import { searchProse } from './searchProse';
 import { readTrade } from './trade';
 
+/** What stands beside an empty field: what there is to choose from, and queries that find something. */
+export interface Overview {
+  engines: Pick<SearchEngine, 'key' | 'name'>[];
+  facets: Facets;
+  suggestions: Suggestion[];
+}
+
 /** What a set of books looks like to search, at one state of those books. */
 interface Held {
   etag: string;
   search: Search;
+  overview: Overview;
   index: Compressed;
 }
 
@@ -45,7 +60,13 @@ async function make(books: string[]): Promise<Held> {
   const book = { documents, ...trade };
   const body = Buffer.from(JSON.stringify(packBook(book)));
   const etag = `"${createHash('sha256').update(body).digest('hex').slice(0, 32)}"`;
-  return { etag, search: createSearch(book), index: new Compressed(body) };
+  const search = createSearch(book);
+  const overview = {
+    engines: trade.engines.map(({ key, name }) => ({ key, name })),
+    facets: search.query('', undefined, { limit: 0 }).facets,
+    suggestions: suggestions(book, search),
+  };
+  return { etag, search, overview, index: new Compressed(body) };
 }
 
 /** The search over what a person may see; made again when one of those books has changed. */
@@ -69,6 +90,10 @@ async function heldFor(actor: Actor): Promise<Held> {
 /** What the person's pages search on, as bytes of JSON (`PackedBook`) that can be had compressed. */
 export async function searchIndex(actor: Actor): Promise<{ etag: string; index: Compressed }> {
   return heldFor(actor);
+}
+
+export async function searchOverview(actor: Actor): Promise<Overview> {
+  return (await heldFor(actor)).overview;
 }
 
 /**

@@ -1,0 +1,13 @@
+import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
+import { useState } from 'react';
+import { Desk, type DeskProps } from './Desk';
+
+/** Look up, as an island: the server has made the same page already, so nothing moves when it comes to life. */
+export function LookUp(props: DeskProps) {
+  const [client] = useState(() => new QueryClient());
+  return (
+    <QueryClientProvider client={client}>
+      <Desk {...props} />
+    </QueryClientProvider>
+  );
+}
