@@ -1,3 +1,4 @@
+import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'astro/config';
 import mdx from '@astrojs/mdx';
 import node from '@astrojs/node';
@@ -18,6 +19,13 @@ export default defineConfig({
   devToolbar: { enabled: false },
   server: { port: Number(process.env.PORT ?? 4321), host: process.env.HOST ?? '127.0.0.1' },
   vite: {
+    // Astro reads these from tsconfig.json for pages, but not for the bundle of a web worker.
+    resolve: {
+      alias: {
+        '@': fileURLToPath(new URL('./src', import.meta.url)),
+        '@db': fileURLToPath(new URL('./db', import.meta.url)),
+      },
+    },
     plugins: [parseWorker()],
     ssr: { external: ['sqlite3', 'sequelize', 'umzug', '@node-rs/argon2'] },
   },
