@@ -7,8 +7,10 @@ export interface Suggestion {
   says: string;
 }
 
-const lastWord = (name: string): string | undefined =>
-  name.split(/[\s,]+/).filter((word) => /^\p{L}{4,}$/u.test(word))[0];
+const FASTENERS = /^(bolt|screw|stud|nut|plug)s?$/i;
+/** A word of a name that says which one it is. */
+const tellingWord = (name: string): string | undefined =>
+  name.split(/[\s,]+/).find((word) => /^\p{L}{4,}$/u.test(word) && !FASTENERS.test(word));
 const firstOf = <T, R>(items: readonly T[], make: (item: T) => R | undefined): R | undefined => {
   for (const item of items) {
     const made = make(item);
