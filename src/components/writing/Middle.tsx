@@ -8,8 +8,8 @@ import { WhatChanges } from './WhatChanges';
 
 /** The chosen part of the sheet. */
 export function Middle({ changes, id }: { changes: Comparison | undefined; id: string }) {
-  const { place, draft, baseLetter } = useDesk();
-  if (place === 'changes') return <WhatChanges changes={changes} id={id} base={baseLetter} />;
+  const { place, draft, baseLetter, problems } = useDesk();
+  if (place === 'changes') return <WhatChanges changes={changes} id={id} base={baseLetter} old={problems.length > 0} />;
   if (place === 'sheet') return <SheetFields />;
   if ('list' in place)
     return (
@@ -19,5 +19,5 @@ export function Middle({ changes, id }: { changes: Comparison | undefined; id: s
       </div>
     );
   const index = draft.steps.findIndex((step) => step.id === place.step);
-  return <StepEditor key={`${place.step}:${index}`} index={index} />;
+  return <StepEditor index={index} />;
 }

@@ -27,7 +27,7 @@ const isOpen = ({ state }: ProposalSummary) => state === 'draft' || state === 'r
 
 /** Throws a draft away, after a second press that says what it does. Works without a script. */
 const Discard = ({ proposal }: { proposal: ProposalSummary }) => (
-  <details className="relative">
+  <details className="relative sm:-my-3">
     <summary className="inline-flex min-h-touch cursor-pointer items-center text-small font-semibold text-petrol underline underline-offset-[3px]">
       Discard<span className="sr-only"> the draft of {proposal.title}</span>
     </summary>

@@ -16,7 +16,7 @@ export function NewProcedure({
 }) {
   const first = chosen ?? books[0]?.book;
   return (
-    <form method="post" className="leaf framed-sections max-w-[46rem]">
+    <form method="post" className="leaf framed-sections mx-auto max-w-[46rem]">
       <div className="px-5 py-6 sm:px-9">
         <h1 className="text-title">Write a new procedure</h1>
         <p className="mt-2 max-w-prose text-ink-2">

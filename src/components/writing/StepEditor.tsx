@@ -7,7 +7,7 @@ import { InsertRow } from './InsertRow';
 import { Prose } from './Prose';
 import { RemarksHere } from './Returned';
 import { useBox } from './useBox';
-import { useSteps } from './useSteps';
+import { fieldsKey, useSteps } from './useSteps';
 import { ValuesBehind } from './ValuesBehind';
 
 function Title({ index }: { index: number }) {
@@ -33,24 +33,33 @@ function Title({ index }: { index: number }) {
   );
 }
 
-/** Everything of one step: its order, what stands ahead of it, how it is done, the values it works to. */
-export function StepEditor({ index }: { index: number }) {
-  const { draft } = useDesk();
-  const { move, add, remove } = useSteps();
+/** The fields of one step. They are new ones for another step, so that the browser's undo stays with its own words. */
+function StepFields({ index, body }: { index: number; body: string }) {
   const area = useRef<HTMLTextAreaElement>(null);
-  const step = draft.steps[index];
-  if (!step) return null;
-  const last = draft.steps.length - 1;
   return (
-    <div className="flex flex-col gap-5">
-      <RemarksHere anchor={`step:${step.id}`} />
+    <>
       <Title index={index} />
       <CautionsAhead index={index} />
       <div className="flex flex-col gap-2.5">
         <Prose path={`steps.${index}.body`} label="How" area={area} />
         <InsertRow area={area} step={index} />
       </div>
-      <ValuesBehind body={step.body} />
+      <ValuesBehind body={body} />
+    </>
+  );
+}
+
+/** Everything of one step: its order, what stands ahead of it, how it is done, the values it works to. */
+export function StepEditor({ index }: { index: number }) {
+  const { draft } = useDesk();
+  const { move, add, remove } = useSteps();
+  const step = draft.steps[index];
+  if (!step) return null;
+  const last = draft.steps.length - 1;
+  return (
+    <div className="flex flex-col gap-5">
+      <RemarksHere anchor={`step:${step.id}`} />
+      <StepFields key={`${fieldsKey(step.id)}:${index}`} index={index} body={step.body} />
       <div className="-mx-2 flex flex-wrap gap-x-2">
         <Button
           kind="quiet"

@@ -30,10 +30,10 @@ function Torques({ keys }: { keys: readonly string[] }) {
       <caption className="sr-only">Torques of this step</caption>
       <thead>
         <tr>
-          <th scope="col" className={`${HEAD} w-[30%]`}>
+          <th scope="col" className={`${HEAD} w-[30%] max-sm:w-[38%]`}>
             Fastener
           </th>
-          <th scope="col" className={`${HEAD} w-[24%]`}>
+          <th scope="col" className={`${HEAD} w-[24%] max-sm:hidden`}>
             Thread, class
           </th>
           <th scope="col" className={HEAD}>
@@ -42,7 +42,7 @@ function Torques({ keys }: { keys: readonly string[] }) {
           <th scope="col" className={HEAD}>
             ±
           </th>
-          <th scope="col" className={`${HEAD} w-[19%]`}>
+          <th scope="col" className={`${HEAD} w-[19%] max-sm:w-[27%]`}>
             Condition
           </th>
         </tr>
@@ -57,7 +57,7 @@ function Torques({ keys }: { keys: readonly string[] }) {
             )).toSpliced(
               1,
               0,
-              <td key="thread" className={CELL}>
+              <td key="thread" className={`${CELL} max-sm:hidden`}>
                 <a
                   href="#torques"
                   className="block px-2.5 py-1.5 leading-snug text-ink"
@@ -70,9 +70,10 @@ function Torques({ keys }: { keys: readonly string[] }) {
           </tr>
           {boxesOf(entry['passes']).map((_, at) => (
             <tr key={at}>
-              <th scope="row" colSpan={2} className={`${CELL} px-2.5 text-left font-normal text-ink-2`}>
+              <th scope="row" className={`${CELL} px-2.5 text-left font-normal text-ink-2`}>
                 {PASSES[at]}
               </th>
+              <td className={`${CELL} max-sm:hidden`} />
               <td className={CELL}>
                 <BoxCell
                   list="torques"
@@ -105,7 +106,7 @@ function Limits({ keys }: { keys: readonly string[] }) {
       <caption className="sr-only">Limits of this step</caption>
       <thead>
         <tr>
-          <th scope="col" className={`${HEAD} w-[44%]`}>
+          <th scope="col" className={`${HEAD} w-[44%] max-sm:w-[36%]`}>
             What is measured
           </th>
           {['Least', 'Nominal', 'Most', 'Unit'].map((label) => (

@@ -66,10 +66,13 @@ const STEP_WORDS = { added: 'New', removed: 'Taken away', edited: 'Edited', same
 /** What the draft changes against its base, in place: values first, then the words of each step. */
 export function WhatChanges({
   changes,
+  old,
   id,
   base,
 }: {
   changes: Comparison | undefined;
+  /** It is of an earlier text, because a value of this one cannot be read. */
+  old: boolean;
   id: string;
   base: string | null;
 }) {
@@ -82,6 +85,9 @@ export function WhatChanges({
           <a href={`/proposals/${id}`}>Open it as the editor will see it</a>
         </p>
       </div>
+      {changes && old && (
+        <p className="heavy-edge px-4 py-2.5">As it was before what is to mend. The check says what that is.</p>
+      )}
       {!changes && <p>This shows once every value can be read; the check says what is to mend.</p>}
       {changes?.identical && <p>Nothing differs yet. Change a step or a value, then look here again.</p>}
       {changes && changes.values.length > 0 && <Values values={changes.values} />}

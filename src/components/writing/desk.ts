@@ -28,7 +28,8 @@ export interface Desk {
   /** The author asked what is wrong, so every field says it, touched or not. */
   tried: boolean;
   place: Place;
-  choose: (place: Place) => void;
+  /** `replace` leaves no trace in the browser's history. */
+  choose: (place: Place, how?: { replace: boolean }) => void;
   /** Goes to the field at a problem's path. */
   goTo: (path: string) => void;
   /** Puts the caret into the field with this id as soon as it is on the screen. */

@@ -54,7 +54,6 @@ export function useKeeping(proposal: Proposal, first: Words, latest: () => Words
       now.current.onFound(left);
     }
     // Once, when the page opens.
-    // eslint-disable-next-line react-hooks/exhaustive-deps
   }, []);
 
   useEffect(() => {

@@ -1,5 +1,6 @@
 import { useSyncExternalStore } from 'react';
 import type { Draft } from '@/domain/writing/draft';
+import type { Desk } from './desk';
 import { hashOfPlace, placeOfHash, type Place } from './places';
 
 const subscribe = (listener: () => void) => {
@@ -8,7 +9,7 @@ const subscribe = (listener: () => void) => {
 };
 
 /** The chosen place stands in the address, so that the browser's own back and a link from the sheet work. */
-export function usePlace(draft: Draft): { place: Place; choose: (place: Place) => void } {
+export function usePlace(draft: Draft): { place: Place; choose: Desk['choose'] } {
   const hash = useSyncExternalStore(
     subscribe,
     () => location.hash,
@@ -16,8 +17,11 @@ export function usePlace(draft: Draft): { place: Place; choose: (place: Place) =
   );
   return {
     place: placeOfHash(hash, draft),
-    choose: (place) => {
-      location.hash = hashOfPlace(place);
+    choose: (place, how) => {
+      if (how?.replace) {
+        history.replaceState(history.state, '', hashOfPlace(place));
+        dispatchEvent(new HashChangeEvent('hashchange'));
+      } else location.hash = hashOfPlace(place);
     },
   };
 }

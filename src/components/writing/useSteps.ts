@@ -2,6 +2,12 @@ import type { Step } from '@/domain/procedure/types';
 import { provisionalId, settledId } from '@/domain/writing/ids';
 import { useDesk, useDraftForm } from './desk';
 
+/** Keys of the fields of steps whose id was settled while they were on the screen: the fields must stay the same ones. */
+const keptKeys = new Map<string, string>();
+
+/** A React key for the fields of a step, which outlives the settling of its id. */
+export const fieldsKey = (id: string) => keptKeys.get(id) ?? id;
+
 /** Adding, moving, naming and deleting steps. A step's id is never changed once it has had a title. */
 export function useSteps() {
   const { getValues, setValue } = useDraftForm();
@@ -50,8 +56,9 @@ export function useSteps() {
       steps.map((other) => other.id),
     );
     if (id === step.id) return;
+    keptKeys.set(id, fieldsKey(step.id));
     change(steps.with(at, { ...step, id }));
-    choose({ step: id });
+    choose({ step: id }, { replace: true });
   };
 
   return { move, add, remove, settle };
