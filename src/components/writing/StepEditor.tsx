@@ -63,16 +63,16 @@ export function StepEditor({ index }: { index: number }) {
       <div className="-mx-2 flex flex-wrap gap-x-2">
         <Button
           kind="quiet"
-          disabled={index === 0}
-          className="text-small disabled:bg-transparent disabled:border-transparent"
+          aria-disabled={index === 0}
+          className="text-small aria-disabled:text-ink-2 aria-disabled:no-underline"
           onClick={() => move(index, index - 1)}
         >
           Move up
         </Button>
         <Button
           kind="quiet"
-          disabled={index === last}
-          className="text-small disabled:bg-transparent disabled:border-transparent"
+          aria-disabled={index === last}
+          className="text-small aria-disabled:text-ink-2 aria-disabled:no-underline"
           onClick={() => move(index, index + 1)}
         >
           Move down
