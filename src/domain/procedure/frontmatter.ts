@@ -1,12 +1,9 @@
 import { isAlias, isMap, isScalar, isSeq, LineCounter, parseDocument, visit, type Document } from 'yaml';
 import { forbiddenCharacter, forbiddenSentence } from './characters';
 import { fieldProblems, sentenceErrors } from './frontmatterProblems';
-import { problem, type Place } from './problems';
+import { problem, type Place, type PlaceOf } from './problems';
 import { Frontmatter } from './schema';
 import type { SourceProblem } from './types';
-
-/** Where the value at a path stands in the text; for a missing one, where its parent stands. */
-export type PlaceOf = (path: readonly (string | number)[], part?: 'value' | 'name') => Place;
 
 export type FrontmatterRead =
   { ok: true; frontmatter: Frontmatter; placeOf: PlaceOf } | { ok: false; errors: SourceProblem[] };

@@ -1,8 +1,7 @@
 import type { ZodErrorMap, ZodIssue } from 'zod';
 import { ENTRY_FIELDS, ENTRY_WORDS, HEAD_FIELDS, isListName } from './fields';
-import type { PlaceOf } from './frontmatter';
 import { nearest } from './nearest';
-import { MOST_SHOWN, problem } from './problems';
+import { MOST_SHOWN, problem, type PlaceOf } from './problems';
 import type { SourceProblem } from './types';
 
 const KINDS: Partial<Record<string, string>> = {

@@ -1,9 +1,8 @@
 import type { Nodes, RootContent } from 'mdast';
 import type { DraftBody } from './body';
 import { elementsIn, given } from './references';
-import { problem } from './problems';
+import { problem, type PlaceOf } from './problems';
 import { figuresInProse } from './proseFigures';
-import type { PlaceOf } from './frontmatter';
 import type { Frontmatter } from './schema';
 import type { SourceProblem } from './types';
 

@@ -9,6 +9,9 @@ export interface Place {
   column: number;
 }
 
+/** Where the value at a path stands in the text; for a missing one, where its parent stands. */
+export type PlaceOf = (path: readonly (string | number)[], part?: 'value' | 'name') => Place;
+
 export const START: Place = { line: 1, column: 1 };
 
 export function problem(place: Place | undefined, message: string, path?: string): SourceProblem {
