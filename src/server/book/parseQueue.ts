@@ -6,8 +6,10 @@ import { READY, startThread } from './parseThread';
 interface Options {
   /** Program of the thread. */
   url: URL;
-  /** Milliseconds a single text may take, once the thread runs, before the thread is ended. */
+  /** Milliseconds of processor time a single text may take, once the thread runs, before the thread is ended. */
   limit: number;
+  /** Milliseconds it may take at the most, however busy the machine is. */
+  patience: number;
   /** Milliseconds the thread may take to start. */
   startLimit: number;
   /** Texts that may wait for the thread. */
@@ -22,6 +24,9 @@ interface Waiting {
 const TOO_LONG =
   'This text takes too long to read. Look for very long tables, deep lists or brackets without end, and write it plainer.';
 const BROKE = 'This text could not be read. Write it plainer, or divide it into two procedures.';
+
+/** Share of `limit` that the whole process must have run before a text is held to be the cause. */
+const RAN = 0.75;
 
 const refused = (message: string): Parsed => ({ ok: false, errors: [{ line: 1, column: 1, message }] });
 
@@ -93,8 +98,18 @@ export class ParseQueue {
   #ask(): void {
     clearTimeout(this.#timer);
     if (!this.#current) return;
-    this.#timer = setTimeout(() => void this.#end(TOO_LONG), this.#options.limit);
+    this.#watch(process.cpuUsage(), this.#options.patience);
     this.#thread?.postMessage(this.#current.source);
+  }
+
+  /** On a machine that is busy with other work the clock says little about a text: a process that hardly ran gets longer. */
+  #watch(since: NodeJS.CpuUsage, patience: number): void {
+    const { limit } = this.#options;
+    this.#timer = setTimeout(() => {
+      const { user, system } = process.cpuUsage(since);
+      if ((user + system) / 1000 < limit * RAN && patience > limit) this.#watch(since, patience - limit);
+      else void this.#end(TOO_LONG);
+    }, limit);
   }
 
   #finish(parsed: Parsed): void {

@@ -4,12 +4,19 @@ import { parseWorkerUrl } from './parseWorkerUrl';
 
 /** Every text in bounds takes less than a tenth of this; the rest is for what nobody has thought of. */
 const LIMIT = 1500;
+const PATIENCE = 12_000;
 
 // Kept on globalThis: a development server loads this module again after each change, but one thread is enough.
 const held = globalThis as { matchmarkParser?: ParseQueue };
 
 const parser = () =>
-  (held.matchmarkParser ??= new ParseQueue({ url: parseWorkerUrl, limit: LIMIT, startLimit: 20_000, places: 40 }));
+  (held.matchmarkParser ??= new ParseQueue({
+    url: parseWorkerUrl,
+    limit: LIMIT,
+    patience: PATIENCE,
+    startLimit: 20_000,
+    places: 40,
+  }));
 
 /**
  * Parses foreign text in a thread with a limit of time, so that no text can hold up the server. Never evaluates.

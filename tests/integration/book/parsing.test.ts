@@ -12,7 +12,7 @@ const message = async (queue: ParseQueue, source: string) => {
 describe('the parse thread', () => {
   let queue: ParseQueue;
   const open = (options: Partial<ConstructorParameters<typeof ParseQueue>[0]> = {}) =>
-    (queue = new ParseQueue({ url, limit: 150, startLimit: 10_000, places: 3, ...options }));
+    (queue = new ParseQueue({ url, limit: 150, patience: 3_000, startLimit: 10_000, places: 3, ...options }));
   afterEach(() => queue.close());
 
   it('ends a text that takes too long, refuses it in a sentence, and reads the next one', async () => {
