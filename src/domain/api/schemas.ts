@@ -183,6 +183,12 @@ export const Remark = z.object({
   anchor: z.string().nullable(),
 });
 
+export const TrailEntry = z.object({
+  what: z.enum(['proposed', 'returned', 'declined', 'agreed', 'published']),
+  person: PersonRef,
+  at: z.string(),
+});
+
 export const ProposalSummary = z.object({
   id: Id,
   number: ProcedureNumber,
@@ -207,6 +213,7 @@ export const Proposal = ProposalSummary.extend({
   source: z.string(),
   agreed: z.array(Agreement),
   remarks: z.array(Remark),
+  trail: z.array(TrailEntry).describe('What became of it since it was first sent in, oldest first'),
   currentLetter: RevisionLetter.nullable(),
   publishedLetter: RevisionLetter.nullable().describe('Set once published'),
   may: z.object({
@@ -332,6 +339,8 @@ export type Sheet = z.infer<typeof Sheet>;
 export type SheetStep = z.infer<typeof SheetStep>;
 export type CheckResult = z.infer<typeof CheckResult>;
 export type ProposalSummary = z.infer<typeof ProposalSummary>;
+export type Remark = z.infer<typeof Remark>;
+export type TrailEntry = z.infer<typeof TrailEntry>;
 export type Proposal = z.infer<typeof Proposal>;
 export type DeskItem = z.infer<typeof DeskItem>;
 export type SavedProposal = z.infer<typeof SavedProposal>;

@@ -29,7 +29,17 @@ export function deskOrder<T extends DeskItem>(items: readonly T[]): T[] {
   );
 }
 
+/** What a proposal would do, in words: "Critical, because a torque changes: Cover bolt, and 1 more." */
+export function severityWords({ base, criticalReasons }: Pick<DeskItem, 'base' | 'criticalReasons'>): string {
+  const [first, ...others] = criticalReasons;
+  if (!first) return base === null ? 'A new sheet.' : 'An ordinary change to a sheet in use.';
+  return `Critical, because ${first}${others.length > 0 ? `, and ${others.length} more` : ''}.`;
+}
+
 const DAY = 86_400_000;
+/** Whole days since then; 0 on the day itself. Both ISO 8601 in UTC. */
+export const daysSince = (then: string, now: string): number =>
+  Math.max(0, Math.floor((Date.parse(now) - Date.parse(then)) / DAY));
 
 /**
  * Why a proposal stands where it stands: "Critical: a torque changes: Cover bolt. Waiting 3 days, 1 of 2 agreed."
@@ -37,11 +47,7 @@ const DAY = 86_400_000;
  * @param now ISO 8601 in UTC
  */
 export function deskReason(item: DeskItem, now: string): string {
-  const [first, ...others] = item.criticalReasons;
-  const more = others.length > 0 ? `, and ${others.length} more` : '';
-  const kind = item.base === null ? 'A new sheet.' : 'An ordinary change to a sheet in use.';
-  const what = first ? `Critical, because ${first}${more}.` : kind;
-  const days = Math.max(0, Math.floor((Date.parse(now) - Date.parse(item.proposedAt)) / DAY));
+  const days = daysSince(item.proposedAt, now);
   const waiting = days === 0 ? 'Sent in today' : `Waiting ${days} ${days === 1 ? 'day' : 'days'}`;
-  return `${what} ${waiting}, ${item.agreements} of ${agreementsNeeded(item.criticalReasons)} agreed.`;
+  return `${severityWords(item)} ${waiting}, ${item.agreements} of ${agreementsNeeded(item.criticalReasons)} agreed.`;
 }

@@ -5,6 +5,7 @@ import { agreementsNeeded, isStale, standing, tally } from '@/domain/review/rule
 import { bookRef, personColumn, personRef } from '../book/columns';
 import { app } from '../context';
 import type { Loaded } from './proposals';
+import { trailOf } from './trail';
 
 /** The title as far as the text can be read; a draft may be broken anywhere. */
 const titleOf = ({ head, parentTitle, source }: Loaded): string =>
@@ -71,6 +72,7 @@ export async function proposalOf(actor: Actor, proposal: Loaded): Promise<Propos
       stands: stands.has(g.personId) && g.hash === facts.hash && g.base === facts.base,
     })),
     remarks: remarks.map(({ person, ...remark }) => ({ ...remark, person: personRef(person) })),
+    trail: await trailOf(proposal.id),
     currentLetter: proposal.current,
     publishedLetter: proposal.letter,
     may: Object.fromEntries(acts.map((act) => [act, can[act].ok])) as Proposal['may'],

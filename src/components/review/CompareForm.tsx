@@ -1,0 +1,29 @@
+import { Button } from '@/components/ui/Button';
+import { dayOf } from '@/components/ui/day';
+import { Select } from '@/components/ui/Select';
+import type { RevisionSummary } from '@/domain/api/schemas';
+
+/** Which two revisions; a plain form, so that the comparison has an address. */
+export function CompareForm({
+  number,
+  revisions,
+  from,
+  to,
+}: {
+  number: string;
+  revisions: readonly RevisionSummary[];
+  from: string;
+  to: string;
+}) {
+  const options = revisions.map(({ letter, publishedAt }) => ({
+    value: letter,
+    label: `${letter}, ${dayOf(publishedAt)}`,
+  }));
+  return (
+    <form action={`/procedures/${number}/compare`} className="flex flex-wrap items-end gap-2.5 print:hidden">
+      <Select label="From" name="from" options={options} defaultValue={from} fieldClass="w-44" />
+      <Select label="To" name="to" options={options} defaultValue={to} fieldClass="w-44" />
+      <Button type="submit">Compare</Button>
+    </form>
+  );
+}

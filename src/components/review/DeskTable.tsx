@@ -1,0 +1,77 @@
+import { dayOf } from '@/components/ui/day';
+import { Cell, Row, Table, type Column } from '@/components/ui/Table';
+import type { DeskItem, ProposalSummary } from '@/domain/api/schemas';
+import { daysSince, severityWords } from '@/domain/review/desk';
+import { nextLetter } from '@/domain/revision/letters';
+
+const NEXT_WORDS: Record<DeskItem['next'], string> = {
+  agree: 'Yours to judge',
+  publish: 'Yours to publish',
+  wait: 'Waits for another editor',
+};
+
+/** "today", "1 day", "3 days". */
+const waiting = (since: string, now: string) => {
+  const days = daysSince(since, now);
+  return days === 0 ? 'today' : `${days} ${days === 1 ? 'day' : 'days'}`;
+};
+
+const letters = ({ base, stale }: ProposalSummary) =>
+  base === null ? 'new sheet' : stale ? `on ${base}, superseded` : `${base} to ${nextLetter(base)}`;
+
+/** Proposals that wait for review. Those of a desk say what the reader can do with them; one's own do not. */
+export function DeskTable({
+  caption,
+  columns,
+  items,
+  now,
+}: {
+  caption: string;
+  columns: readonly Column[];
+  items: readonly (ProposalSummary & { next?: DeskItem['next'] })[];
+  /** ISO 8601 in UTC. */
+  now: string;
+}) {
+  return (
+    <Table caption={caption} columns={columns}>
+      {items.map((item) => {
+        const since = item.proposedAt ?? item.updatedAt;
+        return (
+          <Row key={item.id}>
+            <Cell className="sm:w-[26%]">
+              <a href={`/proposals/${item.id}`} className="desk-title">
+                {item.title}
+              </a>
+              <span className="block whitespace-nowrap text-ink-2">
+                {item.number},{' '}
+                <span className={item.stale ? 'font-semibold text-ink' : undefined}>{letters(item)}</span>
+              </span>
+            </Cell>
+            <Cell label="By">
+              <span className="sm:block">{item.author.name}</span>
+              {item.author.shop && <span className="text-ink-2 max-sm:before:content-[',_']">{item.author.shop}</span>}
+            </Cell>
+            <Cell label="Book" className="whitespace-nowrap">
+              {item.book.name}
+            </Cell>
+            <Cell label="What it does" className="sm:w-[28%]">
+              <span className={item.critical ? 'font-semibold' : undefined}>{severityWords(item)}</span>
+            </Cell>
+            <Cell label="Agreed" className="whitespace-nowrap">
+              {item.agreements} of {item.agreementsNeeded}
+              {item.next && (
+                <span className="text-ink-2 max-sm:before:content-[',_'] sm:block">
+                  {item.stale ? 'Waits for its author' : NEXT_WORDS[item.next]}
+                </span>
+              )}
+            </Cell>
+            <Cell label="Waiting" className="whitespace-nowrap">
+              {waiting(since, now)}
+              <span className="text-ink-2 max-sm:before:content-[',_'] sm:block">since {dayOf(since)}</span>
+            </Cell>
+          </Row>
+        );
+      })}
+    </Table>
+  );
+}

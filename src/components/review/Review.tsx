@@ -1,0 +1,189 @@
+import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
+import { useCallback, useEffect, useMemo, useState } from 'react';
+import type { Proposal } from '@/domain/api/schemas';
+import type { StepPair } from '@/domain/revision/twoTexts';
+import type { ValueRow } from '@/domain/revision/valueRows';
+import { ActPanel, ReasonFields } from './ActPanel';
+import { keepReason, keptReason, type Written } from './keptReason';
+import { Panes } from './Panes';
+import { placesOf } from './places';
+import { PublishWords } from './PublishWords';
+import { RemarkNote, unplaced } from './Remarks';
+import { ReviewHead } from './ReviewHead';
+import { Trail } from './Trail';
+import { useReviewActs, type Trouble } from './useReviewActs';
+import { ValueTable } from './ValueTable';
+import { doneWords, type ReviewAct } from './words';
+
+export interface ReviewProps {
+  proposal: Proposal;
+  /** Id of whoever looks. */
+  me: string;
+  /** The letter that it has, or would get now. */
+  letter: string;
+  /** Null while the draft cannot be read; `fault` says where it stops. */
+  texts: { pairs: StepPair[]; values: ValueRow[] } | null;
+  fault: string | null;
+  /** The panel that the address asks for, with what was typed before. */
+  asked: Written | null;
+  /** How the act that made this page went, where no script ran. */
+  trouble: Trouble | null;
+  done: ReviewAct | null;
+}
+
+const onClient = new QueryClient();
+
+/** A proposal with all that can be done with it. Rendered by the server first; the script adds lines and acts in place. */
+export const Review = (props: ReviewProps) => (
+  <QueryClientProvider client={onClient}>
+    <Desk {...props} />
+  </QueryClientProvider>
+);
+
+function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: ReviewProps) {
+  const { proposal, act, pending, movedOn, ...acts } = useReviewActs(first);
+  const done = acts.done ?? came.done;
+  const trouble = acts.trouble ?? (acts.done ? null : came.trouble);
+  const [panel, setPanel] = useState<{ written: Written; at: string } | null>(
+    asked && { written: asked, at: asked.anchor },
+  );
+  const { id, may, remarks } = proposal;
+
+  useEffect(() => {
+    const kept = keptReason(id);
+    if (!kept || asked?.text) return undefined;
+    const frame = requestAnimationFrame(() => setPanel({ written: kept, at: '' }));
+    return () => cancelAnimationFrame(frame);
+  }, [id, asked]);
+
+  const write = (written: Written, at: string) => {
+    setPanel({ written, at });
+    keepReason(id, written);
+  };
+  const ask = (wanted: ReviewAct, anchor = '') =>
+    setPanel((before) => ({
+      written: { act: wanted, anchor, text: before?.written.text ?? '' },
+      at: wanted === 'publish' ? '' : anchor,
+    }));
+  const close = () => {
+    setPanel(null);
+    keepReason(id, null);
+    document.getElementById(`ask-${panel?.at ? panel.at : (panel?.written.act ?? '')}`)?.focus();
+  };
+
+  const { pairs = [], values = [] } = texts ?? {};
+  const steps = useMemo(() => new Set(pairs.map((pair) => pair.id)), [pairs]);
+  const paths = useMemo(() => new Set(values.map(({ path }) => path)), [values]);
+  const loose = unplaced(remarks, steps, paths);
+  const at = panel?.at ?? '';
+  // A panel whose place is not on the page stands in the head.
+  const placed = at.startsWith('step:') && steps.has(at.slice(5));
+  const heldOpen = [...remarks.map(({ anchor }) => anchor), at].flatMap((a) =>
+    a?.startsWith('step:') ? a.slice(5) : [],
+  );
+  const held = heldOpen.join('\n');
+  const keepOpen = useCallback((step: string) => held.split('\n').includes(step), [held]);
+
+  const form = panel && may[panel.written.act] && (
+    <ActPanel
+      key={panel.written.act + at}
+      title={
+        panel.written.act === 'publish'
+          ? `Publish as ${letter}`
+          : panel.written.act === 'return'
+            ? 'Return with reasons'
+            : 'Decline'
+      }
+      button={
+        panel.written.act === 'publish' ? `Publish as ${letter}` : panel.written.act === 'return' ? 'Return' : 'Decline'
+      }
+      act={panel.written.act}
+      version={first.version}
+      href={`/proposals/${id}`}
+      pending={pending === panel.written.act}
+      onCancel={close}
+      onSend={() => {
+        const { act: wanted, text, anchor } = panel.written;
+        act(wanted === 'publish' ? { act: wanted } : { act: wanted, reason: text, anchor: anchor || null }, () => {
+          setPanel(null);
+          keepReason(id, null);
+        });
+      }}
+    >
+      {panel.written.act === 'publish' ? (
+        <PublishWords proposal={proposal} letter={letter} me={me} />
+      ) : (
+        <ReasonFields
+          written={panel.written}
+          author={proposal.author.name}
+          places={placesOf(pairs, values)}
+          error={trouble?.act === panel.written.act ? trouble.field : null}
+          onWrite={(written) => write(written, panel.at)}
+        />
+      )}
+    </ActPanel>
+  );
+  const notes = (anchor: string) =>
+    remarks
+      .filter((remark) => remark.anchor === anchor)
+      .map((remark) => <RemarkNote key={remark.id} remark={remark} />);
+
+  return (
+    <div className="leaf framed-sections review">
+      <ReviewHead
+        proposal={proposal}
+        me={me}
+        letter={letter}
+        version={first.version}
+        fault={fault}
+        pending={pending}
+        said={done && doneWords(done, proposal, me)}
+        trouble={trouble}
+        movedOn={movedOn}
+        onAgree={() => act({ act: 'agree' })}
+        onAsk={ask}
+        panel={placed ? null : form}
+      >
+        {loose.map((remark) => (
+          <RemarkNote key={remark.id} remark={remark} />
+        ))}
+      </ReviewHead>
+      <Trail trail={proposal.trail} letter={proposal.publishedLetter} />
+      {texts && (
+        <>
+          <ValueTable
+            rows={values}
+            fresh={proposal.base === null}
+            names={{ old: 'Now', now: proposal.publishedLetter ? 'Published' : 'Proposed' }}
+            below={notes}
+          />
+          <Panes
+            pairs={pairs}
+            old={proposal.base === null ? null : { name: proposal.stale ? 'Base' : 'Published', letter: proposal.base }}
+            now={{ name: proposal.publishedLetter ? 'Published' : 'Proposed', letter }}
+            keepOpen={keepOpen}
+            below={(pair) => (
+              <>
+                {notes(`step:${pair.id}`)}
+                {placed && at === `step:${pair.id}` && form}
+                {may.return && steps.has(pair.id) && at !== `step:${pair.id}` && (
+                  <a
+                    id={`ask-step:${pair.id}`}
+                    href={`?give=return&at=${encodeURIComponent(`step:${pair.id}`)}#give`}
+                    className="return-here"
+                    onClick={(event) => {
+                      event.preventDefault();
+                      ask('return', `step:${pair.id}`);
+                    }}
+                  >
+                    Return here
+                  </a>
+                )}
+              </>
+            )}
+          />
+        </>
+      )}
+    </div>
+  );
+}

@@ -1,0 +1,84 @@
+import type { Proposal, Remark, TrailEntry } from '@/domain/api/schemas';
+import { dayOf } from '@/components/ui/day';
+
+/** What a reviewer does, each with the words of its button and of what was done. */
+export type ReviewAct = 'agree' | 'publish' | 'return' | 'decline';
+
+export const ACT_WORDS: Record<ReviewAct, { verb: string; doing: string }> = {
+  agree: { verb: 'Agree', doing: 'Agreeing' },
+  publish: { verb: 'Publish', doing: 'Publishing' },
+  return: { verb: 'Return', doing: 'Returning' },
+  decline: { verb: 'Decline', doing: 'Declining' },
+};
+
+/** Says what was done with the word of its button, once it is so; null as long as it is not. */
+export function doneWords(act: ReviewAct, proposal: Proposal, me: string): string | null {
+  const { state, publishedLetter, agreed, agreements, agreementsNeeded } = proposal;
+  switch (act) {
+    case 'agree':
+      return agreed.some((a) => a.person.id === me && a.stands)
+        ? `Agreed, ${agreements} of ${agreementsNeeded}.`
+        : null;
+    case 'publish':
+      return publishedLetter ? `Published as ${publishedLetter}.` : null;
+    case 'return':
+      return state === 'returned' ? `Returned to ${proposal.author.name}.` : null;
+    case 'decline':
+      return state === 'declined' ? 'Declined.' : null;
+  }
+}
+
+export const headingOf = ({ title, base }: Pick<Proposal, 'title' | 'base'>, letter: string) =>
+  base === null ? `${title}: new sheet` : `${title}: ${base} to ${letter}`;
+
+const NUMBERS = ['No', 'One', 'Two', 'Three'];
+
+/** "Two editors must agree, because a torque changes: Cover bolt, and 1 more." */
+export function needed({ agreementsNeeded, criticalReasons, book }: Proposal): string {
+  const [first, ...others] = criticalReasons;
+  const many = NUMBERS[agreementsNeeded] ?? String(agreementsNeeded);
+  const who = agreementsNeeded === 1 ? 'editor' : book.kind === 'common' ? 'editors' : 'people';
+  const why = first ? `, because ${first}${others.length > 0 ? `, and ${others.length} more` : ''}` : '';
+  return `${many} ${who} must agree${why}.`;
+}
+
+const names = (people: readonly string[]) =>
+  people.length < 2 ? people.join('') : `${people.slice(0, -1).join(', ')} and ${people.at(-1) ?? ''}`;
+
+/** Where a proposal stands that is not waiting for review, or that is one's own; null where its buttons say all. */
+export function standingWords(proposal: Proposal, me: string): string | null {
+  const { state, trail, agreed, publishedLetter, agreements, agreementsNeeded } = proposal;
+  const own = proposal.author.id === me;
+  const last = (what: TrailEntry['what']) => trail.filter((entry) => entry.what === what).at(-1);
+  const by = (entry: TrailEntry | undefined) =>
+    entry ? ` by ${entry.person.id === me ? 'you' : entry.person.name} on ${dayOf(entry.at)}` : '';
+  switch (state) {
+    case 'draft':
+      return 'A draft. Nobody else sees it until you send it in.';
+    case 'proposed': {
+      if (!own) return null;
+      const short = agreementsNeeded - agreements;
+      return `You wrote this; somebody else agrees to it. ${agreements} of ${agreementsNeeded} agreed: it waits for ${short < 1 ? 'an editor to publish it' : short === 1 ? 'one more to agree' : 'two to agree'}.`;
+    }
+    case 'returned':
+      return `Returned${by(last('returned'))}. ${own ? 'It waits for you: change it and send it in again.' : 'It waits for its author.'}`;
+    case 'declined':
+      return `Declined${by(last('declined'))}. It stays here as a record.`;
+    case 'published':
+    case 'superseded': {
+      const agreeing = names(agreed.filter((a) => a.stands).map((a) => (a.person.id === me ? 'you' : a.person.name)));
+      const published = last('published');
+      return `Published as ${publishedLetter ?? ''}${published ? ` on ${dayOf(published.at)}` : ''}${agreeing ? `, agreed by ${agreeing}` : ''}.${state === 'superseded' ? ' A later revision has taken its place.' : ''}`;
+    }
+  }
+}
+
+export const REMARK_WORDS: Record<Remark['kind'], string> = { returned: 'returned it', declined: 'declined it' };
+
+/** The trail with a second sending-in told as what it is. */
+export const trailWords = (trail: readonly TrailEntry[], letter: string | null) =>
+  trail.map((entry, i) => {
+    const again = entry.what === 'proposed' && trail.slice(0, i).some(({ what }) => what === 'proposed');
+    const what = again ? 'improved and proposed again' : entry.what;
+    return { ...entry, words: what === 'published' && letter ? `published as ${letter}` : what };
+  });

@@ -1,0 +1,57 @@
+import { GiveReason } from '@/domain/api/schemas';
+import type { Actor } from '@/domain/people/may';
+import { Refusal } from '../refusal';
+import { agree } from './agree';
+import { decline, returnToAuthor } from './giveBack';
+import { publish } from './publish';
+
+export const REVIEW_ACTS = ['agree', 'publish', 'return', 'decline'] as const;
+export type ReviewAct = (typeof REVIEW_ACTS)[number];
+export const isReviewAct = (name: unknown): name is ReviewAct => REVIEW_ACTS.some((act) => act === name);
+
+/** What a form of the review page came to. Where it was refused, all that was typed comes back. */
+export type ReviewOutcome =
+  | { kind: 'done'; act: ReviewAct }
+  | {
+      kind: 'refused';
+      act: ReviewAct;
+      status: number;
+      detail: string;
+      field: string | null;
+      typed: string;
+      anchor: string | null;
+    };
+
+/**
+ * Acts on a form of the review page: `act`, `version`, and `reason` and `anchor` where it gives the text back. Refusals
+ * that the reviewer can do something about come back as words; others are thrown.
+ */
+export async function actOnReviewForm(actor: Actor, id: string, form: FormData): Promise<ReviewOutcome> {
+  const text = (name: string) => String(form.get(name) ?? '');
+  const act = isReviewAct(text('act')) ? (text('act') as ReviewAct) : 'agree';
+  const version = /^\d{1,9}$/.test(text('version')) ? Number(text('version')) : null;
+  const typed = text('reason');
+  const anchor = text('anchor') || null;
+  const refused = (status: number, detail: string, field: string | null = null): ReviewOutcome => ({
+    kind: 'refused',
+    act,
+    status,
+    detail,
+    field,
+    typed,
+    anchor,
+  });
+  try {
+    if (act === 'agree') await agree(actor, id, version);
+    else if (act === 'publish') await publish(actor, id, version);
+    else {
+      const given = GiveReason.safeParse({ reason: typed, anchor });
+      if (!given.success) return refused(422, 'Nothing was sent yet.', given.error.issues[0]?.message ?? null);
+      await (act === 'return' ? returnToAuthor : decline)(actor, id, given.data, version);
+    }
+    return { kind: 'done', act };
+  } catch (error) {
+    if (error instanceof Refusal && [403, 409, 422].includes(error.status)) return refused(error.status, error.detail);
+    throw error;
+  }
+}
