@@ -76,6 +76,14 @@ const server = createServer((req, res) => {
 });
 
 server.requestTimeout = 30_000;
+server.on('error', (error) => {
+  console.error(
+    error.code === 'EADDRINUSE'
+      ? `Port ${port} is taken. Stop what listens there, or set PORT to another number.`
+      : `The server could not listen on ${host}:${port}: ${error.message}`,
+  );
+  process.exit(1);
+});
 server.listen(port, host, () => {
   console.log(`Matchmark answers at ${origin.origin}`);
 });
