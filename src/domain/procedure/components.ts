@@ -90,6 +90,19 @@ function worksheetFaults(given: Attributes, head: Frontmatter): AttributeFault[]
   return keys.flatMap((key) => missing(head.limits, key, 'limits'));
 }
 
+/** A component that names one entry of one list and nothing else. */
+const pointer = (
+  stands: Component['stands'],
+  list: 'cautions' | 'limits' | 'parts' | 'figures',
+  example: string,
+): Component => ({
+  stands,
+  holds: 'nothing',
+  attributes: { of: 'required' },
+  example,
+  faults: (given, head) => missing(head[list], given['of'], list),
+});
+
 export const COMPONENTS: Readonly<Record<string, Component>> = {
   Step: {
     stands: 'step',
@@ -98,13 +111,7 @@ export const COMPONENTS: Readonly<Record<string, Component>> = {
     example: '<Step id="draw-down" title="Draw the cover down">',
     faults: () => [],
   },
-  Caution: {
-    stands: 'block',
-    holds: 'nothing',
-    attributes: { of: 'required' },
-    example: '<Caution of="hot-oil" />',
-    faults: (given, head) => missing(head.cautions, given['of'], 'cautions'),
-  },
+  Caution: pointer('block', 'cautions', '<Caution of="hot-oil" />'),
   Torque: {
     stands: 'sentence',
     holds: 'nothing',
@@ -112,20 +119,8 @@ export const COMPONENTS: Readonly<Record<string, Component>> = {
     example: '<Torque of="cover-bolt" />',
     faults: torqueFaults,
   },
-  Limit: {
-    stands: 'sentence',
-    holds: 'nothing',
-    attributes: { of: 'required' },
-    example: '<Limit of="oil-level" />',
-    faults: (given, head) => missing(head.limits, given['of'], 'limits'),
-  },
-  Part: {
-    stands: 'sentence',
-    holds: 'nothing',
-    attributes: { of: 'required' },
-    example: '<Part of="cover-gasket" />',
-    faults: (given, head) => missing(head.parts, given['of'], 'parts'),
-  },
+  Limit: pointer('sentence', 'limits', '<Limit of="oil-level" />'),
+  Part: pointer('sentence', 'parts', '<Part of="cover-gasket" />'),
   Timer: {
     stands: 'sentence',
     holds: 'nothing',
@@ -133,13 +128,7 @@ export const COMPONENTS: Readonly<Record<string, Component>> = {
     example: '<Timer of="soak" />',
     faults: timerFaults,
   },
-  Figure: {
-    stands: 'block',
-    holds: 'nothing',
-    attributes: { of: 'required' },
-    example: '<Figure of="underside" />',
-    faults: (given, head) => missing(head.figures, given['of'], 'figures'),
-  },
+  Figure: pointer('block', 'figures', '<Figure of="underside" />'),
   Worksheet: {
     stands: 'block',
     holds: 'nothing',
