@@ -1,4 +1,5 @@
 import { type KeyboardEvent, useEffect, useRef, useState } from 'react';
+import { counted } from '@/components/sheet/words';
 import { Button } from '@/components/ui/Button';
 import { Kbd } from '@/components/ui/Kbd';
 import { Notice } from '@/components/ui/Notice';
@@ -9,7 +10,7 @@ import { Blank } from './Blank';
 import { type Choice, FilterPanel } from './FilterPanel';
 import { keepRecent } from './kept';
 import { NoHits } from './NoHits';
-import { ReadAs } from './ReadAs';
+import { Kept, ReadAs } from './ReadAs';
 import { Row } from './Row';
 import { type Given, useAnswer } from './useAnswer';
 import { useRecent } from './useRecent';
@@ -146,7 +147,7 @@ export function Desk(props: DeskProps) {
         </noscript>
         {blank ? (
           <p role="status" className="mt-3 min-h-[1.625rem] text-[1.0625rem] leading-relaxed text-ink-2">
-            {answer.total} sheets in the books you may read.{ready && ' Works without network.'}
+            {counted(answer.total, 'sheet')} in the books you may read. <Kept kept={ready} />
           </p>
         ) : (
           <ReadAs answer={answer} kept={ready} />

@@ -1,5 +1,6 @@
 import { useEffect, useRef } from 'react';
 import { Checkbox } from '@/components/ui/Checkbox';
+import { classes } from '@/components/ui/classes';
 import { SKILLS, SYSTEMS } from '@/domain/procedure/schema';
 import type { Facets, Filters } from '@/domain/search/filters';
 
@@ -48,11 +49,12 @@ export function FilterPanel({
   ];
   const set = filters.engine.length + filters.system.length + filters.fit.length;
   return (
-    <details ref={panel} className="look-up-filters max-lg:frame max-lg:px-4" suppressHydrationWarning>
+    <details ref={panel} className="look-up-filters group max-lg:frame max-lg:px-4" suppressHydrationWarning>
       <summary className="flex min-h-touch cursor-pointer items-center justify-between font-semibold lg:hidden">
-        <span>{set === 0 ? 'Filters' : `Filters, ${set} set`}</span>
-        <span aria-hidden="true" className="text-ink-2">
-          Engine, system, skill
+        <span>{set === 0 ? 'Filters: engine, system, skill' : `Filters, ${set} set`}</span>
+        <span className="font-medium text-ink-2 underline underline-offset-[3px]">
+          <span className="group-open:hidden">Show</span>
+          <span className="hidden group-open:inline">Hide</span>
         </span>
       </summary>
       <div className="grid gap-x-8 max-lg:border-t max-lg:border-hair max-lg:pb-3 max-lg:pt-3 sm:max-lg:grid-cols-3">
@@ -70,7 +72,11 @@ export function FilterPanel({
                     name={name}
                     value={key}
                     checked={chosen.includes(key)}
-                    className="!min-h-9 max-lg:!min-h-touch"
+                    className={classes(
+                      '!min-h-9 max-lg:!min-h-touch',
+                      // A long list of noughts is no help on a phone.
+                      count === 0 && !chosen.includes(key) && 'max-lg:hidden',
+                    )}
                     label={<span className={count === 0 ? 'text-ink-2' : undefined}>{said}</span>}
                     after={count}
                     onChange={({ target }) => {

@@ -12,7 +12,10 @@ export function Marked({ text, marks, from = 0 }: { text: string; marks: readonl
   if (at < text.length) parts.push({ text: text.slice(at), at, marked: false });
   return parts.map((part) =>
     part.marked ? (
-      <mark key={part.at} className="bg-wash px-[3px] text-ink shadow-[inset_0_-2.5px_theme(colors.petrol)]">
+      <mark
+        key={part.at}
+        className="box-decoration-clone bg-wash px-[3px] text-ink shadow-[inset_0_-2.5px_theme(colors.petrol)]"
+      >
         {part.text}
       </mark>
     ) : (

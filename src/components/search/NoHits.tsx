@@ -24,14 +24,14 @@ export function NoHits({
             : 'Fewer words find more. A number needs its unit: 10 N·m, 14 thou, 3 bar.'}
         </p>
         {filtered && (
-          <Button kind="plain" onClick={onClear}>
+          <Button kind="main" onClick={onClear}>
             Clear the filters
           </Button>
         )}
         {mayWrite ? (
           <p>
             Is the job done in your shop, and nobody wrote it down?{' '}
-            <ButtonLink href="/procedures/new" className="mt-3">
+            <ButtonLink href="/procedures/new" kind={filtered ? 'plain' : 'main'} className="mt-3">
               Write a new procedure
             </ButtonLink>
           </p>

@@ -7,6 +7,16 @@ function Read({ children }: { children: string }) {
   return <span className="text-ink underline decoration-petrol decoration-2 underline-offset-4">{children}</span>;
 }
 
+/** Holds its place before it is true, so that nothing moves when it becomes so. */
+export function Kept({ kept }: { kept: boolean }) {
+  return (
+    <span data-needs-script className={kept ? undefined : 'invisible'}>
+      {' '}
+      Works without network.
+    </span>
+  );
+}
+
 /** What the query was taken for, how many sheets there are, and whether it needs the network. */
 export function ReadAs({ answer, kept }: { answer: SearchAnswer; kept: boolean }) {
   const { readAs, total, near } = answer;
@@ -30,7 +40,7 @@ export function ReadAs({ answer, kept }: { answer: SearchAnswer; kept: boolean }
         : total === 0
           ? 'No sheet.'
           : `${counted(total, 'sheet')}.`}
-      {kept && <span> Works without network.</span>}
+      <Kept kept={kept} />
     </p>
   );
 }
