@@ -1,7 +1,7 @@
 import { useEffect, useRef } from 'react';
 import { Checkbox } from '@/components/ui/Checkbox';
 import { classes } from '@/components/ui/classes';
-import { SKILLS, SYSTEMS } from '@/domain/procedure/schema';
+import { SKILLS, SYSTEMS } from '@/domain/procedure/systems';
 import type { Facets, Filters } from '@/domain/search/filters';
 
 const SKILL_NAMES: Record<(typeof SKILLS)[number], string> = {

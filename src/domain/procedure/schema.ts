@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { SKILLS, SYSTEMS, type System } from './systems';
 import { UNITS_BY_QUANTITY, type Quantity, QUANTITIES } from '../measure/quantities';
 
 /**
@@ -8,26 +9,9 @@ import { UNITS_BY_QUANTITY, type Quantity, QUANTITIES } from '../measure/quantit
  * Body text never repeats a value that stands here: it points at it by `key`.
  */
 
-/** The part of the engine a procedure works on. Order is the order of the filter on screen. */
-export const SYSTEMS = {
-  sealing: 'Sealing',
-  lubrication: 'Lubrication',
-  fuel: 'Fuel and injection',
-  intake: 'Intake and breathing',
-  cooling: 'Cooling',
-  'valve-gear': 'Valve gear',
-  timing: 'Timing drive',
-  'cylinder-head': 'Cylinder head',
-  'short-block': 'Crank, rods and pistons',
-  electrical: 'Starting and glow',
-  driveline: 'Flywheel and clutch',
-  checks: 'Tests and running in',
-} as const;
-export type System = keyof typeof SYSTEMS;
+export { SKILLS, SYSTEMS, type System };
 const SYSTEM_KEYS = Object.keys(SYSTEMS) as [System, ...System[]];
 
-/** The least skilled person the sheet is written for. */
-export const SKILLS = ['apprentice', 'technician', 'senior'] as const;
 /** ANSI Z535.6 signal words, worst first. NOTICE never concerns a person. */
 export const SIGNAL_WORDS = ['DANGER', 'WARNING', 'CAUTION', 'NOTICE'] as const;
 /** State of the thread when the torque is applied; it sets the nut factor. */

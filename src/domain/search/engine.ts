@@ -1,4 +1,4 @@
-import { SYSTEMS } from '../procedure/schema';
+import { SYSTEMS } from '../procedure/systems';
 import type { SearchDocument } from './documents';
 import { bestValues, explain, type Matched } from './explain';
 import { type Facets, type Filters, NO_FILTERS, Sieve } from './filters';
@@ -9,7 +9,8 @@ import { type Query, readQuery } from './query';
 import { best, rank, type Ranked, withProse } from './ranking';
 import { createTokens } from './tokens';
 import { type UnitSystem, ValueIndex } from './values';
-import { Phrases, type VocabularyGroup } from './vocabulary';
+import { Phrases } from './phrases';
+import type { VocabularyGroup } from './vocabulary';
 
 /** An engine as far as search knows it. */
 export interface SearchEngine {

@@ -1,8 +1,8 @@
-import { SYSTEMS } from '../procedure/schema';
+import { SYSTEMS } from '../procedure/systems';
 import type { SearchDocument } from './documents';
 import { groupToken } from './tokens';
 import { nameOf, sayValue, type UnitSystem, type ValueMatch } from './values';
-import type { Phrases } from './vocabulary';
+import type { Phrases } from './phrases';
 import { fold, wordRuns } from './words';
 
 /** What matched, in words, and where in those words: `marks` are [start, end) places in `text`. */

@@ -1,4 +1,4 @@
-import { SKILLS, SYSTEMS, type System } from '../procedure/schema';
+import { SKILLS, SYSTEMS, type System } from '../procedure/systems';
 import type { SearchDocument } from './documents';
 
 /** What the list is narrowed to. Within one filter any of the values will do; the filters are all held to. */

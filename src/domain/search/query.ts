@@ -1,5 +1,5 @@
 import { readQuantities, type ReadQuantity } from './quantities';
-import type { Phrases } from './vocabulary';
+import type { Phrases } from './phrases';
 import { fold, plain, saysNothing, wordRuns, wordsOf } from './words';
 
 /** One thing asked for in words: a name the trade knows, or a plain word. */

@@ -1,4 +1,4 @@
-import type { Phrases } from './vocabulary';
+import type { Phrases } from './phrases';
 import { fold, saysNothing, wordRuns } from './words';
 
 /** The token that stands for a vocabulary group. No word can look like it. */
