@@ -28,6 +28,14 @@ export function ActPanel({ title, act, version, href, button, pending, onSend, o
     first?.focus({ preventScroll: true });
     form.current?.scrollIntoView({ block: 'nearest' });
   }, []);
+  useEffect(() => {
+    const element = form.current;
+    const onKey = (event: KeyboardEvent) => {
+      if (event.key === 'Escape') onCancel();
+    };
+    element?.addEventListener('keydown', onKey);
+    return () => element?.removeEventListener('keydown', onKey);
+  }, [onCancel]);
   return (
     <form
       ref={form}
@@ -39,9 +47,6 @@ export function ActPanel({ title, act, version, href, button, pending, onSend, o
       onSubmit={(event) => {
         event.preventDefault();
         onSend();
-      }}
-      onKeyDown={(event) => {
-        if (event.key === 'Escape') onCancel();
       }}
     >
       <input type="hidden" name="act" value={act} />

@@ -54,6 +54,7 @@ export function Acts({ proposal, me, version, pending, onAgree, onAsk }: ActsPro
             type="submit"
             kind={may.publish || !may.agree ? 'plain' : 'main'}
             disabled={!may.agree}
+            aria-describedby={may.agree ? undefined : 'stale'}
             pending={pending === 'agree'}
             pendingText={ACT_WORDS.agree.doing}
           >
@@ -67,7 +68,7 @@ export function Acts({ proposal, me, version, pending, onAgree, onAsk }: ActsPro
           Publish, {agreements} of {agreementsNeeded} agreed
         </Button>
       )}
-      {!may.publish && editor && whyNot['publish'] && (
+      {!may.publish && editor && !stale && (
         <p id="why-not" className="why-not">
           {whyNot['publish']}
         </p>

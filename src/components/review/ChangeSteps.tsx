@@ -1,9 +1,18 @@
-import { useCallback, useEffect, useRef, useState, type RefObject } from 'react';
+import { useCallback, useEffect, useState, type RefObject } from 'react';
 import { Button } from '@/components/ui/Button';
 import { Kbd } from '@/components/ui/Kbd';
 
 const typing = (target: EventTarget | null) =>
   target instanceof HTMLElement && (target.isContentEditable || /^(INPUT|TEXTAREA|SELECT)$/.test(target.tagName));
+
+/** From the middle of the screen, the first change below it or the last above it. */
+function beyondSight(targets: readonly HTMLElement[], by: 1 | -1): number {
+  const below = (target: HTMLElement) => target.getBoundingClientRect().top > innerHeight / 2 + 1;
+  const first = targets.findIndex(below);
+  if (by === 1) return first === -1 ? 0 : first;
+  const above = targets.findLastIndex((target) => target.getBoundingClientRect().top < innerHeight / 2 - 40);
+  return above === -1 ? targets.length - 1 : above;
+}
 
 /** How many changes there are, and the way from one to the next, also by the keys N and P. */
 export function ChangeSteps({
@@ -17,22 +26,24 @@ export function ChangeSteps({
   ids: readonly string[];
 }) {
   const [said, setSaid] = useState('');
-  const at = useRef(-1);
   const go = useCallback(
     (by: 1 | -1) => {
-      if (ids.length === 0) return;
-      at.current = at.current === -1 && by === -1 ? ids.length - 1 : (at.current + by + ids.length) % ids.length;
-      const id = CSS.escape(ids[at.current] ?? '');
       // The new text first; a removed step is only in the old one.
-      const [target] = ['new', 'old'].flatMap(
-        (side) => root.current?.querySelector<HTMLElement>(`[data-line="${id}"][data-side="${side}"]`) ?? [],
-      );
-      target?.focus({ preventScroll: true });
-      target?.scrollIntoView({
+      const targets = ids.flatMap((id) => {
+        const found = ['new', 'old'].map((side) =>
+          root.current?.querySelector<HTMLElement>(`[data-line="${CSS.escape(id)}"][data-side="${side}"]`),
+        );
+        return found.find((element) => element?.getClientRects().length) ?? [];
+      });
+      const here = targets.findIndex((target) => target === document.activeElement);
+      const next = here === -1 ? beyondSight(targets, by) : here + by;
+      const at = (next + targets.length) % targets.length;
+      targets[at]?.focus({ preventScroll: true });
+      targets[at]?.scrollIntoView({
         block: 'center',
         behavior: matchMedia('(prefers-reduced-motion: reduce)').matches ? 'auto' : 'smooth',
       });
-      setSaid(`Change ${at.current + 1} of ${ids.length}`);
+      setSaid(`Change ${at + 1} of ${targets.length}`);
     },
     [ids, root],
   );

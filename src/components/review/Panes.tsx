@@ -10,7 +10,8 @@ import { useMatchLines } from './useMatchLines';
 /** One of the two texts: what it is, and its letter. */
 export interface PaneName {
   name: string;
-  letter: string;
+  /** Null where it has none yet. */
+  letter: string | null;
 }
 
 const foldLine = (id: string) => `fold ${id}`;
@@ -65,7 +66,7 @@ export function Panes({
 
   const pane = (side: Side, { name, letter }: PaneName, list: readonly Section<StepPair>[]) => {
     const step = (pair: StepPair) => (
-      <PaneStep pair={pair} side={side} tag={`${letter}, ${name.toLowerCase()}`}>
+      <PaneStep pair={pair} side={side} tag={letter === null ? name : `${letter}, ${name.toLowerCase()}`}>
         {(side === 'new' || pair.kind === 'removed') && below?.(pair)}
       </PaneStep>
     );
@@ -73,10 +74,12 @@ export function Panes({
       <section className={`pane pane-${side}`} aria-labelledby={`pane-${side}`}>
         <div className="pane-cap">
           <h2 id={`pane-${side}`}>{name}</h2>
-          <span>
-            <span className="sr-only">Revision </span>
-            {letter}
-          </span>
+          {letter !== null && (
+            <span>
+              <span className="sr-only">Revision </span>
+              {letter}
+            </span>
+          )}
         </div>
         <ol data-pane>
           {list.map((section) => {

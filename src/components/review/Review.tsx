@@ -19,8 +19,8 @@ export interface ReviewProps {
   proposal: Proposal;
   /** Id of whoever looks. */
   me: string;
-  /** The letter that it has, or would get now. */
-  letter: string;
+  /** The letter that it has, or would get now; null where it stands on an older revision. */
+  letter: string | null;
   /** Null while the draft cannot be read; `fault` says where it stops. */
   texts: { pairs: StepPair[]; values: ValueRow[] } | null;
   fault: string | null;
@@ -31,14 +31,16 @@ export interface ReviewProps {
   done: ReviewAct | null;
 }
 
-const onClient = new QueryClient();
-
 /** A proposal with all that can be done with it. Rendered by the server first; the script adds lines and acts in place. */
-export const Review = (props: ReviewProps) => (
-  <QueryClientProvider client={onClient}>
-    <Desk {...props} />
-  </QueryClientProvider>
-);
+export function Review(props: ReviewProps) {
+  // One for each page that is made: the server must never show one person what it answered another.
+  const [client] = useState(() => new QueryClient());
+  return (
+    <QueryClientProvider client={client}>
+      <Desk {...props} />
+    </QueryClientProvider>
+  );
+}
 
 function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: ReviewProps) {
   const { proposal, act, pending, movedOn, ...acts } = useReviewActs(first);
@@ -89,13 +91,17 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
       key={panel.written.act + at}
       title={
         panel.written.act === 'publish'
-          ? `Publish as ${letter}`
+          ? `Publish as ${letter ?? ''}`
           : panel.written.act === 'return'
             ? 'Return with reasons'
             : 'Decline'
       }
       button={
-        panel.written.act === 'publish' ? `Publish as ${letter}` : panel.written.act === 'return' ? 'Return' : 'Decline'
+        panel.written.act === 'publish'
+          ? `Publish as ${letter ?? ''}`
+          : panel.written.act === 'return'
+            ? 'Return'
+            : 'Decline'
       }
       act={panel.written.act}
       version={first.version}
@@ -111,7 +117,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
       }}
     >
       {panel.written.act === 'publish' ? (
-        <PublishWords proposal={proposal} letter={letter} me={me} />
+        <PublishWords proposal={proposal} letter={letter ?? ''} me={me} />
       ) : (
         <ReasonFields
           written={panel.written}

@@ -55,7 +55,7 @@ function Ways({ proposal, me }: { proposal: Proposal; me: string }) {
 export interface ReviewHeadProps {
   proposal: Proposal;
   me: string;
-  letter: string;
+  letter: string | null;
   version: number;
   /** Where a draft stops being readable. */
   fault: string | null;
@@ -114,8 +114,8 @@ export function ReviewHead({
             <LoadAgain id={proposal.id} />
           </Notice>
         )}
-        {proposal.stale && (
-          <Notice title="Written on an older revision">
+        {proposal.stale && trouble?.status !== 409 && (
+          <Notice id="stale" title="Written on an older revision">
             <p>
               {proposal.base === null
                 ? `Revision ${proposal.currentLetter ?? ''} was published meanwhile.`

@@ -1,5 +1,5 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
-import { useState } from 'react';
+import { useRef, useState } from 'react';
 import { ask, Refused } from '@/components/api/ask';
 import type { Proposal } from '@/domain/api/schemas';
 import type { ReviewAct } from './words';
@@ -60,6 +60,8 @@ export function useReviewActs(first: Proposal) {
   const [judged, setJudged] = useState(first.version);
   const [done, setDone] = useState<ReviewAct | null>(null);
   const [trouble, setTrouble] = useState<Trouble | null>(null);
+  // Pressed twice before the page has drawn its answer to the first press is pressed once.
+  const running = useRef(false);
   const { mutate, isPending, variables } = useMutation({
     mutationFn: ({ act, reason, anchor, key }: Wanted & { key: string }) =>
       ask<Proposal>('POST', `${path}/${act}`, {
@@ -77,6 +79,9 @@ export function useReviewActs(first: Proposal) {
       setTrouble(troubleOf(act, error));
       void client.invalidateQueries({ queryKey: [path] });
     },
+    onSettled: () => {
+      running.current = false;
+    },
   });
   return {
     proposal,
@@ -86,7 +91,8 @@ export function useReviewActs(first: Proposal) {
     /** The proposal went on without us: its text on the screen may no longer be what stands. */
     movedOn: proposal.version !== judged,
     act: (wanted: Wanted, onDone?: () => void) => {
-      if (isPending) return;
+      if (running.current) return;
+      running.current = true;
       mutate({ ...wanted, key: crypto.randomUUID() }, onDone ? { onSuccess: onDone } : {});
     },
   };

@@ -28,8 +28,10 @@ export function doneWords(act: ReviewAct, proposal: Proposal, me: string): strin
   }
 }
 
-export const headingOf = ({ title, base }: Pick<Proposal, 'title' | 'base'>, letter: string) =>
-  base === null ? `${title}: new sheet` : `${title}: ${base} to ${letter}`;
+export function headingOf({ title, base }: Pick<Proposal, 'title' | 'base'>, letter: string | null): string {
+  if (base === null) return `${title}: new sheet`;
+  return letter === null ? `${title}: a change to ${base}` : `${title}: ${base} to ${letter}`;
+}
 
 const NUMBERS = ['No', 'One', 'Two', 'Three'];
 

@@ -1,4 +1,5 @@
 import type { WordRun } from './types';
+import { MEASURED } from './words';
 
 /** A stretch of text that is set alike. `changed`: struck out in the old text, new in the other. */
 export interface Span {
@@ -7,6 +8,8 @@ export interface Span {
   strong?: true;
   emphasis?: true;
   code?: true;
+  /** A number with its unit. */
+  value?: true;
   href?: string;
 }
 
@@ -40,7 +43,7 @@ function oneSide(runs: readonly WordRun[], side: Side): Marked {
 }
 
 type Look = Omit<Span, 'text'>;
-const LOOKS = ['changed', 'strong', 'emphasis', 'code', 'href'] as const;
+const LOOKS = ['changed', 'strong', 'emphasis', 'code', 'value', 'href'] as const;
 
 function push(spans: Span[], text: string, look: Look): void {
   const last = spans.at(-1);
@@ -63,6 +66,19 @@ function trimmed(spans: readonly Span[]): Span[] {
   }
   return out;
 }
+/** Numbers with their units are set as on a sheet. One that is changed in part stays as it is: it is told whole. */
+const measured = (spans: readonly Span[]): Span[] =>
+  spans.flatMap((span) => {
+    if (span.code) return [span];
+    const out: Span[] = [];
+    let done = 0;
+    for (const { 0: value, index } of span.text.matchAll(MEASURED)) {
+      if (index > done) out.push({ ...span, text: span.text.slice(done, index) });
+      out.push({ ...span, text: value, value: true });
+      done = index + value.length;
+    }
+    return done < span.text.length ? [...out, { ...span, text: span.text.slice(done) }] : out;
+  });
 const lookOf = ({ text: _, ...look }: Span): Look => look;
 
 const LINK = /\[((?:[^[\]\\]|\\.)*)\]\(([^\s()]*)(?: "[^"\n]*")?\)/y;
@@ -159,7 +175,8 @@ export function sideBlocks(runs: readonly WordRun[], side: Side): Block[] {
     const at = start;
     start += line.length + 1;
     if (!line.trim() || RULER.test(line)) continue;
-    const spans = (from: number, to = line.length) => trimmed(inline(marked, at + from, at + to, { changed: false }));
+    const spans = (from: number, to = line.length) =>
+      measured(trimmed(inline(marked, at + from, at + to, { changed: false })));
     const put = (kind: Block['kind'], cells: Span[][], more: Partial<Block> = {}) =>
       blocks.push({ kind, marker: '', markerChanged: false, depth: 0, cells, ...more });
     const [lead = '', indent = '', mark = ''] = ITEM.exec(line) ?? [];

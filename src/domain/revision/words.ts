@@ -22,6 +22,12 @@ const TOKENS = new RegExp(
   'gsu',
 );
 
+/** A number with its unit, "0.80 to 1.40 mm"; set apart where a text is shown. */
+export const MEASURED = new RegExp(
+  String.raw`(?<![\p{L}\p{N}])${NUMBER}(?: to ${NUMBER})?(?: ?±${DIGITS})? ?(?:${UNITS})(?![\p{L}\p{N}])`,
+  'gu',
+);
+
 /** The text cut into words, values, spaces and single marks; joined again they are the text. */
 export const tokensOf = (text: string): string[] => text.match(TOKENS) ?? [];
 

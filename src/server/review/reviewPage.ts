@@ -10,14 +10,15 @@ export interface ReviewPage {
   /** Null while the author's draft cannot be read; `fault` then says where it stops. */
   compared: ComparedProposal | null;
   fault: string | null;
-  /** The letter that it has, or would get if it were published next. */
-  letter: string;
+  /** The letter that it has, or would get if it were published next; null where it stands on an older revision. */
+  letter: string | null;
 }
 
 /** A proposal with what it changes. Refuses 404 like `readProposal`. */
 export async function readReview(actor: Actor, id: string): Promise<ReviewPage> {
   const proposal = await readProposal(actor, id);
-  const letter = proposal.publishedLetter ?? nextLetter(proposal.currentLetter);
+  const { publishedLetter, base, currentLetter } = proposal;
+  const letter = publishedLetter ?? (base === currentLetter ? nextLetter(currentLetter) : null);
   try {
     return { proposal, compared: await compareProposal(actor, id), fault: null, letter };
   } catch (error) {

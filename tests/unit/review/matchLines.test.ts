@@ -9,7 +9,8 @@ const place = (change: Partial<Place>): Place => ({
   now: 100,
   ...change,
 });
-const [WIDTH, line] = [84, (change: Partial<Place>) => matchLines([place(change)], 84)];
+const WIDTH = 84;
+const line = (change: Partial<Place>) => matchLines([place(change)], WIDTH);
 
 describe('the lines between two texts', () => {
   it('joins what did not change by a thin line on the half pixel, straight where both stand level', () => {
