@@ -27,12 +27,12 @@ function WillNeed({ changes, base }: { changes: Comparison | undefined; base: st
 
 /** Sentences with the way to the field that each speaks of. */
 function Problems({ problems }: { problems: readonly SourceProblem[] }) {
-  const { goTo } = useDesk();
+  const { goTo, asText } = useDesk();
   return (
     <ul className="flex flex-col gap-2">
       {problems.slice(0, 12).map((p) => (
         <li key={`${p.path} ${p.line} ${p.message}`}>
-          {p.path ? (
+          {p.path && !asText ? (
             <button
               type="button"
               className="text-left leading-snug text-ink underline decoration-rule underline-offset-[3px] hover:decoration-ink"
@@ -51,7 +51,7 @@ function Problems({ problems }: { problems: readonly SourceProblem[] }) {
 }
 
 function Check({ checked }: { checked: Checked }) {
-  const { draft } = useDesk();
+  const { draft, asText } = useDesk();
   const { problems, notices, checking, failed } = checked;
   if (problems.length > 0)
     return (
@@ -64,7 +64,7 @@ function Check({ checked }: { checked: Checked }) {
   return (
     <>
       <p>
-        {draft.steps.length} steps, every value can be read.{' '}
+        {asText ? 'Every value can be read.' : `${draft.steps.length} steps, every value can be read.`}{' '}
         {notices.length === 0 && !checking && 'Cautions stand before their steps. Nothing missing.'}
       </p>
       {notices.length > 0 && (
@@ -81,7 +81,9 @@ function Check({ checked }: { checked: Checked }) {
 export function Checks({ checked, changes }: { checked: Checked; changes: Comparison | undefined }) {
   const { baseLetter } = useDesk();
   return (
-    <div className="flex flex-col gap-6 leading-snug">
+    // It scrolls by itself where it is taller than the screen, so the keyboard must reach it.
+    // eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex
+    <div className="flex flex-col gap-6 leading-snug" tabIndex={0} role="region" aria-label="Checks">
       <section>
         <Title>This will need</Title>
         <WillNeed changes={changes} base={baseLetter} />

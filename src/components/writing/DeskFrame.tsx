@@ -168,9 +168,9 @@ export function DeskFrame(props: Props) {
             )}
           </p>
         </section>
-        <aside aria-label="Checks" className="writing-checks">
+        <div className="writing-checks">
           <Checks checked={checked} changes={changes} />
-        </aside>
+        </div>
       </div>
     </div>
   );

@@ -67,7 +67,7 @@ function columnsOf(view: MineView): Column[] {
     sorted('state', 'State', false),
     { key: 'waits', label: 'Waits for' },
     sorted('updated', 'Changed', true),
-    { key: 'acts', label: '' },
+    { key: 'discard', label: 'Discard', align: 'right' },
   ];
 }
 

@@ -40,15 +40,17 @@ export function PlainWriting({
       </div>
       {kept && !refused && <p className="px-5 py-3 font-semibold sm:px-9">Draft kept.</p>}
       {refused && (
-        <Notice title="Not accepted" className="border-x-0 border-b-0 sm:px-9">
+        <Notice title="Not accepted" className="border-b-0 border-r-0 px-5 py-4 sm:px-9">
           <p>{refused.refusal.detail}</p>
           <ul>
-            {refused.refusal.errors.map(({ path, message, line }) => (
-              <li key={`${path} ${message}`}>
-                {line ? `Line ${line}: ` : ''}
-                {message}
-              </li>
-            ))}
+            {refused.refusal.errors
+              .filter(({ message }) => message !== refused.refusal.detail)
+              .map(({ path, message, line }) => (
+                <li key={`${path} ${message}`}>
+                  {line ? `Line ${line}: ` : ''}
+                  {message}
+                </li>
+              ))}
           </ul>
         </Notice>
       )}

@@ -88,6 +88,7 @@ export function Session({ proposal, source, base, current, engines, drawings }: 
     drawings,
     problems: checked.problems,
     remarks: proposal.state === 'returned' ? proposal.remarks.filter((remark) => remark.kind === 'returned') : [],
+    asText: text !== null,
     tried,
     place,
     choose,

@@ -26,75 +26,75 @@ function Torques({ keys }: { keys: readonly string[] }) {
   const { draft } = useDesk();
   const rows = draft.torques.flatMap((entry, index) => (keys.includes(entry['key'] ?? '') ? [{ entry, index }] : []));
   return (
-    <table className="w-full table-fixed border-collapse border-frame border-ink bg-white">
-      <caption className="sr-only">Torques of this step</caption>
-      <thead>
-        <tr>
-          <th scope="col" className={`${HEAD} w-[30%] max-sm:w-[38%]`}>
-            Fastener
-          </th>
-          <th scope="col" className={`${HEAD} w-[24%] max-sm:hidden`}>
-            Thread, class
-          </th>
-          <th scope="col" className={HEAD}>
-            N·m
-          </th>
-          <th scope="col" className={HEAD}>
-            ±
-          </th>
-          <th scope="col" className={`${HEAD} w-[19%] max-sm:w-[27%]`}>
-            Condition
-          </th>
-        </tr>
-      </thead>
-      {rows.map(({ entry, index }) => (
-        <tbody key={`${entry['key']}:${index}`}>
+    <div>
+      <table className="w-full table-fixed border-collapse border-frame border-ink bg-white">
+        <caption className="sr-only">Torques of this step</caption>
+        <thead>
           <tr>
-            {TORQUE_FIELDS.map((field) => (
-              <td key={field} className={CELL}>
-                <Cell list="torques" index={index} entry={entry} column={column('torques', field)} />
-              </td>
-            )).toSpliced(
-              1,
-              0,
-              <td key="thread" className={`${CELL} max-sm:hidden`}>
-                <a
-                  href="#torques"
-                  className="block px-2.5 py-1.5 leading-snug text-ink"
-                  title="Thread, order and the rest of it"
-                >
-                  {threadOf(entry) || 'Fill in'}
-                </a>
-              </td>,
-            )}
+            <th scope="col" className={`${HEAD} w-[30%] max-sm:w-[38%]`}>
+              Fastener
+            </th>
+            <th scope="col" className={`${HEAD} w-[24%] max-sm:hidden`}>
+              Thread, class
+            </th>
+            <th scope="col" className={HEAD}>
+              N·m
+            </th>
+            <th scope="col" className={HEAD}>
+              ±
+            </th>
+            <th scope="col" className={`${HEAD} w-[19%] max-sm:w-[27%]`}>
+              Condition
+            </th>
           </tr>
-          {boxesOf(entry['passes']).map((_, at) => (
-            <tr key={at}>
-              <th scope="row" className={`${CELL} px-2.5 text-left font-normal text-ink-2`}>
-                {PASSES[at]}
-              </th>
-              <td className={`${CELL} max-sm:hidden`} />
-              <td className={CELL}>
-                <BoxCell
-                  list="torques"
-                  index={index}
-                  entry={entry}
-                  field="passes"
-                  at={at}
-                  label={`${PASSES[at]}, N·m`}
-                />
-              </td>
-              <td colSpan={2} className={CELL} />
+        </thead>
+        {rows.map(({ entry, index }) => (
+          <tbody key={`${entry['key']}:${index}`}>
+            <tr>
+              {TORQUE_FIELDS.map((field) => (
+                <td key={field} className={CELL}>
+                  <Cell list="torques" index={index} entry={entry} column={column('torques', field)} />
+                </td>
+              )).toSpliced(
+                1,
+                0,
+                <td key="thread" className={`${CELL} max-sm:hidden`}>
+                  <a
+                    href="#torques"
+                    className="block px-2.5 py-1.5 leading-snug text-ink"
+                    title="Thread, order and the rest of it"
+                  >
+                    {threadOf(entry) || 'Fill in'}
+                  </a>
+                </td>,
+              )}
             </tr>
-          ))}
-          <tr>
-            <td colSpan={5} className="p-0">
-              <RowProblems list="torques" index={index} fields={[...TORQUE_FIELDS, 'passes']} />
-            </td>
-          </tr>
-        </tbody>
+            {boxesOf(entry['passes']).map((_, at) => (
+              <tr key={at}>
+                <th scope="row" className={`${CELL} px-2.5 text-left font-normal text-ink-2`}>
+                  {PASSES[at]}
+                </th>
+                <td className={`${CELL} max-sm:hidden`} />
+                <td className={CELL}>
+                  <BoxCell
+                    list="torques"
+                    index={index}
+                    entry={entry}
+                    field="passes"
+                    at={at}
+                    label={`${PASSES[at]}, N·m`}
+                  />
+                </td>
+                <td colSpan={2} className={CELL} />
+              </tr>
+            ))}
+          </tbody>
+        ))}
+      </table>
+      {rows.map(({ entry, index }) => (
+        <RowProblems key={entry['key']} list="torques" index={index} fields={[...TORQUE_FIELDS, 'passes']} />
       ))}
-    </table>
+    </div>
   );
 }
 

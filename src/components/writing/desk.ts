@@ -25,6 +25,8 @@ export interface Desk {
   problems: readonly SourceProblem[];
   /** Why it was returned; empty unless it was. */
   remarks: readonly z.infer<typeof Remark>[];
+  /** The whole sheet is edited as text, so there are no fields to go to. */
+  asText: boolean;
   /** The author asked what is wrong, so every field says it, touched or not. */
   tried: boolean;
   place: Place;
