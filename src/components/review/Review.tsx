@@ -13,7 +13,7 @@ import { ReviewHead } from './ReviewHead';
 import { Trail } from './Trail';
 import { useReviewActs, type Trouble } from './useReviewActs';
 import { ValueTable } from './ValueTable';
-import { doneWords, type ReviewAct } from './words';
+import { doneWords, type Done } from './words';
 
 export interface ReviewProps {
   proposal: Proposal;
@@ -28,7 +28,7 @@ export interface ReviewProps {
   asked: Written | null;
   /** How the act that made this page went, where no script ran. */
   trouble: Trouble | null;
-  done: ReviewAct | null;
+  done: Done | null;
 }
 
 /** A proposal with all that can be done with it. Rendered by the server first; the script adds lines and acts in place. */

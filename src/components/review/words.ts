@@ -11,10 +11,15 @@ export const ACT_WORDS: Record<ReviewAct, { verb: string; doing: string }> = {
   decline: { verb: 'Decline', doing: 'Declining' },
 };
 
+/** What may just have been done when the page is shown: an act of review, or the author's own sending-in. */
+export type Done = ReviewAct | 'proposed';
+
 /** Says what was done with the word of its button, once it is so; null as long as it is not. */
-export function doneWords(act: ReviewAct, proposal: Proposal, me: string): string | null {
+export function doneWords(act: Done, proposal: Proposal, me: string): string | null {
   const { state, publishedLetter, agreed, agreements, agreementsNeeded } = proposal;
   switch (act) {
+    case 'proposed':
+      return state === 'proposed' ? 'Proposed.' : null;
     case 'agree':
       return agreed.some((a) => a.person.id === me && a.stands)
         ? `Agreed, ${agreements} of ${agreementsNeeded}.`

@@ -17,7 +17,7 @@ import { StaleBase } from './StaleBase';
 import { TextMode } from './TextMode';
 import type { Checked } from './useCheck';
 import type { Refusal } from './useProposing';
-import type { Standing } from './WritingDesk';
+import type { Standing } from './writingProps';
 
 interface Props {
   proposal: Proposal;

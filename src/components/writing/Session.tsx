@@ -14,7 +14,7 @@ import { useKeeping } from './useKeeping';
 import { useChanges } from './useNeeds';
 import { focusSoon, usePlace } from './usePlace';
 import { useProposing } from './useProposing';
-import type { WritingProps } from './WritingDesk';
+import type { WritingProps } from './writingProps';
 import { REASON_ID } from './ReasonField';
 
 /** One sitting at the desk: the form, what keeps it, what checks it, and what may be done with it. */

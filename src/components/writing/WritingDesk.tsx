@@ -1,25 +1,7 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
 import { useState } from 'react';
-import type { Proposal } from '@/domain/api/schemas';
-import type { Drawing } from './desk';
 import { Session } from './Session';
-
-/** A published text with its letter. */
-export interface Standing {
-  letter: string;
-  source: string;
-}
-
-export interface WritingProps {
-  proposal: Proposal;
-  /** The draft's text, in the shape of the form wherever it can be read. */
-  source: string;
-  base: Standing | null;
-  /** What is published now, where that is no longer the base. */
-  current: Standing | null;
-  engines: readonly { key: string; name: string }[];
-  drawings: readonly Drawing[];
-}
+import type { WritingProps } from './writingProps';
 
 /** The desk where a proposal is written: the whole island. */
 export function WritingDesk(props: WritingProps) {
