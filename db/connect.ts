@@ -1,4 +1,4 @@
-import { QueryTypes, Sequelize, Transaction } from 'sequelize';
+import { ConnectionError, QueryTypes, Sequelize, Transaction } from 'sequelize';
 import sqlite3 from 'sqlite3';
 import type { Database } from './database';
 import { migrate } from './migrations/migrate';
@@ -101,7 +101,8 @@ export async function openDatabase(file: string, { now = isoNow }: OpenOptions =
     await sequelize.query('PRAGMA journal_mode = WAL');
     await migrate(db);
   } catch (error) {
-    await sequelize.close();
+    // A connection that never opened never finishes closing either.
+    if (!(error instanceof ConnectionError)) await sequelize.close();
     throw storageFault(error);
   }
   return db;

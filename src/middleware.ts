@@ -21,6 +21,8 @@ const refusals = defineMiddleware(async (context, next) => {
     const refusal = asRefusal(error);
     if (refusal.status >= 500) console.error(refusal.cause);
     if (isApi(context.url.pathname)) return problemResponse(refusal, crypto.randomUUID());
+    // The error page itself failed: asking for it again would go round for ever.
+    if (context.locals.refusal) return new Response(refusal.detail, { status: refusal.status });
     context.locals.refusal = refusal;
     const page = await context.rewrite(`/${[403, 404].includes(refusal.status) ? refusal.status : 500}`);
     return new Response(page.body, {
@@ -35,7 +37,8 @@ const guard = defineMiddleware(async (context, next) => {
   const { locals, url, cookies } = context;
   locals.actor ??= NOBODY;
   locals.person ??= null;
-  if (needsNoBook(url.pathname)) return next();
+  // An error page is shown with what is known already; the book may be what failed.
+  if (locals.refusal || needsNoBook(url.pathname)) return next();
   const { config } = await startOnce();
   if (!comesFromUs(context.request, [url.origin, ...(config.origin ? [config.origin] : [])]))
     throw forbidden('This was asked for by a page of another site.');
