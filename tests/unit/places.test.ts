@@ -1,0 +1,29 @@
+import { describe, expect, it } from 'vitest';
+import { initialsOf, placesFor } from '@/layouts/places';
+import type { Membership } from '@/domain/people/may';
+
+const seen = (memberships: Membership[], shops: string[] = []) =>
+  placesFor({ personId: 'p', memberships }, shops).map(({ key }) => key);
+
+describe('the navigation', () => {
+  it('shows an apprentice only what an apprentice may use', () => {
+    expect(seen([{ in: 'shop', shopId: 's', role: 'apprentice' }])).toEqual(['look-up', 'handbook']);
+  });
+  it('shows a technician their proposals and an editor the review desk', () => {
+    expect(seen([{ in: 'shop', shopId: 's', role: 'technician' }])).toEqual(['look-up', 'proposals', 'handbook']);
+    expect(seen([{ in: 'common', role: 'editor' }])).toContain('review-desk');
+  });
+  it('shows a senior technician the review desk only where the shop has one editor', () => {
+    const senior: Membership[] = [{ in: 'shop', shopId: 's', role: 'senior' }];
+    expect(seen(senior)).not.toContain('review-desk');
+    expect(seen(senior, ['s'])).toContain('review-desk');
+  });
+});
+
+describe('initials', () => {
+  it.each([
+    ['Rowan Achterberg', 'RA'],
+    ['  Anna van der Berg ', 'AB'],
+    ['Cher', 'C'],
+  ])('of %s are %s', (name, initials) => expect(initialsOf(name)).toBe(initials));
+});
