@@ -13,7 +13,7 @@ import { ReviewHead } from './ReviewHead';
 import { Trail } from './Trail';
 import { useReviewActs, type Trouble } from './useReviewActs';
 import { ValueTable } from './ValueTable';
-import { doneWords, type Done } from './words';
+import { doneWords, type Done, type ReviewAct } from './words';
 
 export interface ReviewProps {
   proposal: Proposal;
