@@ -1,0 +1,104 @@
+import type { Page } from '@playwright/test';
+import { readProposal } from './support/api';
+import { alive, expect, test } from './support/book';
+import { WritingDesk } from './support/writing';
+
+/** Presses Tab until something with that name has the focus; every stop on the way must show where it is. */
+async function tabTo(page: Page, name: RegExp, { most = 60, key = 'Tab' } = {}): Promise<void> {
+  const passed: string[] = [];
+  for (let press = 0; press < most; press += 1) {
+    await page.keyboard.press(key);
+    const stop = await page.evaluate(() => {
+      const at = document.activeElement as HTMLElement | null;
+      if (!at || at === document.body) return { name: '', seen: true };
+      const labels =
+        'labels' in at ? [...((at as HTMLInputElement).labels ?? [])].map((l) => l.innerText).join(' ') : '';
+      const style = getComputedStyle(at);
+      const after = getComputedStyle(at, '::after');
+      const outlined = [style, after].some((s) => s.outlineStyle !== 'none' && parseFloat(s.outlineWidth) > 0);
+      const box = at.getBoundingClientRect();
+      return {
+        name: (at.getAttribute('aria-label') ?? (labels || at.innerText || at.id)).trim(),
+        seen: (outlined || style.boxShadow !== 'none') && box.bottom > 0 && box.top < innerHeight,
+      };
+    });
+    passed.push(stop.name);
+    expect(stop.seen, `the focus shows at "${stop.name}"`).toBe(true);
+    if (name.test(stop.name)) return;
+  }
+  throw new Error(`No stop called ${String(name)} after ${most} presses; there were: ${passed.join(' | ')}`);
+}
+
+test('without a pointer: sign in, look up, read, propose', async ({ as }) => {
+  test.setTimeout(120_000);
+  const page = await as(null);
+  await page.goto('/');
+  await tabTo(page, /Greta Halvorsen/);
+  await page.keyboard.press('Enter');
+  await expect(page).toHaveURL('/');
+  await alive(page);
+
+  await page.keyboard.press('/');
+  await page.keyboard.type('starter motor remove');
+  const hits = page.getByRole('list', { name: 'Sheets' }).getByRole('link');
+  await expect(hits.first()).toContainText('tarter');
+  await page.keyboard.press('Escape');
+  await expect(page.getByRole('searchbox')).toHaveValue('');
+  await page.keyboard.type('P-0163');
+  await expect(hits).toHaveCount(1);
+  await page.keyboard.press('ArrowDown');
+  await expect(hits.first()).toBeFocused();
+  await page.keyboard.press('ArrowUp');
+  await expect(page.getByRole('searchbox')).toBeFocused();
+  await page.keyboard.press('Enter');
+  await expect(page).toHaveURL('/procedures/P-0163');
+
+  await page.keyboard.press('Tab');
+  await expect(page.getByRole('link', { name: 'Skip to the page' })).toBeFocused();
+  await page.keyboard.press('Enter');
+  await tabTo(page, /^Propose a change$/, { most: 8 });
+  await page.keyboard.press('Enter');
+  const desk = new WritingDesk(page);
+  await desk.ready();
+
+  await tabTo(page, /^Step 1, what to do$/, { most: 90 });
+  await page.keyboard.press('End');
+  await page.keyboard.type(', and say so');
+  await expect(desk.stepTitle(1)).toHaveValue(/, and say so$/);
+  await tabTo(page, /^Why this is better, for the editor/);
+  await page.keyboard.type('Somebody else had a hand in the engine bay.');
+  await desk.kept();
+  await tabTo(page, /^Propose$/, { key: 'Shift+Tab', most: 120 });
+  await page.keyboard.press('Enter');
+  await expect(page).toHaveURL(/\?done=proposed$/);
+  expect(await readProposal(page, desk.id)).toMatchObject({
+    state: 'proposed',
+    reason: 'Somebody else had a hand in the engine bay.',
+  });
+});
+
+test('steps are moved by keyboard, and a reader hears where to', async ({ as }) => {
+  const page = await as('northSenior');
+  await page.goto('/procedures/P-0160');
+  await page.getByRole('button', { name: 'Propose a change' }).click();
+  const desk = new WritingDesk(page);
+  await desk.ready();
+  const steps = page.getByRole('navigation', { name: 'Parts of the sheet' }).getByRole('listitem');
+  const title = async (at: number) => (await steps.nth(at).getByRole('link').innerText()).replace(/^\d+\s*/, '');
+  const [first, second] = [await title(0), await title(1)];
+  await steps
+    .nth(0)
+    .getByRole('button', { name: /^Move step 1/ })
+    .focus();
+  await page.keyboard.press('Space');
+  await expect(page.getByText(/^Picked up step 1, place 1 of/)).toBeAttached();
+  await page.keyboard.press('ArrowDown');
+  await expect(page.getByText(/^Now at place 2 of/)).toBeAttached();
+  await page.keyboard.press('Space');
+  await expect.poll(() => title(0)).toBe(second);
+  expect(await title(1)).toBe(first);
+  await desk.kept();
+  await page.reload();
+  await desk.ready();
+  expect(await title(0)).toBe(second);
+});

@@ -1,0 +1,44 @@
+import { expect, type Locator, type Page } from '@playwright/test';
+
+/** The writing desk of a proposal, by what stands on its screen. */
+export class WritingDesk {
+  constructor(readonly page: Page) {}
+
+  /** The draft's id, from the address. */
+  get id(): string {
+    return /\/proposals\/([0-9a-f-]{36})/.exec(this.page.url())?.[1] ?? '';
+  }
+
+  get middle(): Locator {
+    return this.page.getByRole('region', { name: 'What is being written' });
+  }
+  stepTitle = (number: number): Locator => this.middle.getByLabel(`Step ${number}, what to do`);
+  get how(): Locator {
+    return this.middle.getByLabel('How', { exact: true });
+  }
+  get reason(): Locator {
+    return this.middle.getByLabel('Why this is better, for the editor');
+  }
+  /** What the desk says about the draft: `kept`, `waiting`, `unreachable`, `stale` … */
+  get keeping(): Locator {
+    return this.page.locator('[data-keeping]');
+  }
+
+  async ready(): Promise<void> {
+    await expect(this.page).toHaveURL(/\/proposals\/[0-9a-f-]{36}\/edit/);
+    await expect(this.page.locator('astro-island[ssr]')).toHaveCount(0);
+  }
+
+  async choose(step: string): Promise<void> {
+    await this.page.getByRole('navigation', { name: 'Parts of the sheet' }).getByRole('link', { name: step }).click();
+  }
+
+  async kept(): Promise<void> {
+    await expect(this.keeping).toHaveAttribute('data-keeping', 'kept');
+  }
+
+  async propose(): Promise<void> {
+    await this.page.getByRole('button', { name: 'Propose', exact: true }).click();
+    await expect(this.page).toHaveURL(/\/proposals\/[0-9a-f-]{36}\?done=proposed$/);
+  }
+}
