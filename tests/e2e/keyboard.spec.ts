@@ -14,8 +14,10 @@ async function tabTo(page: Page, name: RegExp, { most = 60, key = 'Tab' } = {}):
       const labels =
         'labels' in at ? [...((at as HTMLInputElement).labels ?? [])].map((l) => l.innerText).join(' ') : '';
       const style = getComputedStyle(at);
-      const after = getComputedStyle(at, '::after');
-      const outlined = [style, after].some((s) => s.outlineStyle !== 'none' && parseFloat(s.outlineWidth) > 0);
+      const around = at.parentElement ? [getComputedStyle(at.parentElement)] : [];
+      const outlined = [style, getComputedStyle(at, '::after'), ...around].some(
+        (s) => s.outlineStyle !== 'none' && parseFloat(s.outlineWidth) > 0,
+      );
       const box = at.getBoundingClientRect();
       return {
         name: (at.getAttribute('aria-label') ?? (labels || at.innerText || at.id)).trim(),
@@ -91,7 +93,7 @@ test('steps are moved by keyboard, and a reader hears where to', async ({ as }) 
     .getByRole('button', { name: /^Move step 1/ })
     .focus();
   await page.keyboard.press('Space');
-  await expect(page.getByText(/^Picked up step 1, place 1 of/)).toBeAttached();
+  await expect(page.getByText(/^(Picked up step 1, place|Now at place) 1 of/)).toBeAttached();
   await page.keyboard.press('ArrowDown');
   await expect(page.getByText(/^Now at place 2 of/)).toBeAttached();
   await page.keyboard.press('Space');

@@ -51,24 +51,32 @@ test('what is typed into a draft without the network is held, and sent once it i
     .toBe('Typed beside a car park with no signal.');
 });
 
-test('words typed without the network survive closing the page', async ({ as }) => {
+test('words typed without the network survive a browser that dies', async ({ as }) => {
   const page = await as('technician', { allow: NO_NETWORK });
   await page.goto('/procedures/P-0115');
   await page.getByRole('button', { name: 'Propose a change' }).click();
   const desk = new WritingDesk(page);
   await desk.ready();
   const { id } = desk;
+  const before = (await readProposal(page, id)).version;
   await page.context().setOffline(true);
   await desk.how.fill('Held words, typed in the pit.');
   await expect(desk.keeping).toHaveAttribute('data-keeping', 'unreachable');
+  // A page that is closed still sends its last words; one that dies does not.
+  const died = page.waitForEvent('crash');
+  const devtools = await page.context().newCDPSession(page);
+  void devtools.send('Page.crash').catch(() => null);
+  await died;
+  const context = page.context();
   await page.close();
 
-  const next = new WritingDesk(await page.context().newPage());
-  await page.context().setOffline(false);
+  await context.setOffline(false);
+  const next = new WritingDesk(await context.newPage());
+  expect((await readProposal(next.page, id)).version).toBe(before);
   await next.page.goto(`/proposals/${id}/edit`);
   await next.ready();
   await expect(next.middle.getByText('Words that were held on this device are back on the screen.')).toBeVisible();
   await expect(next.how).toHaveValue('Held words, typed in the pit.');
   await next.kept();
-  expect((await readProposal(next.page, id)).source).toContain('Held words, typed in the pit.');
+  await expect.poll(async () => (await readProposal(next.page, id)).source).toContain('Held words, typed in the pit.');
 });

@@ -65,7 +65,7 @@ test('signing out ends the session, also for the back button', async ({ as }) =>
   const page = await as('technician');
   await page.goto('/procedures/P-0137');
   await page.getByLabel(/Dafydd Lorne: profile/).click();
-  await page.getByRole('button', { name: 'Sign out' }).click();
+  await page.getByRole('button', { name: 'Sign out', exact: true }).click();
   await expect(page.getByText('Signed out.')).toBeVisible();
   await page.goBack();
   await page.reload();

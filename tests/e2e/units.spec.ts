@@ -35,7 +35,7 @@ test('units are switched in place and remembered on other pages, in other browse
   await expect(elsewhere.getByRole('region', { name: /^Step 8:/ })).toContainText(INCH);
 
   await page.getByLabel(/Cyrus Pemberwick: profile/).click();
-  await page.getByRole('button', { name: 'Sign out' }).click();
+  await page.getByRole('button', { name: 'Sign out', exact: true }).click();
   await expect(page).toHaveURL(/\/sign-in/);
   await expect(page.locator('html')).toHaveAttribute('data-units', 'inch');
 });

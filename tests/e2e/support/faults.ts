@@ -17,7 +17,7 @@ export function watchFaults(context: BrowserContext, host: string): Faults {
     if (!['data:', 'blob:', 'about:'].includes(protocol) && asked !== host)
       faults.list.push(`Asked another host: ${href}`);
   });
-  context.on('weberror', (error) => faults.list.push(`Uncaught: ${error.error().message}`));
+  context.on('weberror', (error) => faults.list.push(`Uncaught: ${error.error().message} (${error.page()?.url()})`));
   context.on('console', (message) => {
     if (message.type() === 'error') faults.list.push(`Console: ${message.text()} (${message.location().url})`);
   });
