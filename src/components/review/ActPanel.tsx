@@ -51,9 +51,9 @@ export function ActPanel({ title, act, version, href, button, pending, onSend, o
     >
       <input type="hidden" name="act" value={act} />
       <input type="hidden" name="version" value={version} />
-      <h3 id="give-title" className="text-[1.0625rem] leading-snug">
+      <p id="give-title" className="font-serif text-[1.0625rem] font-bold leading-snug">
         {title}
-      </h3>
+      </p>
       {children}
       <div className="flex flex-wrap gap-2.5">
         <Button type="submit" kind="main" pending={pending} pendingText={ACT_WORDS[act].doing}>

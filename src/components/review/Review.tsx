@@ -1,5 +1,6 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
 import { useCallback, useEffect, useMemo, useState } from 'react';
+import { Notice } from '@/components/ui/Notice';
 import type { Proposal } from '@/domain/api/schemas';
 import type { StepPair } from '@/domain/revision/twoTexts';
 import type { ValueRow } from '@/domain/revision/valueRows';
@@ -150,6 +151,11 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
         onAsk={ask}
         panel={placed ? null : form}
       >
+        {panel?.written.text.trim() && !may[panel.written.act] && (
+          <Notice title="What you wrote, not sent">
+            <p className="whitespace-pre-line">{panel.written.text}</p>
+          </Notice>
+        )}
         {loose.map((remark) => (
           <RemarkNote key={remark.id} remark={remark} />
         ))}
@@ -160,12 +166,22 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
           <ValueTable
             rows={values}
             fresh={proposal.base === null}
-            names={{ old: 'Now', now: proposal.publishedLetter ? 'Published' : 'Proposed' }}
+            names={{
+              old: proposal.publishedLetter ? 'Before' : 'Now',
+              now: proposal.publishedLetter ? 'Published' : 'Proposed',
+            }}
             below={notes}
           />
           <Panes
             pairs={pairs}
-            old={proposal.base === null ? null : { name: proposal.stale ? 'Base' : 'Published', letter: proposal.base }}
+            old={
+              proposal.base === null
+                ? null
+                : {
+                    name: proposal.publishedLetter ? 'Before' : proposal.stale ? 'Base' : 'Published',
+                    letter: proposal.base,
+                  }
+            }
             now={{ name: proposal.publishedLetter ? 'Published' : 'Proposed', letter }}
             keepOpen={keepOpen}
             below={(pair) => (
