@@ -155,7 +155,7 @@ test('a better way gets from one bench to every bench', async ({ as }) => {
 
   await test.step('the old sheet says that it is superseded and leads to the current one', async () => {
     await apprentice.goto('/procedures/P-0142/revisions/C');
-    await expect(apprentice.getByRole('note')).toContainText('Revision C is superseded.');
+    await expect(apprentice.getByRole('note').first()).toContainText('Revision C is superseded.');
     await expect(apprentice.getByText(NEW_WORD)).toHaveCount(0);
     await expect(apprentice.getByLabel(/^Step 8:/)).toContainText('10 ±1 N·m');
     await apprentice.getByRole('link', { name: 'Go to revision D' }).click();
