@@ -7,7 +7,7 @@ import { type Answer, answerAsked, mostly, together } from './match';
 import { Postings } from './postings';
 import { type Query, readQuery } from './query';
 import { best, rank, type Ranked, withProse } from './ranking';
-import { createTokens } from './tokens';
+import { tokensIn } from './tokens';
 import { type UnitSystem, ValueIndex } from './values';
 import { Phrases } from './phrases';
 import type { VocabularyGroup } from './vocabulary';
@@ -79,19 +79,30 @@ const NO_PROSE: ReadonlyMap<string, Matched> = new Map();
 const MOST_ASKED = 12;
 const REMEMBERED = 32;
 
-/** What is searched, with how much it says about what a sheet is for. */
-const FIELDS: [boost: number, of: (document: SearchDocument, engineNames: (key: string) => string[]) => string[]][] = [
-  [6, (d) => [d.title]],
+/** What is searched, with how much it says about what a sheet is for. `name` reads a text that comes back in many sheets. */
+type Read = (text: string) => readonly string[];
+const FIELDS: [boost: number, tokens: (d: SearchDocument, text: Read, name: Read, engine: Read) => string[]][] = [
+  [6, (d, text) => [...text(d.title)]],
   [
     2.5,
-    (d) => [
-      ...d.parts.map((part) => (part.number ? `${part.name} ${part.number}` : part.name)),
-      ...d.torques.map((torque) => `${torque.name} ${torque.thread}`),
-      ...d.limits.map((limit) => limit.name),
+    (d, _, name) => [
+      ...d.parts.flatMap((part) => [...name(part.name), ...(part.number === null ? [] : name(part.number))]),
+      ...d.torques.flatMap((torque) => [...name(torque.name), ...name(torque.thread)]),
+      ...d.limits.flatMap((limit) => name(limit.name)),
     ],
   ],
-  [2, (d, engineNames) => [d.summary, SYSTEMS[d.system], d.skill, ...d.engines.flatMap(engineNames)]],
-  [1, (d) => [...d.steps, ...d.tools, ...d.timers.map((timer) => timer.name)]],
+  [
+    2,
+    (d, text, name, engine) => [...text(d.summary), ...name(SYSTEMS[d.system]), d.skill, ...d.engines.flatMap(engine)],
+  ],
+  [
+    1,
+    (d, text, name) => [
+      ...d.steps.flatMap(text),
+      ...d.tools.flatMap(name),
+      ...d.timers.flatMap((timer) => name(timer.name)),
+    ],
+  ],
 ];
 
 const answers = ({ scores }: Answer): boolean => scores.some((score) => score > 0);
@@ -132,22 +143,28 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
     ...vocabulary,
     ...engines.map(({ name, aliases }) => ({ terms: [...namesOf(name), ...aliases] })),
   ]);
-  const tokensOf = createTokens(phrases);
+  const tokensOf: Read = (text) => tokensIn(text, phrases);
+  const known = new Map<string, readonly string[]>();
+  const nameTokens: Read = (name) => {
+    const tokens = known.get(name) ?? tokensOf(name);
+    known.set(name, tokens);
+    return tokens;
+  };
   const byKey = new Map(engines.map((engine) => [engine.key, engine]));
-  const engineNames = (key: string): string[] => {
+  const engineTokens: Read = (key) => {
     const engine = byKey.get(key);
-    return engine ? [engine.name, ...engine.aliases] : [key];
+    return (engine ? [engine.name, ...engine.aliases] : [key]).flatMap(nameTokens);
   };
   const postings = new Postings(
     documents.length,
-    FIELDS.map(([boost, of]) => ({
+    FIELDS.map(([boost, tokens]) => ({
       boost,
-      tokens: documents.map((document) => of(document, engineNames).flatMap((text) => tokensOf(text))),
+      tokensOf: (at) => tokens(documents[at] as SearchDocument, tokensOf, nameTokens, engineTokens),
     })),
   );
   const values = new ValueIndex(documents);
   const sieve = new Sieve(documents);
-  const engineTokens = new Set(engines.flatMap(({ key }) => engineNames(key).flatMap(tokensOf)));
+  const told = new Set(engines.flatMap(({ key }) => engineTokens(key)));
 
   const rankOnce = remember((text): Ranked => {
     const query = readQuery(text, phrases, (word) => postings.has(word));
@@ -156,7 +173,7 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
       query,
       found: findText(postings, query),
       values: values.find(query.quantities),
-      tokensOf,
+      tokensOf: nameTokens,
     });
   });
 
@@ -193,8 +210,8 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
         hits: first.map((at): SearchHit => {
           const document = documents[at] as SearchDocument;
           const { number, title, summary, system, minutes, skill, holds, letter, publishedAt, book } = document;
-          const told = bestValues(document, ranked.values.get(at) ?? [], ranked.terms, tokensOf);
-          const matched = explain(document, ranked.terms, engineTokens, told, { phrases, tokensOf, units });
+          const named = bestValues(document, ranked.values.get(at) ?? [], ranked.terms, nameTokens);
+          const matched = explain(document, ranked.terms, told, named, { phrases, nameTokens, tokensOf, units });
           const prose = ranked.proseOnly.has(at) ? inProse.get(number) : undefined;
           return {
             ...{ number, title, summary, system, minutes, skill, holds, letter, publishedAt, book },

@@ -37,25 +37,51 @@ interface Line {
   field: Matched['field'];
   text: string;
   step: number | null;
+  tokens: readonly string[];
 }
 
-function linesOf(document: SearchDocument): Line[] {
+interface Reading {
+  phrases: Phrases;
+  tokensOf: (text: string) => readonly string[];
+  /** The same for names that many sheets share, which are read once. */
+  nameTokens: (name: string) => readonly string[];
+  units: UnitSystem;
+}
+
+function linesOf(document: SearchDocument, { tokensOf, nameTokens }: Reading): Line[] {
   const at = (step: number | null): string => (step === null ? '' : `, step ${step}`);
   return [
-    ...document.parts.map((part): Line => ({
+    ...document.parts.map(({ name, number }): Line => ({
       field: 'part',
-      text: part.number ? `${part.name}, ${part.number}` : part.name,
+      text: number === null ? name : `${name}, ${number}`,
       step: null,
+      tokens: number === null ? nameTokens(name) : [...nameTokens(name), ...nameTokens(number)],
     })),
-    ...document.torques.map((torque): Line => ({
+    ...document.torques.map(({ name, thread, step }): Line => ({
       field: 'torque',
-      text: `${torque.name}, ${torque.thread}${at(torque.step)}`,
-      step: torque.step,
+      text: `${name}, ${thread}${at(step)}`,
+      step,
+      tokens: nameTokens(name),
     })),
-    ...document.limits.map((limit): Line => ({ field: 'limit', text: limit.name + at(limit.step), step: limit.step })),
-    ...document.steps.map((title, i): Line => ({ field: 'step', text: `Step ${i + 1}: ${title}`, step: i + 1 })),
-    ...document.tools.map((tool): Line => ({ field: 'tool', text: tool, step: null })),
-    { field: 'system', text: SYSTEMS[document.system], step: null },
+    ...document.limits.map(({ name, step }): Line => ({
+      field: 'limit',
+      text: name + at(step),
+      step,
+      tokens: nameTokens(name),
+    })),
+    ...document.steps.map((title, i): Line => ({
+      field: 'step',
+      text: `Step ${i + 1}: ${title}`,
+      step: i + 1,
+      tokens: tokensOf(title),
+    })),
+    ...document.tools.map((name): Line => ({ field: 'tool', text: name, step: null, tokens: nameTokens(name) })),
+    {
+      field: 'system',
+      text: SYSTEMS[document.system],
+      step: null,
+      tokens: nameTokens(SYSTEMS[document.system]),
+    },
   ];
 }
 
@@ -74,42 +100,40 @@ export function explain(
   matched: ReadonlySet<string>,
   told: ReadonlySet<string>,
   values: readonly ValueMatch[],
-  tools: { phrases: Phrases; tokensOf: (text: string) => readonly string[]; units: UnitSystem },
+  reading: Reading,
 ): Matched[] {
   const marked = (field: Matched['field'], text: string, step: number | null): Matched => ({
     field,
     text,
     step,
-    marks: marksIn(text, matched, tools.phrases),
+    marks: marksIn(text, matched, reading.phrases),
   });
   const head = [marked('title', document.title, null), marked('summary', document.summary, null)];
   const open = new Set([...matched].filter((token) => !told.has(token)));
-  const cross = (text: string): number => {
-    let crossed = 0;
-    for (const token of tools.tokensOf(text)) if (open.delete(token)) crossed += 1;
-    return crossed;
+  const account = (tokens: readonly string[]): void => {
+    for (const token of tokens) open.delete(token);
   };
   const out = head.filter((line) => line.marks.length > 0);
-  for (const line of head) cross(line.text);
+  for (const line of out) account(reading.tokensOf(line.text));
 
   for (const match of values.slice(0, MOST_VALUES)) {
-    const { value, rest, step } = sayValue(document, match, tools.units);
+    const { value, rest, step } = sayValue(document, match, reading.units);
     const line = marked(match.kind, `${value} ${rest}`, step);
     const after = line.marks.filter(([start]) => start > value.length);
     out.push({ ...line, marks: [[0, value.length], ...after] });
-    cross(rest);
+    account(reading.tokensOf(rest));
   }
 
-  const lines = open.size > 0 ? linesOf(document) : [];
+  const lines = open.size > 0 ? linesOf(document, reading) : [];
   for (let i = 0; i < MOST_LINES && open.size > 0; i += 1) {
     const best = lines
-      .map((line) => ({ line, counts: tools.tokensOf(line.text).filter((token) => open.has(token)).length }))
+      .map((line) => ({ line, counts: line.tokens.filter((token) => open.has(token)).length }))
       .reduce<{ line: Line | null; counts: number }>((a, b) => (b.counts > a.counts ? b : a), {
         line: null,
         counts: 0,
       });
     if (!best.line) break;
-    cross(best.line.text);
+    account(best.line.tokens);
     out.push(marked(best.line.field, best.line.text, best.line.step));
   }
   return out;

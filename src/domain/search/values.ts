@@ -85,11 +85,15 @@ function entriesOf(document: SearchDocument, at: number): Entry[] {
 
 export class ValueIndex {
   readonly #byUnit = new Map<string, { value: number; entry: Entry }[]>();
-  readonly #documents: readonly SearchDocument[];
+  readonly #byThread = new Map<string, { document: number; at: number }[]>();
 
   constructor(documents: readonly SearchDocument[]) {
-    this.#documents = documents;
     documents.forEach((document, at) => {
+      document.torques.forEach(({ thread }, i) => {
+        const torques = this.#byThread.get(thread) ?? [];
+        torques.push({ document: at, at: i });
+        this.#byThread.set(thread, torques);
+      });
       for (const entry of entriesOf(document, at)) {
         const based = inBase(entry.value, entry.unit);
         if (!based) continue;
@@ -106,38 +110,36 @@ export class ValueIndex {
    * values that answer one each.
    */
   find(quantities: readonly ReadQuantity[]): Map<number, ValueMatch[]> {
-    const found = new Map<number, Map<string, ValueMatch>>();
+    const found = new Map<number, ValueMatch[]>();
     const add = (document: number, match: ValueMatch): void => {
-      const of = found.get(document) ?? new Map<string, ValueMatch>();
-      found.set(document, of);
-      const key = `${match.kind}${match.at}`;
-      const known = of.get(key);
-      if (!known) of.set(key, match);
+      const of = found.get(document);
+      const at = of?.findIndex((one) => one.kind === match.kind && one.at === match.at) ?? -1;
+      const known = of?.[at];
+      if (!of) found.set(document, [match]);
+      else if (!known) of.push(match);
       else if (match.value !== null && known.value !== null) {
-        if (match.score > known.score) of.set(key, match);
+        if (match.score > known.score) of[at] = match;
       } else
-        of.set(key, {
+        of[at] = {
           ...known,
           value: known.value ?? match.value,
           unit: known.value === null ? match.unit : known.unit,
           score: known.score + match.score,
           answers: known.answers + match.answers,
-        });
+        };
     };
     for (const quantity of quantities) {
       if (quantity.kind === 'thread') this.#threads(quantity.thread, add);
       else this.#measures(quantity, add);
     }
-    return new Map([...found].map(([document, matches]) => [document, [...matches.values()]]));
+    return found;
   }
 
-  #threads(thread: string, add: (document: number, match: ValueMatch) => void): void {
-    this.#documents.forEach((document, at) => {
-      document.torques.forEach((torque, i) => {
-        if (sameThread(thread, torque.thread))
-          add(at, { kind: 'torque', at: i, value: null, unit: 'N·m', score: 0.7, answers: 1 });
-      });
-    });
+  #threads(asked: string, add: (document: number, match: ValueMatch) => void): void {
+    for (const [thread, torques] of this.#byThread)
+      if (sameThread(asked, thread))
+        for (const { document, at } of torques)
+          add(document, { kind: 'torque', at, value: null, unit: 'N·m', score: 0.7, answers: 1 });
   }
 
   #measures(read: ReadMeasure, add: (document: number, match: ValueMatch) => void): void {

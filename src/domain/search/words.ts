@@ -8,21 +8,26 @@ export interface Word {
 
 /** A part number is its letters and its digits, so that "TN-4102", "TN 4102" and "tn4102" are the same two words. */
 const WORD = /\d+(?:[.,]\d+)+|\p{L}{1,4}(?=\d{3})|[\p{L}\p{N}]+(?:['’]s\b)?/gu;
+/** The same for plain letters, which is most text and reads several times faster. */
+const PLAIN_WORD = /\d+(?:[.,]\d+)+|[a-z]{1,4}(?=\d{3})|[a-z0-9]+(?:'s\b)?/g;
+const isPlain = (text: string): boolean => !/[^\x20-\x7e]/.test(text);
 
 /** Small letters without accents. Keeps the length of the text, so that places in one are places in the other. */
 export function plain(text: string): string {
-  const folded = text
-    .normalize('NFD')
-    .replace(/\p{M}+/gu, '')
-    .toLowerCase();
-  return folded.length === text.length ? folded : text.toLowerCase().length === text.length ? text.toLowerCase() : text;
+  const small = text.toLowerCase();
+  if (isPlain(text)) return small;
+  const folded = small.normalize('NFD').replace(/\p{M}+/gu, '');
+  if (folded.length === text.length) return folded;
+  return small.length === text.length ? small : text;
 }
 
 export function wordsOf(text: string): Word[] {
   const words: Word[] = [];
-  for (const match of plain(text).matchAll(WORD)) {
+  for (const match of plain(text).matchAll(isPlain(text) ? PLAIN_WORD : WORD)) {
+    const [word] = match;
     const start = match.index;
-    words.push({ text: match[0].replace(/['’]s$/, '').replace(',', '.'), start, end: start + match[0].length });
+    const cut = /^\d/.test(word) ? word.replace(',', '.') : word.replace(/['’]s$/, '');
+    words.push({ text: cut, start, end: start + word.length });
   }
   return words;
 }
