@@ -27,7 +27,7 @@ export function Actions({
           </Button>
         </form>
       )}
-      <Button data-print data-needs-script="" className="max-sm:px-3">
+      <Button data-print data-needs-script="" className="max-sm:px-3 max-[379px]:hidden">
         <span>
           Print<span className="max-sm:sr-only"> the sheet</span>
         </span>

@@ -41,7 +41,7 @@ export function Segmented({
           aria-label={segment.name}
           aria-pressed={segment.value === value}
           onClick={onChoose && (() => onChoose(segment.value))}
-          className="min-h-[43px] min-w-[46px] bg-sheet px-3.5 font-medium hover:bg-wash aria-pressed:bg-ink aria-pressed:text-white"
+          className="min-h-[43px] min-w-[46px] whitespace-nowrap bg-sheet px-3.5 max-sm:px-2.5 font-medium hover:bg-wash aria-pressed:bg-ink aria-pressed:text-white"
         >
           {segment.label}
         </button>
