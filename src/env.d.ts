@@ -8,5 +8,7 @@ declare namespace App {
     person: import('./domain/api/schemas').Me | null;
     /** Why a page could not be shown; read by the pages 403, 404 and 500. */
     refusal?: import('./server/refusal').Refusal;
+    /** Where trying again may help, for the same pages. */
+    again?: string;
   }
 }

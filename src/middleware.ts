@@ -1,17 +1,33 @@
+import type { APIContext } from 'astro';
 import { defineMiddleware, sequence } from 'astro:middleware';
 import { isSecure, readSession, sessionCookieName } from '@/server/accounts/session';
 import { fromAddress } from '@/server/accounts/tries';
 import { NOBODY, whoIs } from '@/server/accounts/whoIs';
 import { rememberFailedSignIn, sentForm } from '@/server/front/failedSignIn';
 import { withHeaders } from '@/server/front/headers';
-import { isApi, isOpen, needsNoBook } from '@/server/front/openPaths';
+import { isApi, isNoSignIn, isOpen, needsNoBook } from '@/server/front/openPaths';
 import { keptSheet } from '@/server/front/sheetCache';
 import { problemResponse } from '@/server/http/problem';
 import { comesFromUs } from '@/server/http/origin';
-import { asRefusal, forbidden, signedOut } from '@/server/refusal';
+import { asRefusal, forbidden, notFound, type Refusal, signedOut } from '@/server/refusal';
 import { startOnce } from '@/server/start';
 
 const headers = defineMiddleware(async (_context, next) => withHeaders(await next(), import.meta.env.DEV));
+
+/**
+ * The page that tells a reader why not, asked for anew with GET: the body of the request may be read already, and what
+ * is wrong with the request must not be found wrong with its error page.
+ */
+async function errorPage({ locals, request, url, rewrite }: APIContext, refusal: Refusal): Promise<Response> {
+  if (locals.refusal) return new Response(`${refusal.detail}\n`, { status: refusal.status });
+  locals.refusal = refusal;
+  locals.again = request.method === 'GET' ? url.pathname + url.search : '/';
+  const cookie = request.headers.get('cookie');
+  const asked = new URL(`/${[403, 404].includes(refusal.status) ? refusal.status : 500}`, url);
+  const page = await rewrite(new Request(asked, { headers: cookie ? { cookie } : {} }));
+  const { status } = refusal;
+  return new Response(page.body, { status, headers: { ...refusal.headers, ...Object.fromEntries(page.headers) } });
+}
 
 /** Turns a thrown refusal into a problem document for the API and into an error page for a reader. */
 const refusals = defineMiddleware(async (context, next) => {
@@ -21,14 +37,7 @@ const refusals = defineMiddleware(async (context, next) => {
     const refusal = asRefusal(error);
     if (refusal.status >= 500) console.error(refusal.cause);
     if (isApi(context.url.pathname)) return problemResponse(refusal, crypto.randomUUID());
-    // The error page itself failed: asking for it again would go round for ever.
-    if (context.locals.refusal) return new Response(refusal.detail, { status: refusal.status });
-    context.locals.refusal = refusal;
-    const page = await context.rewrite(`/${[403, 404].includes(refusal.status) ? refusal.status : 500}`);
-    return new Response(page.body, {
-      status: refusal.status,
-      headers: { ...refusal.headers, ...Object.fromEntries(page.headers) },
-    });
+    return errorPage(context, refusal);
   }
 });
 
@@ -37,8 +46,9 @@ const guard = defineMiddleware(async (context, next) => {
   const { locals, url, cookies } = context;
   locals.actor ??= NOBODY;
   locals.person ??= null;
-  // An error page is shown with what is known already; the book may be what failed.
+  // An error page is shown to whoever was refused with what is known already; the book may be what failed.
   if (locals.refusal || needsNoBook(url.pathname)) return next();
+  if (isNoSignIn(url.pathname)) throw notFound();
   const { config } = await startOnce();
   if (!comesFromUs(context.request, [url.origin, ...(config.origin ? [config.origin] : [])]))
     throw forbidden('This was asked for by a page of another site.');

@@ -2,7 +2,7 @@ import type { APIContext, MiddlewareNext } from 'astro';
 import { beforeEach, describe, expect, test } from 'vitest';
 import { newSession, sessionCookieName } from '@/server/accounts/session';
 import { onRequest } from '@/middleware';
-import { notFound } from '@/server/refusal';
+import { forbidden, notFound } from '@/server/refusal';
 import { openTestBook } from '../setup/database';
 import { addPerson } from './api/support/network';
 
@@ -13,16 +13,27 @@ interface Asked {
   headers?: Record<string, string>;
   body?: URLSearchParams;
   /** The page or endpoint behind. */
-  page?: (locals: Locals) => Response | Promise<Response>;
+  page?: (request: Request) => Response | Promise<Response>;
+  /** The error page that a refusal leads to. */
+  errorPage?: () => Response | Promise<Response>;
+  locals?: Locals;
+  depth?: number;
 }
 
 beforeEach(async () => {
   await openTestBook();
 });
 
-async function ask(path: string, { method = 'GET', cookie, headers = {}, body = undefined, page }: Asked = {}) {
+interface Answered {
+  response: Response;
+  reached: boolean;
+  locals: Locals;
+}
+
+async function ask(path: string, asked: Asked = {}): Promise<Answered> {
+  const { method = 'GET', cookie, headers = {}, body = undefined, page, locals = {} as Locals, depth = 0 } = asked;
+  const errorPage = asked.errorPage ?? (() => new Response(`told why not`));
   const url = new URL(path, 'http://book.test');
-  const locals = {} as Locals;
   let reached = false;
   const context = {
     url,
@@ -31,11 +42,24 @@ async function ask(path: string, { method = 'GET', cookie, headers = {}, body = 
     clientAddress: '192.0.2.1',
     cookies: { get: (name: string) => (name === sessionCookieName(false) && cookie ? { value: cookie } : undefined) },
     redirect: (to: string, status: number) => new Response(null, { status, headers: { location: to } }),
-    rewrite: (to: string) => Promise.resolve(new Response(`rewritten to ${to}`)),
+    // As Astro does it: the middleware runs again, for the request that was asked for instead.
+    rewrite: async (to: Request) => {
+      const { pathname } = new URL(to.url);
+      if (depth > 2) return new Response('Loop Detected', { status: 508 });
+      const again = await ask(pathname, {
+        method: to.method,
+        headers: Object.fromEntries(to.headers),
+        ...(cookie ? { cookie } : {}),
+        page: errorPage,
+        locals,
+        depth: depth + 1,
+      });
+      return again.response;
+    },
   } as unknown as APIContext;
   const next = (async () => {
     reached = true;
-    return (await page?.(locals)) ?? new Response('page');
+    return (await page?.(context.request)) ?? new Response('page');
   }) as MiddlewareNext;
   const response = (await onRequest(context, next)) as Response;
   return { response, reached, locals };
@@ -109,7 +133,9 @@ describe('whoever is signed in', () => {
   test('is not believed on a call that a page of another site makes', async () => {
     const { cookie } = await signedIn();
     const from = (origin: string) => ask('/profile', { method: 'POST', cookie, headers: { origin } });
-    expect((await from('https://other.test')).response.status).toBe(403);
+    const refused = (await from('https://other.test')).response;
+    expect(refused.status).toBe(403);
+    expect(await refused.text()).toBe('told why not');
     expect((await from('https://other.test')).reached).toBe(false);
     expect((await from('http://book.test')).reached).toBe(true);
   });
@@ -119,9 +145,39 @@ describe('whoever is signed in', () => {
     const page = () => Promise.reject(notFound());
     const { response } = await ask('/procedures/P-9999', { cookie, page });
     expect(response.status).toBe(404);
-    expect(await response.text()).toBe('rewritten to /404');
+    expect(await response.text()).toBe('told why not');
+  });
+
+  test('sees it too where the refused page had read the form that was sent', async () => {
+    const { cookie } = await signedIn();
+    const page = async (request: Request) => {
+      await request.formData();
+      throw forbidden('Not by you.');
+    };
+    const body = new URLSearchParams({ step: 'check' });
+    const { response, locals } = await ask('/procedures/P-0142/propose', { method: 'POST', cookie, body, page });
+    expect(response.status).toBe(403);
+    expect(await response.text()).toBe('told why not');
+    expect(locals.again).toBe('/');
+  });
+
+  test('is told in one line where the error page itself fails', async () => {
+    const { cookie } = await signedIn();
+    const refuse = () => Promise.reject(notFound('No such sheet.'));
+    const { response } = await ask('/procedures/P-9999', { cookie, page: refuse, errorPage: refuse });
+    expect(response.status).toBe(404);
+    expect(await response.text()).toBe('No such sheet.\n');
   });
 });
+
+test.each(['/api/auth/verify-request', '/api/auth/webauthn-options', '/api/auth/callback/other', '/api/auth/csrf/'])(
+  'sign-in has nothing at %s',
+  async (path) => {
+    const { response, reached } = await ask(path);
+    expect(reached).toBe(false);
+    expect(response.status).toBe(404);
+  },
+);
 
 test('a failed sign-in comes back with where the person was going, and what they typed in a cookie, not in the address', async () => {
   const sent = (callbackUrl: string) =>
