@@ -85,7 +85,7 @@ export async function openDatabase(file: string, { now = isoNow }: OpenOptions =
     },
     async read<Row extends object>(sql: string, replacements: Record<string, unknown> = {}) {
       try {
-        return await sequelize.query<Row>(sql, { type: QueryTypes.SELECT, replacements });
+        return await sequelize.query<Row>(sql, { type: QueryTypes.SELECT, replacements: wholeStrings(replacements) });
       } catch (error) {
         throw storageFault(error);
       }
@@ -107,5 +107,14 @@ export async function openDatabase(file: string, { now = isoNow }: OpenOptions =
   }
   return db;
 }
+
+/** A NUL ends a statement for SQLite, wherever it stands; a text that holds one matches nothing instead. */
+const wholeStrings = (replacements: Record<string, unknown>): Record<string, unknown> =>
+  Object.fromEntries(
+    Object.entries(replacements).map(([name, value]) => [
+      name,
+      typeof value === 'string' ? value.replaceAll('\0', '\ufffd') : value,
+    ]),
+  );
 
 const isoNow = () => new Date().toISOString();

@@ -1,7 +1,9 @@
 import { beforeEach, describe, expect, it, vi } from 'vitest';
+import { readSheet } from '@/server/book/sheet';
 import { PER_MINUTE } from '@/server/http/rateLimit';
+import { readProposal } from '@/server/review/readProposal';
 import { call, type Sent } from './support/call';
-import { publishFirst } from './support/network';
+import { publishFirst, signedIn } from './support/network';
 import { text } from './support/text';
 import { useNetwork } from './support/useNetwork';
 
@@ -127,6 +129,13 @@ describe('bad input', () => {
     ];
     expect(unseen.status).toBe(404);
     expect(unseen.body).toEqual(unknown.body);
+  });
+
+  it('is not brought down by a NUL, which ends a statement for the database', async () => {
+    expect((await call(who('north.senior'), 'GET', '/procedures?cursor=%00')).status).toBe(200);
+    const { actor } = await signedIn(who('north.senior'));
+    await expect(readSheet(actor, 'P-0142\0')).rejects.toMatchObject({ status: 404 });
+    await expect(readProposal(actor, '\0')).rejects.toMatchObject({ status: 404 });
   });
 
   it('names what a method may be', async () => {
