@@ -18,6 +18,8 @@ import { record } from './record';
 export async function publish(actor: Actor, id: string, version: number | null = null): Promise<Proposal> {
   // Made when the text was sent in; asked for here so that nothing is parsed while others wait to write.
   const before = await readableProposal(actor, id);
+  // Asked before the text is: a draft that nobody may publish yet need not be readable.
+  guard({ act: 'publish' }, actor, before, version);
   const rendered = await readRendering(before);
   const { db } = await app();
   await db.write(async () => {

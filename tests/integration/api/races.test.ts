@@ -57,6 +57,17 @@ describe('two saves of one version', () => {
   });
 });
 
+it('says why a text that cannot be read is not published, before it looks at the text', async () => {
+  const senior = who('north.senior');
+  const { id } = await waiting(senior, 'P-0142');
+  await call(who('common.editor'), 'POST', `/proposals/${id}/return`, { body: { reason: 'Look again' } });
+  const broken = { body: { source: 'no front matter' }, headers: { 'if-match': '*' } };
+  expect((await call(senior, 'PUT', `/proposals/${id}`, broken)).body.check.ok).toBe(false);
+  expect((await call(senior, 'POST', `/proposals/${id}/publish`)).status).toBe(403);
+  const early = await call(who('common.editor'), 'POST', `/proposals/${id}/publish`);
+  expect(early).toMatchObject({ status: 409, body: { state: 'returned' } });
+});
+
 describe('a base that is no longer current', () => {
   /** Revision B is out; `loser` waits on A. */
   async function overtaken() {
