@@ -36,7 +36,8 @@ document.addEventListener('submit', (event) => {
     return;
   }
   form.dataset.sent = '';
-  if (new URL(form.action).pathname === '/sign-out') forgetAll();
+  const everywhere = form.querySelector('input[name="section"][value="sessions"]');
+  if (everywhere || new URL(form.action).pathname === '/sign-out') forgetAll();
   event.submitter?.setAttribute('data-pending', '');
 });
 addEventListener('pageshow', (event) => {

@@ -22,6 +22,12 @@ const HEADERS: Record<string, string> = {
 };
 
 /**
+ * For answers that end a session. A browser keeps pages for its Back button whatever `no-cache` says; at a bench that
+ * many use, the next person must not find those of the last.
+ */
+export const FORGET_PAGES = { 'Clear-Site-Data': '"cache"' };
+
+/**
  * The response with the headers that every answer carries. Pages depend on who asks, so they may be kept
  * by that browser only, and asked for again each time: nobody works from an old sheet.
  * `development`: Vite's own socket is let through.
