@@ -20,4 +20,9 @@ export function forbiddenCharacter(text: string): { index: number; what: string 
   return first;
 }
 
+/** Whether a name or the like is one line of plain text, which reads as it is stored. */
+export const isOneLine = (text: string): boolean => !/[\t\n\r]/.test(text) && forbiddenCharacter(text) === null;
+
+export const NOT_ONE_LINE = 'Use letters and signs of a single line only.';
+
 export const forbiddenSentence = (what: string) => `There is ${what} here. Delete it and type the place again.`;

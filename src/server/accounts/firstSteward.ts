@@ -1,11 +1,17 @@
 import { z } from 'zod';
+import { isOneLine, NOT_ONE_LINE } from '@/domain/procedure/characters';
 import { appendAudit } from '../audit/append';
 import { app } from '../context';
 import { invalid, stale } from '../refusal';
 import { assertGoodPassword, hashPassword } from './passwords';
 
 const NewPerson = z.object({
-  name: z.string().trim().min(1, 'Write a name.').max(80, 'Use 80 characters or fewer.'),
+  name: z
+    .string()
+    .trim()
+    .min(1, 'Write a name.')
+    .max(80, 'Use 80 characters or fewer.')
+    .refine(isOneLine, NOT_ONE_LINE),
   email: z.string().trim().max(254).email('This is no e-mail address.'),
   password: z.string(),
 });

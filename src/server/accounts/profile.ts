@@ -2,6 +2,7 @@ import { z } from 'zod';
 import type { Person } from '@db/models/people';
 import { UnitSystem } from '@/domain/api/schemas';
 import type { Actor } from '@/domain/people/may';
+import { isOneLine, NOT_ONE_LINE } from '@/domain/procedure/characters';
 import { appendAudit } from '../audit/append';
 import { app } from '../context';
 import { invalid, notFound, signedOut } from '../refusal';
@@ -10,7 +11,12 @@ import { assertGoodPassword, hashPassword, verifyPassword } from './passwords';
 import { countTry } from './tries';
 
 const Profile = z.object({
-  name: z.string().trim().min(1, 'Write your name.').max(80, 'Use 80 characters or fewer.'),
+  name: z
+    .string()
+    .trim()
+    .min(1, 'Write your name.')
+    .max(80, 'Use 80 characters or fewer.')
+    .refine(isOneLine, NOT_ONE_LINE),
   units: UnitSystem,
 });
 
@@ -32,9 +38,15 @@ export async function saveProfile(actor: Actor, change: { name?: string; units?:
     );
   await db.write(async () => {
     const person = await self(actor);
+    const { name: before } = person;
     await person.update(read.data);
-    if (read.data.name !== undefined)
-      await appendAudit({ actorId: actor.personId, act: 'person.renamed', subject: { type: 'person', id: person.id } });
+    if (person.name !== before)
+      await appendAudit({
+        actorId: actor.personId,
+        act: 'person.renamed',
+        subject: { type: 'person', id: person.id },
+        detail: { from: before, to: person.name },
+      });
   });
 }
 

@@ -32,6 +32,26 @@ it.each([
   expect(answer).toMatchObject({ status: 422, body: { errors: [{ path, message }] } });
 });
 
+it.each(['two\nlines', 'a\0b', 'read \u202ebackwards'])(
+  'refuses a name that does not read as it is stored: %j',
+  async (name) => {
+    const answer = await call(who('north.senior'), 'PATCH', '/me', { body: { name } });
+    expect(answer).toMatchObject({ status: 422, body: { errors: [{ path: 'name' }] } });
+    expect((await call(who('north.senior'), 'GET', '/me')).body).toMatchObject({ name: 'north senior' });
+  },
+);
+
+it('keeps in the audit trail what I was called, and nothing where my name stays', async () => {
+  const person = who('north.senior');
+  await call(person, 'PATCH', '/me', { body: { name: 'north senior', units: 'inch' } });
+  await call(person, 'PATCH', '/me', { body: { name: 'Another Name' } });
+  const { db } = await app();
+  const trail = await db.read<{ detail: string }>(`SELECT detail FROM auditEntries WHERE act = 'person.renamed'`);
+  expect(trail.map(({ detail }) => JSON.parse(detail) as unknown)).toEqual([
+    { from: 'north senior', to: 'Another Name' },
+  ]);
+});
+
 it('changes my password, ends my other sessions and gives this one a new cookie', async () => {
   const person = who('north.senior');
   const { db } = await app();
@@ -56,7 +76,9 @@ it('changes my password, ends my other sessions and gives this one a new cookie'
 
 it('signs me out everywhere', async () => {
   const person = who('north.senior');
-  expect((await call(person, 'POST', '/me/sign-out-everywhere')).status).toBe(204);
+  const answer = await call(person, 'POST', '/me/sign-out-everywhere');
+  expect(answer.status).toBe(204);
+  expect(answer.headers.get('clear-site-data')).toBe('"cache"');
   const { db } = await app();
   expect((await db.models.Person.findByPk(person.id))!.tokenVersion).toBe(2);
 });
