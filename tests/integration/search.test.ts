@@ -5,10 +5,12 @@ import { unpackBook, type PackedBook } from '@/domain/search/columns';
 import { createSearch } from '@/domain/search/engine';
 import { NO_FILTERS } from '@/domain/search/filters';
 import { searchBook, searchIndex } from '@/server/book/search';
+import { publish } from '@/server/review/publish';
 import { GET } from '@/pages/api/v1/search-index';
 import { openTestBook } from '../setup/database';
 import { call } from './api/support/call';
 import { makeNetwork, publishFirst, signedIn, type Member, type Network } from './api/support/network';
+import { waiting } from './api/support/review';
 import { text } from './api/support/text';
 
 let network: Network;
@@ -110,6 +112,18 @@ describe('the index', () => {
     expect(next.status).toBe(200);
     expect(next.headers.get('etag')).not.toBe(tag);
     expect(numbers(await call(who('north.senior'), 'GET', '/search?q=fly+wheel'))).toEqual(['P-0160']);
+  });
+
+  it('knows the next revision of a sheet at once, and no more of the one before', async () => {
+    const before = await fetchIndex('north.apprentice');
+    expect(numbers(await call(who('north.apprentice'), 'GET', '/search?q=valve+cover'))).toContain('P-0142');
+    const { id } = await waiting(who('north.senior'), 'P-0142', { title: 'Reseal the tappet lid' });
+    await publish(await actorOf('common.editor'), id);
+    const after = await fetchIndex('north.apprentice', { 'if-none-match': before.headers.get('etag')! });
+    expect(after.status).toBe(200);
+    expect(await after.text()).toContain('Reseal the tappet lid');
+    const { body } = await call(who('north.apprentice'), 'GET', '/search?q=tappet+lid');
+    expect(body.items[0]).toMatchObject({ number: 'P-0142', letter: 'B', title: 'Reseal the tappet lid' });
   });
 
   it('is the same in every encoding', async () => {

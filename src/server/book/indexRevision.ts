@@ -1,5 +1,6 @@
 import type { RenderedProcedure } from '@/domain/procedure/types';
 import { searchDocument } from '@/domain/search/documents';
+import { now } from '../clock';
 import { app } from '../context';
 import { BOOK_COLUMNS, bookRef, type BookRow } from './columns';
 
@@ -23,6 +24,8 @@ export async function indexRevision(procedureId: string, rendered: RenderedProce
       book: row.shopId ?? 'common',
       hash,
       json: JSON.stringify(document),
+      // Said here because an upsert leaves it as it was; by it the search sees that the book has changed.
+      updatedAt: now(),
     });
     const { title, summary } = rendered.frontmatter;
     const words = [title, summary, ...rendered.steps.flatMap((step) => [step.title, step.text, ...step.holds])].join(
