@@ -42,7 +42,7 @@ test('a better way gets from one bench to every bench', async ({ as }) => {
 
     const torques = desk.middle.getByRole('table', { name: 'Torques of this step' });
     await torques.getByLabel('N·m, row 1', { exact: true }).fill('11');
-    await expect(senior.getByRole('complementary', { name: 'Checks' })).toContainText('Two editors, because');
+    await expect(senior.getByRole('region', { name: 'Checks' })).toContainText('Two editors, because');
 
     await desk.middle.getByRole('button', { name: 'Add a step after this one' }).click();
     await desk.stepTitle(9).fill(NEW_STEP);
