@@ -45,7 +45,7 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
 ): Promise<Outgoing> {
   const { request, url, locals } = context;
   const changing = operation.method !== 'get';
-  const { config } = await app();
+  const { config, secret } = await app();
   if (changing && !comesFromUs(request, [url.origin, ...(config.origin ? [config.origin] : [])]))
     throw forbidden('This call came from a page of another site.');
   const { actor } = locals as { actor?: Actor };
@@ -82,7 +82,7 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
   const { replayed, ...kept } = await once(
     actor.personId,
     key,
-    requestPrint(request.method, url.pathname, json.text),
+    requestPrint(secret, request.method, url.pathname, json.text),
     async () => {
       const given = await answer();
       return { ...given, body: String(given.body) };

@@ -1,4 +1,4 @@
-import { createHash } from 'node:crypto';
+import { createHmac } from 'node:crypto';
 import { Op } from 'sequelize';
 import { app } from '../context';
 import { invalid } from '../refusal';
@@ -24,9 +24,12 @@ export function idempotencyKey(headers: Headers): string | null {
   return key;
 }
 
-/** One request as a short text; two are the same where method, path and body are. */
-export const requestPrint = (method: string, path: string, body: string) =>
-  createHash('sha256').update(`${method} ${path}\n${body}`).digest('hex');
+/**
+ * One request as a short text; two are the same where method, path and body are. Keyed with the secret, because it is
+ * stored and a body may hold a password.
+ */
+export const requestPrint = (secret: string, method: string, path: string, body: string) =>
+  createHmac('sha256', secret).update(`${method} ${path}\n${body}`).digest('hex');
 
 /**
  * Acts once for each key of a person and answers the same to every repetition within a day, also to one
