@@ -1,6 +1,6 @@
 import { GiveReason } from '@/domain/api/schemas';
 import type { Actor } from '@/domain/people/may';
-import { Refusal } from '../refusal';
+import { malformed, Refusal } from '../refusal';
 import { agree } from './agree';
 import { decline, returnToAuthor } from './giveBack';
 import { publish } from './publish';
@@ -28,8 +28,11 @@ export type ReviewOutcome =
  */
 export async function actOnReviewForm(actor: Actor, id: string, form: FormData): Promise<ReviewOutcome> {
   const text = (name: string) => String(form.get(name) ?? '');
-  const act = isReviewAct(text('act')) ? (text('act') as ReviewAct) : 'agree';
-  const version = /^\d{1,9}$/.test(text('version')) ? Number(text('version')) : null;
+  const act = text('act');
+  // Nobody agrees by a form that lost its fields, nor to another text than the one that was on the screen.
+  if (!isReviewAct(act) || !/^\d{1,9}$/.test(text('version')))
+    throw malformed('The form came without some of its fields. Go back and send it again.');
+  const version = Number(text('version'));
   const typed = text('reason');
   const anchor = text('anchor') || null;
   const refused = (status: number, detail: string, field: string | null = null): ReviewOutcome => ({

@@ -1,0 +1,35 @@
+import { expect, it } from 'vitest';
+import { actOnReviewForm } from '@/server/review/reviewForm';
+import { readProposal } from '@/server/review/readProposal';
+import { signedIn } from '../api/support/network';
+import { waiting } from '../api/support/review';
+import { useNetwork } from '../api/support/useNetwork';
+
+const { who } = useNetwork();
+
+const form = (fields: Record<string, string>) => {
+  const data = new FormData();
+  for (const [name, value] of Object.entries(fields)) data.set(name, value);
+  return data;
+};
+
+it.each([[{}], [{ act: 'agree' }], [{ act: 'constructor', version: '2' }], [{ act: 'agree', version: '2x' }]])(
+  'does nothing for a form that lost its fields: %j',
+  async (fields) => {
+    const { id } = await waiting(who('north.senior'), 'P-0142');
+    const { actor } = await signedIn(who('common.editor'));
+    await expect(actOnReviewForm(actor, id, form(fields as Record<string, string>))).rejects.toMatchObject({
+      status: 400,
+    });
+    expect((await readProposal(actor, id)).agreed).toEqual([]);
+  },
+);
+
+it('agrees to the version that was on the screen, and to no other', async () => {
+  const { id, version } = await waiting(who('north.senior'), 'P-0142');
+  const { actor } = await signedIn(who('common.editor'));
+  const press = (seen: number) => actOnReviewForm(actor, id, form({ act: 'agree', version: String(seen) }));
+  expect(await press(version - 1)).toMatchObject({ kind: 'refused', status: 409 });
+  expect(await press(version)).toMatchObject({ kind: 'done', act: 'agree' });
+  expect((await readProposal(actor, id)).agreed).toHaveLength(1);
+});
