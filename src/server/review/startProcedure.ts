@@ -14,13 +14,16 @@ export interface NewProcedure {
   reason: string;
 }
 
+/** Numbers up to here are for procedures that a release ships, so that a later release never finds one taken. */
+const RELEASED_UP_TO = 1000;
+
 /** The number after the highest of the network, whoever may see that one. */
 async function nextNumber(): Promise<string> {
   const { db } = await app();
   const [row] = await db.read<{ highest: number | null }>(
     'SELECT max(CAST(substr(number, 3) AS INTEGER)) AS highest FROM procedures',
   );
-  return `P-${String((row?.highest ?? 0) + 1).padStart(4, '0')}`;
+  return `P-${String(Math.max(row?.highest ?? 0, RELEASED_UP_TO) + 1).padStart(4, '0')}`;
 }
 
 /**
