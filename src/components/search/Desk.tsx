@@ -1,18 +1,20 @@
-import { type KeyboardEvent, useEffect, useRef, useState } from 'react';
+import { type KeyboardEvent, useCallback, useRef, useState } from 'react';
 import { counted } from '@/components/sheet/words';
 import { Button } from '@/components/ui/Button';
-import { Kbd } from '@/components/ui/Kbd';
 import { Notice } from '@/components/ui/Notice';
+import type { SearchHit } from '@/domain/search/engine';
 import { type Facets, isFiltered, NO_FILTERS } from '@/domain/search/filters';
 import type { Suggestion } from '@/domain/search/suggest';
-import { addressOf, type Asked, askedIn } from './address';
+import type { Asked } from './address';
 import { Blank } from './Blank';
 import { type Choice, FilterPanel } from './FilterPanel';
 import { keepRecent } from './kept';
 import { NoHits } from './NoHits';
 import { Kept, ReadAs } from './ReadAs';
 import { Row } from './Row';
+import { SearchField } from './SearchField';
 import { type Given, useAnswer } from './useAnswer';
+import { keepAddress, useAsked } from './useAsked';
 import { useRecent } from './useRecent';
 
 export interface DeskProps extends Given {
@@ -23,14 +25,12 @@ export interface DeskProps extends Given {
   mayWrite: boolean;
 }
 
-const FIELD = 'Find a job, part, engine or torque';
-
 export function Desk(props: DeskProps) {
   const { engines, whole, suggestions, mayWrite, person } = props;
-  const [asked, setAsked] = useState<Asked>(props.asked);
   const [limit, setLimit] = useState(props.limit);
   const recent = useRecent(person);
   const field = useRef<HTMLInputElement>(null);
+  const [asked, setAsked] = useAsked(props.asked, field);
   const list = useRef<HTMLUListElement>(null);
   const { answer, ready, late, lost, settle } = useAnswer(asked, limit, props);
   const filtered = isFiltered(asked.filters);
@@ -39,30 +39,23 @@ export function Desk(props: DeskProps) {
   const ask = (next: Asked): void => {
     setAsked(next);
     setLimit(props.limit);
-    history.replaceState(history.state, '', addressOf(next));
   };
   const put = (q: string): void => {
     if (field.current) field.current.value = q;
     ask({ ...asked, q });
   };
 
-  useEffect(() => {
-    // What was typed before the page came to life counts.
-    if (field.current && field.current.value !== field.current.defaultValue)
-      field.current.dispatchEvent(new Event('input', { bubbles: true }));
-    const back = (): void => {
-      const there = askedIn(
-        new URLSearchParams(location.search),
-        engines.map(({ key }) => key),
-      );
-      if (field.current) field.current.value = there.q;
-      setAsked(there);
-    };
-    addEventListener('popstate', back);
-    return () => {
-      removeEventListener('popstate', back);
-    };
-  }, [engines]);
+  const engineName = useCallback(
+    (key: string): string => engines.find((engine) => engine.key === key)?.name ?? key,
+    [engines],
+  );
+  const onOpen = useCallback(
+    (hit: SearchHit): void => {
+      keepAddress(asked);
+      keepRecent(person, hit);
+    },
+    [asked, person],
+  );
 
   const links = (): HTMLAnchorElement[] => [
     ...(list.current?.querySelectorAll<HTMLAnchorElement>('a[data-hit]') ?? []),
@@ -70,7 +63,7 @@ export function Desk(props: DeskProps) {
   const openFirst = async (): Promise<void> => {
     const [first] = (late ? await settle() : answer).hits;
     if (!first || blank) return;
-    keepRecent(person, first);
+    onOpen(first);
     location.assign(`/procedures/${first.number}`);
   };
 
@@ -94,7 +87,6 @@ export function Desk(props: DeskProps) {
     event.preventDefault();
   };
 
-  const engineName = (key: string): string => engines.find((engine) => engine.key === key)?.name ?? key;
   return (
     <form
       action="/"
@@ -108,43 +100,14 @@ export function Desk(props: DeskProps) {
     >
       <div className="lg:col-span-2">
         <h1 className="sr-only">Look up</h1>
-        <div className="relative">
-          <input
-            ref={field}
-            type="search"
-            name="q"
-            data-find
-            defaultValue={props.asked.q}
-            maxLength={200}
-            aria-label={FIELD}
-            placeholder={FIELD}
-            autoComplete="off"
-            autoCapitalize="off"
-            spellCheck={false}
-            enterKeyHint="go"
-            aria-describedby="look-up-keys"
-            onInput={({ currentTarget }) => {
-              ask({ ...asked, q: currentTarget.value });
-            }}
-            onKeyDown={onFieldKey}
-            className="h-[58px] w-full rounded border-2 border-ink bg-white pl-4 pr-4 font-serif text-[1.125rem] sm:h-[68px] sm:pl-5 sm:pr-16 sm:text-[1.5625rem] [&::-webkit-search-cancel-button]:hidden"
-          />
-          <span
-            data-needs-script
-            aria-hidden="true"
-            className="pointer-events-none absolute right-5 top-1/2 -translate-y-1/2 max-sm:hidden"
-          >
-            <Kbd>/</Kbd>
-          </span>
-        </div>
-        <span id="look-up-keys" className="sr-only" data-needs-script>
-          Enter opens the first sheet. Arrow down goes into the list, Escape clears.
-        </span>
-        <noscript>
-          <button className="mt-3 min-h-touch rounded border-frame border-petrol bg-petrol px-5 font-semibold text-white">
-            Look up
-          </button>
-        </noscript>
+        <SearchField
+          ref={field}
+          defaultValue={props.asked.q}
+          onText={(q) => {
+            ask({ ...asked, q });
+          }}
+          onKeyDown={onFieldKey}
+        />
         {blank ? (
           <p role="status" className="mt-3 min-h-[1.625rem] text-[1.0625rem] leading-relaxed text-ink-2">
             {counted(answer.total, 'sheet')} in the books you may read. <Kept kept={ready} />
@@ -190,9 +153,7 @@ export function Desk(props: DeskProps) {
                   hit={hit}
                   engineName={engineName}
                   current={i === 0 && asked.q.trim() !== ''}
-                  onOpen={() => {
-                    keepRecent(person, hit);
-                  }}
+                  onOpen={onOpen}
                 />
               ))}
             </ul>

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { benchTime, counted } from '@/components/sheet/words';
 import { classes } from '@/components/ui/classes';
 import { dayOf } from '@/components/ui/day';
@@ -26,18 +27,16 @@ function Line({ field, text, marks }: Matched) {
   );
 }
 
-export function Row({
-  hit,
-  engineName,
-  current,
-  onOpen,
-}: {
+interface RowProps {
   hit: SearchHit;
   engineName: (key: string) => string;
   /** The one that Enter opens. */
   current: boolean;
-  onOpen: () => void;
-}) {
+  onOpen: (hit: SearchHit) => void;
+}
+
+/** One sheet of the list. A letter typed draws no row again until the answer to it is there. */
+export const Row = memo(function Row({ hit, engineName, current, onOpen }: RowProps) {
   const marksOf = (field: Matched['field']): [number, number][] =>
     hit.matched.find((one) => one.field === field)?.marks ?? [];
   const lines = hit.matched.filter(({ field }) => !OWN_PLACE.includes(field));
@@ -56,7 +55,9 @@ export function Row({
           <a
             href={`/procedures/${hit.number}`}
             data-hit
-            onClick={onOpen}
+            onClick={() => {
+              onOpen(hit);
+            }}
             className="text-ink no-underline after:absolute after:inset-0 focus-visible:outline-none after:focus-visible:outline after:focus-visible:outline-[3px] after:focus-visible:outline-offset-[-3px] after:focus-visible:outline-petrol"
           >
             <Marked text={hit.title} marks={marksOf('title')} />
@@ -97,4 +98,4 @@ export function Row({
       </div>
     </li>
   );
-}
+});
