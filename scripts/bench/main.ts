@@ -114,7 +114,14 @@ async function largeBook(): Promise<void> {
   atMost('10,000 procedures: later start', product.readyMs / 1000, 2, 's');
   const cookie = await signIn(product.address, READER);
   await pages('10,000 procedures', product.address, cookie, '/procedures/P-4711');
-  const index = await wireBytes(`${product.address}/api/v1/search-index`, { cookie, 'accept-encoding': 'br' });
+  // The first answer goes out lightly compressed; the tight one takes its place once the server has made it.
+  const indexBytes = () => wireBytes(`${product.address}/api/v1/search-index`, { cookie, 'accept-encoding': 'br' });
+  const light = await indexBytes();
+  let index = light;
+  for (let tries = 0; index === light && tries < 60; tries++) {
+    await new Promise((resolve) => setTimeout(resolve, 1000));
+    index = await indexBytes();
+  }
   atMost('10,000 procedures: search index, brotli', index / 1e6, 1.2, 'MB', 2);
   const typed = await keystrokes(product.address, cookie, QUERIES);
   atMost('10,000 procedures: search a keystroke, p95', typed.p95, 16, 'ms');

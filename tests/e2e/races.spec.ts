@@ -74,9 +74,9 @@ test('a double click does a thing once', async ({ as }) => {
     const { items } = (await (await call(author, 'GET', '/proposals?limit=200')).json()) as {
       items: ProposalSummary[];
     };
-    return items.filter(({ number }) => number === 'P-0163');
+    return items.filter(({ number }) => number === 'P-0101');
   };
-  await author.goto('/procedures/P-0163');
+  await author.goto('/procedures/P-0101');
   await author.getByRole('button', { name: 'Propose a change' }).dblclick();
   const desk = new WritingDesk(author);
   await desk.ready();
@@ -88,14 +88,14 @@ test('a double click does a thing once', async ({ as }) => {
   await expect(author).toHaveURL(/\?done=proposed$/);
   expect(await mine()).toHaveLength(1);
 
-  const before = await readSheet(author, 'P-0163');
+  const before = await readSheet(author, 'P-0101');
   const editor = await as('editor');
   await editor.goto(`/proposals/${desk.id}`);
   await alive(editor);
   await editor.getByRole('link', { name: 'Publish', exact: true }).click();
   await editor.getByRole('button', { name: /^Publish as/ }).dblclick();
   await expect(editor.getByText(/^Published as/).first()).toBeVisible();
-  const after = await readSheet(author, 'P-0163');
+  const after = await readSheet(author, 'P-0101');
   expect(after.earlier).toBe(before.earlier + 1);
 });
 
