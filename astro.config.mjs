@@ -15,6 +15,8 @@ export default defineConfig({
   // request's URL and refuse every form. Where a changing request comes from is checked by our own middleware:
   // Astro's check turns away every API client that sends no body and no Origin.
   security: { checkOrigin: false, allowedDomains: [{}] },
+  // A sheet is drawn without waiting for a second request: at a bench the network is often poor.
+  build: { inlineStylesheets: 'always' },
   trailingSlash: 'ignore',
   devToolbar: { enabled: false },
   server: { port: Number(process.env.PORT ?? 4321), host: process.env.HOST ?? '127.0.0.1' },

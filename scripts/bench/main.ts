@@ -23,10 +23,14 @@ interface Row {
   met: boolean;
 }
 const rows: Row[] = [];
+const note = (row: Row) => {
+  rows.push(row);
+  console.error(`${row.what}: ${row.got} (${row.aim})`);
+};
 const atLeast = (what: string, got: number, aim: number, digits = 2) =>
-  rows.push({ what, got: got.toFixed(digits), aim: `≥ ${aim}`, met: got >= aim });
+  note({ what, got: got.toFixed(digits), aim: `≥ ${aim}`, met: got >= aim });
 const atMost = (what: string, got: number, aim: number, unit: string, digits = 1) =>
-  rows.push({ what, got: `${got.toFixed(digits)} ${unit}`, aim: `≤ ${aim} ${unit}`, met: got <= aim });
+  note({ what, got: `${got.toFixed(digits)} ${unit}`, aim: `≤ ${aim} ${unit}`, met: got <= aim });
 
 const READER = 'apprentice@northgate.example';
 const work = mkdtempSync(join(tmpdir(), 'matchmark-bench-'));

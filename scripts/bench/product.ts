@@ -66,7 +66,7 @@ export async function signIn(address: string, email: string): Promise<string> {
     body: new URLSearchParams({ csrfToken, email, password: 'matchmark-demo' }),
   });
   keep(answer);
-  if (![...jar.keys()].some((name) => name.includes('session-token')))
+  if (![...jar.keys()].some((name) => name.includes('session')))
     throw new Error(`Could not sign in as ${email}: ${answer.status}`);
   return cookie();
 }

@@ -13,9 +13,9 @@ import { readSheetKey } from '../book/sheet';
  */
 
 interface Kept {
-  plain: Buffer;
-  br: Buffer;
-  gzip: Buffer;
+  plain: Buffer<ArrayBuffer>;
+  br: Buffer<ArrayBuffer>;
+  gzip: Buffer<ArrayBuffer>;
   type: string;
 }
 
@@ -37,7 +37,7 @@ const encodingFor = (accepted: string): 'br' | 'gzip' | undefined =>
 
 function answer(entry: Kept, etag: string, accepted: string): Response {
   const encoding = encodingFor(accepted);
-  return new Response(new Uint8Array(entry[encoding ?? 'plain']), {
+  return new Response(entry[encoding ?? 'plain'], {
     headers: {
       'content-type': entry.type,
       etag,
