@@ -81,8 +81,8 @@ it('starts a new procedure under the next number, unseen until it is published',
   const started = await call(technician, 'POST', '/procedures', {
     body: { book: shop('north'), source: text({ title: 'Fit the test pump' }), reason: 'We had none' },
   });
-  expect(started).toMatchObject({ status: 201, body: { number: 'P-0143', base: null, state: 'draft', version: 1 } });
-  expect((await call(technician, 'GET', '/procedures/P-0143')).status).toBe(404);
+  expect(started).toMatchObject({ status: 201, body: { number: 'P-1001', base: null, state: 'draft', version: 1 } });
+  expect((await call(technician, 'GET', '/procedures/P-1001')).status).toBe(404);
   const at = `/proposals/${started.body.id as string}`;
   await call(technician, 'POST', `${at}/submit`);
   expect((await call(who('pier.editor'), 'GET', at)).status).toBe(404);
@@ -90,13 +90,13 @@ it('starts a new procedure under the next number, unseen until it is published',
   await call(who('north.owner'), 'POST', `${at}/agree`);
   const published = await call(who('north.editor'), 'POST', `${at}/publish`);
   expect(published.body).toMatchObject({ state: 'published', publishedLetter: 'A' });
-  expect((await call(who('north.apprentice'), 'GET', '/procedures/P-0143')).status).toBe(200);
-  expect((await call(who('pier.owner'), 'GET', '/procedures/P-0143')).status).toBe(404);
+  expect((await call(who('north.apprentice'), 'GET', '/procedures/P-1001')).status).toBe(200);
+  expect((await call(who('pier.owner'), 'GET', '/procedures/P-1001')).status).toBe(404);
   const lists = await Promise.all(
     ['north.apprentice', 'pier.owner'].map(async (name) => (await call(who(name), 'GET', '/procedures')).body.items),
   );
   expect(lists.map((items: { number: string }[]) => items.map((i) => i.number))).toEqual([
-    ['P-0142', 'P-0143'],
+    ['P-0142', 'P-1001'],
     ['P-0142'],
   ]);
 });
