@@ -25,6 +25,12 @@ interface Remembered {
 
 const KEY = 'content.';
 
+/**
+ * Files taken in one transaction. A book of thousands held whole until one transaction at the end takes
+ * gigabytes; a start that is cut off keeps the batches it finished and goes on from there.
+ */
+const BATCH = 100;
+
 interface Shipped extends ContentFile {
   standing: Standing | null;
   text: Weighed;
@@ -42,20 +48,22 @@ export async function importContent(): Promise<Imported> {
   const imported: Imported = { added: [], revised: [], proposed: [], problems: [] };
   const changed = (await readContent(config.contentDir)).filter(({ number, hash }) => known.get(number)?.file !== hash);
 
-  // Read before the transaction, so that nobody waits for the parser.
-  const shipped: Shipped[] = [];
-  for (const file of changed) {
-    try {
-      shipped.push(await readShipped(file));
-    } catch (error) {
-      if (!(error instanceof Refusal)) throw error;
-      imported.problems.push({ file: file.name, message: error.detail });
+  for (let from = 0; from < changed.length; from += BATCH) {
+    const shipped: Shipped[] = [];
+    // Read before the transaction, so that nobody waits for the parser.
+    for (const file of changed.slice(from, from + BATCH)) {
+      try {
+        shipped.push(await readShipped(file));
+      } catch (error) {
+        if (!(error instanceof Refusal)) throw error;
+        imported.problems.push({ file: file.name, message: error.detail });
+      }
     }
+    if (shipped.length > 0)
+      await db.write(async () => {
+        for (const file of shipped) await take(file, known.get(file.number)?.shipped ?? null, imported);
+      });
   }
-  if (shipped.length === 0) return imported;
-  await db.write(async () => {
-    for (const file of shipped) await take(file, known.get(file.number)?.shipped ?? null, imported);
-  });
   return imported;
 }
 
