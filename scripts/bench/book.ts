@@ -1,4 +1,4 @@
-import { cpSync, mkdirSync, writeFileSync } from 'node:fs';
+import { cpSync, readdirSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { toSource } from '@/domain/procedure/canonical';
 import { Frontmatter } from '@/domain/procedure/schema';
@@ -61,12 +61,17 @@ export function sourceOf(document: SearchDocument, seed: number): string {
   return toSource({ frontmatter, intro: '', steps });
 }
 
-/** Writes a content folder with `count` generated procedures beside the engines and vocabulary of this release. */
+/**
+ * Writes a content folder of `count` procedures: those of this release, which the demonstration tells its history
+ * of, and generated ones under all other numbers, beside the engines and vocabulary of this release.
+ */
 export function writeBook(contentDir: string, folder: string, count: number): void {
-  mkdirSync(join(folder, 'procedures'), { recursive: true });
-  for (const part of ['engines', 'vocabulary', 'demonstration'])
+  for (const part of ['procedures', 'engines', 'vocabulary', 'demonstration'])
     cpSync(join(contentDir, part), join(folder, part), { recursive: true });
+  const procedures = join(folder, 'procedures');
+  const shipped = new Set(readdirSync(procedures).map((file) => file.slice(0, 'p-0000'.length)));
   generatedDocuments(count).forEach((document, i) => {
-    writeFileSync(join(folder, 'procedures', `p-${document.number.slice(2)}-generated.mdx`), sourceOf(document, i));
+    const name = document.number.toLowerCase();
+    if (!shipped.has(name)) writeFileSync(join(procedures, `${name}-generated.mdx`), sourceOf(document, i));
   });
 }

@@ -83,11 +83,13 @@ export async function scores(
   debugPort: number,
 ): Promise<Record<string, number>> {
   const browser = await chromium.launch({ executablePath, args: [...ARGS, `--remote-debugging-port=${debugPort}`] });
+  // Cookies of the browser itself: a header that Lighthouse adds would not go with what a worker fetches.
+  const session = await browser.newBrowserCDPSession();
+  await session.send('Storage.setCookies', { cookies: cookies(address, cookie) });
   const result = await lighthouse(address + path, {
     port: debugPort,
     output: 'json',
     logLevel: 'error',
-    extraHeaders: { Cookie: cookie },
     disableStorageReset: true,
     onlyCategories: ['performance', 'accessibility', 'best-practices', 'seo'],
   });

@@ -25,6 +25,8 @@ export async function start(dataDir: string, port: number, env: Record<string, s
     stdio: ['ignore', 'ignore', 'inherit'],
   });
   const address = `http://127.0.0.1:${port}`;
+  // A measurement that fails must not leave a server behind it.
+  process.once('exit', () => child.kill('SIGKILL'));
   for (;;) {
     if (child.exitCode !== null) throw new Error(`The server stopped with ${child.exitCode}.`);
     if (

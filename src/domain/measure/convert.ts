@@ -120,3 +120,18 @@ export function convert(value: number, from: Unit, to: Unit, density?: number): 
   const result = (base * across - (b.offset ?? 0)) / b.factor;
   return Number.isFinite(result) ? { ok: true, value: result } : refuse(`The ${quantityOf(from)} is too large.`);
 }
+
+/** A value in the base unit of its kind (m, N·m, Pa, K, m³/s …; % and turns as they are), not rounded. Refuses what `convert` refuses. */
+export function toBase(value: number, unit: Unit): Converted {
+  const checked = convert(value, unit, unit);
+  if (!checked.ok) return checked;
+  const { factor, offset = 0 } = MEASURES[unit];
+  return { ok: true, value: factor * value + offset };
+}
+
+/** A value from the base unit of its kind in `unit`, not rounded. */
+export const fromBase = (base: number, unit: Unit): number =>
+  (base - (MEASURES[unit].offset ?? 0)) / MEASURES[unit].factor;
+
+/** Whether two units measure the same kind of thing, so that one can be turned into the other without a density. */
+export const sameKind = (a: Unit, b: Unit): boolean => MEASURES[a].kind === MEASURES[b].kind;

@@ -41,7 +41,8 @@ export function withUnit(number: string, unit: Unit): string {
 /** Torques of less than this are read on a wrench in lbf·in; 27 N·m. Common practice, no source. */
 const POUND_FEET_FROM = 20;
 
-function inchUnit(unit: Unit, largest: number): Unit {
+/** What a reader in inch units reads a value of that size in. */
+export function inchUnit(unit: Unit, largest: number): Unit {
   if (unit === 'N·m' || unit === 'kgf·m') {
     const feet = convert(largest, unit, 'lbf·ft');
     return feet.ok && feet.value >= POUND_FEET_FROM ? 'lbf·ft' : 'lbf·in';

@@ -1,9 +1,10 @@
 import { convert, type Unit } from '../measure/convert';
 import { withUnit, formatNumber, inBothUnits } from '../measure/format';
+import { NUMBER, numberOf, SPELLINGS } from '../measure/spellings';
 
 /**
  * Reads measures out of what somebody types: a torque off an old wrench, a clearance in thou, a thread. People write
- * one unit in many ways, so the spellings stand in a table; what is read is compared in the unit the book keeps.
+ * one unit in many ways (`measure/spellings.ts`); what is read is compared in the unit the book keeps.
  */
 
 /** A measure met in a query. `low` and `high` are the least and most it can mean, in `unit`. */
@@ -32,60 +33,6 @@ export interface ReadThread {
 
 export type ReadQuantity = ReadMeasure | ReadThread;
 
-const dot = String.raw`[\s.·⋅•*x-]*`;
-const force = '(?:lbf|lbs?|pounds?|pound-force)';
-const foot = '(?:ft|foot|feet)';
-const inch = '(?:in|inch|inches)';
-
-/** Spellings of a unit, the longest and least mistakable first. Matched after a number, whatever the case. */
-const SPELLINGS: readonly (readonly [pattern: string, unit: Unit, times?: number])[] = [
-  [`${force}${dot}${foot}|${foot}${dot}${force}`, 'lbf·ft'],
-  [`${force}${dot}${inch}|${inch}${dot}${force}`, 'lbf·in'],
-  [`kgf?${dot}cm`, 'kgf·m', 0.01],
-  [`kgf?${dot}m|kpm|m${dot}kgf?`, 'kgf·m'],
-  [`dan${dot}m`, 'N·m', 10],
-  [`n${dot}m|newton[\\s-]?met(?:re|er)s?`, 'N·m'],
-  [`cc${dot}/${dot}min|cc per min(?:ute)?`, 'cc/min'],
-  ['ml ?/ ?min|ml per min(?:ute)?', 'mL/min'],
-  ['l ?/ ?min|lit(?:re|er)s? per min(?:ute)?', 'L/min'],
-  ['lbs? ?/ ?(?:h|hr|hour)|pph', 'lb/h'],
-  ['g ?/ ?s', 'g/s'],
-  ['kpa', 'kPa'],
-  ['mpa', 'MPa'],
-  ['bars?', 'bar'],
-  ['psig?|lbf? ?/ ?in(?:2|²)', 'psi'],
-  ['°? ?c(?:elsius)?|deg(?:rees?)? ?c', '°C'],
-  ['°? ?f(?:ahrenheit)?|deg(?:rees?)? ?f', '°F'],
-  ['°|deg(?:rees?)?', '°'],
-  ['thous?|thousandths?|mils?', 'thou'],
-  ['mm|millimet(?:re|er)s?', 'mm'],
-  ['[µμu]m|microns?|micromet(?:re|er)s?', 'µm'],
-  ['cm', 'mm', 10],
-  [`${inch}|"|″|''`, 'in'],
-  ['us (?:qts?|quarts?)', 'US qt'],
-  ['imp(?:erial)? (?:qts?|quarts?)', 'imp qt'],
-  ['qts?|quarts?', 'US qt'],
-  ['ml|millilit(?:re|er)s?', 'mL'],
-  ['cc|cm3|cm³', 'cm³'],
-  ['l|lit(?:re|er)s?|ltrs?', 'L'],
-  ['rpm|r/min|revs?', 'rpm'],
-  ['mv|millivolts?', 'mV'],
-  ['v|volts?', 'V'],
-  ['kohms?|k(?:Ω|ω)', 'kΩ'],
-  ['ohms?|Ω|ω', 'Ω'],
-  ['amps?|a', 'A'],
-  ['kn', 'kN'],
-  ['n|newtons?', 'N'],
-  [force, 'lbf'],
-  ['kgs?|kilos?', 'kg'],
-  ['g|grams?', 'g'],
-  ['h|hrs?|hours?', 'h'],
-  ['mins?|minutes?', 'min'],
-  ['s|secs?|seconds?', 's'],
-  ['%|per ?cent', '%'],
-];
-
-const NUMBER = String.raw`\d{1,3}(?:[\u202f\u2009' ]\d{3})+(?![\d])|\d+(?:[.,]\d+)?|[.,]\d+`;
 const AFTER = String.raw`(?![\p{L}\d])`;
 const UNITS = SPELLINGS.map(([pattern], i) => `(?<u${i}>${pattern})`).join('|');
 const MEASURE = new RegExp(
@@ -94,8 +41,6 @@ const MEASURE = new RegExp(
 );
 const THREAD = /(?<![\p{L}\d])m ?(\d{1,2}(?:[.,]5)?)(?: ?[x×*] ?(\d(?:[.,]\d{1,2})?))?(?:[x×*]\d+)?(?![\p{L}\d])/giu;
 const INCH_THREAD = /(?<![\p{L}\d])(#?\d{1,2}(?:\/\d{1,2})?) ?- ?(\d{1,2}) ?(un[cf])(?![\p{L}\d])/giu;
-
-const numberOf = (text: string): number => Number(text.replace(/[\u202f\u2009' ]/g, '').replace(',', '.'));
 
 /** Half of the last digit written: 0.5 for "89", 0.05 for "7.4". */
 function halfDigitOf(text: string): number {
