@@ -38,4 +38,14 @@ const handbook = defineCollection({
     .strict(),
 });
 
-export const collections = { procedures, engines, vocabulary, handbook };
+/** The words around each calculator. They stand in the worksheet's own folder, whose name is their id. */
+const calculators = defineCollection({
+  loader: glob({
+    pattern: '*/docs.mdx',
+    base: './src/domain/worksheets',
+    generateId: ({ entry }) => entry.slice(0, entry.indexOf('/')),
+  }),
+  schema: z.object({}).strict(),
+});
+
+export const collections = { procedures, engines, vocabulary, handbook, calculators };
