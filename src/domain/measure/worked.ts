@@ -15,7 +15,7 @@ export const refused = (...problems: FieldProblem[]): { ok: false; problems: Fie
   problems,
 });
 
-interface Bounds {
+export interface Bounds {
   /** Must be more than this. */
   above?: number;
   /** Must be this or more. */
