@@ -40,7 +40,7 @@ const Outline = ({ drawing }: { drawing: Placement }) => {
  * Bolts where they stand, seen from their heads. With an order, each shows its turn and the first is filled; without,
  * its place. The same is said in words underneath.
  */
-export function OrderDrawing({ torque }: { torque: Torque }) {
+export function OrderDrawing({ torque }: { torque: Pick<Torque, 'name' | 'positions' | 'order'> }) {
   const { positions, order, name } = torque;
   if (!positions?.length) return null;
   const drawing = place(positions);

@@ -10,8 +10,20 @@ export type FieldProps = FieldWords &
   };
 
 /** One line of text, or a number with its unit. */
-export function Field({ label, name, id, hint, error, fieldClass, unit, className, ref, ...input }: FieldProps) {
-  const words = { label, name, id, hint, error, fieldClass };
+export function Field({
+  label,
+  name,
+  id,
+  hint,
+  hintBelow,
+  error,
+  fieldClass,
+  unit,
+  className,
+  ref,
+  ...input
+}: FieldProps) {
+  const words = { label, name, id, hint, hintBelow, error, fieldClass };
   return (
     <FieldShell {...words}>
       <span className="relative block">

@@ -9,6 +9,8 @@ export interface FieldWords {
   name: string;
   id?: string;
   hint?: ReactNode;
+  /** Under the control, so that boxes beside each other stand on one line however long their hints are. */
+  hintBelow?: boolean;
   /** What is wrong and what to do about it. */
   error?: string | undefined;
   /** Classes of the whole field, for its place in a layout. */
@@ -29,22 +31,24 @@ export function tie({ name, id = name, hint, error }: FieldWords) {
 /** Label above, hint under it, the control, and the error right beside what it speaks of. */
 export function FieldShell({ children, ...words }: FieldWords & { children: ReactNode }) {
   const { id } = tie(words);
+  const hint = words.hint && (
+    <p id={`${id}-hint`} className={classes('text-small text-ink-2', !words.hintBelow && '-mt-1')}>
+      {words.hint}
+    </p>
+  );
   return (
     <div className={classes('flex min-w-0 flex-col gap-1.5', words.fieldClass)}>
       <label htmlFor={id} className="font-medium">
         {words.label}
       </label>
-      {words.hint && (
-        <p id={`${id}-hint`} className="-mt-1 text-small text-ink-2">
-          {words.hint}
-        </p>
-      )}
+      {!words.hintBelow && hint}
       {children}
       {words.error && (
         <p id={`${id}-error`} className="border-l-[8px] border-ink pl-2.5 font-medium leading-snug">
           {words.error}
         </p>
       )}
+      {words.hintBelow && hint}
     </div>
   );
 }

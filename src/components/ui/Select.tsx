@@ -13,6 +13,7 @@ export function Select({
   name,
   id,
   hint,
+  hintBelow,
   error,
   fieldClass,
   options,
@@ -24,7 +25,7 @@ export function Select({
     options: readonly Option[];
     ref?: Ref<HTMLSelectElement>;
   }) {
-  const words = { label, name, id, hint, error, fieldClass };
+  const words = { label, name, id, hint, hintBelow, error, fieldClass };
   return (
     <FieldShell {...words}>
       <select {...select} {...tie(words)} ref={ref} className={classes('field-box', className)}>
