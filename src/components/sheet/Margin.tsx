@@ -3,6 +3,7 @@ import type { Frontmatter, Limit, Timer, Torque } from '@/domain/procedure/schem
 import type { Reference } from '@/domain/procedure/types';
 import { durationText, limitText, threadText, torqueText } from '@/domain/procedure/values';
 import { OrderDrawing } from './OrderDrawing';
+import { roundsOf } from './orderPasses';
 import { BigValue, OtherUnits, Value } from './Value';
 import { counted, passWord } from './words';
 
@@ -62,7 +63,7 @@ function TorqueBlock({
         {torque.note && <Line>{torque.note}</Line>}
         <Origin source={torque.source} frontmatter={f} />
       </div>
-      <OrderDrawing torque={torque} />
+      <OrderDrawing torque={torque} rounds={roundsOf(torque, { passes, final })} />
     </Block>
   );
 }

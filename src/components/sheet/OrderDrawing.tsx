@@ -1,4 +1,5 @@
 import type { Torque } from '@/domain/procedure/schema';
+import type { Round } from './orderPasses';
 import { place, type Placement } from './placement';
 
 const third = (at: number, of: number, words: readonly [string, string, string]) =>
@@ -40,14 +41,21 @@ const Outline = ({ drawing }: { drawing: Placement }) => {
  * Bolts where they stand, seen from their heads. With an order, each shows its turn and the first is filled; without,
  * its place. The same is said in words underneath.
  */
-export function OrderDrawing({ torque }: { torque: Pick<Torque, 'name' | 'positions' | 'order'> }) {
+export function OrderDrawing({
+  torque,
+  rounds = [],
+}: {
+  torque: Pick<Torque, 'name' | 'positions' | 'order'>;
+  /** What is done to each bolt in turn; `orderSteps.ts` steps through them. */
+  rounds?: readonly Round[];
+}) {
   const { positions, order, name } = torque;
   if (!positions?.length) return null;
   const drawing = place(positions);
   const turns = order ?? positions.map((_, i) => i + 1);
   const caption = order ? 'Tightening order' : 'Places';
   return (
-    <figure className="mt-3 break-inside-avoid">
+    <figure className="mt-3 break-inside-avoid" data-order={order ? JSON.stringify(rounds) : undefined}>
       <svg
         viewBox={`0 0 ${drawing.width} ${drawing.height}`}
         role="img"
@@ -63,7 +71,7 @@ export function OrderDrawing({ torque }: { torque: Pick<Torque, 'name' | 'positi
           if (!at) return null;
           const first = order !== undefined && turn === 0;
           return (
-            <g key={bolt}>
+            <g key={bolt} data-turn={order ? turn + 1 : undefined}>
               <circle
                 cx={at.x}
                 cy={at.y}
@@ -78,6 +86,7 @@ export function OrderDrawing({ torque }: { torque: Pick<Torque, 'name' | 'positi
           );
         })}
       </svg>
+      {order && <div data-order-steps="" data-needs-script="" className="order-steps" />}
       <figcaption className="mt-1 text-small text-ink-2">
         <details>
           <summary className="inline-flex min-h-7 cursor-pointer items-center underline decoration-rule underline-offset-[3px] print:no-underline">

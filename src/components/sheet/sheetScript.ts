@@ -1,3 +1,5 @@
+import { stepThrough } from './orderSteps';
+
 /** A sheet's small comforts: units in place, links to steps, print. Each works as a plain link or form without it. */
 
 for (const form of document.querySelectorAll<HTMLFormElement>('form[data-units-switch]'))
@@ -26,6 +28,8 @@ for (const link of document.querySelectorAll<HTMLAnchorElement>('a[data-copy-lin
       })
       .catch(() => {});
   });
+
+for (const figure of document.querySelectorAll<HTMLElement>('figure[data-order]')) stepThrough(figure);
 
 for (const button of document.querySelectorAll('[data-print]')) button.addEventListener('click', () => print());
 

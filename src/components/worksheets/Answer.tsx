@@ -6,7 +6,7 @@ import type { Units } from './asked';
 
 /** Out of limits is told by words, weight, hatching and a heavy edge; the signal colours belong to cautions alone. */
 const EDGE: Record<Verdict, string> = {
-  fail: 'border-l-[14px] border-ink worksheet-hatch',
+  fail: 'border-l-[14px] border-ink work-hatch',
   look: 'border-l-[8px] border-ink',
   pass: 'border-l-[8px] border-petrol',
   none: '',

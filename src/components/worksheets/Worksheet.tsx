@@ -53,12 +53,12 @@ export function Worksheet({
   const { outcome } = now;
   return (
     <>
-      <div className="worksheet">
-        <div className="worksheet-boxes">
+      <div className="work">
+        <div className="work-boxes">
           {worksheet.groups.map(({ title, fields }) => {
             const shown = fields.filter((name) => !hidden.includes(name));
             return shown.length === 0 ? null : (
-              <section key={title} className="worksheet-group">
+              <section key={title} className="work-group">
                 <h2 className="font-serif text-lead font-bold">{title}</h2>
                 <div className="mt-3 grid gap-x-5 gap-y-4 sm:grid-cols-2">
                   {shown.map((name) => {
@@ -79,7 +79,7 @@ export function Worksheet({
             );
           })}
         </div>
-        <div className="worksheet-answer">
+        <div className="work-answer">
           <h2 className="font-serif text-lead font-bold">Answer</h2>
           <div role="status" aria-live="polite" className="mt-3">
             {outcome.ok ? (
@@ -91,7 +91,7 @@ export function Worksheet({
         </div>
       </div>
       {outcome.ok && outcome.value.results.length > 0 && (
-        <section className="worksheet-more">
+        <section className="work-more">
           <h2 className="font-serif text-lead font-bold">How it is worked out</h2>
           <div className="mt-2 max-w-[52rem]">
             <Working outcome={outcome.value} units={now.units} />
@@ -99,7 +99,7 @@ export function Worksheet({
         </section>
       )}
       {outcome.ok && outcome.value.charts.length > 0 && (
-        <section className="worksheet-more flex flex-col gap-7">
+        <section className="work-more flex flex-col gap-7">
           <Charts charts={outcome.value.charts} units={now.units} />
         </section>
       )}

@@ -1,5 +1,6 @@
 import type { Frontmatter } from './schema';
 import { suggestion } from './nearest';
+import { bindingFault, bindingsIn } from './bindings';
 import { WORKSHEETS } from './worksheets';
 
 /** Attributes of a component as written: literal text only. */
@@ -68,12 +69,10 @@ function timerFaults(given: Attributes, head: Frontmatter): AttributeFault[] {
   return [{ attribute: 'stage', message: `${supply.name} has no ${stage} time. Write it in the supplies first.` }];
 }
 
-/** Keys that a worksheet judges against, in order. */
-export const worksheetKeys = (of: string | undefined) => (of ?? '').split(/\s+/).filter(Boolean);
-
 function worksheetFaults(given: Attributes, head: Frontmatter): AttributeFault[] {
   const kind = given['kind'] ?? '';
-  const keys = worksheetKeys(given['of']);
+  const bindings = bindingsIn(given['of']);
+  const keys = bindings.map(({ key }) => key);
   if (!Object.hasOwn(WORKSHEETS, kind))
     return [
       { attribute: 'kind', message: `There is no worksheet "${kind}". ${suggestion(kind, Object.keys(WORKSHEETS))}` },
@@ -87,7 +86,17 @@ function worksheetFaults(given: Attributes, head: Frontmatter): AttributeFault[]
     ];
   const twice = keys.find((key, i) => keys.indexOf(key) !== i);
   if (twice) return [{ attribute: 'of', message: `"${twice}" is named twice in this worksheet.` }];
-  return keys.flatMap((key) => missing(head.limits, key, 'limits'));
+  return bindings.flatMap((binding) => {
+    const wrong = bindingFault(
+      kind,
+      binding,
+      head.limits.find(({ key }) => key === binding.key),
+    );
+    return [
+      ...(wrong === null ? [] : [{ attribute: 'of', message: wrong }]),
+      ...missing(head.limits, binding.key, 'limits'),
+    ];
+  });
 }
 
 /** A component that names one entry of one list and nothing else. */

@@ -1,4 +1,5 @@
 import type { Nodes, RootContent } from 'mdast';
+import { limitKeysIn } from './bindings';
 import type { DraftBody } from './body';
 import { elementsIn, given } from './references';
 import { problem, type PlaceOf } from './problems';
@@ -21,7 +22,7 @@ function keysUsed(body: DraftBody, ...names: string[]): Set<string> {
   return new Set(
     elementsIn(allNodes(body))
       .filter((e) => names.includes(e.name ?? ''))
-      .flatMap((e) => (given(e)['of'] ?? '').split(/\s+/)),
+      .flatMap((e) => limitKeysIn(given(e)['of'])),
   );
 }
 

@@ -1,6 +1,7 @@
 import type { Nodes, PhrasingContent, RootContent } from 'mdast';
 import { isElement, type Element } from './attributes';
-import { isStage, worksheetKeys, type Attributes } from './components';
+import { limitKeysIn } from './bindings';
+import { isStage, type Attributes } from './components';
 import type { BothUnits } from '../measure/format';
 import type { Frontmatter } from './schema';
 import type { Reference } from './types';
@@ -30,7 +31,7 @@ export function referenceOf(element: Element): Reference | null {
     case 'Figure':
       return { kind: 'figure', key };
     case 'Worksheet':
-      return { kind: 'worksheet', worksheet: kind, keys: worksheetKeys(given(element)['of']) };
+      return { kind: 'worksheet', worksheet: kind, keys: limitKeysIn(given(element)['of']) };
     default:
       return null;
   }

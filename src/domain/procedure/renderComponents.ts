@@ -1,7 +1,8 @@
 import type { Element as HastElement, ElementContent, Properties } from 'hast';
 import type { BothUnits } from '../measure/format';
 import type { Element } from './attributes';
-import { referenceOf, valueOf } from './references';
+import { bindingsIn, type Binding } from './bindings';
+import { given, referenceOf, valueOf } from './references';
 import type { Frontmatter, Limit } from './schema';
 import type { Reference } from './types';
 import { limitText } from './values';
@@ -56,11 +57,26 @@ function reading(limit: Limit): HastElement {
   return h('tr', {}, h('th', { scope: 'row' }, ...name), h('td', {}, value), h('td', {}));
 }
 
+/** What the page's script needs to open the worksheet with the sheet's own limits in place. */
+function boundLimits(bindings: readonly Binding[], head: Frontmatter): string {
+  const bound = bindings.flatMap(({ field, key }) => {
+    const limit = head.limits.find((l) => l.key === key);
+    if (field === null || !limit) return [];
+    const { name, min, max, nominal, unit } = limit;
+    return [{ field, name, min, max, nominal, unit, text: limitText(limit) }];
+  });
+  return JSON.stringify(bound);
+}
+
 /** A table to write readings in, on paper as well; without limits only the name of the worksheet. */
-function worksheet(kind: string, keys: readonly string[], head: Frontmatter): HastElement {
+function worksheet(kind: string, bindings: readonly Binding[], head: Frontmatter): HastElement {
   const title = WORKSHEETS[kind as WorksheetKind];
-  const limits = keys.flatMap((key) => head.limits.filter((l) => l.key === key));
-  const properties = { className: ['worksheet'], dataWorksheet: kind };
+  const limits = bindings.flatMap(({ key }) => head.limits.filter((l) => l.key === key));
+  const properties = {
+    className: ['worksheet'],
+    dataWorksheet: kind,
+    ...(kind !== 'readings' && { dataBound: boundLimits(bindings, head) }),
+  };
   if (limits.length === 0) return h('p', properties, `Worksheet: ${title.toLowerCase()}`);
   const columns = ['Measure', 'Limit', 'Reading'].map((text) => h('th', { scope: 'col' }, text));
   return h(
@@ -77,7 +93,7 @@ export function componentNodes(element: Element, head: Frontmatter, opensSentenc
   const reference = referenceOf(element);
   if (!reference) return [];
   if (reference.kind === 'figure') return figure(reference.key, head);
-  if (reference.kind === 'worksheet') return [worksheet(reference.worksheet, reference.keys, head)];
+  if (reference.kind === 'worksheet') return [worksheet(reference.worksheet, bindingsIn(given(element)['of']), head)];
   const text = valueOf(reference, head, opensSentence);
   return text ? [valueSpan(reference, text)] : [];
 }

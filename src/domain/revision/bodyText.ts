@@ -1,4 +1,6 @@
-import { isStage, worksheetKeys } from '../procedure/components';
+import { bindingsIn } from '../procedure/bindings';
+import { isStage } from '../procedure/components';
+import { worksheetNamed } from '../worksheets/registry';
 import type { Frontmatter } from '../procedure/schema';
 import { limitText, partText, stageText, timerText, torqueText } from '../procedure/values';
 import { WORKSHEETS, type WorksheetKind } from '../procedure/worksheets';
@@ -37,7 +39,11 @@ function textOf({ name, given, inside }: Found, head: Frontmatter): string | nul
       return figure ? `Figure: ${figure.caption}` : null;
     }
     case 'Worksheet': {
-      const names = worksheetKeys(given['of']).map((key) => head.limits.find((l) => l.key === key)?.name ?? key);
+      const fields = worksheetNamed(given['kind'])?.fields ?? {};
+      const names = bindingsIn(given['of']).map(({ field, key }) => {
+        const name = head.limits.find((l) => l.key === key)?.name ?? key;
+        return field === null ? name : `${fields[field]?.label ?? field} by ${name}`;
+      });
       const title = WORKSHEETS[given['kind'] as WorksheetKind] ?? given['kind'] ?? '';
       return `Worksheet: ${[title, ...names].join('; ')}`;
     }
@@ -73,8 +79,8 @@ export function actedOn(body: string): {
     if (name === 'Limit') values.push({ kind: 'limit', key, id: `limit ${key}` });
     // A worksheet judges readings against its limits, so to leave one out is to stop measuring it.
     if (name === 'Worksheet')
-      for (const limit of worksheetKeys(given['of']))
-        values.push({ kind: 'limit', key: limit, id: `worksheet ${given['kind'] ?? ''} ${limit}` });
+      for (const { field, key: limit } of bindingsIn(given['of']))
+        values.push({ kind: 'limit', key: limit, id: `worksheet ${given['kind'] ?? ''} ${field ?? ''} ${limit}` });
     if (name === 'Hold') holds.push(inside.trim());
     return null;
   });

@@ -1,3 +1,4 @@
+import { limitKeysIn } from '../procedure/bindings';
 import { isListName } from '../procedure/fields';
 import type { Draft, ListName } from './draft';
 
@@ -12,11 +13,11 @@ const COMPONENTS: Partial<Record<ListName, RegExp>> = {
   cautions: /<Caution\b[^>]*\sof="([^"]*)"/g,
 };
 
-/** Keys of a list that a text points at, each once, in reading order. */
+/** Keys of a list that a text points at (a worksheet's without their fields), each once, in reading order. */
 export function keysIn(text: string, list: ListName): string[] {
   const pattern = COMPONENTS[list];
   if (!pattern) return [];
-  return [...new Set([...text.matchAll(pattern)].flatMap(([, of = '']) => of.split(/\s+/).filter(Boolean)))];
+  return [...new Set([...text.matchAll(pattern)].flatMap(([, of]) => limitKeysIn(of)))];
 }
 
 /** Numbers, from 1, of the steps that use an entry. */

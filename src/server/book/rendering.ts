@@ -3,7 +3,7 @@ import { app } from '../context';
 import { parsedText } from './parsed';
 
 /** Raise it whenever the parser makes other HTML of the same text; older renderings are then made again. */
-export const RENDERING_FORM = 1;
+export const RENDERING_FORM = 2;
 
 /** Keeps what a text looks like under the hash of the text. Call it in the `write` that saves the text. */
 export async function keepRendering(hash: string, rendered: RenderedProcedure): Promise<void> {

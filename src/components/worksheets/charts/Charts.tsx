@@ -1,5 +1,8 @@
-import type { ReactNode } from 'react';
+import { useEffect, useRef, type ReactNode } from 'react';
 import { OrderDrawing } from '@/components/sheet/OrderDrawing';
+import { stepThrough } from '@/components/sheet/orderSteps';
+import { passWord } from '@/components/sheet/words';
+import { formatMeasure } from '@/domain/measure/format';
 import { show } from '@/domain/measure/said';
 import type { BarsChart, Chart, OrderChart, ShapeChart } from '@/domain/worksheets/charts';
 import type { Units } from '../asked';
@@ -80,16 +83,36 @@ const KINDS = {
   ),
   order: (chart: OrderChart) => (
     <Frame chart={chart}>
+      <Stepped chart={chart} />
+    </Frame>
+  ),
+};
+
+/** The same drawing as on a sheet, gone through bolt by bolt. Drawn anew where the order is another. */
+function Stepped({ chart }: { chart: OrderChart }) {
+  const place = useRef<HTMLDivElement>(null);
+  const id = JSON.stringify(chart);
+  useEffect(() => {
+    const figure = place.current?.querySelector<HTMLElement>('figure[data-order]');
+    if (figure) stepThrough(figure);
+  }, [id]);
+  const rounds = chart.passes.map((torque, i) => ({
+    name: i === chart.passes.length - 1 ? 'Final pass' : passWord(i + 1),
+    text: formatMeasure(torque, 'N·m'),
+  }));
+  return (
+    <div ref={place} key={id}>
       <OrderDrawing
+        rounds={rounds}
         torque={{
           name: chart.title,
           positions: chart.positions.map(([right, down]) => [right * 1000, down * 1000]),
           order: chart.order,
         }}
       />
-    </Frame>
-  ),
-};
+    </div>
+  );
+}
 
 /** All drawings of an outcome. */
 export const Charts = ({ charts, units }: { charts: readonly Chart[]; units: Units }) =>
