@@ -1,4 +1,6 @@
-import { quantityOf, sameKind, toBase, type Unit } from './convert';
+import { isUnit, quantityOf, sameKind, toBase, type Unit } from './convert';
+import { withUnit } from './format';
+import type { MeasuredQuantity } from './quantities';
 import { NUMBER, numberOf, SPELLINGS } from './spellings';
 
 /** A measure as somebody typed it into a box. */
@@ -34,7 +36,7 @@ const plain = (text: string): string =>
     .trim();
 
 const MEASURE = new RegExp(
-  String.raw`^(?<sign>[-+]?) ?(?:(?:(?<whole>\d{1,4})[ -])?(?<over>\d{1,4})/(?<under>\d{1,4})|(?<number>\d+(?:\.\d+)?e[-+]?\d{1,3}|${NUMBER}))(?<unit>.*)$`,
+  String.raw`^(?<sign>[-+]?) ?(?:(?:(?<whole>\d{1,4})[ -])?(?<over>\d{1,4})/(?<under>\d{1,4})|(?<number>\d+(?:\.\d+)?e[-+]?\d{1,3}|${NUMBER}))\.?(?<unit>.*)$`,
   'iu',
 );
 
@@ -44,11 +46,16 @@ const UNITS = SPELLINGS.map(([pattern, unit, times = 1]) => ({
   times,
 }));
 
-/** The unit that a text names, and how many of it one is (a cm is ten mm); null where the book knows none. */
-export function readUnit(text: string): { unit: Unit; times: number } | null {
-  const bare = text.replace(/^-(?=\p{L})/u, '').trim();
-  const found = UNITS.find(({ is }) => is.test(bare));
-  return found ? { unit: found.unit, times: found.times } : null;
+/**
+ * The unit that a text names, and how many of it one is (a cm is ten mm); null where the book knows none. Where a word
+ * names two units, such as the pound of force and the pound of mass, the one that measures `wanted` is meant.
+ */
+export function readUnit(text: string, wanted?: MeasuredQuantity): { unit: Unit; times: number } | null {
+  // "in." is written as often as "in".
+  const bare = text.replace(/^-(?=\p{L})|(?<=\p{L})\.$/gu, '').trim();
+  const named = UNITS.flatMap(({ is, unit, times }) => (is.test(bare) ? [{ unit, times }] : []));
+  if (isUnit(bare)) named.push({ unit: bare, times: 1 });
+  return named.find(({ unit }) => quantityOf(unit) === wanted) ?? named[0] ?? null;
 }
 
 interface Parsed {
@@ -57,7 +64,11 @@ interface Parsed {
   unit: Unit | null;
 }
 
-function parse(text: string, instead: string): { ok: true; value: Parsed } | { ok: false; message: string } {
+function parse(
+  text: string,
+  instead: string,
+  wanted?: MeasuredQuantity,
+): { ok: true; value: Parsed } | { ok: false; message: string } {
   const groups = MEASURE.exec(plain(text))?.groups;
   if (!groups) return refuse(`"${text.trim().slice(0, 40)}" is no number. Write, for example, ${instead}.`);
   const { sign, whole = '0', over, under, number = '' } = groups;
@@ -70,7 +81,7 @@ function parse(text: string, instead: string): { ok: true; value: Parsed } | { o
   const signed = sign === '-' ? -size : size;
   const named = (groups['unit'] ?? '').trim();
   if (named === '') return { ok: true, value: { amount: signed, unit: null } };
-  const found = readUnit(named);
+  const found = readUnit(named, wanted);
   if (!found) return refuse(`"${named.slice(0, 20)}" is no unit that the book knows. Write, for example, ${instead}.`);
   return { ok: true, value: { amount: signed * found.times, unit: found.unit } };
 }
@@ -88,7 +99,7 @@ function settle({ amount, unit }: Parsed, own: Unit): ReadTyped {
  * one that measures something else.
  */
 export function readTyped(text: string, unit: Unit): ReadTyped {
-  const parsed = parse(text, example(unit));
+  const parsed = parse(text, example(unit), quantityOf(unit));
   if (!parsed.ok) return parsed;
   const { unit: named } = parsed.value;
   if (named && quantityOf(named) !== quantityOf(unit))
@@ -104,7 +115,7 @@ export function readAny(text: string): ReadTyped {
   return unit ? settle(parsed.value, unit) : refuse('Write the unit after the number, for example 89 lbf·in.');
 }
 
-const example = (unit: Unit): string => (unit === 'mm' ? '0.35 mm or 14 thou' : `12 ${unit}`);
+const example = (unit: Unit): string => (unit === 'mm' ? '0.35 mm or 14 thou' : withUnit('12', unit));
 
 /** Whether a measure needs the density of the fluid to become one in `unit`: lb/h against cc/min. */
 export const needsDensity = (typed: Typed, unit: Unit): boolean => !sameKind(typed.unit, unit);

@@ -47,6 +47,8 @@ export const SPELLINGS: readonly (readonly [pattern: string, unit: Unit, times?:
   ['kn', 'kN'],
   ['n|newtons?', 'N'],
   [force, 'lbf'],
+  // In a box for a mass; anywhere else a pound is a force.
+  ['lbs?|pounds?', 'lb'],
   ['kgs?|kilos?', 'kg'],
   ['g|grams?', 'g'],
   ['h|hrs?|hours?', 'h'],
@@ -56,6 +58,6 @@ export const SPELLINGS: readonly (readonly [pattern: string, unit: Unit, times?:
 ];
 
 /** A number as people type it: a point or a comma before the decimals, thin or ordinary spaces between groups of three. */
-export const NUMBER = String.raw`\d{1,3}(?:[\u202f\u2009' ]\d{3})+(?![\d])|\d+(?:[.,]\d+)?|[.,]\d+`;
+export const NUMBER = String.raw`\d{1,3}(?:[\u202f\u2009' ]\d{3})+(?!\d)(?:[.,]\d+)?|\d+(?:[.,]\d+)?|[.,]\d+`;
 
 export const numberOf = (text: string): number => Number(text.replace(/[\u202f\u2009' ]/g, '').replace(',', '.'));
