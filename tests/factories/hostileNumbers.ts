@@ -34,7 +34,7 @@ export function expectSound(result: Worked<unknown>): void {
   expect(result.problems.length).toBeGreaterThan(0);
   for (const { field, message } of result.problems) {
     expect(field).not.toBe('');
-    expect(message).toMatch(/^[A-Zx-y].* .*\.$/);
+    expect(message).toMatch(/^[A-Z].* .*\.$/);
     expect(message).not.toMatch(/NaN|undefined|Infinity|object/);
   }
 }

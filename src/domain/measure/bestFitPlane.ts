@@ -25,7 +25,7 @@ function pointProblems(points: readonly FacePoint[]): FieldProblem[] {
   if (count.length > 0) return count;
   return Array.from(points).flatMap((point, place) =>
     (['x', 'y', 'height'] as const).flatMap((name) =>
-      numberProblem(`points.${place}.${name}`, `${name} of place ${place + 1}`, point?.[name], OFFSET),
+      numberProblem(`points.${place}.${name}`, `The ${name} of place ${place + 1}`, point?.[name], OFFSET),
     ),
   );
 }

@@ -1,6 +1,6 @@
 import { sameWithin } from './band';
 import { PRESSURE } from './reach';
-import { listProblems } from './readings';
+import { countProblem, listProblems } from './readings';
 import { numberProblem, work, type FieldProblem, type Worked } from './worked';
 
 export interface WetTest {
@@ -45,12 +45,21 @@ function wetProblems({ dry, wet, risePercent, neighbours = [] }: WetTest): Field
       say: (bound) => `${bound} %`,
     }),
   );
-  neighbours.forEach((pair, place) => {
-    const known = pair.every((one) => Number.isInteger(one) && one >= 0 && one < dry.length) && pair[0] !== pair[1];
-    if (!known)
-      problems.push({ field: `neighbours.${place}`, message: `Neighbours ${place + 1} must be two cylinders.` });
-  });
+  problems.push(...pairProblems(neighbours, dry));
   return problems;
+}
+
+function pairProblems(pairs: readonly (readonly [number, number])[], dry: readonly number[]): FieldProblem[] {
+  const count = countProblem('neighbours', { list: 'The neighbours', one: 'Pair' }, pairs, { atLeast: 0, atMost: 64 });
+  if (count.length > 0) return count;
+  const known = (pair: readonly number[]) =>
+    Array.isArray(pair) &&
+    pair.length === 2 &&
+    pair[0] !== pair[1] &&
+    pair.every((one: number) => Number.isInteger(one) && one >= 0 && one < dry.length);
+  return Array.from(pairs).flatMap((pair, place) =>
+    known(pair) ? [] : [{ field: `neighbours.${place}`, message: `Pair ${place + 1} must name two cylinders.` }],
+  );
 }
 
 /**
