@@ -101,6 +101,7 @@ export function ReasonFields({
             : 'It cannot be taken up again. The proposal and this reason stay as a record.'
         }
         error={error ?? undefined}
+        fieldClass="max-w-[46rem]"
         value={written.text}
         maxLength={4000}
         onChange={(event) => onWrite({ ...written, text: event.target.value })}

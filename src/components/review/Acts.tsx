@@ -1,7 +1,7 @@
 import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
 import type { Proposal } from '@/domain/api/schemas';
-import { ACT_WORDS, type ReviewAct } from './words';
+import { ACT_WORDS, whyNotYet, type ReviewAct } from './words';
 
 interface ActsProps {
   proposal: Proposal;
@@ -19,7 +19,7 @@ export const isReviewer = ({ state, may, agreed }: Proposal, me: string) =>
 
 /** The acts of a reviewer. Those that ask for something first are links to the page with their panel open. */
 export function Acts({ proposal, me, version, pending, onAgree, onAsk }: ActsProps) {
-  const { may, whyNot, agreements, agreementsNeeded, stale } = proposal;
+  const { may, agreements, agreementsNeeded, stale } = proposal;
   const agreed = proposal.agreed.some((a) => a.person.id === me && a.stands);
   const editor = may.return;
   const asks = (act: ReviewAct, text: string, kind: 'main' | 'plain' = 'plain') => (
@@ -70,7 +70,7 @@ export function Acts({ proposal, me, version, pending, onAgree, onAsk }: ActsPro
       )}
       {!may.publish && editor && !stale && (
         <p id="why-not" className="why-not">
-          {whyNot['publish']}
+          {whyNotYet(proposal)}
         </p>
       )}
     </div>

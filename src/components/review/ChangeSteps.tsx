@@ -57,7 +57,7 @@ export function ChangeSteps({
   }, [go]);
 
   return (
-    <div className="change-steps print:static">
+    <div className="change-steps">
       <p className="font-medium">{words}</p>
       {ids.length > 0 && (
         <div data-needs-script="" className="ml-auto flex items-center gap-2.5 print:hidden">

@@ -20,9 +20,9 @@ export function CompareForm({
     label: `${letter}, ${dayOf(publishedAt)}`,
   }));
   return (
-    <form action={`/procedures/${number}/compare`} className="flex flex-wrap items-end gap-2.5 print:hidden">
-      <Select label="From" name="from" options={options} defaultValue={from} fieldClass="w-44" />
-      <Select label="To" name="to" options={options} defaultValue={to} fieldClass="w-44" />
+    <form action={`/procedures/${number}/compare`} className="compare-form print:hidden">
+      <Select label="From" name="from" options={options} defaultValue={from} fieldClass="sm:w-44" />
+      <Select label="To" name="to" options={options} defaultValue={to} fieldClass="sm:w-44" />
       <Button type="submit">Compare</Button>
     </form>
   );

@@ -1,9 +1,9 @@
 import { Button } from '@/components/ui/Button';
 import { Select, type Option } from '@/components/ui/Select';
 
-/** Which book; a plain form, so that the view has an address. The script sends it at once and hides the button. */
+/** Which book; a plain form, so that the view has an address. The order of the desk goes with it. */
 export const DeskFilter = ({ books, book, sort }: { books: readonly Option[]; book: string; sort: string | null }) => (
-  <form action="/review-desk" className="flex flex-wrap items-end gap-2.5" data-desk-filter>
+  <form action="/review-desk" className="flex flex-wrap items-end gap-2.5">
     <Select
       label="Book"
       name="book"

@@ -38,36 +38,38 @@ export function DeskTable({
         const since = item.proposedAt ?? item.updatedAt;
         return (
           <Row key={item.id}>
-            <Cell className="sm:w-[26%]">
+            <Cell className="sm:w-[26%] lg:w-[30%]">
               <a href={`/proposals/${item.id}`} className="desk-title">
                 {item.title}
               </a>
-              <span className="block whitespace-nowrap text-ink-2">
+              <span className="block text-ink-2">
                 {item.number},{' '}
-                <span className={item.stale ? 'font-semibold text-ink' : undefined}>{letters(item)}</span>
+                <span className={item.stale ? 'font-semibold text-ink' : undefined}>{letters(item)}</span>,{' '}
+                {item.book.kind === 'common' ? 'common book' : `book of ${item.book.name}`}
               </span>
             </Cell>
             <Cell label="By">
-              <span className="sm:block">{item.author.name}</span>
-              {item.author.shop && <span className="text-ink-2 max-sm:before:content-[',_']">{item.author.shop}</span>}
+              {item.author.name}
+              {item.author.shop && (
+                <span className="text-ink-2 max-sm:before:content-[',_'] sm:block">{item.author.shop}</span>
+              )}
             </Cell>
-            <Cell label="Book" className="whitespace-nowrap">
-              {item.book.name}
-            </Cell>
-            <Cell label="What it does" className="sm:w-[28%]">
+            <Cell label="What it does" className="sm:w-[23%] lg:w-[26%]">
               <span className={item.critical ? 'font-semibold' : undefined}>{severityWords(item)}</span>
             </Cell>
-            <Cell label="Agreed" className="whitespace-nowrap">
+            <Cell label="Agreed">
               {item.agreements} of {item.agreementsNeeded}
               {item.next && (
-                <span className="text-ink-2 max-sm:before:content-[',_'] sm:block">
+                <span className="text-ink-2 max-sm:before:content-['._'] sm:block">
                   {item.stale ? 'Waits for its author' : NEXT_WORDS[item.next]}
                 </span>
               )}
             </Cell>
-            <Cell label="Waiting" className="whitespace-nowrap">
+            <Cell label="Waiting">
               {waiting(since, now)}
-              <span className="text-ink-2 max-sm:before:content-[',_'] sm:block">since {dayOf(since)}</span>
+              <span className="whitespace-nowrap text-ink-2 max-sm:before:content-[',_'] sm:block">
+                since {dayOf(since)}
+              </span>
             </Cell>
           </Row>
         );

@@ -9,17 +9,22 @@ const Caution = ({ caution, side }: { caution: CautionLine; side: Side }) => (
   <div className="pane-caution">
     <SignalWord signal={caution.signal} className="!px-2 !py-0 !text-small" />
     <p>
+      {caution.otherSignal && (
+        <b className="font-semibold">
+          {side === 'old' ? 'Becomes' : 'Was'} {caution.otherSignal}.{' '}
+        </b>
+      )}
       <Spans spans={caution.spans} side={side} />
     </p>
   </div>
 );
 
 /** What is to be said of the step as a whole, in words. */
-function remark({ kind, moved, old, now, critical }: StepPair, side: Side): string | null {
+function remark({ kind, moved, old, now, critical }: StepPair, side: Side, alone: boolean): string | null {
   const place = side === 'old' ? now?.number : old?.number;
   const said = [
     side === 'old' && kind === 'removed' && 'Removed',
-    side === 'new' && kind === 'added' && 'Added',
+    side === 'new' && kind === 'added' && !alone && 'Added',
     moved && place && (side === 'old' ? `Moves to step ${place}` : `Moved, was step ${place}`),
     critical && (side === 'new' || kind === 'removed') && `Critical: ${critical}`,
   ].filter(Boolean);
@@ -35,13 +40,13 @@ export function PaneStep({
 }: {
   pair: StepPair;
   side: Side;
-  /** Which text this is, said where both stand in one column: "C, published". */
-  tag: string;
+  /** Which text this is, said where both stand in one column: "C, published". Null where there is only one text. */
+  tag: string | null;
   children?: ReactNode;
 }) {
   const it = side === 'old' ? pair.old : pair.now;
   if (!it) return null;
-  const said = remark(pair, side);
+  const said = remark(pair, side, tag === null);
   const changed = isChange(pair);
   return (
     <div
@@ -50,7 +55,7 @@ export function PaneStep({
       data-moved={pair.moved || undefined}
       data-changed={changed || undefined}
     >
-      {changed && <p className="side-tag">{tag}</p>}
+      {changed && tag !== null && <p className="side-tag">{tag}</p>}
       {it.cautions.map((caution) => (
         <Caution key={caution.key} caution={caution} side={side} />
       ))}

@@ -12,6 +12,8 @@ export interface PaneName {
   name: string;
   /** Null where it has none yet. */
   letter: string | null;
+  /** What it is called above a step that stands alone; "C, published" unless given. */
+  tag?: string;
 }
 
 const foldLine = (id: string) => `fold ${id}`;
@@ -64,9 +66,10 @@ export function Panes({
       return after;
     });
 
-  const pane = (side: Side, { name, letter }: PaneName, list: readonly Section<StepPair>[]) => {
+  const pane = (side: Side, { name, letter, tag }: PaneName, list: readonly Section<StepPair>[]) => {
+    const called = tag ?? (letter === null ? name : `${letter}, ${name.toLowerCase()}`);
     const step = (pair: StepPair) => (
-      <PaneStep pair={pair} side={side} tag={letter === null ? name : `${letter}, ${name.toLowerCase()}`}>
+      <PaneStep pair={pair} side={side} tag={old && called}>
         {(side === 'new' || pair.kind === 'removed') && below?.(pair)}
       </PaneStep>
     );
@@ -99,7 +102,8 @@ export function Panes({
                   onToggle={(event) => toggle(id, event.currentTarget.open)}
                 >
                   <summary data-line={foldLine(id)} data-side={side}>
-                    {inside.length} steps unchanged, <span className="fold-word" />
+                    {inside.length} steps unchanged
+                    <span className="fold-word" />
                   </summary>
                   <ol>
                     {inside.map((pair) => (

@@ -1,5 +1,5 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
-import { useCallback, useEffect, useMemo, useState } from 'react';
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { Notice } from '@/components/ui/Notice';
 import type { Proposal } from '@/domain/api/schemas';
 import type { StepPair } from '@/domain/revision/twoTexts';
@@ -7,14 +7,14 @@ import type { ValueRow } from '@/domain/revision/valueRows';
 import { ActPanel, ReasonFields } from './ActPanel';
 import { keepReason, keptReason, type Written } from './keptReason';
 import { Panes } from './Panes';
-import { placesOf } from './places';
+import { placesOf, standsAt, unplaced } from './places';
 import { PublishWords } from './PublishWords';
-import { RemarkNote, unplaced } from './Remarks';
+import { RemarkNote } from './Remarks';
 import { ReviewHead } from './ReviewHead';
 import { Trail } from './Trail';
 import { useReviewActs, type Trouble } from './useReviewActs';
 import { ValueTable } from './ValueTable';
-import { doneWords, type Done, type ReviewAct } from './words';
+import { doneWords, sideNames, type Done, type ReviewAct } from './words';
 
 export interface ReviewProps {
   proposal: Proposal;
@@ -50,11 +50,15 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
   const [panel, setPanel] = useState<{ written: Written; at: string } | null>(
     asked && { written: asked, at: asked.anchor },
   );
+  /** What was typed into a panel that was closed; it stands there again when one is opened. */
+  const laidAside = useRef('');
   const { id, may, remarks } = proposal;
 
   useEffect(() => {
     const kept = keptReason(id);
     if (!kept || asked?.text) return undefined;
+    laidAside.current = kept.text;
+    if (!kept.open) return undefined;
     const frame = requestAnimationFrame(() => setPanel({ written: kept, at: '' }));
     return () => cancelAnimationFrame(frame);
   }, [id, asked]);
@@ -64,20 +68,21 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
     keepReason(id, written);
   };
   const ask = (wanted: ReviewAct, anchor = '') =>
-    setPanel((before) => ({
-      written: { act: wanted, anchor, text: before?.written.text ?? '' },
+    setPanel({
+      written: { act: wanted, anchor, text: panel?.written.text ?? laidAside.current },
       at: wanted === 'publish' ? '' : anchor,
-    }));
+    });
   const close = () => {
+    laidAside.current = panel?.written.text ?? '';
+    keepReason(id, panel?.written ?? null, false);
     setPanel(null);
-    keepReason(id, null);
     document.getElementById(`ask-${panel?.at ? panel.at : (panel?.written.act ?? '')}`)?.focus();
   };
 
   const { pairs = [], values = [] } = texts ?? {};
   const steps = useMemo(() => new Set(pairs.map((pair) => pair.id)), [pairs]);
-  const paths = useMemo(() => new Set(values.map(({ path }) => path)), [values]);
-  const loose = unplaced(remarks, steps, paths);
+  const shown = { steps, paths: values.map(({ path }) => path) };
+  const names = sideNames(proposal);
   const at = panel?.at ?? '';
   // A panel whose place is not on the page stands in the head.
   const placed = at.startsWith('step:') && steps.has(at.slice(5));
@@ -113,6 +118,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
         const { act: wanted, text, anchor } = panel.written;
         act(wanted === 'publish' ? { act: wanted } : { act: wanted, reason: text, anchor: anchor || null }, () => {
           setPanel(null);
+          laidAside.current = '';
           keepReason(id, null);
         });
       }}
@@ -130,9 +136,9 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
       )}
     </ActPanel>
   );
-  const notes = (anchor: string) =>
+  const notes = (place: string) =>
     remarks
-      .filter((remark) => remark.anchor === anchor)
+      .filter(({ anchor }) => standsAt(anchor, shown) === place)
       .map((remark) => <RemarkNote key={remark.id} remark={remark} />);
 
   return (
@@ -156,8 +162,8 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
             <p className="whitespace-pre-line">{panel.written.text}</p>
           </Notice>
         )}
-        {loose.map((remark) => (
-          <RemarkNote key={remark.id} remark={remark} />
+        {unplaced(remarks, shown).map(({ remark, about }) => (
+          <RemarkNote key={remark.id} remark={remark} about={about} />
         ))}
       </ReviewHead>
       <Trail trail={proposal.trail} letter={proposal.publishedLetter} />
@@ -166,23 +172,13 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
           <ValueTable
             rows={values}
             fresh={proposal.base === null}
-            names={{
-              old: proposal.publishedLetter ? 'Before' : 'Now',
-              now: proposal.publishedLetter ? 'Published' : 'Proposed',
-            }}
+            names={{ old: names.old.column, now: names.now.column }}
             below={notes}
           />
           <Panes
             pairs={pairs}
-            old={
-              proposal.base === null
-                ? null
-                : {
-                    name: proposal.publishedLetter ? 'Before' : proposal.stale ? 'Base' : 'Published',
-                    letter: proposal.base,
-                  }
-            }
-            now={{ name: proposal.publishedLetter ? 'Published' : 'Proposed', letter }}
+            old={proposal.base === null ? null : { name: names.old.pane, letter: proposal.base }}
+            now={{ name: names.now.pane, letter }}
             keepOpen={keepOpen}
             below={(pair) => (
               <>

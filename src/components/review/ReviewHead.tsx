@@ -90,9 +90,14 @@ export function ReviewHead({
   const refused = proposal.state === 'proposed' && !reviewer && proposal.author.id !== me;
   return (
     <header className="review-head">
-      <div className="min-w-0">
+      {!proposal.publishedLetter && (
+        <p className="review-paper">Not a sheet to work from: this text was not published when it was printed.</p>
+      )}
+      <div className="review-title">
         <h1 className="text-title tracking-[-0.01em]">{headingOf(proposal, letter)}</h1>
         <ByLine proposal={proposal} me={me} />
+      </div>
+      <div className="min-w-0">
         <p className="review-why">{proposal.reason || 'No reason given yet.'}</p>
         {standing && <p className="mt-3 max-w-prose font-medium">{standing}</p>}
         {refused && <p className="mt-3 font-medium">{proposal.whyNot['agree']}</p>}

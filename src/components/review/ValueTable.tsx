@@ -1,5 +1,5 @@
-import type { ReactNode } from 'react';
-import { isAtTheBench, type ValueRow } from '@/domain/revision/valueRows';
+import { Fragment, type ReactNode } from 'react';
+import { beyondName, isAtTheBench, type ValueRow } from '@/domain/revision/valueRows';
 import type { Side, Span } from '@/domain/revision/sideText';
 import { Mark, Spans } from './Spans';
 
@@ -7,7 +7,7 @@ import { Mark, Spans } from './Spans';
 const UNIT = /^(.*\d)(\D{1,12})$/s;
 
 function Value({ spans, side, prose }: { spans: readonly Span[] | null; side: Side; prose: boolean }) {
-  if (!spans) return <span className="text-ink-2">{side === 'old' ? 'Not there' : 'Left out'}</span>;
+  if (!spans) return <span className="value-none">{side === 'old' ? 'Not there' : 'Left out'}</span>;
   const [only, ...more] = spans;
   const [, number, unit] = (!prose && only && more.length === 0 && UNIT.exec(only.text)) || [];
   if (!number) return <Spans spans={spans} side={side} />;
@@ -28,51 +28,77 @@ const CHANGE_WORDS: Record<ValueRow['kind'], string> = { added: 'New', removed: 
 
 const upper = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
-function Rows({
-  rows,
-  fresh,
-  below,
-}: {
+const reasonOf = ({ critical }: ValueRow) => (critical ? `${upper(critical.replace(/: [^:]*$/, ''))}.` : null);
+
+interface RowsProps {
   rows: readonly ValueRow[];
-  fresh: boolean;
+  names: { old: string; now: string };
   below: (path: string) => ReactNode;
-}) {
-  return rows.map((row) => {
-    const why = row.critical ? upper(row.critical.replace(/: [^:]*$/, '')) : null;
-    const cell = row.prose ? 'value-prose' : 'value-number';
+}
+
+const RowHead = ({ row, span }: { row: ValueRow; span?: number }) => (
+  <th scope="row" colSpan={span}>
+    <span className="font-semibold">{row.label}</span>
+    {row.detail && row.detail !== row.to && <span className="value-detail">{row.detail}</span>}
+  </th>
+);
+
+/** What was written about a value stands under it, as wide as the table. */
+function Below({ children, span }: { children: ReactNode; span: number }) {
+  const nothing = children === null || (Array.isArray(children) && children.length === 0);
+  return nothing ? null : (
+    <tr className="value-below">
+      <td colSpan={span}>{children}</td>
+    </tr>
+  );
+}
+
+/** Values of a new sheet: what stands there, with nothing to set it against. */
+const FreshRows = ({ rows, below }: Omit<RowsProps, 'names'>) =>
+  rows.map((row) => {
+    const text = beyondName(row);
     return (
-      <tr key={row.path} id={`value-${row.path}`}>
-        <th scope="row">
-          <span className="font-semibold">{row.label}</span>
-          {row.detail && <span className="block font-normal text-ink-2">{row.detail}</span>}
-          {below(row.path)}
-        </th>
-        {!fresh && (
-          <td data-label="Now" className={cell}>
-            <Value spans={row.old} side="old" prose={row.prose} />
-          </td>
-        )}
-        <td data-label={fresh ? 'Value' : 'Proposed'} className={cell}>
-          {fresh ? row.to : <Value spans={row.now} side="new" prose={row.prose} />}
-        </td>
-        {!fresh && (
-          <td data-label="Change" className="value-number whitespace-nowrap">
-            {row.percent === null ? (
-              <span className="text-base font-normal text-ink-2">{CHANGE_WORDS[row.kind]}</span>
-            ) : (
-              percentText(row.percent)
-            )}
-          </td>
-        )}
-        {!fresh && (
-          <td data-label="Critical" data-empty={why ? undefined : ''}>
-            {why ? `${why}.` : <span className="text-ink-2">No</span>}
-          </td>
-        )}
-      </tr>
+      <Fragment key={row.path}>
+        <tr id={`value-${row.path}`}>
+          <RowHead row={row} span={text ? 1 : 2} />
+          {text && <td className={row.prose ? 'value-prose' : 'value-number'}>{text}</td>}
+        </tr>
+        <Below span={2}>{below(row.path)}</Below>
+      </Fragment>
     );
   });
-}
+
+/** Old and new of each value. What a cell holds stands in one block, so that a phone can set its name beside it. */
+const ChangeRows = ({ rows, names, below }: RowsProps) =>
+  rows.map((row) => {
+    const cell = row.prose ? 'value-prose' : 'value-number';
+    const change = row.percent === null ? CHANGE_WORDS[row.kind] : percentText(row.percent);
+    const why = reasonOf(row);
+    return (
+      <Fragment key={row.path}>
+        <tr id={`value-${row.path}`}>
+          <RowHead row={row} />
+          <td data-label={names.old} className={cell}>
+            <div>
+              <Value spans={row.old} side="old" prose={row.prose} />
+            </div>
+          </td>
+          <td data-label={names.now} className={cell}>
+            <div>
+              <Value spans={row.now} side="new" prose={row.prose} />
+            </div>
+          </td>
+          <td data-label="Change" data-empty={change ? undefined : ''} className="value-number whitespace-nowrap">
+            <div className={row.percent === null ? 'value-none' : undefined}>{change}</div>
+          </td>
+          <td data-label="Critical" data-empty={why ? undefined : ''}>
+            <div className={why ? undefined : 'value-none'}>{why ?? 'No'}</div>
+          </td>
+        </tr>
+        <Below span={5}>{below(row.path)}</Below>
+      </Fragment>
+    );
+  });
 
 /**
  * Values that differ, those that hands act on first and apart from the rest.
@@ -100,7 +126,7 @@ export function ValueTable({
       <section key={title} aria-label={title} className="review-part">
         <h2 className="text-lead">{title}</h2>
         {shown.length === 0 ? (
-          <p className="mt-2 text-ink-2">No value changes; only words do.</p>
+          <p className="mt-2 text-ink-2">No value does: no torque, limit, caution, time, part, supply or tool.</p>
         ) : (
           <table className="value-table" data-fresh={fresh || undefined}>
             <caption className="sr-only">{title}</caption>
@@ -114,7 +140,11 @@ export function ValueTable({
               </tr>
             </thead>
             <tbody>
-              <Rows rows={shown} fresh={fresh} below={below} />
+              {fresh ? (
+                <FreshRows rows={shown} below={below} />
+              ) : (
+                <ChangeRows rows={shown} names={names} below={below} />
+              )}
             </tbody>
           </table>
         )}

@@ -4,7 +4,6 @@ import { deskAddress, type DeskSort, type DeskView } from '@/domain/review/deskV
 const COLUMNS: readonly (Column & { sort?: DeskSort })[] = [
   { key: 'what', label: 'Proposal', sort: 'title' },
   { key: 'who', label: 'By', sort: 'author' },
-  { key: 'book', label: 'Book' },
   { key: 'why', label: 'What it does', sort: 'worst' },
   { key: 'agreed', label: 'Agreed', sort: 'agreed' },
   { key: 'waiting', label: 'Waiting', sort: 'waiting' },

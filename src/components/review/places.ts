@@ -1,4 +1,5 @@
 import type { Option } from '@/components/ui/Select';
+import type { Remark } from '@/domain/api/schemas';
 import type { StepPair } from '@/domain/revision/twoTexts';
 import type { ValueRow } from '@/domain/revision/valueRows';
 
@@ -16,3 +17,33 @@ export const placesOf = (pairs: readonly StepPair[], values: readonly ValueRow[]
     };
   }),
 ];
+
+/** What of a comparison stands on the page: its steps by id, and its changed values by path in the order they stand in. */
+export interface Shown {
+  steps: ReadonlySet<string>;
+  paths: readonly string[];
+}
+
+/**
+ * Where a remark with that anchor stands: `step:<id>`, or the path of the first changed value that belongs to it. Null
+ * where it is on the whole, and where what it was tied to is no longer there.
+ */
+export function standsAt(anchor: string | null, { steps, paths }: Shown): string | null {
+  if (anchor === null) return null;
+  if (anchor.startsWith('step:')) return steps.has(anchor.slice(5)) ? anchor : null;
+  return paths.find((path) => path === anchor || path.startsWith(`${anchor}.`)) ?? null;
+}
+
+/** The remarks that stand nowhere else on the page, each with what became of its place; undefined for the whole. */
+export const unplaced = (remarks: readonly Remark[], shown: Shown): { remark: Remark; about: string | undefined }[] =>
+  remarks
+    .filter(({ anchor }) => standsAt(anchor, shown) === null)
+    .map((remark) => ({
+      remark,
+      about:
+        remark.anchor === null
+          ? undefined
+          : remark.anchor.startsWith('step:')
+            ? 'about a step that is no longer there'
+            : 'about a value that no longer changes',
+    }));

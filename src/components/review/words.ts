@@ -38,6 +38,24 @@ export function headingOf({ title, base }: Pick<Proposal, 'title' | 'base'>, let
   return letter === null ? `${title}: a change to ${base}` : `${title}: ${base} to ${letter}`;
 }
 
+/** What the two texts of a proposal are called: above the panes, and over the columns of the values. */
+export function sideNames({
+  state,
+  base,
+  currentLetter,
+  publishedLetter,
+}: Pick<Proposal, 'state' | 'base' | 'currentLetter' | 'publishedLetter'>) {
+  if (publishedLetter !== null)
+    return { old: { pane: 'Before', column: 'Before' }, now: { pane: 'Published', column: 'Published' } };
+  const now = state === 'draft' ? 'Draft' : 'Proposed';
+  // An older text must not be called what is worked to now.
+  const old =
+    base === currentLetter
+      ? { pane: 'Published', column: 'Now' }
+      : { pane: 'Superseded', column: `In ${base ?? currentLetter ?? ''}` };
+  return { old, now: { pane: now, column: now } };
+}
+
 const NUMBERS = ['No', 'One', 'Two', 'Three'];
 
 /** "Two editors must agree, because a torque changes: Cover bolt, and 1 more." */
@@ -47,6 +65,13 @@ export function needed({ agreementsNeeded, criticalReasons, book }: Proposal): s
   const who = agreementsNeeded === 1 ? 'editor' : book.kind === 'common' ? 'editors' : 'people';
   const why = first ? `, because ${first}${others.length > 0 ? `, and ${others.length} more` : ''}` : '';
   return `${many} ${who} must agree${why}.`;
+}
+
+/** Why it cannot be published yet, to somebody whose own agreement is already counted on, or still to come. */
+export function whyNotYet({ whyNot, may }: Pick<Proposal, 'whyNot' | 'may'>): string {
+  const why = whyNot['publish'] ?? '';
+  // Publishing is an agreement too, so what is missing is missing besides the reader's own.
+  return why && may.agree ? `Besides you, ${why.charAt(0).toLowerCase()}${why.slice(1)}` : why;
 }
 
 const names = (people: readonly string[]) =>

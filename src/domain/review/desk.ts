@@ -51,3 +51,17 @@ export function deskReason(item: DeskItem, now: string): string {
   const waiting = days === 0 ? 'Sent in today' : `Waiting ${days} ${days === 1 ? 'day' : 'days'}`;
   return `${severityWords(item)} ${waiting}, ${item.agreements} of ${agreementsNeeded(item.criticalReasons)} agreed.`;
 }
+
+const proposals = (count: number) => (count === 1 ? '1 proposal waits' : `${count} proposals wait`);
+
+/**
+ * How much of a desk is the reader's to do, and how much waits for its author or for another editor: "2 proposals wait
+ * for you, 1 for others." Empty for an empty desk.
+ */
+export function deskCount(items: readonly { next: 'agree' | 'publish' | 'wait'; stale: boolean }[]): string {
+  const yours = items.filter(({ next, stale }) => next !== 'wait' && !stale).length;
+  const others = items.length - yours;
+  if (items.length === 0) return '';
+  if (yours === 0) return `Nothing here waits for you; ${proposals(others)} for others.`;
+  return `${proposals(yours)} for you${others > 0 ? `, ${others} for others` : ''}.`;
+}

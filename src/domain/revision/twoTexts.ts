@@ -7,6 +7,8 @@ import { compareWords } from './words';
 export interface CautionLine {
   key: string;
   signal: Caution['signal'];
+  /** The signal word that it has in the other text, where that is another one. */
+  otherSignal: Caution['signal'] | null;
   spans: Span[];
 }
 
@@ -47,19 +49,25 @@ function cautionLines(side: Side, here: string[], there: string[], head?: Frontm
     const mine = words(caution);
     const theirs = twin ? words(twin) : '';
     const runs: WordRun[] = side === 'old' ? compareWords(mine, theirs) : compareWords(theirs, mine);
-    return [{ key, signal: caution.signal, spans: sideLine(runs, side) }];
+    const otherSignal = twin && twin.signal !== caution.signal ? twin.signal : null;
+    return [{ key, signal: caution.signal, otherSignal, spans: sideLine(other ? runs : unmarked(runs), side) }];
   });
 }
 
-const isChanged = (lines: readonly CautionLine[]) => lines.some(({ spans }) => spans.some(({ changed }) => changed));
+const isChanged = (lines: readonly CautionLine[]) =>
+  lines.some(({ spans, otherSignal }) => otherSignal !== null || spans.some(({ changed }) => changed));
+
+/** A text that nothing stands against has no words of its own: marking them all would mark none. */
+const unmarked = (runs: readonly WordRun[]): WordRun[] => runs.map(({ text }) => ({ kind: 'same', text }));
 
 /**
- * Both texts step by step, in the order of the new one. A step is told as edited also where only the words of a
- * caution ahead of it changed, since whoever reads the step reads those.
+ * Both texts step by step, in the order of the new one. A step is told as edited also where only the words or the
+ * signal word of a caution ahead of it changed, since whoever reads the step reads those.
  *
- * @param from front matter of the old text; null for a new procedure
+ * @param from front matter of the old text; null for a new procedure, whose words are not marked
  */
 export function twoTexts(comparison: Comparison, from: Frontmatter | null, to: Frontmatter): StepPair[] {
+  const own = from ? (runs: readonly WordRun[]) => runs : unmarked;
   const steps = comparison.steps.map((step): StepPair => {
     const sideOf = (side: Side, number: number | null): StepSide | null => {
       if (number === null) return null;
@@ -67,9 +75,9 @@ export function twoTexts(comparison: Comparison, from: Frontmatter | null, to: F
       const heads = side === 'old' ? ([from ?? undefined, to] as const) : ([to, from ?? undefined] as const);
       return {
         number,
-        title: sideLine(step.title, side),
+        title: sideLine(own(step.title), side),
         cautions: cautionLines(side, step.cautions[here], step.cautions[there], ...heads),
-        blocks: sideBlocks(step.body, side),
+        blocks: sideBlocks(own(step.body), side),
       };
     };
     const old = sideOf('old', step.fromNumber);
@@ -77,11 +85,14 @@ export function twoTexts(comparison: Comparison, from: Frontmatter | null, to: F
     const reworded = step.kind === 'same' && (isChanged(old?.cautions ?? []) || isChanged(now?.cautions ?? []));
     return { id: step.id, kind: reworded ? 'edited' : step.kind, moved: step.moved, critical: step.critical, old, now };
   });
-  return comparison.intro.some(({ kind }) => kind !== 'same') ? [introduction(comparison.intro), ...steps] : steps;
+  return comparison.intro.some(({ kind }) => kind !== 'same')
+    ? [introduction(own(comparison.intro), from === null), ...steps]
+    : steps;
 }
 
-function introduction(runs: readonly WordRun[]): StepPair {
+function introduction(runs: readonly WordRun[], alone: boolean): StepPair {
   const sideOf = (side: Side): StepSide | null => {
+    if (alone && side === 'old') return null;
     const blocks = sideBlocks(runs, side);
     return blocks.length === 0
       ? null

@@ -10,15 +10,19 @@ export interface ReviewPage {
   /** Null while the author's draft cannot be read; `fault` then says where it stops. */
   compared: ComparedProposal | null;
   fault: string | null;
-  /** The letter that it has, or would get if it were published next; null where it stands on an older revision. */
+  /**
+   * The letter that it has, or would get if it were published next; null where it stands on an older revision, and
+   * where it was declined, for then it never gets one.
+   */
   letter: string | null;
 }
 
 /** A proposal with what it changes. Refuses 404 like `readProposal`. */
 export async function readReview(actor: Actor, id: string): Promise<ReviewPage> {
   const proposal = await readProposal(actor, id);
-  const { publishedLetter, base, currentLetter } = proposal;
-  const letter = publishedLetter ?? (base === currentLetter ? nextLetter(currentLetter) : null);
+  const { publishedLetter, base, currentLetter, state } = proposal;
+  const next = base === currentLetter && state !== 'declined' ? nextLetter(currentLetter) : null;
+  const letter = publishedLetter ?? next;
   try {
     return { proposal, compared: await compareProposal(actor, id), fault: null, letter };
   } catch (error) {

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { type DeskItem, deskOrder, deskReason, severity } from '@/domain/review/desk';
+import { deskCount, type DeskItem, deskOrder, deskReason, severity } from '@/domain/review/desk';
 
 const item = (id: string, change: Partial<DeskItem> = {}): DeskItem => ({
   id,
@@ -57,5 +57,18 @@ describe('the order of the review desk', () => {
     ],
   ])('says why: %o', (change, words) => {
     expect(deskReason(item('x', change), '2026-12-01T10:00:00Z')).toBe(words);
+  });
+});
+
+describe('how much of a desk is the reader’s', () => {
+  const one = (next: 'agree' | 'publish' | 'wait', stale = false) => ({ next, stale });
+
+  it('counts what they can do, apart from what waits for its author or for another editor', () => {
+    expect(deskCount([one('agree'), one('publish'), one('wait'), one('agree', true)])).toBe(
+      '2 proposals wait for you, 2 for others.',
+    );
+    expect(deskCount([one('publish')])).toBe('1 proposal waits for you.');
+    expect(deskCount([one('wait')])).toBe('Nothing here waits for you; 1 proposal waits for others.');
+    expect(deskCount([])).toBe('');
   });
 });
