@@ -1,5 +1,6 @@
 import { useId } from 'react';
 import type { BothUnits } from '@/domain/measure/format';
+import { readBare } from '@/domain/measure/read';
 import type { Column } from '@/domain/worksheets/fields';
 import { boxUnit } from '@/domain/worksheets/readInputs';
 import { classes } from '@/components/ui/classes';
@@ -128,7 +129,7 @@ export function Cell({
       </select>
     );
   const own = unitAfter(column, units);
-  const reads = understood && own && !understood.metric.endsWith(own) && !understood.inch.endsWith(own);
+  const reads = own && !readBare(text).ok && !text.trim().endsWith(own);
   return (
     <>
       <input

@@ -1,3 +1,4 @@
+import { readBare } from '@/domain/measure/read';
 import type { Fields } from '@/domain/worksheets/fields';
 import { boxUnit } from '@/domain/worksheets/readInputs';
 import { ownTexts, rowsFilled } from '@/domain/worksheets/typedIn';
@@ -33,10 +34,7 @@ export function pinUnits(fields: Fields, typed: TypedIn, from: Units, to: Units)
     Object.entries(typed).map(([path, text]) => {
       const unit = unitOfBox(fields, path);
       const changes = unit !== null && boxUnit(unit, from) !== boxUnit(unit, to);
-      return [
-        path,
-        changes && /^[-+−]?[\d.,\s/]*\d$/.test(text.trim()) ? `${text.trim()} ${boxUnit(unit, from)}` : text,
-      ];
+      return [path, changes && readBare(text).ok ? `${text.trim()} ${boxUnit(unit, from)}` : text];
     }),
   );
 }

@@ -115,6 +115,14 @@ export function readAny(text: string): ReadTyped {
   return unit ? settle(parsed.value, unit) : refuse('Write the unit after the number, for example 89 lbf·in.');
 }
 
+/** Reads a number that stands alone: `0,5`, `1 3/8`, `12 345`. Refuses what `readTyped` refuses, and a unit. */
+export function readBare(text: string): { ok: true; value: number } | { ok: false; message: string } {
+  const parsed = parse(text, '12');
+  if (!parsed.ok) return parsed;
+  const { amount, unit } = parsed.value;
+  return unit ? refuse('Write the number alone, without a unit.') : { ok: true, value: amount };
+}
+
 const example = (unit: Unit): string => (unit === 'mm' ? '0.35 mm or 14 thou' : withUnit('12', unit));
 
 /** Whether a measure needs the density of the fluid to become one in `unit`: lb/h against cc/min. */

@@ -1,6 +1,7 @@
-import { convert, fromBase, toBase, type Unit } from '../measure/convert';
+import { convert, fromBase, sameKind, toBase, type Unit } from '../measure/convert';
 import { formatMeasure, formatNumber, inchUnit, withUnit, type BothUnits } from '../measure/format';
-import { needsDensity, readTyped } from '../measure/read';
+import { sameWithin } from '../measure/band';
+import { needsDensity, readBare, readTyped } from '../measure/read';
 import { refused, worked, type FieldProblem, type Worked } from '../measure/worked';
 import type {
   BandField,
@@ -129,10 +130,13 @@ function readQuantity(
 
 /** "0.014 in" and "0.356 mm" for what was typed as `.014"`: as it was typed in the one system, converted in the other. */
 function understood(amount: number, unit: Unit, base: number, fieldUnit: Unit): BothUnits {
-  const both = formatMeasure(Number(amount.toPrecision(12)), unit);
-  if (both.metric !== both.inch) return both;
+  const typed = Number(amount.toPrecision(12));
+  const both = formatMeasure(typed, unit);
+  if (sameKind(unit, fieldUnit) && both.metric !== both.inch) return both;
   const inField = withUnit(formatNumber(Number(fromBase(base, fieldUnit).toPrecision(4))), fieldUnit);
-  return inField === both.metric || unit === fieldUnit ? both : { metric: inField, inch: inField };
+  if (unit === fieldUnit || inField === both.metric) return both;
+  // Mass taken for volume: what came of it says more than the same mass in another unit.
+  return { metric: inField, inch: sameKind(unit, fieldUnit) ? inField : withUnit(formatNumber(typed), unit) };
 }
 
 function outside(
@@ -149,17 +153,21 @@ function outside(
 }
 
 function readNumber(field: NumberField, path: string, called: string, raw: unknown, desk: Desk): number | undefined {
-  const text = String(raw).trim().replace(/−/g, '-').replace(',', '.');
-  const value =
-    typeof raw === 'number' ? raw : /^[-+]?(\d+\.?\d*|\.\d+)(e[-+]?\d{1,3})?$/i.test(text) ? Number(text) : NaN;
+  const say = (message: string) => void desk.problems.push({ field: path, message });
+  const text = String(raw).trim();
+  const { after } = field;
+  const read =
+    typeof raw === 'number'
+      ? ({ ok: true, value: raw } as const)
+      : readBare(after && text.endsWith(after) ? text.slice(0, -after.length) : text);
+  if (!read.ok) return say(`${called}: ${read.message}`);
+  const { value } = read;
   const wrong = !Number.isFinite(value)
     ? 'must be a number'
     : field.whole && !Number.isInteger(value)
       ? 'must be a whole number'
       : outside(value, field, (bound) => formatNumber(bound));
-  if (!wrong) return value;
-  desk.problems.push({ field: path, message: `${called} ${wrong}.` });
-  return undefined;
+  return wrong ? say(`${called} ${wrong}.`) : value;
 }
 
 function readChoice(field: ChoiceField, path: string, called: string, raw: unknown, desk: Desk): string | undefined {
@@ -188,9 +196,13 @@ function readBand(field: BandField, path: string, called: string, raw: unknown, 
     isBlank(value)
       ? undefined
       : readQuantity(field, `${path}.${which}`, `${called}, ${which === 'min' ? 'least' : 'most'}`, value, desk);
-  const [low, high] = [end(min, 'min'), end(max, 'max')];
-  if (low !== undefined && high !== undefined && low > high)
-    desk.problems.push({ field: `${path}.max`, message: `${called}: the most is less than the least.` });
+  const low = end(min, 'min');
+  let high = end(max, 'max');
+  if (low !== undefined && high !== undefined && low > high) {
+    // The same limit in two units differs by a slip of floating point, and is no mistake.
+    if (sameWithin(low, high)) high = low;
+    else desk.problems.push({ field: `${path}.max`, message: `${called}: the most is less than the least.` });
+  }
   return { ...(low !== undefined && { min: low }), ...(high !== undefined && { max: high }) };
 }
 

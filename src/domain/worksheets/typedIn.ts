@@ -13,14 +13,15 @@ export function boxesOf(name: string, field: Field, rowCount: number): string[] 
   ).flat();
 }
 
+/** A row's place as `boxesOf` writes it: "7", never "07". */
+const isPlace = (text: string | undefined): boolean => /^(0|[1-9]\d{0,2})$/.test(text ?? '');
+
 /** Rows that the texts reach to: one more than the highest place that holds something, at most the field's own most. */
 export function rowsFilled(name: string, field: Extract<Field, { type: 'rows' }>, typed: TypedIn): number {
   const places = Object.entries(typed).flatMap(([path, value]) => {
     const [of, place, column] = path.split('.');
-    const at = Number(place);
-    return of === name && column !== undefined && column in field.columns && Number.isInteger(at) && value.trim() !== ''
-      ? [at + 1]
-      : [];
+    const counts = of === name && isPlace(place) && Object.hasOwn(field.columns, column ?? '') && value.trim() !== '';
+    return counts ? [Number(place) + 1] : [];
   });
   return Math.min(Math.max(0, ...places), field.most);
 }
@@ -53,10 +54,7 @@ export function ownTexts(fields: Fields, texts: Iterable<readonly [string, strin
       field.type === 'band'
         ? (second === 'min' || second === 'max') && third === undefined
         : field.type === 'rows'
-          ? /^\d{1,3}$/.test(second ?? '') &&
-            Number(second) < field.most &&
-            third !== undefined &&
-            Object.hasOwn(field.columns, third)
+          ? isPlace(second) && Number(second) < field.most && third !== undefined && Object.hasOwn(field.columns, third)
           : second === undefined;
     if (fits && value.trim() !== '') kept[path] = value.slice(0, 60);
   }
