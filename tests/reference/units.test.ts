@@ -20,6 +20,9 @@ describe('NIST SP 811, appendix B.8 (as quoted in the R package NISTunits; seven
     [1, 'US qt', 'L', 0.9463529],
     [1, 'lb/h', 'g/s', 0.1259979],
     [1, 'lbf', 'N', 4.448222],
+    [1, 'hp', 'kW', 0.7456999],
+    // Printed as 1.689 659 E-07 kg/J.
+    [1, 'lb/hp·h', 'g/kWh', 1.689659e-7 * 3.6e9],
   ])('%d %s = %s · %d', (amount, from, to, want) => {
     expect(relative(value(amount, from, to), want)).toBeLessThan(5e-7);
   });
@@ -30,6 +33,7 @@ describe('GNU units 2.22 (printed digits, quoted from Debian bookworm)', () => {
     [1, 'lbf·ft', 'N·m', 1.35581794833],
     [1, 'lbf·in', 'N·m', 0.112984829028],
     [1, 'kgf·m', 'N·m', 9.80665],
+    [1, 'kgf·cm', 'N·m', 0.0980665],
     [1, 'thou', 'mm', 0.0254],
     [1, 'psi', 'kPa', 6.89475729317],
     [1, 'bar', 'psi', 14.503773773],
@@ -38,6 +42,8 @@ describe('GNU units 2.22 (printed digits, quoted from Debian bookworm)', () => {
     [1, 'imp qt', 'L', 1.1365225],
     [1, 'lb/h', 'g/s', 0.125997880556],
     [1, 'lbf', 'N', 4.44822161526],
+    [1, 'hp', 'kW', 0.745699871582],
+    [1, 'lb/hp·h', 'g/kWh', 608.277387842],
     [212, '°F', '°C', 100],
   ])('%d %s = %s · %d', (amount, from, to, want) => {
     expect(relative(value(amount, from, to), want)).toBeLessThan(1e-11);
@@ -47,12 +53,14 @@ describe('GNU units 2.22 (printed digits, quoted from Debian bookworm)', () => {
 const NAMES: Partial<Record<Unit, string>> = {
   mm: 'mm',
   µm: 'micrometer',
+  cm: 'cm',
   in: 'inch',
   thou: 'mil',
   'N·m': 'N m',
   'lbf·ft': 'lbf ft',
   'lbf·in': 'lbf inch',
   'kgf·m': 'kgf m',
+  'kgf·cm': 'kgf cm',
   N: 'N',
   kN: 'kN',
   lbf: 'lbf',
@@ -75,6 +83,13 @@ const NAMES: Partial<Record<Unit, string>> = {
   g: 'g',
   kg: 'kg',
   lb: 'lb',
+  kW: 'kW',
+  hp: 'hp',
+  'g/kWh': 'g/(kW hour)',
+  'lb/hp·h': 'lb/(hp hour)',
+  'kg/m³': 'kg/m^3',
+  'g/cm³': 'g/cm^3',
+  'mm²/s': 'mm^2/s',
 };
 
 /** Asks the installed program for all pairs at once; null for a pair that it refuses. */
@@ -118,8 +133,8 @@ describe.runIf(installed())('the installed GNU units, as an independent converte
 describe('published pairs in two units, to the printed digits', () => {
   it.each<[string, number, Unit, Unit, number, number]>([
     ['TM 5-3805-274-13&P WP 0051', 19, 'lbf·ft', 'N·m', 0.1, 25.8],
-    ['TM 5-3805-274-13&P WP 0051', 22, 'in', 'mm', 1, 559],
-    ['TM 5-3805-274-13&P WP 0051', 25, 'in', 'mm', 1, 635],
+    ['TM 5-3805-274-13&P WP 0051', 22, 'in', 'cm', 0.1, 55.9],
+    ['TM 5-3805-274-13&P WP 0051', 25, 'in', 'cm', 0.1, 63.5],
     ['TM 5-3805-298-23-2 WP 0176', 30, 'lbf·ft', 'N·m', 1, 41],
     ['TM 9-2815-260-24 p. 5-65', 0.0016, 'in', 'mm', 0.001, 0.041],
     ['TM 9-2815-260-24 p. 5-65', 0.0043, 'in', 'mm', 0.001, 0.109],
@@ -137,7 +152,12 @@ describe('reverse check numbers (computed from the exact bases, no published sou
     ['lbf·ft', 73.7562149],
     ['lbf·in', 885.0745791],
     ['kgf·m', 10.1971621],
+    ['kgf·cm', 1019.71621],
   ])('100 N·m in %s is %d', (to, want) => {
-    expect(value(100, 'N·m', to)).toBeCloseTo(want, 7);
+    expect(relative(value(100, 'N·m', to), want)).toBeLessThan(5e-9);
+  });
+
+  it('0.50 lb/hp·h is 304.14 g/kWh', () => {
+    expect(value(0.5, 'lb/hp·h', 'g/kWh')).toBeCloseTo(304.14, 2);
   });
 });

@@ -1,9 +1,9 @@
 import { UNITS_BY_QUANTITY, type MeasuredQuantity } from './quantities';
 
 /**
- * Every unit a limit may be written in, and the few that only a reader in inch units is shown.
+ * Every unit a limit may be written in, and the few more that a reader in inch units is shown or a worksheet takes.
  * Each factor takes one unit to the base unit of its kind (m, N, N·m, Pa, K, m³, kg, m³/s, kg/s, s,
- * V, A, Ω, degree). The bases are exact by definition: 1 in = 25.4 mm, 1 lb = 0.45359237 kg, g_n = 9.80665 m/s²,
+ * V, A, Ω, degree, W, kg/J, kg/m³, m²/s). The bases are exact by definition: 1 in = 25.4 mm, 1 lb = 0.45359237 kg, g_n = 9.80665 m/s²,
  * 1 US gal = 231 in³, 1 imp gal = 4.54609 L. Source: NIST SP 811, appendix B.
  */
 const INCH = 0.0254;
@@ -11,12 +11,19 @@ const POUND = 0.45359237;
 const GRAVITY = 9.80665;
 const POUND_FORCE = POUND * GRAVITY;
 const LITRE = 1e-3;
+/** Mechanical horsepower, 550 ft·lbf/s, in W. */
+const HORSEPOWER = 550 * 12 * INCH * POUND_FORCE;
 
 type Written = (typeof UNITS_BY_QUANTITY)[MeasuredQuantity][number];
-export type Unit = Written | 'lb';
+/** Units of worksheets; no limit of a sheet is written in them. */
+type WorksheetUnit = 'lb' | 'cm' | 'kgf·cm' | 'kW' | 'hp' | 'g/kWh' | 'lb/hp·h' | 'kg/m³' | 'g/cm³' | 'mm²/s';
+export type Unit = Written | WorksheetUnit;
+
+/** What a unit belongs to: a quantity of limits, or one that only worksheets reckon with. */
+export type UnitQuantity = MeasuredQuantity | 'power' | 'fuel consumption' | 'density' | 'kinematic viscosity';
 
 /** What a unit measures. Two flows: a volume and a mass in a time, joined only by a density. */
-type Kind = Exclude<MeasuredQuantity, 'flow'> | 'volume flow' | 'mass flow';
+type Kind = Exclude<UnitQuantity, 'flow'> | 'volume flow' | 'mass flow';
 
 interface Measure {
   kind: Kind;
@@ -28,6 +35,7 @@ interface Measure {
 const MEASURES: Record<Unit, Measure> = {
   mm: { kind: 'length', factor: 1e-3 },
   µm: { kind: 'length', factor: 1e-6 },
+  cm: { kind: 'length', factor: 1e-2 },
   in: { kind: 'length', factor: INCH },
   thou: { kind: 'length', factor: INCH / 1000 },
   '°': { kind: 'angle', factor: 1 },
@@ -35,6 +43,7 @@ const MEASURES: Record<Unit, Measure> = {
   'lbf·ft': { kind: 'torque', factor: POUND_FORCE * 12 * INCH },
   'lbf·in': { kind: 'torque', factor: POUND_FORCE * INCH },
   'kgf·m': { kind: 'torque', factor: GRAVITY },
+  'kgf·cm': { kind: 'torque', factor: GRAVITY / 100 },
   N: { kind: 'force', factor: 1 },
   kN: { kind: 'force', factor: 1000 },
   lbf: { kind: 'force', factor: POUND_FORCE },
@@ -71,6 +80,13 @@ const MEASURES: Record<Unit, Measure> = {
   turns: { kind: 'count', factor: 1 },
   places: { kind: 'count', factor: 1 },
   drops: { kind: 'count', factor: 1 },
+  kW: { kind: 'power', factor: 1000 },
+  hp: { kind: 'power', factor: HORSEPOWER },
+  'g/kWh': { kind: 'fuel consumption', factor: 1e-3 / 3.6e6 },
+  'lb/hp·h': { kind: 'fuel consumption', factor: POUND / (HORSEPOWER * 3600) },
+  'kg/m³': { kind: 'density', factor: 1 },
+  'g/cm³': { kind: 'density', factor: 1000 },
+  'mm²/s': { kind: 'kinematic viscosity', factor: 1e-6 },
 };
 
 /** Kinds that can stand below zero: a depth, a turn back, a gauge pressure under the air's, a share that fell. */
@@ -83,7 +99,7 @@ const refuse = (message: string): Converted => ({ ok: false, message });
 export const isUnit = (text: string): text is Unit => Object.hasOwn(MEASURES, text);
 
 /** The quantity a unit belongs to: `'torque'` for `lbf·in`, `'flow'` for `lb/h`. */
-export function quantityOf(unit: Unit): MeasuredQuantity {
+export function quantityOf(unit: Unit): UnitQuantity {
   const { kind } = MEASURES[unit];
   return kind === 'volume flow' || kind === 'mass flow' ? 'flow' : kind;
 }

@@ -43,13 +43,14 @@ const POUND_FEET_FROM = 20;
 
 /** What a reader in inch units reads a value of that size in. */
 export function inchUnit(unit: Unit, largest: number): Unit {
-  if (unit === 'N·m' || unit === 'kgf·m') {
+  if (unit === 'N·m' || unit === 'kgf·m' || unit === 'kgf·cm') {
     const feet = convert(largest, unit, 'lbf·ft');
     return feet.ok && feet.value >= POUND_FEET_FROM ? 'lbf·ft' : 'lbf·in';
   }
   // cc, mL, cc/min and grams stay: burettes, flow benches and piston scales carry them everywhere (common practice).
   const other: Partial<Record<Unit, Unit>> = {
     mm: 'in',
+    cm: 'in',
     µm: 'in',
     N: 'lbf',
     kN: 'lbf',
@@ -61,6 +62,8 @@ export function inchUnit(unit: Unit, largest: number): Unit {
     'imp qt': 'US qt',
     kg: 'lb',
     'g/s': 'lb/h',
+    kW: 'hp',
+    'g/kWh': 'lb/hp·h',
   };
   return other[unit] ?? unit;
 }
@@ -71,6 +74,7 @@ const METRIC_UNIT: Partial<Record<Unit, Unit>> = {
   'lbf·ft': 'N·m',
   'lbf·in': 'N·m',
   'kgf·m': 'N·m',
+  'kgf·cm': 'N·m',
   lbf: 'N',
   psi: 'kPa',
   '°F': '°C',
@@ -78,6 +82,8 @@ const METRIC_UNIT: Partial<Record<Unit, Unit>> = {
   'imp qt': 'L',
   lb: 'kg',
   'lb/h': 'g/s',
+  hp: 'kW',
+  'lb/hp·h': 'g/kWh',
 };
 
 /** The step a converted value is shown to where no tool is named: never worse than about 1.3 % of a value from 4 up. */

@@ -1,6 +1,5 @@
-import { convert, quantityOf, type Unit } from '../measure/convert';
+import { convert, quantityOf, type Unit, type UnitQuantity } from '../measure/convert';
 import { formatMeasure, inBothUnits, withUnit } from '../measure/format';
-import type { MeasuredQuantity } from '../measure/quantities';
 import type { SearchDocument, SearchLimit, SearchTorque } from './documents';
 import { agreement, type ReadMeasure, type ReadQuantity } from './quantities';
 
@@ -34,7 +33,7 @@ export interface ValueMatch {
 }
 
 /** The unit that values of one quantity are compared in. Mass flow has its own: it cannot become volume flow. */
-const BASE: Partial<Record<MeasuredQuantity, Unit>> = {
+const BASE: Partial<Record<UnitQuantity, Unit>> = {
   length: 'mm',
   torque: 'N·m',
   force: 'N',

@@ -4,6 +4,15 @@ import { convert, isUnit, quantityOf, type Unit } from '@/domain/measure/convert
 import { UNITS_BY_QUANTITY } from '@/domain/measure/quantities';
 
 const units = Object.values(UNITS_BY_QUANTITY).flat() as Unit[];
+/** Units that only worksheets take, each with a value that is one of its partner. */
+const ofWorksheets: readonly (readonly [Unit, Unit, number])[] = [
+  ['cm', 'mm', 10],
+  ['kgf·cm', 'kgf·m', 0.01],
+  ['kW', 'hp', 1 / 0.74569987158227],
+  ['g/kWh', 'lb/hp·h', 1 / 608.277387841811],
+  ['g/cm³', 'kg/m³', 1000],
+  ['mm²/s', 'mm²/s', 1],
+];
 const unit = fc.constantFrom(...units);
 const kin = fc
   .constantFrom(...Object.values(UNITS_BY_QUANTITY))
@@ -19,6 +28,15 @@ describe('convert', () => {
       }
     expect(isUnit('furlong')).toBe(false);
     expect(isUnit('toString')).toBe(false);
+  });
+
+  it('knows the units of worksheets, which no limit is written in', () => {
+    for (const [from, to, times] of ofWorksheets) {
+      expect(units).not.toContain(from);
+      expect(convert(1, from, to)).toEqual({ ok: true, value: expect.closeTo(times, 9) });
+    }
+    expect(quantityOf('hp')).toBe('power');
+    expect(quantityOf('g/kWh')).toBe('fuel consumption');
   });
 
   it('there and back is where it started', () => {
