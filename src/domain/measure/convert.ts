@@ -137,6 +137,10 @@ export function convert(value: number, from: Unit, to: Unit, density?: number): 
   return Number.isFinite(result) ? { ok: true, value: result } : refuse(`The ${quantityOf(from)} is too large.`);
 }
 
+/** All units of the quantity that a unit belongs to, itself among them: the torques for `lbf·in`. */
+export const unitsLike = (unit: Unit): Unit[] =>
+  (Object.keys(MEASURES) as Unit[]).filter((other) => quantityOf(other) === quantityOf(unit));
+
 /** A value in the base unit of its kind (m, N·m, Pa, K, m³/s …; % and turns as they are), not rounded. Refuses what `convert` refuses. */
 export function toBase(value: number, unit: Unit): Converted {
   const checked = convert(value, unit, unit);

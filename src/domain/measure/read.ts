@@ -1,7 +1,6 @@
-import { isUnit, quantityOf, sameKind, toBase, type Unit } from './convert';
+import { isUnit, quantityOf, sameKind, toBase, type Unit, type UnitQuantity } from './convert';
 import { withUnit } from './format';
-import type { MeasuredQuantity } from './quantities';
-import { NUMBER, numberOf, SPELLINGS } from './spellings';
+import { NUMBER, numberOf, SPELLINGS, WORKSHEET_SPELLINGS } from './spellings';
 
 /** A measure as somebody typed it into a box. */
 export interface Typed {
@@ -40,7 +39,7 @@ const MEASURE = new RegExp(
   'iu',
 );
 
-const UNITS = SPELLINGS.map(([pattern, unit, times = 1]) => ({
+const UNITS = [...SPELLINGS, ...WORKSHEET_SPELLINGS].map(([pattern, unit, times = 1]) => ({
   is: new RegExp(`^(?:${pattern})$`, 'iu'),
   unit,
   times,
@@ -50,7 +49,7 @@ const UNITS = SPELLINGS.map(([pattern, unit, times = 1]) => ({
  * The unit that a text names, and how many of it one is (a cm is ten mm); null where the book knows none. Where a word
  * names two units, such as the pound of force and the pound of mass, the one that measures `wanted` is meant.
  */
-export function readUnit(text: string, wanted?: MeasuredQuantity): { unit: Unit; times: number } | null {
+export function readUnit(text: string, wanted?: UnitQuantity): { unit: Unit; times: number } | null {
   // "in." is written as often as "in".
   const bare = text.replace(/^-(?=\p{L})|(?<=\p{L})\.$/gu, '').trim();
   const named = UNITS.flatMap(({ is, unit, times }) => (is.test(bare) ? [{ unit, times }] : []));
@@ -67,7 +66,7 @@ interface Parsed {
 function parse(
   text: string,
   instead: string,
-  wanted?: MeasuredQuantity,
+  wanted?: UnitQuantity,
 ): { ok: true; value: Parsed } | { ok: false; message: string } {
   const groups = MEASURE.exec(plain(text))?.groups;
   if (!groups) return refuse(`"${text.trim().slice(0, 40)}" is no number. Write, for example, ${instead}.`);

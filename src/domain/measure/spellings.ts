@@ -57,6 +57,17 @@ export const SPELLINGS: readonly (readonly [pattern: string, unit: Unit, times?:
   ['%|per ?cent', '%'],
 ];
 
+/** Units that only a box of a worksheet takes; in the search field these are words like any other. */
+export const WORKSHEET_SPELLINGS: typeof SPELLINGS = [
+  ['kw|kilowatts?', 'kW'],
+  ['b?hp|horse ?power', 'hp'],
+  [`g ?/ ?(?:kw${dot}h|\\(kw${dot}h\\))`, 'g/kWh'],
+  [`lbs? ?/ ?(?:hp${dot}h|\\(hp${dot}h\\))`, 'lb/hp·h'],
+  ['kg ?/ ?m(?:3|³)|kg per m(?:3|³)', 'kg/m³'],
+  ['g ?/ ?(?:cc|cm3|cm³|ml)|kg ?/ ?(?:l|dm3|dm³)', 'g/cm³'],
+  ['mm(?:2|²) ?/ ?s|cst|centistokes?', 'mm²/s'],
+];
+
 /** A number as people type it: a point or a comma before the decimals, thin or ordinary spaces between groups of three. */
 export const NUMBER = String.raw`\d{1,3}(?:[\u202f\u2009' ]\d{3})+(?!\d)(?:[.,]\d+)?|\d+(?:[.,]\d+)?|[.,]\d+`;
 

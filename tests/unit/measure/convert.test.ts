@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { convert, isUnit, quantityOf, type Unit } from '@/domain/measure/convert';
+import { convert, isUnit, quantityOf, type Unit, unitsLike } from '@/domain/measure/convert';
 import { UNITS_BY_QUANTITY } from '@/domain/measure/quantities';
 
 const units = Object.values(UNITS_BY_QUANTITY).flat() as Unit[];
@@ -37,6 +37,8 @@ describe('convert', () => {
     }
     expect(quantityOf('hp')).toBe('power');
     expect(quantityOf('g/kWh')).toBe('fuel consumption');
+    expect(unitsLike('lbf·in')).toEqual(['N·m', 'lbf·ft', 'lbf·in', 'kgf·m', 'kgf·cm']);
+    expect(unitsLike('hp')).toEqual(['kW', 'hp']);
   });
 
   it('there and back is where it started', () => {

@@ -1,6 +1,5 @@
-import { convert, quantityOf, type Unit } from '../../measure/convert';
+import { convert, quantityOf, unitsLike } from '../../measure/convert';
 import { formatNumber, withUnit } from '../../measure/format';
-import { UNITS_BY_QUANTITY } from '../../measure/quantities';
 import { readAny } from '../../measure/read';
 import { refused, worked, type Worked } from '../../measure/worked';
 import type { Values } from '../fields';
@@ -16,7 +15,7 @@ export function compute({ measure, density }: Values<typeof fields>): Worked<Out
   if (!read.ok) return refused({ field: 'measure', message: read.message });
   const { amount, unit } = read.value;
   const results: Result[] = [];
-  for (const to of UNITS_BY_QUANTITY[quantityOf(unit)] as readonly Unit[]) {
+  for (const to of unitsLike(unit)) {
     const found = convert(amount, unit, to, density);
     // A mass flow has no volume flow without a density; the units that need none are still shown.
     if (!found.ok || to === unit) continue;
