@@ -35,7 +35,9 @@ export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
         {facts.letter && (
           <span className="mr-1.5 font-serif text-[1.75rem] font-bold leading-none">{facts.letter}</span>
         )}
-        <span className="inline-block text-small font-medium text-ink-2">{facts.standing}</span>
+        <span data-standing className="inline-block text-small font-medium text-ink-2">
+          {facts.standing}
+        </span>
       </Fact>
       <Fact name="Published">{facts.published}</Fact>
       <Fact name="Written by">{facts.writtenBy}</Fact>
@@ -64,7 +66,9 @@ export const RunningHead = ({ facts, title }: { facts: TitleBlockFacts; title: s
           ['Number', facts.number],
           [
             'Revision',
-            facts.standing === 'current' ? facts.letter : [facts.letter, facts.standing].filter(Boolean).join(', '),
+            <b key="letter" className="font-semibold" data-strip-revision>
+              {facts.standing === 'current' ? facts.letter : [facts.letter, facts.standing].filter(Boolean).join(', ')}
+            </b>,
           ],
           ['Published', facts.published],
           ['Written by', facts.writtenBy],

@@ -32,31 +32,3 @@ for (const link of document.querySelectorAll<HTMLAnchorElement>('a[data-copy-lin
 for (const figure of document.querySelectorAll<HTMLElement>('figure[data-order]')) stepThrough(figure);
 
 for (const button of document.querySelectorAll('[data-print]')) button.addEventListener('click', () => print());
-
-/**
- * A sheet left open, or found again with the Back button, may have been superseded meanwhile. It asks when somebody
- * comes back to it and says so at once; without network it stays as it is.
- */
-const newer = document.querySelector<HTMLElement>('[data-newer]');
-let asked = Date.now();
-async function askWhetherCurrent(): Promise<void> {
-  if (!newer?.hidden) return;
-  asked = Date.now();
-  const { number = '', letter = '' } = newer.dataset;
-  const answer = await fetch(`/api/v1/procedures/${number}`, { cache: 'no-cache' }).catch(() => undefined);
-  if (!answer?.ok) return;
-  const { revision } = (await answer.json()) as { revision: { letter: string } };
-  if (revision.letter === letter) return;
-  for (const place of newer.querySelectorAll('[data-letter-now]')) place.textContent = revision.letter;
-  newer.hidden = false;
-}
-const cameBack = (event: PageTransitionEvent) => {
-  const [entry] = performance.getEntriesByType('navigation') as PerformanceNavigationTiming[];
-  return event.persisted || entry?.type === 'back_forward';
-};
-window.addEventListener('pageshow', (event) => {
-  if (cameBack(event)) void askWhetherCurrent();
-});
-document.addEventListener('visibilitychange', () => {
-  if (document.visibilityState === 'visible' && Date.now() - asked > 30_000) void askWhetherCurrent();
-});
