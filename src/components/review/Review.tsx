@@ -3,6 +3,7 @@ import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { Notice } from '@/components/ui/Notice';
 import type { Proposal } from '@/domain/api/schemas';
 import type { StepPair } from '@/domain/revision/twoTexts';
+import type { ClampChange } from '@/domain/revision/types';
 import type { ValueRow } from '@/domain/revision/valueRows';
 import { ActPanel, ReasonFields } from './ActPanel';
 import { keepReason, keptReason, type Written } from './keptReason';
@@ -23,7 +24,7 @@ export interface ReviewProps {
   /** The letter that it has, or would get now; null where it stands on an older revision. */
   letter: string | null;
   /** Null while the draft cannot be read; `fault` says where it stops. */
-  texts: { pairs: StepPair[]; values: ValueRow[] } | null;
+  texts: { pairs: StepPair[]; values: ValueRow[]; clamp: ClampChange[] } | null;
   fault: string | null;
   /** The panel that the address asks for, with what was typed before. */
   asked: Written | null;
@@ -79,7 +80,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
     document.getElementById(`ask-${panel?.at ? panel.at : (panel?.written.act ?? '')}`)?.focus();
   };
 
-  const { pairs = [], values = [] } = texts ?? {};
+  const { pairs = [], values = [], clamp = [] } = texts ?? {};
   const steps = useMemo(() => new Set(pairs.map((pair) => pair.id)), [pairs]);
   const shown = { steps, paths: values.map(({ path }) => path) };
   const names = sideNames(proposal);
@@ -171,6 +172,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
         <>
           <ValueTable
             rows={values}
+            clamp={clamp}
             fresh={proposal.base === null}
             names={{ old: names.old.column, now: names.now.column }}
             below={notes}

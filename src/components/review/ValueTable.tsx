@@ -1,6 +1,8 @@
 import { Fragment, type ReactNode } from 'react';
 import { beyondName, isAtTheBench, type ValueRow } from '@/domain/revision/valueRows';
 import type { Side, Span } from '@/domain/revision/sideText';
+import type { ClampChange } from '@/domain/revision/types';
+import { ClampRow } from './ClampRow';
 import { Mark, Spans } from './Spans';
 
 /** "10 ±1 N·m": the number large, its unit smaller. */
@@ -34,6 +36,8 @@ interface RowsProps {
   rows: readonly ValueRow[];
   names: { old: string; now: string };
   below: (path: string) => ReactNode;
+  /** Clamp load of the torque whose rows end with this one. */
+  loadUnder: (i: number) => ClampChange | undefined;
 }
 
 const RowHead = ({ row, span }: { row: ValueRow; span?: number }) => (
@@ -54,29 +58,32 @@ function Below({ children, span }: { children: ReactNode; span: number }) {
 }
 
 /** Values of a new sheet: what stands there, with nothing to set it against. */
-const FreshRows = ({ rows, below }: Omit<RowsProps, 'names'>) =>
-  rows.map((row) => {
+const FreshRows = ({ rows, below, loadUnder }: Omit<RowsProps, 'names'>) =>
+  rows.map((row, i) => {
+    const load = loadUnder(i);
     const text = beyondName(row);
     return (
       <Fragment key={row.path}>
-        <tr id={`value-${row.path}`}>
+        <tr id={`value-${row.path}`} data-goes-on={load ? '' : undefined}>
           <RowHead row={row} span={text ? 1 : 2} />
           {text && <td className={row.prose ? 'value-prose' : 'value-number'}>{text}</td>}
         </tr>
+        {load && <ClampRow load={load} columns={2} fresh />}
         <Below span={2}>{below(row.path)}</Below>
       </Fragment>
     );
   });
 
 /** Old and new of each value. What a cell holds stands in one block, so that a phone can set its name beside it. */
-const ChangeRows = ({ rows, names, below }: RowsProps) =>
-  rows.map((row) => {
+const ChangeRows = ({ rows, names, below, loadUnder }: RowsProps) =>
+  rows.map((row, i) => {
+    const load = loadUnder(i);
     const cell = row.prose ? 'value-prose' : 'value-number';
     const change = row.percent === null ? CHANGE_WORDS[row.kind] : percentText(row.percent);
     const why = reasonOf(row);
     return (
       <Fragment key={row.path}>
-        <tr id={`value-${row.path}`}>
+        <tr id={`value-${row.path}`} data-goes-on={load ? '' : undefined}>
           <RowHead row={row} />
           <td data-label={names.old} className={cell}>
             <div>
@@ -95,10 +102,17 @@ const ChangeRows = ({ rows, names, below }: RowsProps) =>
             <div className={why ? undefined : 'value-none'}>{why ?? 'No'}</div>
           </td>
         </tr>
+        {load && <ClampRow load={load} columns={5} fresh={false} />}
         <Below span={5}>{below(row.path)}</Below>
       </Fragment>
     );
   });
+
+/** Once for each torque, under the last of its rows. */
+const loadsOf = (rows: readonly ValueRow[], clamp: readonly ClampChange[]) => (i: number) => {
+  const row = rows[i];
+  return row?.list === 'torques' && rows[i + 1]?.key !== row.key ? clamp.find(({ key }) => key === row.key) : undefined;
+};
 
 /**
  * Values that differ, those that hands act on first and apart from the rest.
@@ -106,11 +120,14 @@ const ChangeRows = ({ rows, names, below }: RowsProps) =>
  */
 export function ValueTable({
   rows,
+  clamp,
   fresh,
   names,
   below = () => null,
 }: {
   rows: readonly ValueRow[];
+  /** Clamp load then and now of the torques among them. */
+  clamp: readonly ClampChange[];
   /** A new sheet: there is nothing to compare with. */
   fresh: boolean;
   /** What the two texts are called. */
@@ -141,9 +158,9 @@ export function ValueTable({
             </thead>
             <tbody>
               {fresh ? (
-                <FreshRows rows={shown} below={below} />
+                <FreshRows rows={shown} below={below} loadUnder={loadsOf(shown, clamp)} />
               ) : (
-                <ChangeRows rows={shown} names={names} below={below} />
+                <ChangeRows rows={shown} names={names} below={below} loadUnder={loadsOf(shown, clamp)} />
               )}
             </tbody>
           </table>

@@ -3,6 +3,8 @@ import type { Frontmatter, Limit, Timer, Torque } from '@/domain/procedure/schem
 import type { Reference } from '@/domain/procedure/types';
 import { durationText, limitText, threadText, torqueText } from '@/domain/procedure/values';
 import { OrderDrawing } from './OrderDrawing';
+import { ClampLine } from './ClampLine';
+import { GaugeLine } from './GaugeLine';
 import { roundsOf } from './orderPasses';
 import { BigValue, OtherUnits, Value } from './Value';
 import { counted, passWord } from './words';
@@ -61,6 +63,7 @@ function TorqueBlock({
             </Line>
           ))}
         {torque.note && <Line>{torque.note}</Line>}
+        {final && <ClampLine torque={torque} />}
         <Origin source={torque.source} frontmatter={f} />
       </div>
       <OrderDrawing torque={torque} rounds={roundsOf(torque, { passes, final })} />
@@ -80,6 +83,7 @@ function LimitBlock({ limit, f }: { limit: Limit; f: Frontmatter }) {
           </Line>
         )}
         {limit.note && <Line>{limit.note}</Line>}
+        <GaugeLine limit={limit} />
         <Origin source={limit.source} frontmatter={f} />
       </div>
     </Block>

@@ -122,6 +122,9 @@ export const SourceProblem = z.object({
   path: z.string().optional(),
 });
 
+/** over: past proof load. unknown: nothing can be said, and the message says why. */
+export const ClampVerdict = z.enum(['over', 'low', 'ok', 'unknown']);
+
 export const CheckRequest = z.object({
   source: z.string(),
   preview: z.boolean().optional().describe('Also return the rendered steps'),
@@ -131,8 +134,21 @@ export const CheckResult = z.object({
   errors: z.array(SourceProblem),
   notices: z.array(SourceProblem),
   clamp: z
-    .array(z.object({ key: z.string(), message: z.string() }))
-    .describe('Clamp check of each torque; empty until torques are checked against the fastener'),
+    .array(
+      z.object({
+        key: z.string(),
+        name: z.string(),
+        path: z.string().describe('`torques.0`'),
+        verdict: ClampVerdict,
+        message: z.string().describe('The verdict in a sentence'),
+        clampLoad: z.number().nullable().describe('N'),
+        proofLoad: z.number().nullable().describe('N'),
+        share: z.number().nullable().describe('Clamp load over proof load: 0.72 is 72 %'),
+        nutFactor: z.number().nullable().describe('K of T = K·d·F'),
+        mixUp: z.string().nullable().describe('The unit that the figure may really have been in, in a sentence'),
+      }),
+    )
+    .describe('Clamp check of each torque; empty where the text cannot be read'),
   preview: z.object({ frontmatter: FrontmatterFields, introHtml: z.string(), steps: z.array(SheetStep) }).optional(),
 });
 
@@ -250,6 +266,19 @@ export const Comparison = z.object({
       critical: z.string().nullable(),
     }),
   ),
+  clamp: z
+    .array(
+      z.object({
+        key: z.string(),
+        name: z.string(),
+        from: z.string().nullable(),
+        to: z.string().nullable(),
+        verdict: ClampVerdict,
+        why: z.string(),
+        mixUps: z.array(z.string()).describe('Units that may have been mixed up, each a sentence'),
+      }),
+    )
+    .describe('Clamp load then and now of each torque that is new or whose load may have changed'),
   intro: z.array(WordRun),
   steps: z.array(
     z.object({

@@ -1,6 +1,8 @@
 import type { Nodes, RootContent } from 'mdast';
 import { limitKeysIn } from './bindings';
 import type { DraftBody } from './body';
+import { clampChecks } from './clamp';
+import { coarseTool } from './gauge';
 import { elementsIn, given } from './references';
 import { problem, type PlaceOf } from './problems';
 import { figuresInProse } from './proseFigures';
@@ -119,7 +121,33 @@ const figuresWrittenOut: Rule = ({ body }) => [
   ...body.steps.flatMap((step, i) => writtenOut(step.children, `steps.${i}.body`)),
 ];
 
-const RULES: readonly Rule[] = [unused, cautionsNowhere, withoutSource, untimedSupplies, emptySteps, figuresWrittenOut];
+/** A torque that its fastener cannot bear, hardly needs, or that was meant in another unit. */
+const implausibleTorques: Rule = ({ frontmatter, placeOf }) =>
+  clampChecks(frontmatter.torques).flatMap(({ name, path, verdict, message, mixUp }, i) => {
+    const said = [...(verdict === 'over' || verdict === 'low' ? [message] : []), ...(mixUp ? [mixUp] : [])];
+    if (said.length === 0) return [];
+    return [problem(placeOf(['torques', i, 'nm']), `Torque ${i + 1} (${name}): ${said.join(' ')}`, `${path}.nm`)];
+  });
+
+/** A limit that its own tool cannot read. */
+const coarseTools: Rule = ({ frontmatter, placeOf }) =>
+  frontmatter.limits.flatMap((limit, i) => {
+    const why = coarseTool(limit);
+    if (!why) return [];
+    const place = placeOf(['limits', i, 'resolution']);
+    return [problem(place, `Limit ${i + 1} (${limit.name}): ${why}`, `limits.${i}.resolution`)];
+  });
+
+const RULES: readonly Rule[] = [
+  implausibleTorques,
+  coarseTools,
+  unused,
+  cautionsNowhere,
+  withoutSource,
+  untimedSupplies,
+  emptySteps,
+  figuresWrittenOut,
+];
 
 /** What a reviewer should look at in a text that is otherwise in order. */
 export const noticesOf = (read: Noticed): SourceProblem[] => RULES.flatMap((rule) => rule(read));

@@ -1,5 +1,6 @@
 import type { Procedure } from '../procedure/types';
 import { bodyText } from './bodyText';
+import { clampChanges } from './clampChanges';
 import { compareSteps } from './compareSteps';
 import { compareValues } from './compareValues';
 import { inOrder, sheetReasons } from './critical';
@@ -28,6 +29,7 @@ export function compareProcedures(from: Procedure | null, to: Procedure): Compar
   ];
   return {
     values: values.map(({ change }) => change),
+    clamp: clampChanges(from?.frontmatter ?? null, to.frontmatter),
     intro,
     steps: steps.map(({ change }) => change),
     criticalReasons: identical ? [] : inOrder(reasons),

@@ -47,8 +47,24 @@ export interface StepChange {
   critical: string | null;
 }
 
+/** The clamp load that a torque gives, before and after. Texts are "8.3 kN, 72 % of proof load". */
+export interface ClampChange {
+  /** Of the torque in the new text. */
+  key: string;
+  name: string;
+  /** Null where there was no such torque, or where nothing can be said of it. */
+  from: string | null;
+  to: string | null;
+  verdict: 'over' | 'low' | 'ok' | 'unknown';
+  /** The verdict in a sentence. */
+  why: string;
+  /** Units that may have been mixed up, each a sentence. */
+  mixUps: string[];
+}
+
 export interface Comparison {
   values: ValueChange[];
+  clamp: ClampChange[];
   intro: WordRun[];
   /** In the order of the new text; removed steps stand after the step they followed. */
   steps: StepChange[];

@@ -1,6 +1,7 @@
 import type { CheckResult } from '@/domain/api/schemas';
 import type { Actor } from '@/domain/people/may';
 import { sizeProblem } from '@/domain/procedure/bounds';
+import { clampChecks } from '@/domain/procedure/clamp';
 import type { Parsed } from '@/domain/procedure/types';
 import { invalid } from '../refusal';
 import { parsedText } from './parsed';
@@ -18,7 +19,7 @@ export function checkResult(parsed: Parsed, preview = false): CheckResult {
     ok: true,
     errors: [],
     notices: parsed.notices,
-    clamp: [],
+    clamp: clampChecks(parsed.procedure.frontmatter.torques),
     ...(preview ? { preview: parsed.rendered } : {}),
   };
 }
