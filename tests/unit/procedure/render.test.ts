@@ -57,7 +57,7 @@ describe('rendering', () => {
     );
     expect(check?.html).toContain('<th scope="row">Gap at the corner <small>cold</small></th>');
     expect(html('<Worksheet kind="injector-set" />')).toBe(
-      '<p class="worksheet" data-worksheet="injector-set">Worksheet: injector set</p>',
+      '<p class="worksheet" data-worksheet="injector-set" data-bound="[]">Worksheet: injector set</p>',
     );
   });
 
