@@ -108,10 +108,13 @@ const ChangeRows = ({ rows, names, below, loadUnder }: RowsProps) =>
     );
   });
 
-/** Once for each torque, under the last of its rows. */
+/** Once for each torque: under its final value where that changes, else under the last of its rows. */
 const loadsOf = (rows: readonly ValueRow[], clamp: readonly ClampChange[]) => (i: number) => {
   const row = rows[i];
-  return row?.list === 'torques' && rows[i + 1]?.key !== row.key ? clamp.find(({ key }) => key === row.key) : undefined;
+  if (row?.list !== 'torques') return undefined;
+  const own = rows.filter(({ list, key }) => list === 'torques' && key === row.key);
+  const under = own.find(({ path }) => path.endsWith('.nm')) ?? own.at(-1);
+  return under === row ? clamp.find(({ key }) => key === row.key) : undefined;
 };
 
 /**

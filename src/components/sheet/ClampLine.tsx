@@ -1,4 +1,4 @@
-import { clampOf, clampText } from '@/domain/procedure/clamp';
+import { clampOf, clampText, OUT_OF_TABLES, sizeMixUp } from '@/domain/procedure/clamp';
 import type { Torque } from '@/domain/procedure/schema';
 import { Value } from './Value';
 
@@ -26,23 +26,39 @@ const Bar = ({ share }: { share: number }) => (
   </svg>
 );
 
-/** What a torque clamps with, against the proof load of its fastener: how plausible the number is, never a number to work to. */
-export function ClampLine({ torque }: { torque: Torque }) {
+/**
+ * What a torque clamps with, against the proof load of its fastener: how plausible the number is, never a number to
+ * work to.
+ *
+ * @param tellAll for whoever writes the number: also why nothing can be said, a low clamp, and units that may have been mixed up
+ */
+export function ClampLine({ torque, tellAll = false }: { torque: Torque; tellAll?: boolean }) {
   const check = clampOf(torque);
   const text = check && clampText(check);
-  if (!check || !text) return null;
   const turns = (torque.angles?.length ?? 0) > 0;
+  const mixUp = tellAll ? sizeMixUp(torque) : null;
+  const why = check?.verdict === 'over' || (tellAll && check?.verdict !== 'ok') ? (check?.why ?? OUT_OF_TABLES) : null;
+  if (!text && !why) return null;
   return (
     <div>
-      {check.share !== null && <Bar share={check.share} />}
-      <p className="leading-snug">
-        {turns ? 'Clamps ' : 'Clamp '}
-        <Value text={text} />
-        {turns && ' before the turn'}
-      </p>
-      {check.verdict === 'over' && (
-        <p className="border-l-[8px] border-ink pl-2.5 font-medium leading-snug">{check.why}</p>
+      {check?.share != null && <Bar share={check.share} />}
+      {text && (
+        <p className="leading-snug">
+          {turns ? 'Clamps ' : 'Clamp '}
+          <Value text={text} />
+          {turns && ' before the turn'}
+        </p>
       )}
+      {why && (
+        <p
+          className={
+            check?.verdict === 'over' ? 'border-l-[8px] border-ink pl-2.5 font-medium leading-snug' : 'leading-snug'
+          }
+        >
+          {why}
+        </p>
+      )}
+      {mixUp && <p className="border-l-[8px] border-ink pl-2.5 font-medium leading-snug">{mixUp}</p>}
     </div>
   );
 }

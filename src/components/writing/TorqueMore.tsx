@@ -1,8 +1,11 @@
+import { useMemo } from 'react';
+import { ClampLine } from '@/components/sheet/ClampLine';
 import { OrderDrawing } from '@/components/sheet/OrderDrawing';
 import { TextArea } from '@/components/ui/TextArea';
 import type { Torque } from '@/domain/procedure/schema';
 import { boxesOf, type Entry } from '@/domain/writing/draft';
 import { readNumbers } from '@/domain/writing/numbers';
+import { torqueOf } from '@/domain/writing/procedureOf';
 import { TextBox } from './fields';
 import { NumberBoxes } from './NumberBoxes';
 import { useBox } from './useBox';
@@ -28,9 +31,13 @@ export function TorqueMore({ index, entry }: { index: number; entry: Entry }) {
   const path = `torques.${index}`;
   const places = useBox(`${path}.positions`);
   const torque = drawable(entry);
+  const whole = useMemo(() => torqueOf(entry), [entry]);
   const turns = boxesOf(entry['angles']).length > 0 || Boolean(entry['angleTolerance']);
   return (
     <>
+      <div aria-live="polite" className="empty:hidden sm:col-span-full sm:max-w-[30rem]">
+        {whole && <ClampLine torque={whole} tellAll />}
+      </div>
       <div className="flex flex-wrap gap-x-10 gap-y-4 sm:col-span-full">
         <NumberBoxes
           list="torques"

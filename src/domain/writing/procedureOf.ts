@@ -1,5 +1,5 @@
 import { ENTRY_FIELDS } from '../procedure/fields';
-import { KEYED_LISTS, type Frontmatter } from '../procedure/schema';
+import { KEYED_LISTS, Torque, type Frontmatter } from '../procedure/schema';
 import type { Procedure } from '../procedure/types';
 import { boxesOf, fieldKind, type Draft, type Entry, type FieldKind, type ListName } from './draft';
 import { readNumber, readNumbers } from './numbers';
@@ -30,6 +30,12 @@ const entryOf = (list: ListName, entry: Entry) =>
       .map((field) => [field, valueOf(entry[field], fieldKind(list, field))])
       .filter(([, value]) => value !== undefined),
   );
+
+/** The torque that a row of the form stands for; null while it is not a whole one. */
+export function torqueOf(entry: Entry): Torque | null {
+  const read = Torque.safeParse(entryOf('torques', entry));
+  return read.success ? read.data : null;
+}
 
 /**
  * The procedure that a draft stands for. It has the shape of one, not yet its validity: a number that could not
