@@ -41,7 +41,7 @@ export function ClampLine({ torque, tellAll = false }: { torque: Torque; tellAll
   if (!text && !why) return null;
   return (
     <div>
-      {check?.share != null && <Bar share={check.share} />}
+      {typeof check?.share === 'number' && <Bar share={check.share} />}
       {text && (
         <p className="leading-snug">
           {turns ? 'Clamps ' : 'Clamp '}

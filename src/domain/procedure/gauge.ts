@@ -43,10 +43,13 @@ export function gaugeText(limit: Limit): BothUnits | null {
   return { metric: steps(found.unit), inch: steps(inchUnit(found.unit, found.max)) };
 }
 
-/** Why the tool that a limit names is too coarse for it, in a sentence; null where it is fine enough or none is named. */
+/**
+ * Why the tool that a limit names is too coarse for it, in a sentence; null where it is fine enough or none is named.
+ * A limit with one end may be a feeler that goes or does not go, so only two ends are judged.
+ */
 export function coarseTool(limit: Limit): string | null {
   const found = ends(limit);
-  if (!found || limit.resolution === undefined) return null;
+  if (!found || limit.min === undefined || limit.resolution === undefined) return null;
   const fit = gaugeFit(found.max - found.min, limit.resolution);
   if (!fit.ok || fit.value.verdict !== 'too coarse') return null;
   return `Fewer than four steps of ${withUnit(formatNumber(limit.resolution), found.unit)} fit into this tolerance; a reading near its end is a guess.`;

@@ -134,5 +134,7 @@ describe('the gauge for a limit', () => {
     );
     expect(coarseTool(limit({ min: 0.02, max: 0.06, resolution: 0.01 }))).toBeNull();
     expect(coarseTool(limit({ min: 0.02, max: 0.06 }))).toBeNull();
+    // A feeler of the limit's own size goes or does not go.
+    expect(coarseTool(limit({ max: 0.05, resolution: 0.05 }))).toBeNull();
   });
 });
