@@ -1,10 +1,4 @@
-import type { Migration } from './migration';
-
-// Every time is ISO 8601 text in UTC, every id a UUIDv7, every boolean 0 or 1. Sequelize reads the
-// declared types JSON and TINYINT back as objects and booleans.
-const times = `
-  createdAt TEXT NOT NULL DEFAULT (strftime('%Y-%m-%dT%H:%M:%fZ', 'now')),
-  updatedAt TEXT NOT NULL DEFAULT (strftime('%Y-%m-%dT%H:%M:%fZ', 'now'))`;
+import { times, type Migration } from './migration';
 
 export const tables: Migration = {
   name: '0001-tables',

@@ -1,7 +1,7 @@
 import { DataTypes, type Sequelize } from 'sequelize';
 import { Procedure, Rendering, Revision, SearchDocument } from './book';
 import { flag, id, optionalText, text, times } from './columns';
-import { Membership, Person, Shop } from './people';
+import { Membership, Person, Shop, ShopRule } from './people';
 import { AuditEntry, IdempotencyKey, Setting } from './records';
 import { Agreement, Remark } from './review';
 
@@ -50,6 +50,17 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
     Membership: class extends Membership {}.init(
       own({ id, personId: text, scope: text, shopId: optionalText, role: text, ...stamps }),
       bind('Membership', 'memberships'),
+    ),
+    ShopRule: class extends ShopRule {}.init(
+      own({
+        id,
+        shopId: text,
+        name: text,
+        value: { type: DataTypes.DOUBLE, allowNull: false },
+        setById: text,
+        ...stamps,
+      }),
+      bind('ShopRule', 'shopRules'),
     ),
     Procedure: class extends Procedure {}.init(
       own({

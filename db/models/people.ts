@@ -39,3 +39,17 @@ export class Membership extends Model<InferAttributes<Membership>, InferCreation
   declare createdAt: CreationOptional<string>;
   declare updatedAt: CreationOptional<string>;
 }
+
+/** What a shop has set for a rule of thumb. No row: the usual value stands. */
+export class ShopRule extends Model<InferAttributes<ShopRule>, InferCreationAttributes<ShopRule>> {
+  declare id: CreationOptional<string>;
+  declare shopId: string;
+  /** Worksheet and field: `injector-set.deviation`. */
+  declare name: string;
+  /** In the unit of the field. */
+  declare value: number;
+  declare setById: string;
+  declare createdAt: CreationOptional<string>;
+  /** When it was last set. */
+  declare updatedAt: CreationOptional<string>;
+}

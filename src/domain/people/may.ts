@@ -48,6 +48,8 @@ export interface Subjects {
   witness: { shopId: string; signedBy: string };
   writeSupplement: { shopId: string };
   manageMembers: { shopId: string };
+  readShopSettings: { shopId: string };
+  changeShopSettings: { shopId: string };
   manageShops: null;
 }
 export type Act = keyof Subjects;
@@ -147,6 +149,11 @@ const RULES: { [A in Act]: (actor: Actor, subject: Subjects[A]) => Permission } 
     isSteward(actor)
       ? YES
       : inShop(actor, shopId, ['owner'], 'The owner of the shop or the network steward looks after its people.'),
+  readShopSettings: (actor, { shopId }) => (isSteward(actor) || isMember(actor, shopId) ? YES : HIDDEN),
+  changeShopSettings: (actor, { shopId }) =>
+    isSteward(actor)
+      ? YES
+      : inShop(actor, shopId, ['owner'], 'The owner of the shop or the network steward changes its settings.'),
   manageShops: (actor) =>
     isSteward(actor) ? YES : no('The network steward looks after shops and common-book editors.'),
 };

@@ -165,6 +165,23 @@ describe('the database itself holds that', () => {
     await refused(() => Membership.create({ personId, scope: 'common', role: 'editor' }), 'Validation error');
   });
 
+  test('a shop sets each rule of thumb once, to a number, by somebody', async () => {
+    const { Shop, ShopRule } = db.models;
+    const [shop, other] = [await Shop.create({ name: 'Shop' }), await Shop.create({ name: 'Other' })];
+    const row = { shopId: shop.id, name: 'injector-set.deviation', value: 4, setById: people['first'] ?? '' };
+    for (const name of ['', 'deviation', '.deviation', 'injector-set.', 'Injector.x'])
+      await refused(() => ShopRule.create({ ...row, name }), 'CHECK');
+    for (const value of [1e16, -1e16, Infinity]) await refused(() => ShopRule.create({ ...row, value }), 'CHECK');
+    await refused(() => ShopRule.create({ ...row, value: NaN }), /CHECK|NOT NULL|notNull|no such column/);
+    for (const wrong of [{ shopId: 'nowhere' }, { setById: 'nobody' }])
+      await refused(() => ShopRule.create({ ...row, ...wrong }), 'FOREIGN KEY');
+    await ShopRule.create(row);
+    await refused(() => ShopRule.create({ ...row, value: 5 }), 'Validation error');
+    await ShopRule.create({ ...row, shopId: other.id });
+    const [kept] = await db.read<{ value: number }>('SELECT value FROM shopRules WHERE shopId = :id', { id: shop.id });
+    expect(kept).toEqual({ value: 4 });
+  });
+
   test('nothing points at what is not there', async () => {
     await refused(
       () => db.models.Membership.create({ personId: 'nobody', scope: 'common', role: 'editor' }),
