@@ -11,7 +11,7 @@ const size = (min: number, max: number) => ({ min: inches(min), max: inches(max)
 
 describe('bores', () => {
   it('S (TM 9-2815-202-34 p. 4-147): taper limit 0.002 in, out-of-round limit 0.0025 in, by two heights; diameters C', () => {
-    const limits = { taper: inches(0.002), outOfRound: inches(0.0025) };
+    const limits = { taper: { max: inches(0.002) }, outOfRound: { max: inches(0.0025) } };
     const at = (top: number, bottom: number, across: number) => {
       const readings = [
         [inches(top), inches(across)],
@@ -57,7 +57,7 @@ describe('bores', () => {
 
 describe('journals', () => {
   it('S (TM 5-3805-262-34 p. 4-24): taper front against rear and out-of-round 90° apart, 0.0005 in each; diameters C', () => {
-    const limits = { taper: inches(0.0005), outOfRound: inches(0.0005) };
+    const limits = { taper: { max: inches(0.0005) }, outOfRound: { max: inches(0.0005) } };
     const at = (rear: number) =>
       valueOf(judgeJournal({ readings: [[2.4995, 2.499].map(inches), [rear, 2.499].map(inches)], limits })).judged;
     expect(at(2.499)).toMatchObject({ taper: { at: 'in' }, outOfRound: { at: 'in' } });
@@ -65,7 +65,7 @@ describe('journals', () => {
   });
 
   it('S (TM 5-3805-281-24-2): taper 0.0025 mm in 25.4 mm of length, out-of-round 0.025 mm; diameters C', () => {
-    const limits = { taperPerLength: 0.0025 / 25.4, outOfRound: 0.025 * MM };
+    const limits = { taperPerLength: { max: 0.0025 / 25.4 }, outOfRound: { max: 0.025 * MM } };
     const at = (taper: number, length: number) => {
       const readings = [
         [63.5 * MM, 63.475 * MM],

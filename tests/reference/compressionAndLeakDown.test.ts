@@ -10,14 +10,15 @@ const psi = (...values: number[]) => values.map((value) => value * PSI);
 
 describe('compression rules', () => {
   it('S (TM 5-4210-230-14&P-1 Add. 2): the lowest must be 75 % of the highest; numbers C', () => {
-    const passes = (...list: number[]) => valueOf(judgeCompression(psi(...list), { lowestOfHighest: 75 })).passes;
+    const passes = (...list: number[]) =>
+      valueOf(judgeCompression(psi(...list), { lowestOfHighest: { min: 75 } })).passes;
     expect(passes(160, 140, 120)).toBe(true);
     expect(passes(160, 140, 119)).toBe(false);
   });
 
   it('S (TM 1-1500-204-23-1, aircraft): a cylinder 20 % below the average is to be replaced; numbers C', () => {
     const at = (low: number) =>
-      valueOf(judgeCompression(psi(150, 150, 150, low), { belowAverage: 20 })).cylinders[3]?.average?.at;
+      valueOf(judgeCompression(psi(150, 150, 150, low), { belowAverage: { max: 20 } })).cylinders[3]?.average?.at;
     // With the low one in it, the average is (450 + low) / 4: 20 % below it is 112.5.
     expect(at(113)).toBe('in');
     expect(at(112)).toBe('over');
@@ -25,13 +26,17 @@ describe('compression rules', () => {
 
   it('S (TM 10-3930-618-20): no more than 10 psi between cylinders; numbers C', () => {
     const at = (low: number) =>
-      valueOf(judgeCompression(psi(150, low), { difference: 10 * PSI })).judged.difference?.at;
+      valueOf(judgeCompression(psi(150, low), { difference: { max: 10 * PSI } })).judged.difference?.at;
     expect([at(140), at(139.9)]).toEqual(['in', 'over']);
   });
 
   it('the rules do not agree (C): 160 and 125 psi pass one and fail another', () => {
     const found = valueOf(
-      judgeCompression(psi(160, 125), { lowestOfHighest: 75, belowAverage: 20, difference: 10 * PSI }),
+      judgeCompression(psi(160, 125), {
+        lowestOfHighest: { min: 75 },
+        belowAverage: { max: 20 },
+        difference: { max: 10 * PSI },
+      }),
     );
     expect(found.judged).toMatchObject({ lowestOfHighest: { at: 'in' }, difference: { at: 'over' } });
     expect(found.cylinders[1]?.average?.at).toBe('in');

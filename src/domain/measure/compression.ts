@@ -1,18 +1,18 @@
-import { nothingFails, optionalBandProblems, placeIn, placeInIfAny, type Band, type Judged } from './band';
-import { PRESSURE, SHARE_PERCENT } from './reach';
+import { nothingFails, optionalBandProblems, placeInIfAny, type Band, type Judged } from './band';
+import { PRESSURE, TOLERANCE_PERCENT } from './reach';
 import { largestOf, listProblems, meanOf, rangeOf, smallestOf } from './readings';
-import { numberProblem, work, type FieldProblem, type Worked } from './worked';
+import { work, type FieldProblem, type Worked } from './worked';
 
 /** Each rule is used where it is given. They come from different books and do not agree; the sheet says which holds. */
 export interface CompressionRules {
   /** Every cylinder, Pa. */
   band?: Band;
-  /** Lowest as a share of the highest, per cent. 75: TM 5-4210-230-14&P-1 Add. 2. */
-  lowestOfHighest?: number;
-  /** How far a cylinder may lie below the average of all, per cent. 20: TM 1-1500-204-23-1 (aircraft). */
-  belowAverage?: number;
-  /** Largest difference between two cylinders, Pa. 10 psi: TM 10-3930-618-20. */
-  difference?: number;
+  /** Lowest as a share of the highest, per cent. `{ min: 75 }`: TM 5-4210-230-14&P-1 Add. 2. */
+  lowestOfHighest?: Band;
+  /** How far a cylinder lies below the average of all, per cent. `{ max: 20 }`: TM 1-1500-204-23-1 (aircraft). */
+  belowAverage?: Band;
+  /** Difference between the highest and the lowest, Pa. 10 psi at most: TM 10-3930-618-20. */
+  difference?: Band;
 }
 
 export interface CompressionFound {
@@ -37,19 +37,11 @@ export interface CompressionFound {
 }
 
 function ruleProblems({ band, lowestOfHighest, belowAverage, difference }: CompressionRules): FieldProblem[] {
-  const given = (value: number | undefined, problems: (value: number) => FieldProblem[]) =>
-    value === undefined ? [] : problems(value);
   return [
     ...optionalBandProblems('rules.band', 'The compression allowed', band, PRESSURE),
-    ...given(lowestOfHighest, (share) =>
-      numberProblem('rules.lowestOfHighest', 'The least share of the highest', share, SHARE_PERCENT),
-    ),
-    ...given(belowAverage, (share) =>
-      numberProblem('rules.belowAverage', 'The share below the average', share, SHARE_PERCENT),
-    ),
-    ...given(difference, (most) =>
-      numberProblem('rules.difference', 'The difference between cylinders', most, PRESSURE),
-    ),
+    ...optionalBandProblems('rules.lowestOfHighest', 'The share of the highest', lowestOfHighest, TOLERANCE_PERCENT),
+    ...optionalBandProblems('rules.belowAverage', 'The share below the average', belowAverage, TOLERANCE_PERCENT),
+    ...optionalBandProblems('rules.difference', 'The difference between cylinders', difference, PRESSURE),
   ];
 }
 
@@ -77,7 +69,6 @@ function found(readings: readonly number[], rules: CompressionRules): Compressio
   const mean = meanOf(readings);
   const difference = rangeOf(readings);
   const lowestOfHighest = (100 * lowest) / highest;
-  const most = (max: number | undefined) => (max === undefined ? undefined : { max });
 
   const cylinders = readings.map((reading) => {
     const belowAverage = (100 * (mean - reading)) / mean;
@@ -85,13 +76,12 @@ function found(readings: readonly number[], rules: CompressionRules): Compressio
       reading,
       belowAverage,
       judged: placeInIfAny(reading, rules.band),
-      average: placeInIfAny(belowAverage, most(rules.belowAverage), 100),
+      average: placeInIfAny(belowAverage, rules.belowAverage, 100),
     };
   });
   const judged = {
-    lowestOfHighest:
-      rules.lowestOfHighest === undefined ? null : placeIn(lowestOfHighest, { min: rules.lowestOfHighest }),
-    difference: placeInIfAny(difference, most(rules.difference), highest),
+    lowestOfHighest: placeInIfAny(lowestOfHighest, rules.lowestOfHighest),
+    difference: placeInIfAny(difference, rules.difference, highest),
   };
   const passes = nothingFails([...Object.values(judged), ...cylinders.flatMap((one) => [one.judged, one.average])]);
   return { lowest, highest, mean, difference, lowestOfHighest, cylinders, judged, passes };

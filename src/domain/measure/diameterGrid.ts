@@ -1,7 +1,7 @@
 import { optionalBandProblems, placeInIfAny, type Band, type Judged } from './band';
 import { GAP, SIZE } from './reach';
 import { countProblem, largestOf, listProblems, rangeOf, smallestOf, type Called } from './readings';
-import { numberProblem, type FieldProblem } from './worked';
+import type { FieldProblem } from './worked';
 
 /**
  * Diameters in m at two or three places along a bore or a journal, first place to last, each on two axes a quarter turn
@@ -28,10 +28,9 @@ export interface Shape {
 export interface ShapeLimits {
   /** Of every reading, m. */
   diameter?: Band;
-  /** Most, m. */
-  taper?: number;
-  outOfRound?: number;
-  cylindricity?: number;
+  taper?: Band;
+  outOfRound?: Band;
+  cylindricity?: Band;
 }
 
 export interface ShapeJudged {
@@ -55,13 +54,11 @@ export function gridProblems(field: string, called: Called, grid: DiameterGrid):
 
 export function shapeLimitProblems(limits: ShapeLimits | undefined): FieldProblem[] {
   const { diameter, taper, outOfRound, cylindricity } = limits ?? {};
-  const most = (field: string, called: string, value: number | undefined) =>
-    value === undefined ? [] : numberProblem(`limits.${field}`, called, value, GAP);
   return [
     ...optionalBandProblems('limits.diameter', 'The diameter allowed', diameter, SIZE),
-    ...most('taper', 'The taper allowed', taper),
-    ...most('outOfRound', 'The out-of-round allowed', outOfRound),
-    ...most('cylindricity', 'The cylindricity allowed', cylindricity),
+    ...optionalBandProblems('limits.taper', 'The taper allowed', taper, GAP),
+    ...optionalBandProblems('limits.outOfRound', 'The out-of-round allowed', outOfRound, GAP),
+    ...optionalBandProblems('limits.cylindricity', 'The cylindricity allowed', cylindricity, GAP),
   ];
 }
 
@@ -88,16 +85,14 @@ export function shapeOf(grid: DiameterGrid): Shape {
   };
 }
 
-const atMost = (max: number | undefined): Band | undefined => (max === undefined ? undefined : { max });
-
 /** Each of the limits that is given, judged; differences are forgiven the rounding of the diameters. */
 export function judgeShape(shape: Shape, limits: ShapeLimits = {}): ShapeJudged {
   const { smallest, largest } = shape;
   const least = placeInIfAny(smallest, limits.diameter);
   return {
     diameter: least?.at === 'under' ? least : placeInIfAny(largest, limits.diameter),
-    taper: placeInIfAny(shape.worstTaper, atMost(limits.taper), largest),
-    outOfRound: placeInIfAny(shape.worstOutOfRound, atMost(limits.outOfRound), largest),
-    cylindricity: placeInIfAny(shape.cylindricity, atMost(limits.cylindricity), largest),
+    taper: placeInIfAny(shape.worstTaper, limits.taper, largest),
+    outOfRound: placeInIfAny(shape.worstOutOfRound, limits.outOfRound, largest),
+    cylindricity: placeInIfAny(shape.cylindricity, limits.cylindricity, largest),
   };
 }

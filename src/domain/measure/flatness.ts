@@ -1,4 +1,4 @@
-import { placeIn, type Judged } from './band';
+import { optionalBandProblems, placeIn, placeInIfAny, type Band, type Judged } from './band';
 import { GAP, SIZE } from './reach';
 import { countProblem } from './readings';
 import { numberProblem, work, type FieldProblem, type Worked } from './worked';
@@ -15,10 +15,10 @@ export interface EdgeGap {
 }
 
 export interface FlatnessLimits {
-  /** Most in a direction, m. */
-  along?: number;
-  across?: number;
-  diagonal?: number;
+  /** By the direction, m. */
+  along?: Band;
+  across?: Band;
+  diagonal?: Band;
   /** Most in any stretch of a length, m: 0.05 mm in 150 mm. */
   local?: { max: number; over: number };
 }
@@ -53,9 +53,8 @@ function limitProblems(limits: FlatnessLimits): FieldProblem[] {
   const { local } = limits;
   return [
     ...DIRECTIONS.flatMap((direction) => {
-      const most = limits[direction];
       const called = `The limit ${direction === 'diagonal' ? 'diagonally' : direction}`;
-      return most === undefined ? [] : numberProblem(`limits.${direction}`, called, most, GAP);
+      return optionalBandProblems(`limits.${direction}`, called, limits[direction], GAP);
     }),
     ...(local === undefined
       ? []
@@ -95,10 +94,9 @@ export function judgeFlatness(gaps: readonly EdgeGap[], limits: FlatnessLimits =
 
 function found(gaps: readonly EdgeGap[], limits: FlatnessLimits): FlatnessFound {
   const each = gaps.map((one) => {
-    const max = limits[one.direction];
     return {
       gap: one.gap,
-      judged: max === undefined ? null : placeIn(one.gap, { max }),
+      judged: placeInIfAny(one.gap, limits[one.direction]),
       local: limits.local === undefined ? null : localVerdict(one, limits.local),
     };
   });

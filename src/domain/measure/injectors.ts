@@ -1,4 +1,12 @@
-import { bandProblems, nothingFails, placeIn, placeInIfAny, type Band, type Judged } from './band';
+import {
+  bandProblems,
+  nothingFails,
+  optionalBandProblems,
+  placeIn,
+  placeInIfAny,
+  type Band,
+  type Judged,
+} from './band';
 import { FLOW, TOLERANCE_PERCENT } from './reach';
 import { countProblem, largestOf, meanOf, rangeOf, smallestOf } from './readings';
 import { numberProblem, work, type FieldProblem, type Worked } from './worked';
@@ -20,10 +28,10 @@ export interface Injector {
 export interface InjectorLimits {
   /** What each one must flow, m³/s; `bandAround(nominal, 3)` for a tolerance in per cent. */
   flow: Band;
-  /** Largest spread of the set, in per cent of its mean. */
-  spreadPercent?: number;
-  /** Most drops in the hold; needed where drops were counted. */
-  drops?: number;
+  /** Spread of the set, in per cent of its mean. */
+  spread?: Band;
+  /** Drops in the hold; needed where drops were counted. */
+  drops?: Band;
 }
 
 export interface InjectorSet {
@@ -71,6 +79,8 @@ export interface InjectorSetFound {
 }
 
 type RunName = 'before' | 'after';
+/** Counted through a minute or so; a number beyond is a stream. */
+const DROPS = { least: 0, most: 1e6 };
 const FAULTS: readonly InjectorFault[] = ['flows too little', 'flows too much', 'drips', 'sprays badly'];
 
 /** All of a run or none of it: a spread over three of four would flatter the set. */
@@ -90,19 +100,16 @@ function findingProblems(injectors: readonly Injector[], limits: InjectorLimits)
   const problems = injectors.flatMap((one, place) => [
     ...(one?.drops === undefined
       ? []
-      : numberProblem(`injectors.${place}.drops`, `The drops of injector ${place + 1}`, one.drops, {
-          least: 0,
-          most: 1e6,
-        })),
+      : numberProblem(`injectors.${place}.drops`, `The drops of injector ${place + 1}`, one.drops, DROPS)),
     ...(one?.spray === undefined || SPRAYS.includes(one.spray)
       ? []
       : [
           { field: `injectors.${place}.spray`, message: `The spray of injector ${place + 1} must be one of the list.` },
         ]),
   ]);
-  if (limits?.drops !== undefined || counted)
-    problems.push(...numberProblem('limits.drops', 'The drops allowed', limits?.drops, { least: 0, most: 1e6 }));
-  return problems;
+  if (counted && limits?.drops === undefined)
+    problems.push({ field: 'limits.drops', message: 'Drops were counted; say how many are allowed.' });
+  return [...problems, ...optionalBandProblems('limits.drops', 'The drops allowed', limits?.drops, DROPS)];
 }
 
 function problemsOf({ nominal, injectors, limits }: InjectorSet): FieldProblem[] {
@@ -117,9 +124,7 @@ function problemsOf({ nominal, injectors, limits }: InjectorSet): FieldProblem[]
     ...runProblems(set, 'after'),
     ...findingProblems(set, limits),
     ...bandProblems('limits.flow', 'The flow allowed', limits?.flow, FLOW),
-    ...(limits?.spreadPercent === undefined
-      ? []
-      : numberProblem('limits.spreadPercent', 'The spread allowed', limits.spreadPercent, TOLERANCE_PERCENT)),
+    ...optionalBandProblems('limits.spread', 'The spread allowed', limits?.spread, TOLERANCE_PERCENT),
   ];
 }
 
@@ -162,7 +167,7 @@ function found({ nominal, injectors, limits }: InjectorSet): InjectorSetFound {
     const has: Record<InjectorFault, boolean> = {
       'flows too little': at === 'under',
       'flows too much': at === 'over',
-      drips: one.drops !== undefined && one.drops > (limits.drops ?? 0),
+      drips: one.drops !== undefined && !nothingFails([placeInIfAny(one.drops, limits.drops)]),
       'sprays badly': one.spray !== undefined && one.spray !== 'even',
     };
     const faults = FAULTS.filter((fault) => has[fault]);
@@ -170,8 +175,7 @@ function found({ nominal, injectors, limits }: InjectorSet): InjectorSetFound {
   });
 
   const judged = after ?? before;
-  const most = limits.spreadPercent;
-  const spread = placeInIfAny(judged?.spreadPercent ?? 0, most === undefined ? undefined : { max: most }, 100);
+  const spread = placeInIfAny(judged?.spreadPercent ?? 0, limits.spread, 100);
   const reasons: InjectorSetFound['reasons'] = FAULTS.map((fault) => ({
     fault,
     injectors: each.flatMap((one, place) => (one.faults.includes(fault) ? [place] : [])),

@@ -1,4 +1,4 @@
-import { nothingFails, placeInIfAny, type Judged } from './band';
+import { nothingFails, optionalBandProblems, placeInIfAny, type Band, type Judged } from './band';
 import {
   gridProblems,
   judgeShape,
@@ -18,8 +18,8 @@ export interface Journal {
   /** Distance between the first place and the last, m; needed where taper is limited for a length. */
   length?: number;
   limits?: ShapeLimits & {
-    /** Most taper in m for each m of length: 0.0025 mm in 25.4 mm is 0.0025 / 25.4. */
-    taperPerLength?: number;
+    /** Taper in m for each m of length: 0.0025 mm in 25.4 mm is 0.0025 / 25.4. */
+    taperPerLength?: Band;
   };
 }
 
@@ -34,9 +34,7 @@ function lengthProblems({ length, limits }: Journal): FieldProblem[] {
   const most = limits?.taperPerLength;
   return [
     ...(length === undefined ? [] : numberProblem('length', 'The length between the readings', length, SIZE)),
-    ...(most === undefined
-      ? []
-      : numberProblem('limits.taperPerLength', 'The taper allowed for a length', most, { least: 0, most: 1 })),
+    ...optionalBandProblems('limits.taperPerLength', 'The taper allowed for a length', most, { least: 0, most: 1 }),
     ...(most !== undefined && length === undefined
       ? [{ field: 'length', message: 'A taper for a length needs the length between the readings.' }]
       : []),
@@ -67,7 +65,7 @@ export const judgeJournal = (journal: Journal): Worked<JournalFound> =>
         taperPerLength:
           taperPerLength === null || length === undefined || most === undefined
             ? null
-            : placeInIfAny(taperPerLength, { max: most }, shape.largest / length),
+            : placeInIfAny(taperPerLength, most, shape.largest / length),
       };
       return { ...shape, taperPerLength, judged, passes: nothingFails(Object.values(judged)) };
     },

@@ -13,9 +13,9 @@ const bore: Bore = {
   piston: 81.97 * MM,
   limits: {
     diameter: { min: 82 * MM, max: 82.02 * MM },
-    taper: 0.015 * MM,
-    outOfRound: 0.012 * MM,
-    cylindricity: 0.015 * MM,
+    taper: { max: 0.015 * MM },
+    outOfRound: { max: 0.012 * MM },
+    cylindricity: { max: 0.015 * MM },
     clearance: { min: 0.025 * MM, max: 0.055 * MM },
   },
 };
@@ -36,7 +36,9 @@ describe('a bore', () => {
 
   it('sees a barrel that taper between top and bottom does not', () => {
     const readings = grid([82, 82], [82.02, 82.018], [82, 82]);
-    const found = valueOf(judgeBore({ readings, limits: { taper: 0.01 * MM, cylindricity: 0.01 * MM } }));
+    const found = valueOf(
+      judgeBore({ readings, limits: { taper: { max: 0.01 * MM }, cylindricity: { max: 0.01 * MM } } }),
+    );
     expect([found.worstTaper, found.cylindricity].map(microns)).toEqual([0, 20]);
     expect(found.judged).toMatchObject({
       taper: { at: 'in' },
@@ -49,7 +51,7 @@ describe('a bore', () => {
 
   it('passes a difference that is the limit to the digit', () => {
     const readings = grid([82.015, 82.012], [82, 82]);
-    const limits = { taper: 0.015 * MM, outOfRound: 0.003 * MM };
+    const limits = { taper: { max: 0.015 * MM }, outOfRound: { max: 0.003 * MM } };
     expect(valueOf(judgeBore({ readings, limits })).passes).toBe(true);
   });
 
@@ -92,7 +94,8 @@ describe('a bore', () => {
     fc.assert(
       fc.property(between(0, 0.03), between(0, 0.03), (taper, more) => {
         const passes = (by: number) =>
-          valueOf(judgeBore({ readings: grid([82 + by, 82], [82, 82]), limits: { taper: 0.015 * MM } })).passes;
+          valueOf(judgeBore({ readings: grid([82 + by, 82], [82, 82]), limits: { taper: { max: 0.015 * MM } } }))
+            .passes;
         if (!passes(taper)) expect(passes(taper + more)).toBe(false);
       }),
     );
@@ -134,10 +137,10 @@ const journal: Journal = {
   length: 25.4 * MM,
   limits: {
     diameter: { min: 44.98 * MM, max: 44.992 * MM },
-    taper: 0.005 * MM,
-    outOfRound: 0.005 * MM,
-    cylindricity: 0.005 * MM,
-    taperPerLength: 0.0045 / 25.4,
+    taper: { max: 0.005 * MM },
+    outOfRound: { max: 0.005 * MM },
+    cylindricity: { max: 0.005 * MM },
+    taperPerLength: { max: 0.0045 / 25.4 },
   },
 };
 

@@ -9,9 +9,9 @@ import { between, PSI, relative, valueOf } from '../../factories/measures';
 const kPa = (...values: number[]) => values.map((value) => value * 1000);
 const rules: CompressionRules = {
   band: { min: 1_050_000 },
-  lowestOfHighest: 75,
-  belowAverage: 20,
-  difference: 10 * PSI,
+  lowestOfHighest: { min: 75 },
+  belowAverage: { max: 20 },
+  difference: { max: 10 * PSI },
 };
 const readings = fc.array(between(1e5, 3e6), { minLength: 1, maxLength: 8 });
 
@@ -154,7 +154,7 @@ describe('altitude', () => {
 
   it('shows that shares of absolute readings flatter a weak cylinder', () => {
     const air = 100_000;
-    const share = (list: number[]) => valueOf(judgeCompression(list, { lowestOfHighest: 75 }));
+    const share = (list: number[]) => valueOf(judgeCompression(list, { lowestOfHighest: { min: 75 } }));
     const gauge = [1_200_000, 890_000];
     expect(share(gauge).passes).toBe(false);
     expect(share(gauge.map((one) => one + air)).passes).toBe(true);

@@ -10,7 +10,11 @@ const gap = (direction: Direction, blade: number, span?: number): EdgeGap => ({
   gap: blade * MM,
   ...(span === undefined ? {} : { span: span * MM }),
 });
-const limits: FlatnessLimits = { along: 0.05 * MM, across: 0.03 * MM, diagonal: 0.05 * MM };
+const limits: FlatnessLimits = {
+  along: { max: 0.05 * MM },
+  across: { max: 0.03 * MM },
+  diagonal: { max: 0.05 * MM },
+};
 const local = { max: 0.05 * MM, over: 150 * MM };
 
 describe('straightedge and feeler gauge', () => {

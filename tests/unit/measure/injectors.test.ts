@@ -7,7 +7,7 @@ import { sweep } from '../../factories/hostileNumbers';
 import { between, CC_PER_MINUTE, relative, valueOf } from '../../factories/measures';
 
 const cc = (flow: number) => flow * CC_PER_MINUTE;
-const limits = { flow: valueOf(bandAround(cc(250), 3)), spreadPercent: 2, drops: 1 };
+const limits = { flow: valueOf(bandAround(cc(250), 3)), spread: { max: 2 }, drops: { max: 1 } };
 const set = (injectors: Injector[], more: Partial<InjectorSet> = {}): InjectorSet => ({
   nominal: cc(250),
   injectors,
@@ -108,7 +108,7 @@ describe('a set of injectors', () => {
       problems: [{ field: 'injectors', message: 'The set needs a flow for each injector, before or after.' }],
     });
     expect(judgeInjectors(set([{ after: 1e-6, drops: 2 }], { limits: { flow: { min: 0 } } }))).toMatchObject({
-      problems: [{ field: 'limits.drops', message: 'The drops allowed must be a number.' }],
+      problems: [{ field: 'limits.drops', message: 'Drops were counted; say how many are allowed.' }],
     });
     const spray = 'fine' as unknown as 'even';
     expect(judgeInjectors(set([{ after: 1e-6, spray }]))).toMatchObject({
