@@ -1,6 +1,6 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import type { SKILLS, System } from '@/domain/procedure/schema';
-import type { RevisionState } from '@/domain/revision/types';
+import type { RevisionState, TakenBackFrom } from '@/domain/revision/types';
 
 /** What lists show of a revision, so that they need not read its text. */
 export interface RevisionHead {
@@ -49,6 +49,8 @@ export class Revision extends Model<InferAttributes<Revision>, InferCreationAttr
   /** The change, compared with its parent, needs two editors. Kept right by whoever saves the text. */
   declare critical: CreationOptional<boolean>;
   declare criticalReasons: CreationOptional<string[]>;
+  /** What of earlier revisions the text sets back, latest first. Kept right like `critical`. */
+  declare takesBack: CreationOptional<TakenBackFrom[]>;
   /** Rises with every change of text, reason, base or state; a writer names the one it read. */
   declare version: CreationOptional<number>;
   /** True from the first submission on; such a revision is never deleted. */

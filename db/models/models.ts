@@ -88,6 +88,7 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
         reason: { ...text, defaultValue: '' },
         critical: flag,
         criticalReasons: { ...json, defaultValue: [] },
+        takesBack: { ...json, defaultValue: [] },
         version: { ...integer, defaultValue: 1 },
         everProposed: flag,
         proposedAt: optionalText,

@@ -18,6 +18,7 @@ export const proposal = (change: Partial<Proposal> = {}): Proposal => ({
   reason: 'It weeps at ten.',
   critical: true,
   criticalReasons: ['a torque changes: Cover bolt'],
+  takesBack: [],
   agreementsNeeded: 2,
   agreements: 0,
   createdAt: '2026-11-27T09:00:00.000Z',

@@ -1,7 +1,7 @@
 import { dayOf } from '@/components/ui/day';
 import { Cell, Row, Table, type Column } from '@/components/ui/Table';
 import type { DeskItem, ProposalSummary } from '@/domain/api/schemas';
-import { daysSince, severityWords } from '@/domain/review/desk';
+import { daysSince, severityWords, takenBackWords } from '@/domain/review/desk';
 import { nextLetter } from '@/domain/revision/letters';
 
 const NEXT_WORDS: Record<DeskItem['next'], string> = {
@@ -56,6 +56,11 @@ export function DeskTable({
             </Cell>
             <Cell label="What it does" className="sm:w-[23%] lg:w-[26%]">
               <span className={item.critical ? 'font-semibold' : undefined}>{severityWords(item)}</span>
+              {takenBackWords(item.takesBack, 1).map((sentence) => (
+                <span key={sentence} className="taken-back">
+                  {sentence}
+                </span>
+              ))}
             </Cell>
             <Cell label="Agreed">
               {item.agreements} of {item.agreementsNeeded}

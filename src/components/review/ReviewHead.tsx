@@ -5,6 +5,7 @@ import { dayOf } from '@/components/ui/day';
 import { Notice } from '@/components/ui/Notice';
 import { Status } from '@/components/ui/Status';
 import type { Proposal } from '@/domain/api/schemas';
+import { takenBackWords } from '@/domain/review/desk';
 import { Acts, isReviewer } from './Acts';
 import type { Trouble } from './useReviewActs';
 import { headingOf, needed, standingWords, type ReviewAct } from './words';
@@ -87,6 +88,7 @@ export function ReviewHead({
 }: ReviewHeadProps) {
   const standing = standingWords(proposal, me);
   const reviewer = isReviewer(proposal, me);
+  const takesBack = takenBackWords(proposal.takesBack, 4, proposal.publishedLetter !== null);
   const refused = proposal.state === 'proposed' && !reviewer && proposal.author.id !== me;
   return (
     <header className="review-head">
@@ -96,6 +98,15 @@ export function ReviewHead({
       <div className="review-title">
         <h1 className="text-title tracking-[-0.01em]">{headingOf(proposal, letter)}</h1>
         <ByLine proposal={proposal} me={me} />
+        {takesBack.length > 0 && (
+          <Notice className="mt-3">
+            {takesBack.map((sentence) => (
+              <p key={sentence} className="font-semibold">
+                {sentence}
+              </p>
+            ))}
+          </Notice>
+        )}
       </div>
       <div className="min-w-0">
         <p className="review-why">{proposal.reason || 'No reason given yet.'}</p>

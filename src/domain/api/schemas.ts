@@ -218,6 +218,9 @@ export const ProposalSummary = z.object({
   reason: z.string(),
   critical: z.boolean(),
   criticalReasons: z.array(z.string()),
+  takesBack: z
+    .array(z.object({ revision: RevisionLetter, what: z.array(z.string()) }))
+    .describe('What earlier revisions changed and this sets back to what it was, latest revision first'),
   agreementsNeeded: z.number().int(),
   agreements: z.number().int(),
   createdAt: z.string(),

@@ -1,3 +1,4 @@
+import type { TakenBackFrom } from '../revision/types';
 import { agreementsNeeded } from './rules';
 
 /** What the review desk needs of a proposal to put it in its place. */
@@ -34,6 +35,23 @@ export function severityWords({ base, criticalReasons }: Pick<DeskItem, 'base' |
   const [first, ...others] = criticalReasons;
   if (!first) return base === null ? 'A new sheet.' : 'An ordinary change to a sheet in use.';
   return `Critical, because ${first}${others.length > 0 ? `, and ${others.length} more` : ''}.`;
+}
+
+/**
+ * What a proposal undoes of earlier revisions, a sentence for each: "Takes back what revision C changed: Cover bolt
+ * torque, 10 to 12 N·m; step “Wait”, added; and 2 more." Whoever proposes it may not know.
+ *
+ * @param most how many are named of each revision before the rest is counted
+ * @param done true once it was published: it took them back
+ */
+export function takenBackWords(takesBack: readonly TakenBackFrom[], most: number, done = false): string[] {
+  return takesBack.map(({ revision, what }) => {
+    // A rest of one is named: counting it would be no shorter.
+    const named = what.length === most + 1 ? what : what.slice(0, most);
+    const rest = what.length - named.length;
+    const told = [...named, ...(rest > 0 ? [`and ${rest} more`] : [])].join('; ');
+    return `${done ? 'Took' : 'Takes'} back what revision ${revision} changed: ${told}.`;
+  });
 }
 
 const DAY = 86_400_000;

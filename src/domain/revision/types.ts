@@ -62,6 +62,14 @@ export interface ClampChange {
   mixUps: string[];
 }
 
+/** What one earlier revision changed and a proposal sets back, each in words. */
+export interface TakenBackFrom {
+  /** Its letter. */
+  revision: string;
+  /** "Cover bolt torque, 10 to 12 N·m" */
+  what: string[];
+}
+
 export interface Comparison {
   values: ValueChange[];
   clamp: ClampChange[];

@@ -1,11 +1,11 @@
 import type { RevisionHead } from '@db/models/book';
-import type { Parsed, Procedure, RenderedProcedure } from '@/domain/procedure/types';
+import type { Parsed, RenderedProcedure } from '@/domain/procedure/types';
 import { compareProcedures } from '@/domain/revision/compare';
-import { acceptedProcedure } from '../book/compare';
+import type { TakenBackFrom } from '@/domain/revision/types';
 import { headOf } from '../book/head';
 import { hashOf, parsedText } from '../book/parsed';
-import { app } from '../context';
 import { invalid } from '../refusal';
+import { ancestryOf, takenBack } from './ancestry';
 
 /** What a revision row keeps of a text. */
 export interface TextColumns {
@@ -14,6 +14,7 @@ export interface TextColumns {
   head: RevisionHead | null;
   critical: boolean;
   criticalReasons: string[];
+  takesBack: TakenBackFrom[];
 }
 
 export interface Weighed extends TextColumns {
@@ -22,36 +23,32 @@ export interface Weighed extends TextColumns {
   identical: boolean;
 }
 
-/** The text that a draft stands on, as a procedure; null for a new procedure. */
-async function baseProcedure(parentId: string | null): Promise<Procedure | null> {
-  if (parentId === null) return null;
-  const { db } = await app();
-  const [base] = await db.read<{ source: string }>('SELECT source FROM revisions WHERE id = :parentId', { parentId });
-  return base ? acceptedProcedure(base.source) : null;
-}
-
 /** Reads a text, as it was typed, and weighs it against its base. A text that cannot be read is weighed as nothing yet. */
 export async function weigh(source: string, parentId: string | null): Promise<Weighed> {
   const parsed = await parsedText(source);
   const plain = { source, hash: hashOf(source), parsed };
-  if (!parsed.ok) return { ...plain, head: null, critical: false, criticalReasons: [], identical: false };
-  const { criticalReasons, identical } = compareProcedures(await baseProcedure(parentId), parsed.procedure);
+  if (!parsed.ok)
+    return { ...plain, head: null, critical: false, criticalReasons: [], takesBack: [], identical: false };
+  const ancestry = await ancestryOf(parentId);
+  const { criticalReasons, identical } = compareProcedures(ancestry[0]?.procedure ?? null, parsed.procedure);
   return {
     ...plain,
     head: headOf(parsed.rendered),
     critical: criticalReasons.length > 0,
     criticalReasons,
+    takesBack: takenBack(ancestry, parsed.procedure),
     identical: identical && parentId !== null,
   };
 }
 
 /** The columns of a weighed text. */
-export const columnsOf = ({ source, hash, head, critical, criticalReasons }: Weighed): TextColumns => ({
+export const columnsOf = ({ source, hash, head, critical, criticalReasons, takesBack }: Weighed): TextColumns => ({
   source,
   hash,
   head,
   critical,
   criticalReasons,
+  takesBack,
 });
 
 /** Refuses 422, with line and column, a text that cannot be read. */

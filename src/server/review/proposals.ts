@@ -1,7 +1,7 @@
 import type { RevisionHead } from '@db/models/book';
 import type { Book } from '@/domain/people/may';
 import type { ProposalFacts } from '@/domain/review/rules';
-import type { RevisionState } from '@/domain/revision/types';
+import type { RevisionState, TakenBackFrom } from '@/domain/revision/types';
 import { AUTHOR_COLUMN, BOOK_COLUMNS, bookOf, type BookRow } from '../book/columns';
 import { app } from '../context';
 
@@ -25,6 +25,7 @@ interface Row extends BookRow {
   author: string;
   reason: string;
   criticalReasons: string;
+  takesBack: string;
   everProposed: 0 | 1;
   createdAt: string;
   updatedAt: string;
@@ -40,9 +41,10 @@ export interface GivenAgreement {
 }
 
 /** A revision on its way, with the facts that the rules of review ask for. */
-export interface Loaded extends Omit<Row, 'head' | 'criticalReasons' | 'everProposed'> {
+export interface Loaded extends Omit<Row, 'head' | 'criticalReasons' | 'takesBack' | 'everProposed'> {
   head: RevisionHead | null;
   criticalReasons: string[];
+  takesBack: TakenBackFrom[];
   given: GivenAgreement[];
   facts: ProposalFacts;
 }
@@ -50,7 +52,7 @@ export interface Loaded extends Omit<Row, 'head' | 'criticalReasons' | 'everProp
 const SELECT = `SELECT r.id, p.number, p.id AS procedureId, p.currentRevisionId, ${BOOK_COLUMNS}, r.letter, r.state,
     r.version, r.source, r.hash, r.head, r.parentId, b.hash AS parentHash, b.letter AS base,
     json_extract(b.head, '$.title') AS parentTitle, c.letter AS current, r.authorId, ${AUTHOR_COLUMN}, r.reason,
-    r.criticalReasons, r.everProposed, r.createdAt, r.updatedAt, r.proposedAt
+    r.criticalReasons, r.takesBack, r.everProposed, r.createdAt, r.updatedAt, r.proposedAt
   FROM revisions r JOIN procedures p ON p.id = r.procedureId
   LEFT JOIN revisions b ON b.id = r.parentId
   LEFT JOIN revisions c ON c.id = p.currentRevisionId`;
@@ -102,7 +104,7 @@ function answerable(book: Book, holders: Holder[]) {
 }
 
 function loaded(
-  { head, criticalReasons, everProposed, ...row }: Row,
+  { head, criticalReasons, takesBack, everProposed, ...row }: Row,
   given: GivenAgreement[],
   holders: Holder[],
 ): Loaded {
@@ -112,6 +114,7 @@ function loaded(
     ...row,
     head: head === null ? null : (JSON.parse(head) as RevisionHead),
     criticalReasons: reasons,
+    takesBack: JSON.parse(takesBack) as TakenBackFrom[],
     given,
     facts: {
       book,

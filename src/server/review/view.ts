@@ -14,7 +14,7 @@ const titleOf = ({ head, parentTitle, source }: Loaded): string =>
 const OPEN = new Set(['draft', 'proposed', 'returned']);
 
 export function summaryOf(proposal: Loaded): ProposalSummary {
-  const { facts, criticalReasons } = proposal;
+  const { facts, criticalReasons, takesBack } = proposal;
   return {
     id: proposal.id,
     number: proposal.number,
@@ -28,6 +28,7 @@ export function summaryOf(proposal: Loaded): ProposalSummary {
     reason: proposal.reason,
     critical: criticalReasons.length > 0,
     criticalReasons,
+    takesBack,
     agreementsNeeded: agreementsNeeded(criticalReasons),
     agreements: tally(facts).given,
     createdAt: proposal.createdAt,

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { deskCount, type DeskItem, deskOrder, deskReason, severity } from '@/domain/review/desk';
+import { deskCount, type DeskItem, deskOrder, deskReason, severity, takenBackWords } from '@/domain/review/desk';
 
 const item = (id: string, change: Partial<DeskItem> = {}): DeskItem => ({
   id,
@@ -70,5 +70,25 @@ describe('how much of a desk is the reader’s', () => {
     expect(deskCount([one('publish')])).toBe('1 proposal waits for you.');
     expect(deskCount([one('wait')])).toBe('Nothing here waits for you; 1 proposal waits for others.');
     expect(deskCount([])).toBe('');
+  });
+});
+
+describe('what a proposal takes back', () => {
+  const back = (...what: string[]) => [{ revision: 'C', what }];
+
+  it('is told in a sentence for each revision', () => {
+    expect(takenBackWords([...back('Cover bolt torque, 10 to 12 N·m'), { revision: 'B', what: ['Gap'] }], 2)).toEqual([
+      'Takes back what revision C changed: Cover bolt torque, 10 to 12 N·m.',
+      'Takes back what revision B changed: Gap.',
+    ]);
+    expect(takenBackWords(back('Gap'), 2, true)).toEqual(['Took back what revision C changed: Gap.']);
+    expect(takenBackWords([], 2)).toEqual([]);
+  });
+
+  it('counts what does not fit, and never a rest of one', () => {
+    expect(takenBackWords(back('a', 'b', 'c'), 2)).toEqual(['Takes back what revision C changed: a; b; c.']);
+    expect(takenBackWords(back('a', 'b', 'c', 'd'), 2)).toEqual([
+      'Takes back what revision C changed: a; b; and 2 more.',
+    ]);
   });
 });
