@@ -18,7 +18,7 @@ export interface Operation<
   method: Method;
   /** Below `/api/v1`, parameters in braces: `/proposals/{id}`. */
   path: string;
-  area: 'You' | 'Book' | 'Proposals' | 'Review' | 'Search' | 'Measures';
+  area: 'You' | 'Book' | 'Proposals' | 'Review' | 'Search' | 'Measures' | 'Shop';
   summary: string;
   description?: string;
   params: Params;

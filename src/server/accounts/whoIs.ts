@@ -2,6 +2,7 @@ import type { Me } from '@/domain/api/schemas';
 import { ROLES, type Actor, type Membership } from '@/domain/people/may';
 import { app } from '../context';
 import type { SignedIn } from './checkSignIn';
+import { chosenShop } from './currentShop';
 
 /** Somebody who is not signed in. No rule lets them do anything. */
 export const NOBODY: Actor = { personId: '', memberships: [] };
@@ -34,9 +35,13 @@ export async function whoIs({ personId, tokenVersion }: SignedIn): Promise<{ act
   const roles = (JSON.parse(row.roles) as Role[]).sort(
     (a, b) => a.name.localeCompare(b.name) || ROLES.indexOf(a.role) - ROLES.indexOf(b.role),
   );
-  const shops = roles.filter((role) => role.in === 'shop');
-  // Somebody who left the shop they last worked in works in another one of theirs.
-  const shop = shops.find((role) => role.shopId === row.currentShopId) ?? shops[0];
+  const shops = roles.flatMap(({ in: scope, shopId, name }) =>
+    scope === 'shop' && shopId ? [{ id: shopId, name }] : [],
+  );
+  const current = chosenShop(
+    shops.map(({ id }) => id),
+    row.currentShopId,
+  );
   return {
     actor: { personId: row.id, memberships: roles.map(membership) },
     me: {
@@ -44,7 +49,7 @@ export async function whoIs({ personId, tokenVersion }: SignedIn): Promise<{ act
       name: row.name,
       email: row.email,
       units: row.units,
-      shop: shop?.shopId ? { id: shop.shopId, name: shop.name } : null,
+      shop: shops.find(({ id }) => id === current) ?? null,
       roles,
     },
   };

@@ -9,6 +9,7 @@ import { workOut, type WorkedOut } from '@/domain/worksheets/work';
 import type { Worksheet } from '@/domain/worksheets/worksheet';
 import { fieldErrors } from '../http/fieldErrors';
 import { invalid, notFound } from '../refusal';
+import { shopRules } from './rules';
 
 const summaryOf = ({ name, title, summary }: Worksheet) => ({ name, title, summary });
 
@@ -34,19 +35,19 @@ export function describeWorksheet(name: string) {
 const withoutBlanks = (value: unknown): never => JSON.parse(JSON.stringify(value)) as never;
 
 /**
- * Works out a worksheet and keeps nothing. Anybody signed in may.
+ * Works out a worksheet by the rules of thumb of the actor's shop, and keeps nothing. Anybody signed in may.
  *
  * @throws Refusal 404 for an unknown worksheet; 422 with the path of each input that cannot be used
  */
-export function workWorksheet(
-  _actor: Actor,
+export async function workWorksheet(
+  actor: Actor,
   name: string,
   body: RawInputs,
-): Omit<WorkedOut, 'outcome'> & { outcome: Outcome } {
+): Promise<Omit<WorkedOut, 'outcome'> & { outcome: Outcome }> {
   const worksheet = found(name);
   const shape = inputSchema(worksheet.fields).safeParse(body);
   if (!shape.success) throw invalid('Some inputs cannot be used.', fieldErrors(shape.error));
-  const { outcome, understood } = workOut(worksheet, body);
+  const { outcome, understood } = workOut(worksheet, body, { rules: await shopRules(actor, worksheet) });
   if (!outcome.ok)
     throw invalid(
       'Some inputs cannot be used.',

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { toBase } from '@/domain/measure/convert';
 import { readInputs } from '@/domain/worksheets/readInputs';
 import { WORKSHEETS } from '@/domain/worksheets/registry';
-import { readRule, rulesFor, rulesOf, type RuleOfThumb } from '@/domain/worksheets/shopRules';
+import { readRule, rulesOf, ruleText, ruleUnit, ruleWords, type RuleOfThumb } from '@/domain/worksheets/shopRules';
 import type { Worksheet } from '@/domain/worksheets/worksheet';
 import { between, relative } from '../../factories/measures';
 import { FILLED, SAMPLE } from './sampleFields';
@@ -102,17 +102,29 @@ describe('a value for a rule', () => {
   });
 });
 
-describe('what a shop has set', () => {
-  it('is handed to a worksheet by its fields', () => {
-    const set = { 'sample.gap': 0.08, 'sample.factor': 0.15, 'other.gap': 9, 'sample.depth': 9 };
-    expect(rulesFor(SHEET, set)).toEqual({ gap: 0.08, factor: 0.15 });
-    expect(rulesFor(SHEET, {})).toEqual({});
+describe('a value of a rule', () => {
+  it('is read by people with its unit, in the units they use', () => {
+    expect(ruleWords(rule('gap'), 0.08, 'metric')).toBe('0.08 mm');
+    expect(ruleWords(rule('gap'), 0.08, 'inch')).toBe('0.0031 in');
+    expect(ruleWords(rule('deviation'), 3, 'inch')).toBe('3 %');
+    expect(ruleWords(rule('factor'), 0.2, 'metric')).toBe('0.2');
+    expect(ruleWords({ unit: null, after: 'kg/m³' }, 745, 'inch')).toBe('745 kg/m³');
   });
 
-  it('is passed over where it no longer fits its field', () => {
-    expect(rulesFor(SHEET, { 'sample.gap': 0, 'sample.deviation': 51, 'sample.factor': 0.15 })).toEqual({
-      factor: 0.15,
-    });
-    expect(rulesFor(SHEET, Object.create({ 'sample.gap': 0.08 }) as Record<string, number>)).toEqual({});
+  it('stands in its box in the unit of the box, fine enough to come back', () => {
+    expect(ruleText(rule('gap'), 0.08, 'metric')).toBe('0.08');
+    expect(ruleText(rule('gap'), 0.08, 'inch')).toBe('0.00315');
+    expect(ruleText(rule('gap'), null, 'inch')).toBe('');
+    expect([ruleUnit(rule('gap'), 'inch'), ruleUnit(rule('gap'), 'metric'), ruleUnit(rule('factor'), 'inch')]).toEqual([
+      'in',
+      'mm',
+      undefined,
+    ]);
+    fc.assert(
+      fc.property(between(1e-3, 10), fc.constantFrom('metric' as const, 'inch' as const), (gap, units) => {
+        const read = readRule(rule('gap'), ruleText(rule('gap'), gap, units), units);
+        expect(read.ok && relative(read.value, gap)).toBeLessThan(1e-3);
+      }),
+    );
   });
 });

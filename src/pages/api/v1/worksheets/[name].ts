@@ -5,17 +5,17 @@ import { describeWorksheet, workWorksheet as work } from '@/server/measure/works
 
 export const { GET, POST, ALL } = route({
   GET: endpoint(readWorksheet, ({ params }) => Promise.resolve({ body: describeWorksheet(params.name) })),
-  POST: endpoint(workWorksheet, ({ actor, params, body, context }) => {
-    const { outcome, understood } = work(actor, params.name, body);
+  POST: endpoint(workWorksheet, async ({ actor, params, body, context }) => {
+    const { outcome, understood } = await work(actor, params.name, body);
     const { verdict, reasons, results } = outcome;
     const units = context.locals.person?.units ?? 'metric';
-    return Promise.resolve({
+    return {
       body: {
         verdict,
         reasons: reasons.map((reason) => reason[units]),
         results: results.map(({ main: _, ...result }) => result),
         understood,
       },
-    });
+    };
   }),
 });
