@@ -1,5 +1,6 @@
 import type { Nodes, RootContent } from 'mdast';
 import { limitKeysIn } from './bindings';
+import { checkOrder } from '../measure/order/check';
 import type { DraftBody } from './body';
 import { clampChecks } from './clamp';
 import { coarseTool } from './gauge';
@@ -138,9 +139,21 @@ const coarseTools: Rule = ({ frontmatter, placeOf }) =>
     return [problem(place, `Limit ${i + 1} (${limit.name}): ${why}`, `limits.${i}.resolution`)];
   });
 
+/** An order that leaves the part to tip: not from the middle outward, or round a circle instead of across it. */
+const oddOrders: Rule = ({ frontmatter, placeOf }) =>
+  frontmatter.torques.flatMap(({ name, positions, order }, i) => {
+    if (!positions || !order) return [];
+    const checked = checkOrder(positions, order);
+    if (!checked.ok) return [];
+    return checked.value.findings.map(({ message }) =>
+      problem(placeOf(['torques', i, 'order']), `Torque ${i + 1} (${name}): ${message}`, `torques.${i}.order`),
+    );
+  });
+
 const RULES: readonly Rule[] = [
   implausibleTorques,
   coarseTools,
+  oddOrders,
   unused,
   cautionsNowhere,
   withoutSource,

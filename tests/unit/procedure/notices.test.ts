@@ -25,6 +25,26 @@ describe('notices', () => {
     expect(notices(source)).toEqual([{ ...placeIn(source, at), message, path }]);
   });
 
+  // What the rules go by stands in tests/unit/procedure/clamp.test.ts and tests/unit/measure.
+  it('says that a torque is beyond its fastener, and which unit it may have been in', () => {
+    const source = changed('nm: 10\n', 'nm: 89\n');
+    const [notice, ...more] = notices(source);
+    expect(more).toEqual([]);
+    expect(notice).toMatchObject({ ...placeIn(source, '89\n'), path: 'torques.0.nm' });
+    expect(notice?.message).toMatch(/^Torque 1 \(Cover bolt\): The final torque clamps to \d+ % of proof load/);
+    expect(notice?.message).toContain('the same figure in lbf·in would be sensible');
+  });
+
+  it('says that an order of a row starts at its end', () => {
+    const row = changed('[[0, 0], [200, 0], [200, 120], [0, 120]]', '[[0, 0], [60, 0], [120, 0], [180, 0]]');
+    const source = row.replace('order: [1, 3, 2, 4]', 'order: [1, 2, 3, 4]');
+    const [notice, ...more] = notices(source);
+    expect(more).toEqual([]);
+    expect(notice).toMatchObject({ ...placeIn(source, '[1, 2, 3, 4]'), path: 'torques.0.order' });
+    expect(notice?.message).toMatch(/^Torque 1 \(Cover bolt\): /);
+    expect(notices(row.replace('order: [1, 3, 2, 4]', 'order: [2, 3, 1, 4]'))).toEqual([]);
+  });
+
   it('names a step without words', () => {
     const source = changed('Wait until the sealant has cured, <Timer of="silicone" stage="cure" />.\n\n', '')
       .replace('<Worksheet kind="readings" of="weep gap" />\n', '')
