@@ -1,4 +1,4 @@
-import { chromium } from '@playwright/test';
+import { chromium, type Page } from '@playwright/test';
 import lighthouse from 'lighthouse';
 import { gzipSync } from 'node:zlib';
 
@@ -12,12 +12,17 @@ const cookies = (address: string, header: string) =>
     url: address,
   }));
 
-/** Bytes of script a page loads, each file compressed with gzip, and the number of files. */
-export async function scriptWeight(address: string, path: string, cookie: string): Promise<number> {
+/** A page of a signed-in browser of its own. */
+export async function openPage(address: string, cookie: string): Promise<{ page: Page; close: () => Promise<void> }> {
   const browser = await chromium.launch({ executablePath, args: ARGS });
   const context = await browser.newContext();
   await context.addCookies(cookies(address, cookie));
-  const page = await context.newPage();
+  return { page: await context.newPage(), close: () => browser.close() };
+}
+
+/** Bytes of script a page loads, each file compressed with gzip, and the number of files. */
+export async function scriptWeight(address: string, path: string, cookie: string): Promise<number> {
+  const { page, close } = await openPage(address, cookie);
   const bodies: Promise<Buffer>[] = [];
   page.on('response', (response) => {
     if (response.request().resourceType() === 'script') bodies.push(response.body());
@@ -25,7 +30,7 @@ export async function scriptWeight(address: string, path: string, cookie: string
   await page.goto(address + path, { waitUntil: 'networkidle' });
   const inline = await page.$$eval('script:not([src])', (all) => all.map((s) => s.textContent ?? ''));
   const files = await Promise.all(bodies);
-  await browser.close();
+  await close();
   return [...files, ...inline.map((text) => Buffer.from(text))].reduce((sum, file) => sum + gzipSync(file).length, 0);
 }
 
@@ -35,10 +40,7 @@ export async function keystrokes(
   cookie: string,
   queries: string[],
 ): Promise<{ p50: number; p95: number }> {
-  const browser = await chromium.launch({ executablePath, args: ARGS });
-  const context = await browser.newContext();
-  await context.addCookies(cookies(address, cookie));
-  const page = await context.newPage();
+  const { page, close } = await openPage(address, cookie);
   await page.goto(address, { waitUntil: 'load' });
   await page.waitForSelector('[data-index="ready"]', { timeout: 60_000 });
   await page.evaluate(() => {
@@ -68,7 +70,7 @@ export async function keystrokes(
     await page.waitForTimeout(400);
   }
   const spans = await page.evaluate(() => (window as unknown as { spans: number[] }).spans);
-  await browser.close();
+  await close();
   const pressed = queries.join('').length;
   if (spans.length < pressed * 0.6) throw new Error(`Only ${spans.length} of ${pressed} keystrokes were answered.`);
   const at = (share: number) => spans.sort((a, b) => a - b)[Math.floor(spans.length * share)] ?? NaN;

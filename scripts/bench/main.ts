@@ -10,6 +10,7 @@ import { keystrokes, scores, scriptWeight } from './browser';
 import { writeBook } from './book';
 import { load, references } from './load';
 import { signIn, start } from './product';
+import { calculatorTyping, slowestWorksheet } from './worksheets';
 
 /**
  * Measures what README.md claims, on this machine, in one run: ratios to plain servers that send the same bytes,
@@ -96,6 +97,11 @@ async function demonstrationBook(): Promise<void> {
     90,
     'kB',
   );
+  const slowest = slowestWorksheet();
+  atMost(`slowest worksheet (${slowest.name}), inputs read and worked out`, slowest.ms, 1, 'ms', 2);
+  const typing = await calculatorTyping(product.address, cookie, 'injector-set');
+  atMost('calculator: key press to the painted answer, p95', typing.p95, 33, 'ms');
+  atMost(`calculator: late frames of ${typing.frames} while typing`, (100 * typing.late) / typing.frames, 0, '%');
   for (const [name, path] of [
     ['sheet', '/procedures/P-0142'],
     ['look-up', '/'],
