@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { clampCheck, torqueFor } from '@/domain/measure/clampLoad';
 import { convert } from '@/domain/measure/convert';
 import { NUT_FACTORS } from '@/domain/measure/nutFactor';
-import { valueOf } from '../unit/measure/sweep';
+import { valueOf } from '../factories/measures';
 
 const LBF = 4.448222; // NIST SP 811, quoted
 const inLbfIn = (nm: number) => {

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { proofLoad, proofStress, stressArea } from '@/domain/measure/fasteners';
 import { COARSE_PITCH, readThread } from '@/domain/measure/threads';
 import type { ScrewThread } from '@/domain/measure/threads';
-import { valueOf } from '../unit/measure/sweep';
+import { valueOf } from '../factories/measures';
 
 const screw = (text: string, pitch?: number): ScrewThread => {
   const thread = valueOf(readThread(text, pitch));

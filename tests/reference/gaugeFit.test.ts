@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { gaugeFit, gaugeFor } from '@/domain/measure/gaugeFit';
-import { valueOf } from '../unit/measure/sweep';
+import { valueOf } from '../factories/measures';
 
 const MM = 1e-3;
 

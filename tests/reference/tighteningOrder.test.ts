@@ -4,7 +4,7 @@ import { makeOrder } from '@/domain/measure/order/make';
 import { PASS_SHARES, passTorques } from '@/domain/measure/order/passes';
 import type { Position } from '@/domain/measure/order/positions';
 import { convert } from '@/domain/measure/convert';
-import { valueOf } from '../unit/measure/sweep';
+import { valueOf } from '../factories/measures';
 
 /** Bolts at the hours of a clock of `n` hours, bolt 1 at the top, numbered clockwise. */
 const clock = (n: number): Position[] =>

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { convert } from '@/domain/measure/convert';
 import { mixUpOfSize, mixUpsOfChange } from '@/domain/measure/unitMixUp';
-import { valueOf } from '../unit/measure/sweep';
+import { valueOf } from '../factories/measures';
 
 /** Factors of NIST SP 811, appendix B.8 (quoted): lbf·ft 1.355 818, lbf·in 0.112 984 8, kgf·m 9.806 65 N·m. */
 describe('what a figure becomes when its unit is taken for another', () => {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { checkVin } from '@/domain/measure/vin';
-import { valueOf } from '../unit/measure/sweep';
+import { valueOf } from '../factories/measures';
 
 describe('check digit of 49 CFR 565.15(c)', () => {
   it.each([
@@ -17,5 +17,10 @@ describe('check digit of 49 CFR 565.15(c)', () => {
     expect(check.verdict).toBe(verdict);
     expect(check.expected).toBe(expected);
     expect(check.warnings.length > 0).toBe(verdict !== 'fits');
+  });
+
+  it('sums as the NHTSA document prints it: 314, which is 28·11 + 6 (seen)', () => {
+    // Its table V of decimal rests is not used: it prints 7/11 as .634.
+    expect(valueOf(checkVin('1J9RP1A36A1644345')).sum).toBe(314);
   });
 });

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { viscosityGrades } from '@/domain/measure/viscosityGrade';
-import { valueOf } from '../unit/measure/sweep';
+import { valueOf } from '../factories/measures';
 
 const at100 = (mm2: number) => valueOf(viscosityGrades(mm2 * 1e-6));
 const grades = (mm2: number) => at100(mm2).fits.map(({ grade }) => grade);

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { convert, type Unit } from '@/domain/measure/convert';
 import { torqueAtBolt, wrenchSetting } from '@/domain/measure/wrenchAdapter';
-import { valueOf } from '../unit/measure/sweep';
+import { valueOf } from '../factories/measures';
 
 const INCH = 0.0254;
 const to = (value: number, from: Unit, unit: Unit) => {

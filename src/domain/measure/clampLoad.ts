@@ -1,7 +1,7 @@
-import { proofLoad } from './fasteners';
+import { type ProofLoad, proofLoad } from './fasteners';
 import { formatNumber } from './format';
 import { type Condition, NUT_FACTORS, type NutFactor } from './nutFactor';
-import { NO_CLAMP_IN_PIPE, readThread } from './threads';
+import { NO_CLAMP_IN_PIPE, readThread, type ThreadRead } from './threads';
 import { type FieldProblem, type Worked, numberProblem, refused, work } from './worked';
 
 const positive = (field: string, called: string, value: unknown) => numberProblem(field, called, value, { above: 0 });
@@ -49,11 +49,13 @@ export interface ClampCheck {
   why: string;
   /** What the numbers are about: the whole of the tightening, or only the torque before the angles. */
   about: 'final torque' | 'snug torque';
+  /** As it was read. */
+  thread: ThreadRead;
   nutFactor: NutFactor | null;
   /** In N. Null for a pipe thread. */
   clampLoad: number | null;
-  /** In N. Null where the class is not known. */
-  proofLoad: number | null;
+  /** Proof load in N with the stress and area it comes from. Null where the class is not known. */
+  proof: ProofLoad | null;
   /** Clamp load as a share of proof load: 0.75 is 75 %. */
   share: number | null;
 }
@@ -105,9 +107,10 @@ export function clampCheck(input: ClampInput, low = LOW_SHARE): Worked<ClampChec
   const nothing = {
     verdict: 'unknown',
     about,
+    thread: thread.value,
     nutFactor: null,
     clampLoad: null,
-    proofLoad: null,
+    proof: null,
     share: null,
   } as const;
   if (thread.value.kind === 'pipe') return work([], 'nm', () => ({ ...nothing, why: NO_CLAMP_IN_PIPE }));
@@ -124,9 +127,10 @@ export function clampCheck(input: ClampInput, low = LOW_SHARE): Worked<ClampChec
   const share = clampLoad / proof.value.load;
   return work([], 'nm', () => ({
     about,
+    thread: thread.value,
     nutFactor,
     clampLoad,
-    proofLoad: proof.value.load,
+    proof: proof.value,
     share,
     ...judge(share, about, low),
   }));

@@ -21,6 +21,8 @@ export interface VinCheck {
   verdict: 'fits' | 'does not fit' | 'not checked';
   /** The check digit that the other sixteen ask for; null where they cannot be reckoned with. */
   expected: string | null;
+  /** Sum of value times weight over all places, of which `expected` is the rest after division by 11; null like it. */
+  sum: number | null;
   /** Whole sentences: why to look again. Empty where the digit fits. Never a reason to refuse the number. */
   warnings: string[];
 }
@@ -61,15 +63,16 @@ export function checkVin(text: string): Worked<VinCheck> {
   if (text.length > 40) return because('The VIN is far too long; it has 17 characters.');
 
   const warnings = misfits(vin);
-  if (warnings.length > 0) return worked({ vin, verdict: 'not checked', expected: null, warnings });
+  if (warnings.length > 0) return worked({ vin, verdict: 'not checked', expected: null, sum: null, warnings });
   const sum = WEIGHTS.reduce((total, weight, i) => total + weight * (VALUES[vin[i] ?? ''] ?? 0), 0);
   const expected = sum % 11 === 10 ? 'X' : String(sum % 11);
   const found = vin[CHECK_PLACE];
-  if (found === expected) return worked({ vin, verdict: 'fits', expected, warnings });
+  if (found === expected) return worked({ vin, verdict: 'fits', expected, sum, warnings });
   return worked({
     vin,
     verdict: 'does not fit',
     expected,
+    sum,
     warnings: [
       `The ninth character is ${found}, but the others ask for ${expected}. Read the number again. ${ONLY_NORTH_AMERICA}`,
     ],

@@ -2,7 +2,8 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { type ClampInput, LOW_SHARE, clampCheck, clampLoadOf, torqueFor } from '@/domain/measure/clampLoad';
 import { CONDITIONS } from '@/domain/procedure/schema';
-import { EXTREMES, NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound, valueOf } from './sweep';
+import { valueOf } from '../../factories/measures';
+import { EXTREMES, NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound } from './sweep';
 
 const m6: ClampInput = { nm: 10, thread: 'M6', pitch: 1, class: '8.8', condition: 'dry' };
 const check = (changes: Partial<ClampInput>, low?: number) => valueOf(clampCheck({ ...m6, ...changes }, low));
@@ -11,7 +12,7 @@ describe('clampCheck', () => {
   it('gives clamp load, proof load and share', () => {
     const made = check({});
     expect(made.clampLoad).toBeCloseTo(10 / (0.2 * 0.006), 9);
-    expect(made.share).toBeCloseTo((made.clampLoad ?? 0) / (made.proofLoad ?? 0), 12);
+    expect(made.share).toBeCloseTo((made.clampLoad ?? 0) / (made.proof?.load ?? 0), 12);
     expect(made).toMatchObject({
       verdict: 'ok',
       about: 'final torque',
@@ -64,18 +65,18 @@ describe('clampCheck', () => {
   it('gives no number where none can be given', () => {
     expect(check({ thread: 'G 1/4', pitch: undefined })).toMatchObject({
       clampLoad: null,
-      proofLoad: null,
+      proof: null,
       share: null,
       nutFactor: null,
     });
     const unclassed = check({ class: undefined });
-    expect(unclassed).toMatchObject({ proofLoad: null, share: null });
+    expect(unclassed).toMatchObject({ proof: null, share: null });
     expect(unclassed.clampLoad).toBeGreaterThan(0);
   });
 
   it('counts exactly 100 % as not over, and low as a parameter', () => {
-    const { proofLoad } = check({});
-    const nm = valueOf(torqueFor(proofLoad ?? 0, 0.006, 0.2));
+    const { proof } = check({});
+    const nm = valueOf(torqueFor(proof?.load ?? 0, 0.006, 0.2));
     expect(check({ nm: nm * (1 - 1e-12) }).verdict).toBe('ok');
     expect(check({ nm: nm * (1 + 1e-12) }).verdict).toBe('over');
     expect(check({}, 0.75).verdict).toBe('low');

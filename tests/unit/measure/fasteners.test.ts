@@ -2,7 +2,8 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { proofLoad, proofStress, stressArea } from '@/domain/measure/fasteners';
 import { type ScrewThread, readThread } from '@/domain/measure/threads';
-import { EXTREMES, NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound, valueOf } from './sweep';
+import { valueOf } from '../../factories/measures';
+import { EXTREMES, NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound } from './sweep';
 
 const screw = (text: string, pitch?: number) => valueOf(readThread(text, pitch)) as ScrewThread;
 

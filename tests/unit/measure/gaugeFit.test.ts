@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { WHOLE_BAND, gaugeFit, gaugeFor } from '@/domain/measure/gaugeFit';
-import { EXTREMES, NO_NUMBERS, expectRefused, expectSound, valueOf } from './sweep';
+import { valueOf } from '../../factories/measures';
+import { EXTREMES, NO_NUMBERS, expectRefused, expectSound } from './sweep';
 
 const size = fc.double({ min: 1e-7, max: 1, noNaN: true });
 const RANK = { 'too coarse': 0, enough: 1, ideal: 2 };

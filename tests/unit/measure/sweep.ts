@@ -32,9 +32,3 @@ export function expectRefused(result: Worked<unknown>, field: string): void {
   expectSound(result, /./);
   if (!result.ok) expect(result.problems.map((problem) => problem.field)).toContain(field);
 }
-
-/** The value, or the test fails with the problems. */
-export function valueOf<T>(result: Worked<T>): T {
-  if (!result.ok) throw new Error(result.problems.map(({ field, message }) => `${field}: ${message}`).join(' '));
-  return result.value;
-}

@@ -3,7 +3,8 @@ import { describe, expect, it } from 'vitest';
 import { UNIFIED_SERIES } from '@/domain/measure/inchThreads';
 import { COARSE_PITCH, readThread } from '@/domain/measure/threads';
 import { Thread } from '@/domain/procedure/schema';
-import { EXTREMES, NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound, valueOf } from './sweep';
+import { valueOf } from '../../factories/measures';
+import { EXTREMES, NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound } from './sweep';
 
 describe('readThread', () => {
   it('reads a metric thread with its pitch', () => {

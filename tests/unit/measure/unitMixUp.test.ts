@@ -4,7 +4,8 @@ import { describe, expect, it } from 'vitest';
 import type { ClampInput } from '@/domain/measure/clampLoad';
 import { MIX_UP_TOLERANCE, mixUpOfSize, mixUpsOfChange } from '@/domain/measure/unitMixUp';
 import { parseProcedure } from '@/domain/procedure/parse';
-import { EXTREMES, NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound, valueOf } from './sweep';
+import { valueOf } from '../../factories/measures';
+import { EXTREMES, NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound } from './sweep';
 
 const says = (before: number, after: number) => valueOf(mixUpsOfChange(before, after)).map((found) => found.says);
 const torque = fc.double({ min: 0.1, max: 2000, noNaN: true });

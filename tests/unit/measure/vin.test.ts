@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { checkVin } from '@/domain/measure/vin';
-import { NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound, valueOf } from './sweep';
+import { valueOf } from '../../factories/measures';
+import { NO_NUMBERS, ODD_TEXTS, expectRefused, expectSound } from './sweep';
 
 const SIGNS = [...'0123456789ABCDEFGHJKLMNPRSTUVWXYZ'];
 /** A number whose ninth character was put right by the check itself. */

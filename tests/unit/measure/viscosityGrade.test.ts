@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { viscosityGrades } from '@/domain/measure/viscosityGrade';
-import { EXTREMES, NO_NUMBERS, expectRefused, expectSound, valueOf } from './sweep';
+import { valueOf } from '../../factories/measures';
+import { EXTREMES, NO_NUMBERS, expectRefused, expectSound } from './sweep';
 
 const at = (mm2: number) => valueOf(viscosityGrades(mm2 * 1e-6));
 

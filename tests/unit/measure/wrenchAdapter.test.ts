@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { torqueAtBolt, wrenchSetting } from '@/domain/measure/wrenchAdapter';
-import { EXTREMES, NO_NUMBERS, expectRefused, expectSound, valueOf } from './sweep';
+import { valueOf } from '../../factories/measures';
+import { EXTREMES, NO_NUMBERS, expectRefused, expectSound } from './sweep';
 
 const torque = fc.double({ min: 0.1, max: 2000, noNaN: true });
 const length = fc.double({ min: 0.1, max: 2, noNaN: true });

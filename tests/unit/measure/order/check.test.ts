@@ -5,7 +5,7 @@ import { checkOrder } from '@/domain/measure/order/check';
 import { makeOrder } from '@/domain/measure/order/make';
 import type { Position } from '@/domain/measure/order/positions';
 import { parseProcedure } from '@/domain/procedure/parse';
-import { valueOf } from '../sweep';
+import { valueOf } from '../../../factories/measures';
 import { anything, ring } from './bolts';
 
 const shipped = readdirSync('content/procedures').flatMap((name) => {

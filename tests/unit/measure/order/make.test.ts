@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { checkOrder } from '@/domain/measure/order/check';
 import { RING_TOLERANCE, makeOrder } from '@/domain/measure/order/make';
 import { type Position, distance, middleOf } from '@/domain/measure/order/positions';
-import { valueOf } from '../sweep';
+import { valueOf } from '../../../factories/measures';
 import { anything, ring } from './bolts';
 
 describe('makeOrder', () => {

@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { passTorques } from '@/domain/measure/order/passes';
-import { expectRefused, valueOf } from '../sweep';
+import { valueOf } from '../../../factories/measures';
+import { expectRefused } from '../sweep';
 
 describe('passTorques', () => {
   it('rises to exactly the final torque', () => {

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { recognisePattern } from '@/domain/measure/order/pattern';
 import type { Position } from '@/domain/measure/order/positions';
-import { valueOf } from '../sweep';
+import { valueOf } from '../../../factories/measures';
 import { circle, rectangle, ring, row } from './bolts';
 
 describe('recognisePattern', () => {
