@@ -1,7 +1,7 @@
 import { type Worked, numberProblem, work } from './worked';
 
 /** One row of SAE J300; kinematic viscosity at 100 °C in mm²/s. */
-interface Grade {
+export interface Grade {
   grade: string;
   least: number;
   /** Exclusive. */
@@ -14,7 +14,7 @@ interface Grade {
  * SAE J300, January 2015, as quoted in two secondary works that agree. 8, 12, 16 and 20 overlap on purpose. Older
  * tables differ: the one of 1999 begins 20 at 5.6 and has no grade below it.
  */
-const GRADES: readonly Grade[] = [
+export const GRADES: readonly Grade[] = [
   { grade: '8', least: 4.0, below: 6.1, highShear: '1.7' },
   { grade: '12', least: 5.0, below: 7.1, highShear: '2.0' },
   { grade: '16', least: 6.1, below: 8.2, highShear: '2.3' },

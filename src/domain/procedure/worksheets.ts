@@ -16,5 +16,7 @@ export const WORKSHEETS = {
   compression: 'Compression',
   'leak-down': 'Leak-down',
   'gauge-fit': 'Gauge fit',
+  'viscosity-grade': 'Viscosity grade',
+  vin: 'Vehicle number check',
 } as const;
 export type WorksheetKind = keyof typeof WORKSHEETS;

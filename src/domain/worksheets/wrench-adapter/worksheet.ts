@@ -1,0 +1,14 @@
+import { worksheet } from '../worksheet';
+import { compute } from './compute';
+import { fields } from './schema';
+import { example, groups } from './view';
+
+export const wrenchAdapter = worksheet({
+  name: 'wrench-adapter',
+  title: 'Wrench with an adapter',
+  summary: 'What to set a torque wrench to when a crow-foot or an extension carries it past the bolt.',
+  fields,
+  groups,
+  example,
+  compute,
+});
