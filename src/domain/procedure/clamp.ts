@@ -74,13 +74,13 @@ export const clampChecks = (torques: readonly Torque[]): CheckedTorque[] =>
         nutFactor: null,
         mixUp: null,
       };
-    const { verdict, why, clampLoad, proofLoad, share, nutFactor } = check;
+    const { verdict, why, clampLoad, proof, share, nutFactor } = check;
     return {
       ...at,
       verdict,
       message: why,
       clampLoad,
-      proofLoad,
+      proofLoad: proof?.load ?? null,
       share,
       nutFactor: nutFactor?.k ?? null,
       mixUp: sizeMixUp(torque),

@@ -118,6 +118,7 @@ function readQuantity(
     if (!across.ok) return say(`${called}: ${across.message}`);
     base = baseOf(across.value, field.unit) ?? base;
   }
+  if (!Number.isFinite(fromBase(base, field.unit))) return say(`${called} is too large.`);
   desk.understood[path] = understood(amount, unit, base, field.unit);
   if ('above' in field || 'least' in field || 'most' in field) {
     const { above, least, most } = field as QuantityField;

@@ -2,7 +2,7 @@ import type { ClampCheck } from '../../measure/clampLoad';
 import { formatNumber, type BothUnits } from '../../measure/format';
 import { said, show } from '../../measure/said';
 import type { Result, Verdict } from '../outcome';
-import { torqueStep } from '../torqueStep';
+import { showTorque } from '../showTorque';
 
 const FORMULA = "T = K · d · F: Shigley's Mechanical Engineering Design, equation 8-27.";
 
@@ -18,11 +18,7 @@ export function resultsOf(torque: number, check: ClampCheck, verdict: Verdict): 
   const { thread, nutFactor, clampLoad, proof, share } = check;
   if (thread.kind === 'pipe' || nutFactor === null || clampLoad === null) return [];
   const k = nutFactor.k.toFixed(2);
-  const diameter = show(
-    thread.diameter,
-    thread.kind === 'metric' ? 'mm' : 'in',
-    thread.kind === 'metric' ? 0.1 : 0.001,
-  );
+  const diameter = show(thread.diameter, thread.kind === 'metric' ? 'mm' : 'in');
   const results: Result[] = [];
   if (proof !== null && share !== null) {
     const percent = `${formatNumber(share * 100, share < 0.1 ? 1 : 0)} %`;
@@ -43,7 +39,7 @@ export function resultsOf(torque: number, check: ClampCheck, verdict: Verdict): 
     value: clampLoad / 1000,
     unit: 'kN',
     text: force(clampLoad),
-    formula: said`F = T / (K · d) = ${show(torque, 'N·m', torqueStep(torque))} / (${k} · ${diameter}) = ${force(clampLoad)}`,
+    formula: said`F = T / (K · d) = ${showTorque(torque)} / (${k} · ${diameter}) = ${force(clampLoad)}`,
     source: FORMULA,
     main: true,
   });

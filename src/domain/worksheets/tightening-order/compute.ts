@@ -2,12 +2,12 @@ import { checkOrder, type CheckedOrder } from '../../measure/order/check';
 import { makeOrder, type MadeOrder } from '../../measure/order/make';
 import { PASS_SHARES, passTorques, type Pass } from '../../measure/order/passes';
 import type { Position } from '../../measure/order/positions';
-import { said, show } from '../../measure/said';
+import { said } from '../../measure/said';
 import { type FieldProblem, type Worked, refused, worked } from '../../measure/worked';
 import type { Chart } from '../charts';
 import type { Values } from '../fields';
 import type { Outcome, Result } from '../outcome';
-import { torqueStep } from '../torqueStep';
+import { showTorque } from '../showTorque';
 import { readOrder } from './readOrder';
 import type { fields } from './schema';
 
@@ -17,7 +17,8 @@ const ROWS = 'Rows from the middle outward, and other shapes likewise: common pr
 
 const KINDS: Readonly<Record<MadeOrder['kind'], string>> = {
   row: 'The bolts stand in a row: from the middle outward, side by side in turn.',
-  circle: 'The bolts stand in a circle: each is followed by the one across, then a quarter turn on.',
+  circle:
+    'The bolts stand in a circle: each is followed by the one across, and each pair stands as far as it can from those before.',
   other:
     'The bolts stand neither in a row nor evenly round a circle: from the middle outward, each followed by one across.',
 };
@@ -47,7 +48,7 @@ function passResults(passes: readonly Pass[], source: string | undefined): Resul
     label: `Pass ${i + 1}, ${Math.round(share * 100)} %`,
     value: torque,
     unit: 'N·m',
-    text: show(torque, 'N·m', torqueStep(torque)),
+    text: showTorque(torque),
     ...(source !== undefined && { source }),
   }));
 }

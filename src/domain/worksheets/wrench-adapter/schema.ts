@@ -5,7 +5,7 @@ export const fields = {
   length: quantity('mm', {
     label: 'Length of the wrench, L',
     hint: 'From the middle of the drive square to the middle of the grip, where your hand pulls.',
-    above: 0,
+    least: 10,
     most: 3000,
   }),
   adapter: quantity('mm', {
