@@ -6,6 +6,7 @@ const PLACES = [
   { key: 'proposals', name: 'Proposals', href: '/proposals' },
   { key: 'review-desk', name: 'Review desk', href: '/review-desk' },
   { key: 'handbook', name: 'Handbook', href: '/handbook' },
+  { key: 'shop', name: 'Shop', href: '/shop/rules' },
 ] as const;
 export type Place = (typeof PLACES)[number]['key'];
 
@@ -15,6 +16,11 @@ export const mayPropose = (actor: Actor) =>
   actor.memberships.some(
     (m) => m.in === 'shop' && may(actor, 'propose', { book: { kind: 'shop', shopId: m.shopId } }).ok,
   );
+
+/** Whether somebody changes the settings of a shop: an owner of theirs, the steward of any. */
+export const maySetShops = (actor: Actor) =>
+  may(actor, 'manageShops', null).ok ||
+  actor.memberships.some((m) => m.in === 'shop' && may(actor, 'changeShopSettings', { shopId: m.shopId }).ok);
 
 /**
  * The places a person may use.
@@ -27,6 +33,7 @@ export function placesFor(actor: Actor, shopsWithOneEditor: readonly string[]) {
     proposals: mayPropose(actor),
     'review-desk': may(actor, 'seeReviewDesk', { shopsWithOneEditor }).ok,
     handbook: true,
+    shop: maySetShops(actor),
   };
   return PLACES.filter(({ key }) => open[key]);
 }

@@ -18,6 +18,13 @@ describe('the navigation', () => {
     expect(seen(senior)).not.toContain('review-desk');
     expect(seen(senior, ['s'])).toContain('review-desk');
   });
+  it('shows the shop to its owner and to the steward, who change its settings', () => {
+    expect(seen([{ in: 'shop', shopId: 's', role: 'owner' }])).toContain('shop');
+    expect(seen([{ in: 'network', role: 'steward' }])).toContain('shop');
+    for (const role of ['apprentice', 'technician', 'senior', 'editor'] as const)
+      expect(seen([{ in: 'shop', shopId: 's', role }])).not.toContain('shop');
+    expect(seen([{ in: 'common', role: 'editor' }])).not.toContain('shop');
+  });
 });
 
 describe('initials', () => {

@@ -1,8 +1,9 @@
-import { useId } from 'react';
+import { useId, type ReactNode } from 'react';
 import type { BothUnits } from '@/domain/measure/format';
 import { readBare } from '@/domain/measure/read';
 import type { Column } from '@/domain/worksheets/fields';
 import { boxUnit } from '@/domain/worksheets/readInputs';
+import { ruleWords } from '@/domain/worksheets/ruleWords';
 import { classes } from '@/components/ui/classes';
 import { Field } from '@/components/ui/Field';
 import { Select } from '@/components/ui/Select';
@@ -18,6 +19,8 @@ export interface BoxProps {
   understood: BothUnits | undefined;
   /** What the shop has set for a rule of thumb, in the field's unit. */
   rule: number | undefined;
+  /** Where the shop sets it; only for those who may. */
+  ruleHref: string | undefined;
   onType: (path: string, text: string) => void;
 }
 
@@ -34,19 +37,38 @@ export function Understood({ both, text }: { both: BothUnits | undefined; text: 
 const unitAfter = (column: Column, units: Units) =>
   column.type === 'quantity' ? boxUnit(column.unit, units) : column.type === 'number' ? column.after : undefined;
 
-/** Words under the label: the field's own, then what is usual where it is a rule of thumb. */
-function hintOf(column: Column, rule: number | undefined): string | undefined {
+type Hinted = Pick<BoxProps, 'units' | 'rule' | 'ruleHref'>;
+
+/** Words under the box: the field's own, then what is usual where it is a rule of thumb. */
+function hintOf(column: Column, { units, rule, ruleHref }: Hinted): ReactNode {
   if (!('usual' in column) || column.usual === undefined || column.type === 'choice') return column.hint;
-  const unit = column.type === 'quantity' ? ` ${column.unit}` : '';
-  const set =
-    rule === undefined
-      ? `Left empty: ${column.usual}${unit}, usual in the trade.`
-      : `Left empty: ${rule}${unit}, set by your shop.`;
-  return [column.hint, set].filter(Boolean).join(' ');
+  const measured = column.type === 'quantity' ? column : { unit: null, after: column.after };
+  const value = ruleWords(measured, rule ?? column.usual, units);
+  return (
+    <>
+      {column.hint && `${column.hint} `}
+      Left empty: {value}, {rule === undefined ? 'usual in the trade' : 'set by your shop'}.{' '}
+      {ruleHref && (
+        <a href={ruleHref} className="whitespace-nowrap print:hidden">
+          {rule === undefined ? 'Set it for your shop' : 'Change it for your shop'}
+        </a>
+      )}
+    </>
+  );
 }
 
 /** One box with its label, and under it how it was read or what is wrong. */
-export function Box({ column, path, text, units, problem, understood, rule, onType }: BoxProps & { column: Column }) {
+export function Box({
+  column,
+  path,
+  text,
+  units,
+  problem,
+  understood,
+  rule,
+  ruleHref,
+  onType,
+}: BoxProps & { column: Column }) {
   const id = useId();
   if (column.type === 'choice') {
     const options = column.optional ? [{ value: '', label: 'Not said' }, ...column.options] : column.options;
@@ -76,7 +98,7 @@ export function Box({ column, path, text, units, problem, understood, rule, onTy
             {column.optional && <span className="font-normal text-ink-2">, if known</span>}
           </>
         }
-        hint={hintOf(column, rule)}
+        hint={hintOf(column, { units, rule, ruleHref })}
         hintBelow
         error={problem}
         {...(unit !== undefined && { unit })}

@@ -14,6 +14,8 @@ export interface CalculatorProps {
   typed: TypedIn;
   units: Units;
   rules: ShopRules;
+  /** Whether the reader may set rules of thumb for the shop. */
+  setsRules: boolean;
 }
 
 const NOTHING: TypedIn = {};
@@ -32,7 +34,13 @@ export function Calculator({ name, ...props }: CalculatorProps) {
   return worksheet ? <Named worksheet={worksheet} {...props} /> : null;
 }
 
-function Named({ worksheet, typed, units: first, rules }: Omit<CalculatorProps, 'name'> & { worksheet: Described }) {
+function Named({
+  worksheet,
+  typed,
+  units: first,
+  rules,
+  setsRules,
+}: Omit<CalculatorProps, 'name'> & { worksheet: Described }) {
   const now = useCase(worksheet, { typed, units: first, rules, fixed: NOTHING });
   const [said, say] = useState('');
   useAddress(worksheet, now.typed, now.units);
@@ -85,7 +93,7 @@ function Named({ worksheet, typed, units: first, rules }: Omit<CalculatorProps, 
           />
         </div>
       </div>
-      <Worksheet worksheet={worksheet} now={now} rules={rules} />
+      <Worksheet worksheet={worksheet} now={now} rules={rules} setsRules={setsRules} />
     </form>
   );
 }

@@ -31,12 +31,15 @@ export function Worksheet({
   now,
   rules,
   hidden = [],
+  setsRules = false,
 }: {
   worksheet: Described;
   now: Case;
   rules: ShopRules;
   /** Fields that the sheet has filled already. */
   hidden?: readonly string[];
+  /** Whether the reader may set rules of thumb for the shop. */
+  setsRules?: boolean;
 }) {
   const boxAt: BoxAt = (path) => {
     const text = now.typed[path] ?? '';
@@ -47,6 +50,7 @@ export function Worksheet({
       problem: text.trim() === '' ? undefined : now.problems.get(path),
       understood: now.understood[path],
       rule: rules[path],
+      ruleHref: setsRules ? `/shop/rules#${worksheet.name}.${path}` : undefined,
       onType: now.type,
     };
   };

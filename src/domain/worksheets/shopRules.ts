@@ -1,7 +1,6 @@
-import { convert, fromBase, type Unit } from '../measure/convert';
-import { formatMeasure, formatNumber } from '../measure/format';
+import { fromBase, type Unit } from '../measure/convert';
 import type { NumberField, QuantityField } from './fields';
-import { boxUnit, readInputs } from './readInputs';
+import { readInputs, type Reading } from './readInputs';
 import { WORKSHEETS } from './registry';
 import type { Worksheet } from './worksheet';
 
@@ -24,7 +23,6 @@ export interface RuleOfThumb {
   most: number | undefined;
 }
 
-type Units = 'metric' | 'inch';
 type Settable = (QuantityField | NumberField) & { usual: number };
 
 const settable = (field: Worksheet['fields'][string] | undefined): Settable | null =>
@@ -52,7 +50,11 @@ export type ReadRule = { ok: true; value: number } | { ok: false; message: strin
  * Reads what somebody set for a rule: a number in its unit, or a text in any unit of the kind. The bounds are those of
  * the field. An empty text is for the caller: it means what is usual.
  */
-export function readRule(rule: RuleOfThumb, raw: string | number, units: Units = 'metric'): ReadRule {
+export function readRule(
+  rule: RuleOfThumb,
+  raw: string | number,
+  units: NonNullable<Reading['units']> = 'metric',
+): ReadRule {
   const { field, unit, label } = rule;
   const bounds = Object.fromEntries(
     (['above', 'least', 'most'] as const).flatMap((end) => (rule[end] === undefined ? [] : [[end, rule[end]]])),
@@ -65,24 +67,4 @@ export function readRule(rule: RuleOfThumb, raw: string | number, units: Units =
   const base = Number(inputs.value[field]);
   // Twelve digits: more than any tool, fewer than the slips of binary numbers.
   return { ok: true, value: Number((unit ? fromBase(base, unit) : base).toPrecision(12)) };
-}
-
-type Measured = Pick<RuleOfThumb, 'unit' | 'after'>;
-
-/** A value of a rule with its unit, for somebody to read: "3 %", "0.0020 in", "745 kg/m³". */
-export function ruleWords({ unit, after }: Measured, value: number, units: Units): string {
-  if (unit) return formatMeasure(value, unit)[units];
-  return after ? `${formatNumber(value)} ${after}` : formatNumber(value);
-}
-
-/** What stands after the box of a rule; undefined for a plain number. */
-export const ruleUnit = ({ unit, after }: Measured, units: Units): string | undefined =>
-  unit ? boxUnit(unit, units) : after;
-
-/** A value of a rule as its box shows it: in the unit of the box, with four digits where that is another; empty where none is set. */
-export function ruleText({ unit }: Measured, value: number | null, units: Units): string {
-  if (value === null) return '';
-  const to = unit && boxUnit(unit, units);
-  const shown = unit && to && to !== unit ? convert(value, unit, to) : null;
-  return formatNumber(shown?.ok ? Number(shown.value.toPrecision(4)) : value);
 }

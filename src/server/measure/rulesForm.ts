@@ -1,5 +1,6 @@
 import type { Actor } from '@/domain/people/may';
-import { rulesOf, ruleText } from '@/domain/worksheets/shopRules';
+import { ruleText } from '@/domain/worksheets/ruleWords';
+import { rulesOf } from '@/domain/worksheets/shopRules';
 import { malformed, Refusal } from '../refusal';
 import { setRules, type RuleChange } from './setRules';
 

@@ -1,5 +1,6 @@
 import { may, type Actor } from '@/domain/people/may';
-import { readRule, rulesOf, ruleWords, type RuleOfThumb } from '@/domain/worksheets/shopRules';
+import { ruleWords } from '@/domain/worksheets/ruleWords';
+import { readRule, rulesOf, type RuleOfThumb } from '@/domain/worksheets/shopRules';
 import { appendAudit } from '../audit/append';
 import { app } from '../context';
 import { forbidden, invalid, notFound, Refusal, type RefusalError } from '../refusal';

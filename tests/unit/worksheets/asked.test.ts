@@ -8,7 +8,7 @@ import { readInputs } from '@/domain/worksheets/readInputs';
 import { WORKSHEETS } from '@/domain/worksheets/registry';
 import { boxesOf, nest, ownTexts } from '@/domain/worksheets/typedIn';
 import type { TypedIn } from '@/domain/worksheets/worksheet';
-import { SAMPLE } from './sampleFields';
+import { SAMPLE } from '../../factories/sampleWorksheet';
 
 const UNITS: readonly Unit[] = [...Object.values(UNITS_BY_QUANTITY).flat(), 'lb'];
 /** A box and a limit for each unit there is. */

@@ -5,7 +5,7 @@ import { inputSchema } from '@/domain/worksheets/inputSchema';
 import { WORKSHEETS } from '@/domain/worksheets/registry';
 import { describeWorksheet } from '@/server/measure/worksheets';
 import { schemaProblems } from '../../factories/jsonSchema';
-import { FILLED, SAMPLE } from './sampleFields';
+import { FILLED, SAMPLE } from '../../factories/sampleWorksheet';
 
 const schemaOf = (fields: Fields) =>
   zodToJsonSchema(inputSchema(fields), { target: 'jsonSchema2019-09', $refStrategy: 'none' }) as Record<

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { bandIfKnown, number, quantity } from '@/domain/worksheets/fields';
 import { boxUnit, readInputs, type RawInputs, type Reading } from '@/domain/worksheets/readInputs';
-import { FILLED, SAMPLE } from './sampleFields';
+import { FILLED, SAMPLE } from '../../factories/sampleWorksheet';
 
 const read = (changed: RawInputs = {}, reading?: Reading) => readInputs(SAMPLE, { ...FILLED, ...changed }, reading);
 

@@ -3,10 +3,11 @@ import { describe, expect, it } from 'vitest';
 import { toBase } from '@/domain/measure/convert';
 import { readInputs } from '@/domain/worksheets/readInputs';
 import { WORKSHEETS } from '@/domain/worksheets/registry';
-import { readRule, rulesOf, ruleText, ruleUnit, ruleWords, type RuleOfThumb } from '@/domain/worksheets/shopRules';
+import { ruleText, ruleUnit, ruleWords } from '@/domain/worksheets/ruleWords';
+import { readRule, rulesOf, type RuleOfThumb } from '@/domain/worksheets/shopRules';
 import type { Worksheet } from '@/domain/worksheets/worksheet';
 import { between, relative } from '../../factories/measures';
-import { FILLED, SAMPLE } from './sampleFields';
+import { FILLED, SAMPLE } from '../../factories/sampleWorksheet';
 
 const SHEET = { name: 'sample', title: 'Sample', fields: SAMPLE } as unknown as Worksheet;
 const rules = rulesOf([SHEET]);

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { boxesOf, nest, ownTexts, rowsFilled } from '@/domain/worksheets/typedIn';
-import { SAMPLE } from './sampleFields';
+import { SAMPLE } from '../../factories/sampleWorksheet';
 
 const own = (...texts: [string, string][]) => ownTexts(SAMPLE, texts);
 

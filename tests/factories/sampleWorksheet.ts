@@ -1,3 +1,4 @@
+import { worked } from '@/domain/measure/worked';
 import {
   band,
   bandIfKnown,
@@ -11,6 +12,7 @@ import {
   text,
   textIfKnown,
 } from '@/domain/worksheets/fields';
+import { worksheet, type Worksheet } from '@/domain/worksheets/worksheet';
 
 /** A made-up worksheet's fields with everything that a field can be, so that the shared parts are tested whatever is registered. */
 export const SAMPLE = {
@@ -54,3 +56,26 @@ export const FILLED = {
   limit: { min: '0.02', max: '0.05' },
   injectors: [{ before: '250' }, { before: '252' }],
 };
+
+/** A worksheet of these fields that answers with the rules of thumb that it was given. */
+export const SAMPLE_WORKSHEET = worksheet({
+  name: 'sample',
+  title: 'Sample',
+  summary: 'Says which rules of thumb it went by.',
+  fields: SAMPLE,
+  groups: [{ title: 'All', fields: Object.keys(SAMPLE) as (keyof typeof SAMPLE)[] }],
+  example: { depth: '12', cylinders: '4', engine: 'T18F', 'limit.max': '0.05', 'injectors.0.before': '250' },
+  compute: ({ deviation, gap, factor }) =>
+    worked({
+      verdict: 'none',
+      reasons: [],
+      charts: [],
+      results: Object.entries({ deviation, gap, factor }).map(([key, value]) => ({
+        key,
+        label: key,
+        value,
+        unit: null,
+        text: { metric: String(value), inch: String(value) },
+      })),
+    }),
+}) as unknown as Worksheet;
