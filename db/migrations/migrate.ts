@@ -5,10 +5,11 @@ import { tables } from './0001-tables';
 import { rules } from './0002-rules';
 import { shopRules } from './0003-shop-rules';
 import { takesBack } from './0004-takes-back';
+import { shortcuts } from './0005-shortcuts';
 import type { Migration } from './migration';
 
 // A list, not a folder read at run time: it is bundled with the server and runs from scripts alike.
-const MIGRATIONS: readonly Migration[] = [tables, rules, shopRules, takesBack];
+const MIGRATIONS: readonly Migration[] = [tables, rules, shopRules, takesBack, shortcuts];
 
 type Handle = Pick<Database, 'sequelize' | 'write'>;
 

@@ -41,6 +41,7 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
         passwordHash: optionalText,
         tokenVersion: { ...integer, defaultValue: 1 },
         units: { ...text, defaultValue: 'metric' },
+        shortcuts: { ...flag, defaultValue: true },
         currentShopId: optionalText,
         demonstration: flag,
         ...stamps,

@@ -22,6 +22,8 @@ export class Person extends Model<InferAttributes<Person>, InferCreationAttribut
   /** Stands in every session token; raising it ends all of them. */
   declare tokenVersion: CreationOptional<number>;
   declare units: CreationOptional<'metric' | 'inch'>;
+  /** Single keys act as shortcuts. */
+  declare shortcuts: CreationOptional<boolean>;
   /** The shop the person works in now. */
   declare currentShopId: CreationOptional<string | null>;
   declare demonstration: CreationOptional<boolean>;

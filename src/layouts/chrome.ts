@@ -1,13 +1,11 @@
 import { forgetAll } from '@/components/search/kept';
+import { singleKey } from '@/components/ui/singleKeys';
 
 /** What the frame of every page does beyond HTML. Nothing here is needed to read, search or save. */
 
-const typing = (target: EventTarget | null) =>
-  target instanceof HTMLElement && (target.isContentEditable || /^(INPUT|TEXTAREA|SELECT)$/.test(target.tagName));
-
 // "/" goes to search from anywhere; the look-up page's own field carries the mark too.
 document.addEventListener('keydown', (event) => {
-  if (event.key === '/' && !event.ctrlKey && !event.metaKey && !event.altKey && !typing(event.target)) {
+  if (singleKey(event) === '/') {
     const find = document.querySelector<HTMLInputElement>('[data-find]');
     if (find) {
       event.preventDefault();

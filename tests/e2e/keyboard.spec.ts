@@ -1,5 +1,6 @@
 import type { Page } from '@playwright/test';
-import { readProposal } from './support/api';
+import type { ProposalSummary } from '@/domain/api/schemas';
+import { call, readProposal } from './support/api';
 import { alive, expect, test } from './support/book';
 import { WritingDesk } from './support/writing';
 
@@ -103,4 +104,43 @@ test('steps are moved by keyboard, and a reader hears where to', async ({ as }) 
   await page.reload();
   await desk.ready();
   expect(await title(0)).toBe(second);
+});
+
+test('whoever switches single-key shortcuts off presses keys in peace, on every page that listens', async ({ as }) => {
+  const page = await as('editor2');
+  const { items } = (await (await call(page, 'GET', '/review-desk')).json()) as { items: ProposalSummary[] };
+  const proposal = `/proposals/${items.find(({ number }) => number === 'P-0142')?.id ?? ''}`;
+  const find = page.getByRole('searchbox');
+  const hint = page.locator('kbd:visible');
+  /** What pressing each key does where. */
+  const acts = async () => {
+    await page.goto(proposal);
+    await alive(page);
+    const hints = await hint.count();
+    await page.keyboard.press('n');
+    const stepped = await page.locator('h3[data-line]:focus').count();
+    await page.keyboard.press('/');
+    const found = [await find.evaluate((field) => field === document.activeElement)];
+    for (const path of ['/procedures/P-0142', '/']) {
+      await page.goto(path);
+      await alive(page);
+      await page.locator('main').focus();
+      await page.keyboard.press('/');
+      found.push(await find.evaluate((field) => field === document.activeElement));
+    }
+    return { hints, stepped, found };
+  };
+  const choose = async (option: 'On' | 'Off') => {
+    await page.goto('/profile');
+    await page.getByLabel('Single-key shortcuts').selectOption(option);
+    await page.getByRole('button', { name: 'Save' }).click();
+    await expect(page.getByText('Saved', { exact: true })).toBeVisible();
+    await expect(page.getByLabel('Single-key shortcuts')).toHaveValue(option.toLowerCase());
+  };
+  const on = { hints: 3, stepped: 1, found: [true, true, true] };
+  expect(await acts()).toEqual(on);
+  await choose('Off');
+  expect(await acts()).toEqual({ hints: 0, stepped: 0, found: [false, false, false] });
+  await choose('On');
+  expect(await acts()).toEqual(on);
 });

@@ -12,7 +12,8 @@ type Errors = Record<string, string>;
 /** What stands beside each form after it was sent. */
 export interface ProfileState {
   saved?: SectionName | undefined;
-  refused?: { section: SectionName; errors: Errors; typed: { name?: string } } | undefined;
+  refused?:
+    { section: SectionName; errors: Errors; typed: { name?: string; units?: string; shortcuts?: string } } | undefined;
 }
 
 /** One form with what it is about on the left and its answer at its own button. */
@@ -62,7 +63,7 @@ function Section({
   );
 }
 
-/** Name, units, password and sessions, each a form of its own that works without a script. */
+/** Name, settings, password and sessions, each a form of its own that works without a script. */
 export function ProfileForms({ me, saved, refused }: { me: Me } & ProfileState) {
   const errorsOf = (section: SectionName): Errors => (refused?.section === section ? refused.errors : {});
   const [profile, password] = [errorsOf('profile'), errorsOf('password')];
@@ -88,11 +89,21 @@ export function ProfileForms({ me, saved, refused }: { me: Me } & ProfileState) 
         <Select
           label="Units"
           name="units"
-          defaultValue={me.units}
+          defaultValue={refused?.typed.units ?? me.units}
           error={profile.units}
           options={[
             { value: 'metric', label: 'Metric: N·m, mm, kPa, °C' },
             { value: 'inch', label: 'Inch: lbf·ft, in, psi, °F' },
+          ]}
+        />
+        <Select
+          label="Single-key shortcuts"
+          name="shortcuts"
+          defaultValue={refused?.typed.shortcuts ?? (me.shortcuts ? 'on' : 'off')}
+          hint="A slash goes to search; n and p go to the next and the previous change of a proposal. Off, no key acts alone."
+          options={[
+            { value: 'on', label: 'On' },
+            { value: 'off', label: 'Off' },
           ]}
         />
         <dl className="grid grid-cols-[auto_1fr] gap-x-5 gap-y-1">

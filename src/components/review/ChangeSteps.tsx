@@ -1,9 +1,7 @@
 import { useCallback, useEffect, useState, type RefObject } from 'react';
 import { Button } from '@/components/ui/Button';
 import { Kbd } from '@/components/ui/Kbd';
-
-const typing = (target: EventTarget | null) =>
-  target instanceof HTMLElement && (target.isContentEditable || /^(INPUT|TEXTAREA|SELECT)$/.test(target.tagName));
+import { singleKey } from '@/components/ui/singleKeys';
 
 /** From the middle of the screen, the first change below it or the last above it. */
 function beyondSight(targets: readonly HTMLElement[], by: 1 | -1): number {
@@ -49,8 +47,8 @@ export function ChangeSteps({
   );
   useEffect(() => {
     const onKey = (event: KeyboardEvent) => {
-      if (event.ctrlKey || event.metaKey || event.altKey || typing(event.target)) return;
-      if (event.key === 'n' || event.key === 'p') go(event.key === 'n' ? 1 : -1);
+      const key = singleKey(event);
+      if (key === 'n' || key === 'p') go(key === 'n' ? 1 : -1);
     };
     document.addEventListener('keydown', onKey);
     return () => document.removeEventListener('keydown', onKey);
@@ -68,13 +66,13 @@ export function ChangeSteps({
             <span>
               Previous<span className="max-sm:sr-only"> change</span>
             </span>
-            <Kbd>p</Kbd>
+            <Kbd className="max-sm:hidden">p</Kbd>
           </Button>
           <Button className="!px-3.5" onClick={() => go(1)}>
             <span>
               Next<span className="max-sm:sr-only"> change</span>
             </span>
-            <Kbd>n</Kbd>
+            <Kbd className="max-sm:hidden">n</Kbd>
           </Button>
         </div>
       )}

@@ -43,6 +43,7 @@ export const Me = z.object({
   name: z.string(),
   email: z.string(),
   units: UnitSystem,
+  shortcuts: z.boolean().describe('Single keys, such as / for search, act as shortcuts'),
   shop: z.object({ id: z.string(), name: z.string() }).nullable().describe('The shop the person works in now'),
   roles: z.array(
     z.object({
@@ -164,6 +165,7 @@ export const UpdateMe = z
   .object({
     name: z.string().trim().min(1, 'must not be empty').max(80, 'must be 80 characters or fewer'),
     units: UnitSystem,
+    shortcuts: z.boolean(),
   })
   .partial();
 export const ChangePassword = z.object({ current: z.string().max(200), next: z.string().max(200) });

@@ -18,6 +18,7 @@ const Profile = z.object({
     .max(80, 'Use 80 characters or fewer.')
     .refine(isOneLine, NOT_ONE_LINE),
   units: UnitSystem,
+  shortcuts: z.boolean(),
 });
 
 async function self(actor: Actor) {
@@ -27,8 +28,11 @@ async function self(actor: Actor) {
   return person;
 }
 
-/** Changes what is given of the actor's own name and units. Refuses 422 with the field that is wrong. */
-export async function saveProfile(actor: Actor, change: { name?: string; units?: string }): Promise<void> {
+/** Changes what is given of the actor's own name and settings. Refuses 422 with the field that is wrong. */
+export async function saveProfile(
+  actor: Actor,
+  change: { name?: string; units?: string; shortcuts?: boolean },
+): Promise<void> {
   const { db } = await app();
   const read = Profile.partial().safeParse(change);
   if (!read.success)

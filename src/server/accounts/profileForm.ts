@@ -10,7 +10,14 @@ export type ProfileOutcome =
   | { kind: 'saved'; what: 'password'; session: SignedIn }
   | { kind: 'signed-out' }
   /** `errors` by field name, "form" for what belongs to none; `typed` is kept for the form. */
-  | { kind: 'refused'; section: 'profile' | 'password'; errors: Record<string, string>; typed: { name?: string } };
+  | { kind: 'refused'; section: 'profile' | 'password'; errors: Record<string, string>; typed: ProfileTyped };
+
+/** What stood in the fields of a refused form, to stand there again. */
+export interface ProfileTyped {
+  name?: string;
+  units?: string;
+  shortcuts?: string;
+}
 
 const REPEAT = 'Write the same new password twice.';
 
@@ -26,11 +33,16 @@ export async function actOnProfileForm(actor: Actor, form: FormData): Promise<Pr
     kind: 'refused',
     section: section === 'password' ? 'password' : 'profile',
     errors,
-    typed: section === 'password' ? {} : { name: text('name') },
+    typed: section === 'password' ? {} : { name: text('name'), units: text('units'), shortcuts: text('shortcuts') },
   });
   try {
     if (section !== 'password') {
-      await saveProfile(actor, { name: text('name'), units: text('units') });
+      await saveProfile(actor, {
+        name: text('name'),
+        units: text('units'),
+        // A form that came without the field leaves it as it is.
+        ...(form.has('shortcuts') && { shortcuts: text('shortcuts') !== 'off' }),
+      });
       return { kind: 'saved', what: 'profile' };
     }
     if (text('next') !== text('repeat')) return refused({ repeat: REPEAT });

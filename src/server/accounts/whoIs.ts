@@ -14,13 +14,14 @@ interface Row {
   name: string;
   email: string;
   units: Me['units'];
+  shortcuts: 0 | 1;
   tokenVersion: number;
   currentShopId: string | null;
   roles: string;
 }
 
 // One statement a request: person, roles and the names of the shops, as they stand now.
-const WHO = `SELECT p.id, p.name, p.email, p.units, p.tokenVersion, p.currentShopId,
+const WHO = `SELECT p.id, p.name, p.email, p.units, p.shortcuts, p.tokenVersion, p.currentShopId,
     (SELECT json_group_array(json_object('in', m.scope, 'shopId', m.shopId, 'role', m.role, 'name',
         CASE m.scope WHEN 'shop' THEN s.name WHEN 'common' THEN 'Common book' ELSE 'Network' END))
       FROM memberships m LEFT JOIN shops s ON s.id = m.shopId WHERE m.personId = p.id) AS roles
@@ -49,6 +50,7 @@ export async function whoIs({ personId, tokenVersion }: SignedIn): Promise<{ act
       name: row.name,
       email: row.email,
       units: row.units,
+      shortcuts: row.shortcuts === 1,
       shop: shops.find(({ id }) => id === current) ?? null,
       roles,
     },

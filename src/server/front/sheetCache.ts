@@ -30,7 +30,7 @@ const RUN = randomBytes(6).toString('hex');
 const brotli = promisify(brotliCompress);
 const gz = promisify(gzip);
 
-const identity = (me: Me) => JSON.stringify([me.id, me.name, me.email, me.units, me.shop, me.roles]);
+const identity = (me: Me) => JSON.stringify([me.id, me.name, me.email, me.units, me.shortcuts, me.shop, me.roles]);
 
 const encodingFor = (accepted: string): 'br' | 'gzip' | undefined =>
   /\bbr\b/.test(accepted) ? 'br' : /\bgzip\b/.test(accepted) ? 'gzip' : undefined;

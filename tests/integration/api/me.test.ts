@@ -23,10 +23,22 @@ it('changes my name and my units, one at a time or both', async () => {
   expect((await call(person, 'GET', '/me')).body).toMatchObject({ name: 'Another Name', units: 'inch' });
 });
 
+it('switches single-key shortcuts off and on; they are on at first', async () => {
+  const person = who('north.senior');
+  const shortcuts = async () => (await call(person, 'GET', '/me')).body;
+  expect(await shortcuts()).toMatchObject({ shortcuts: true });
+  expect((await call(person, 'PATCH', '/me', { body: { shortcuts: false } })).body).toMatchObject({ shortcuts: false });
+  await call(person, 'PATCH', '/me', { body: { units: 'inch' } });
+  expect(await shortcuts()).toMatchObject({ shortcuts: false, units: 'inch' });
+  await call(person, 'PATCH', '/me', { body: { shortcuts: true } });
+  expect(await shortcuts()).toMatchObject({ shortcuts: true });
+});
+
 it.each([
   [{ units: 'cubits' }, 'units', 'must be one of metric, inch'],
   [{ name: '   ' }, 'name', 'must not be empty'],
   [{ name: 7 }, 'name', 'must be text'],
+  [{ shortcuts: 'off' }, 'shortcuts', 'must be true or false'],
 ])('refuses %j', async (body, path, message) => {
   const answer = await call(who('north.senior'), 'PATCH', '/me', { body });
   expect(answer).toMatchObject({ status: 422, body: { errors: [{ path, message }] } });

@@ -6,7 +6,7 @@ export const readMe = operation({
   method: 'get',
   path: '/me',
   area: 'You',
-  summary: 'Who I am, my roles, my shop and my units',
+  summary: 'Who I am, my roles, my shop and my settings',
   reply: Me,
 });
 
@@ -15,7 +15,7 @@ export const updateMe = operation({
   method: 'patch',
   path: '/me',
   area: 'You',
-  summary: 'Change my name or my units',
+  summary: 'Change my name, my units or whether single keys act as shortcuts',
   body: UpdateMe,
   reply: Me,
 });
