@@ -25,17 +25,20 @@ interface Worked {
 
 /** The inputs with every measure written anew: `write` is given what the text means in the unit of its field. */
 function rewritten({ fields, example }: Worksheet, write: (value: number, unit: Unit) => unknown): Body {
-  const texts = Object.entries(example).map(([path, text]): [string, unknown] => {
+  const anew = (path: string, text: string): unknown => {
     const [name = '', , column = ''] = path.split('.');
     const field = fields[name];
     const described: Column | typeof field = field?.type === 'rows' ? field.columns[column] : field;
-    if (described?.type !== 'quantity' && described?.type !== 'band') return [path, text];
+    if (described?.type !== 'quantity' && described?.type !== 'band') return text;
     const read = readTyped(text, described.unit);
     // A flow by mass stays as it is written: it has no number in the unit of its field without the density.
-    if (!read.ok || !sameKind(read.value.unit, described.unit)) return [path, text];
-    return [path, write(fromBase(read.value.base, described.unit), described.unit)];
-  });
-  return JSON.parse(JSON.stringify(nest(fields, Object.fromEntries(texts) as Record<string, string>))) as Body;
+    if (!read.ok || !sameKind(read.value.unit, described.unit)) return text;
+    return write(fromBase(read.value.base, described.unit), described.unit);
+  };
+  const paths = nest(fields, Object.fromEntries(Object.keys(example).map((path) => [path, path])));
+  return JSON.parse(JSON.stringify(paths), (_, path: unknown) =>
+    typeof path === 'string' ? anew(path, example[path] ?? '') : path,
+  ) as Body;
 }
 
 const inInches = (value: number, unit: Unit): string => {
