@@ -20,7 +20,7 @@ const square = bolts([
 describe('the tightening order', () => {
   it('works an order out and draws it', () => {
     const made = answerOf('tightening-order', { ...row, final: '20 N·m' });
-    expect(textOf(made, 'order')?.metric).toBe('2 · 3 · 1 · 4');
+    expect(textOf(made, 'order')?.metric).toBe('Bolts 2 · 3 · 1 · 4');
     expect(reasonsOf(made)).toEqual(['The bolts stand in a row: from the middle outward, side by side in turn.']);
     expect(made.charts).toMatchObject([{ kind: 'order', order: [2, 3, 1, 4], passes: [6, 12, 20] }]);
     expect(textOf(made, 'pass-1')).toEqual({ metric: '6 N·m', inch: '53 lbf·in' });

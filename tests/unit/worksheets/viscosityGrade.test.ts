@@ -6,9 +6,9 @@ describe('the viscosity grade', () => {
     for (const viscosity of ['7', '7 cSt', '7.0 mm2/s']) {
       const made = answerOf('viscosity-grade', { viscosity });
       expect(made.verdict).toBe('none');
-      expect(textOf(made, 'grades')?.metric).toBe('12, 16, 20');
+      expect(textOf(made, 'grades')?.metric).toBe('SAE 12, 16, 20');
     }
-    expect(textOf(answerOf('viscosity-grade', { viscosity: '30' }), 'grades')?.metric).toBe('none');
+    expect(textOf(answerOf('viscosity-grade', { viscosity: '30' }), 'grades')?.metric).toBe('None');
   });
 
   it.each([

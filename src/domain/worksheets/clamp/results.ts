@@ -29,7 +29,7 @@ export function resultsOf(torque: number, check: ClampCheck, verdict: Verdict): 
       unit: '%',
       text: { metric: percent, inch: percent },
       ...(verdict !== 'none' && { verdict }),
-      formula: said`F / F_p = ${force(clampLoad)} / ${force(proof.load)} = ${percent}`,
+      formula: said`F / Fp = ${force(clampLoad)} / ${force(proof.load)} = ${percent}`,
       main: true,
     });
   }
@@ -60,7 +60,7 @@ export function resultsOf(torque: number, check: ClampCheck, verdict: Verdict): 
       value: proof.load / 1000,
       unit: 'kN',
       text: force(proof.load),
-      formula: said`F_p = S_p · A_s = ${show(proof.stress, 'MPa', 1)} · ${area(proof.area)} = ${force(proof.load)}`,
+      formula: said`Fp = Sp · As = ${show(proof.stress, 'MPa', 1)} · ${area(proof.area)} = ${force(proof.load)}`,
       source: `Proof stress: ${proof.standard}, as quoted in secondary tables.`,
     },
     {
@@ -69,7 +69,7 @@ export function resultsOf(torque: number, check: ClampCheck, verdict: Verdict): 
       value: null,
       unit: null,
       text: area(proof.area),
-      formula: thread.kind === 'metric' ? said`A_s = π/4 · (d − 0.9382 · P)²` : said`A_s = π/4 · (D − 0.9743 / n)²`,
+      formula: thread.kind === 'metric' ? said`As = π/4 · (d − 0.9382 · P)²` : said`As = π/4 · (D − 0.9743 / n)²`,
       source:
         thread.kind === 'metric'
           ? 'Stress area: ISO 898-1, quoted.'

@@ -12,7 +12,7 @@ const SOURCE = `${IDEAL_RATIO} to 1: National Physical Laboratory, FAQ on ISO 14
 const VERDICTS: Readonly<Record<GaugeFit['verdict'], Verdict>> = {
   ideal: 'pass',
   enough: 'pass',
-  'too coarse': 'fail',
+  'too coarse': 'look',
 };
 const step = (metres: number) => show(metres, 'mm');
 

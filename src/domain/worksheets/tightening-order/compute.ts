@@ -72,7 +72,7 @@ export function compute({ positions: rows, order: text, final, passes }: Values<
       label: 'Order',
       value: null,
       unit: null,
-      text: said`${made.value.order.join(' · ')}`,
+      text: said`Bolts ${made.value.order.join(' · ')}`,
       source: made.value.kind === 'circle' ? CIRCLES : ROWS,
       main: true,
     },

@@ -20,7 +20,7 @@ export function compute({ viscosity, grade }: Values<typeof fields>): Worked<Out
     label: 'SAE grades that hold it',
     value: null,
     unit: null,
-    text: said`${fits.length === 0 ? 'none' : fits.map((fit) => fit.grade).join(', ')}`,
+    text: said`${fits.length === 0 ? 'None' : `SAE ${fits.map((fit) => fit.grade).join(', ')}`}`,
     source: SOURCE,
     main: true,
   };
@@ -57,7 +57,8 @@ export function compute({ viscosity, grade }: Values<typeof fields>): Worked<Out
     : [];
   return worked({
     verdict: range ? (isIn ? 'pass' : 'fail') : 'none',
-    reasons: [...onCan, said`${says}`, said`${ONLY_KINEMATIC}`],
+    // One grade that is on the can as well need not be named twice.
+    reasons: [...onCan, ...(isIn && fits.length === 1 ? [] : [said`${says}`]), said`${ONLY_KINEMATIC}`],
     results: range ? results.map((one) => (one === main ? { ...one, verdict: isIn ? 'pass' : 'fail' } : one)) : results,
     charts: [],
   });

@@ -38,7 +38,7 @@ export function compute({ atBolt, step, ...wrench }: Values<typeof fields>): Wor
       value: set,
       unit: 'N·m',
       text: showTorque(set),
-      formula: said`T_w = T_a · L / (L + E · cos θ) = ${showTorque(atBolt)} · ${long} / (${long} + ${short} · cos ${turned}) = ${showTorque(setting.value)}`,
+      formula: said`Tw = Ta · L / (L + E · cos θ) = ${showTorque(atBolt)} · ${long} / (${long} + ${short} · cos ${turned}) = ${showTorque(setting.value)}`,
       source: SOURCE,
       main: true,
     },
