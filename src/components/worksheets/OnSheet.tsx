@@ -57,7 +57,8 @@ export function OnSheet({
   worksheet: Described;
   limits: readonly BoundLimit[];
   units: Units;
-  rules: ShopRules;
+  /** null where what the shop has set could not be fetched. */
+  rules: ShopRules | null;
   onClose: () => void;
 }) {
   const fields = useMemo(() => byField(limits), [limits]);
@@ -70,7 +71,7 @@ export function OnSheet({
       ),
     [worksheet, fields, chosen],
   );
-  const now = useCase(worksheet, { typed: NOTHING, units, rules, fixed });
+  const now = useCase(worksheet, { typed: NOTHING, units, rules: rules ?? NOTHING, fixed });
   const hidden = useMemo(() => [...fields.keys(), ...Object.keys(fixed)], [fields, fixed]);
   const section = useRef<HTMLElement>(null);
   // Whoever opened it wants to type.
@@ -84,6 +85,11 @@ export function OnSheet({
         </div>
         <Button onClick={onClose}>Close</Button>
       </div>
+      {rules === null && (
+        <p className="border-b border-hair px-4 py-3 font-medium leading-snug">
+          What your shop has set for its rules of thumb could not be fetched. The usual values stand.
+        </p>
+      )}
       {fields.size > 0 && (
         <div className="border-b border-hair px-4 py-3">
           <Judged
@@ -94,7 +100,7 @@ export function OnSheet({
           />
         </div>
       )}
-      <Worksheet worksheet={worksheet} now={now} rules={rules} hidden={hidden} />
+      <Worksheet worksheet={worksheet} now={now} rules={rules ?? NOTHING} hidden={hidden} />
     </section>
   );
 }

@@ -11,21 +11,22 @@ for (const table of document.querySelectorAll<HTMLElement>('[data-worksheet][dat
   place.hidden = true;
   table.after(button, place);
   button.addEventListener('click', async () => {
+    if (button.dataset['pending'] !== undefined) return;
     button.dataset['pending'] = '';
     const loaded = await import('./open').catch(() => null);
-    delete button.dataset['pending'];
     if (!loaded) {
+      delete button.dataset['pending'];
       button.textContent = 'Could not be fetched. Try again';
       return;
     }
-    button.textContent = 'Work it out here';
-    button.hidden = true;
-    place.hidden = false;
     const limits = JSON.parse(table.dataset['bound'] ?? '[]') as Parameters<typeof loaded.openWorksheet>[2];
-    loaded.openWorksheet(place, table.dataset['worksheet'] ?? '', limits, () => {
+    await loaded.openWorksheet(place, table.dataset['worksheet'] ?? '', limits, () => {
       place.hidden = true;
       button.hidden = false;
       button.focus();
     });
+    delete button.dataset['pending'];
+    button.textContent = 'Work it out here';
+    button.hidden = true;
   });
 }
