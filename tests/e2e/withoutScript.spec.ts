@@ -62,7 +62,13 @@ test.describe('without JavaScript', () => {
   });
 
   test('a draft is written as text, kept, refused with its line, and proposed', async ({ as }) => {
-    const page = await as('technician', { javaScriptEnabled: false });
+    const page = await as('technician', { javaScriptEnabled: false, allow: [/status of 4(09|22)/] });
+    /** Status of the page that a button leads to. */
+    const press = async (name: string, on = page) => {
+      const answer = on.waitForResponse((one) => one.request().method() === 'POST');
+      await on.getByRole('button', { name }).click();
+      return (await answer).status();
+    };
     await page.goto('/procedures/P-0131');
     await page.getByRole('button', { name: 'Propose a change' }).click();
     const text = page.getByRole('textbox', { name: 'The whole text' });
@@ -70,7 +76,7 @@ test.describe('without JavaScript', () => {
     const source = await text.inputValue();
     await text.fill(source.replace(/^minutes: .*$/m, 'minutes: soon'));
     await reason.fill('Timed on three engines.');
-    await page.getByRole('button', { name: 'Propose' }).click();
+    expect(await press('Propose')).toBe(422);
     // Searches by text pass over what stands in <noscript>.
     await expect(page.locator('noscript p', { hasText: 'Not accepted' })).toBeVisible();
     await expect(page.locator('noscript li', { hasText: /^Line \d+:/ })).toBeVisible();
@@ -78,8 +84,17 @@ test.describe('without JavaScript', () => {
     await text.fill(source.replace(/^minutes: .*$/m, 'minutes: 185'));
     await page.getByRole('button', { name: 'Keep the draft' }).click();
     await expect(page.locator('noscript p', { hasText: 'Draft kept.' })).toBeVisible();
+    const behind = await page.context().newPage();
+    await behind.goto(page.url().replace('?kept', ''));
     await page.getByRole('button', { name: 'Propose' }).click();
     await expect(page).toHaveURL(/\?done=proposed$/);
     await expect(page.getByText('0 of 1 agreed')).toBeVisible();
+
+    // In the tab that was left open behind nothing is stored, and what was typed there stands.
+    const late = behind.getByRole('textbox', { name: 'Why this is better, for the editor' });
+    await late.fill('Timed on four engines.');
+    expect(await press('Keep the draft', behind)).toBe(409);
+    await expect(behind.locator('noscript p', { hasText: 'Not accepted' })).toBeVisible();
+    await expect(late).toHaveValue('Timed on four engines.');
   });
 });

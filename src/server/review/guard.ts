@@ -16,13 +16,25 @@ export async function readableProposal(actor: Actor, id: string): Promise<Loaded
 /** What a caller who lost a race needs to go on: nothing of theirs was stored, nothing of the other's was touched. */
 const standing = ({ version, state, base, current }: Loaded) => ({ version, state, base, current });
 
+const CHANGED_UNDER_AUTHOR = (again: string) =>
+  `This proposal was changed elsewhere after you opened it. Nothing was overwritten and nothing you typed was lost: open it again, compare, and ${again} once more.`;
+const CHANGED_UNDER_REVIEWER =
+  'This proposal was changed after you opened it, so what stands now may be another text than the one you judged. Nothing was done, and a reason that you wrote is kept: open it again and judge what stands there.';
+
+/** An author goes on with what they typed; a reviewer must see the new text first. */
+const CHANGED: Record<ProposalAct['act'], string> = {
+  edit: CHANGED_UNDER_AUTHOR('save'),
+  submit: CHANGED_UNDER_AUTHOR('send it in'),
+  return: CHANGED_UNDER_REVIEWER,
+  decline: CHANGED_UNDER_REVIEWER,
+  agree: CHANGED_UNDER_REVIEWER,
+  publish: CHANGED_UNDER_REVIEWER,
+};
+
 /** Refuses 409 where the caller's version is not the one that stands. null says nothing and passes. */
-export function expectVersion(proposal: Loaded, version: number | null): void {
+function expectVersion(act: ProposalAct['act'], proposal: Loaded, version: number | null): void {
   if (version === null || version === proposal.version) return;
-  throw stale(
-    'This proposal was changed elsewhere after you opened it. Nothing was overwritten and nothing you typed was lost: open it again, compare, and save once more.',
-    standing(proposal),
-  );
+  throw stale(CHANGED[act], standing(proposal));
 }
 
 /** A published letter that the text does not stand on is a lost race, told with the letter that won it. */
@@ -43,7 +55,7 @@ export function guard(
   const decision = decide(what, actor, facts);
   if (!decision.ok && decision.kind === 'hidden') throw notFound();
   if (!decision.ok && decision.kind === 'forbidden') throw forbidden(decision.why);
-  expectVersion(proposal, version);
+  expectVersion(what.act, proposal, version);
   if (decision.ok) return decision;
   if (decision.kind === 'invalid') {
     const path = facts.identical && facts.reason.trim() ? 'source' : 'reason';

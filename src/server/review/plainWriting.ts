@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import type { Actor } from '@/domain/people/may';
-import { Refusal, type RefusalError } from '../refusal';
+import { asRefusal, malformed, type RefusalError } from '../refusal';
 import { saveProposal } from './saveProposal';
 import { submit } from './submit';
 
@@ -14,19 +14,23 @@ const PlainForm = z.object({
 
 export type PlainOutcome =
   | { done: 'kept' | 'proposed' }
-  /** Refused: what was typed stands in the form again, with the version to save it over once it was compared. */
-  | { refusal: { detail: string; errors: RefusalError[] }; source: string; reason: string };
+  /**
+   * Refused, with the status to answer: what was typed stands in the form again, with the version to save it over once
+   * it was compared.
+   */
+  | { refusal: { status: number; detail: string; errors: RefusalError[] }; source: string; reason: string };
 
-/** Keeps a draft from a plain form, and proposes it where that was the button. Passes on 403 and 404. */
+/** What the author can do nothing about by sending the form again. */
+const THROWN = [401, 403, 404, 500];
+
+/**
+ * Keeps a draft from a plain form, and proposes it where that was the button. Whatever is refused that another press can
+ * put right, a full disk too, comes back with what was typed; 403, 404 and faults are passed on, and 400 a form without
+ * its fields.
+ */
 export async function writePlainly(actor: Actor, id: string, form: FormData): Promise<PlainOutcome> {
   const read = PlainForm.safeParse(Object.fromEntries(form));
-  if (!read.success)
-    throw new Refusal(
-      400,
-      'malformed',
-      'Not understood',
-      'The form came without some of its fields. Go back and send it again.',
-    );
+  if (!read.success) throw malformed('The form came without some of its fields. Go back and send it again.');
   const { reason, version, act } = read.data;
   // A browser sends every line end of a form as CRLF.
   const source = read.data.source.replace(/\r\n/g, '\n');
@@ -36,7 +40,9 @@ export async function writePlainly(actor: Actor, id: string, form: FormData): Pr
     await submit(actor, id, saved.version);
     return { done: 'proposed' };
   } catch (error) {
-    if (!(error instanceof Refusal) || ![409, 422].includes(error.status)) throw error;
-    return { refusal: { detail: error.detail, errors: error.errors ?? [] }, source, reason };
+    const { status, detail, errors = [] } = asRefusal(error);
+    if (THROWN.includes(status)) throw error;
+    if (status >= 500) console.error(error);
+    return { refusal: { status, detail, errors }, source, reason };
   }
 }

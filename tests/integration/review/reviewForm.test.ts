@@ -25,6 +25,27 @@ it.each([[{}], [{ act: 'agree' }], [{ act: 'constructor', version: '2' }], [{ ac
   },
 );
 
+it.each(['agree', 'publish', 'return', 'decline'])(
+  'tells a reviewer whose text changed to judge the new one, in words of review: %s',
+  async (act) => {
+    const { id, version } = await waiting(who('north.senior'), 'P-0142');
+    const { actor } = await signedIn(who('common.editor'));
+    const outcome = await actOnReviewForm(
+      actor,
+      id,
+      form({ act, version: String(version - 1), reason: 'Which cloth?', anchor: 'step:wipe' }),
+    );
+    expect(outcome).toMatchObject({
+      kind: 'refused',
+      status: 409,
+      detail: expect.stringMatching(/another text than the one you judged.*judge what stands there/) as string,
+      typed: 'Which cloth?',
+      anchor: 'step:wipe',
+    });
+    expect(JSON.stringify(outcome)).not.toMatch(/save/);
+  },
+);
+
 it('agrees to the version that was on the screen, and to no other', async () => {
   const { id, version } = await waiting(who('north.senior'), 'P-0142');
   const { actor } = await signedIn(who('common.editor'));

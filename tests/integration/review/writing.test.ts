@@ -1,6 +1,8 @@
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
+import { StorageFull } from '@db/storageErrors';
 import { BLANK_PROCEDURE } from '@/domain/procedure/blank';
 import { readDraft } from '@/domain/writing/readDraft';
+import { app } from '@/server/context';
 import { writePlainly } from '@/server/review/plainWriting';
 import { readProposal } from '@/server/review/readProposal';
 import { returnToAuthor } from '@/server/review/giveBack';
@@ -89,15 +91,39 @@ describe('the plain form', () => {
     expect(await writePlainly(senior, id, form({ ...typed, act: 'keep' }))).toEqual({ done: 'kept' });
     expect((await readProposal(senior, id)).source).toBe(source);
     expect(await writePlainly(senior, id, form({ ...typed, version: '2', act: 'propose' }))).toMatchObject({
-      refusal: { errors: [{ path: 'reason' }] },
+      refusal: { status: 422, errors: [{ path: 'reason' }] },
       source,
     });
     expect(await writePlainly(senior, id, form({ ...typed, act: 'keep', source: 'other' }))).toMatchObject({
-      refusal: { detail: expect.stringContaining('changed elsewhere') as string },
+      refusal: { status: 409, detail: expect.stringMatching(/changed elsewhere.*save once more/) as string },
       source: 'other',
     });
     const reasoned = form({ ...typed, version: '2', reason: 'Fluff', act: 'propose' });
     expect(await writePlainly(senior, id, reasoned)).toEqual({ done: 'proposed' });
     expect((await readProposal(senior, id)).state).toBe('proposed');
+    // It went on in another tab: what is typed in this one comes back all the same.
+    const late = form({ ...typed, version: '3', reason: 'And more', act: 'keep' });
+    expect(await writePlainly(senior, id, late)).toMatchObject({ refusal: { status: 409 }, reason: 'And more' });
+  });
+
+  it('gives it back where the disk is full too, and passes on what no second press can mend', async () => {
+    const senior = await actor('north.senior');
+    const id = await openDraft(senior, 'P-0142');
+    const fields = { source: text({ word: 'dry' }), reason: 'Fluff', version: '1', act: 'keep' };
+    const { db } = await app();
+    const log = vi.spyOn(console, 'error').mockImplementation(() => undefined);
+    const full = vi.spyOn(db, 'write').mockRejectedValue(new StorageFull(new Error('SQLITE_FULL')));
+    expect(await writePlainly(senior, id, form(fields))).toMatchObject({
+      refusal: { status: 503, detail: expect.stringContaining('cannot write to its disk') as string },
+      reason: 'Fluff',
+    });
+    // Whoever runs the server reads of it.
+    expect(log).toHaveBeenCalledTimes(1);
+    log.mockRestore();
+    full.mockRejectedValue(new TypeError('A fault of ours'));
+    await expect(writePlainly(senior, id, form(fields))).rejects.toThrow('A fault of ours');
+    full.mockRestore();
+    await expect(writePlainly(await actor('pier.senior'), id, form(fields))).rejects.toMatchObject({ status: 404 });
+    await expect(writePlainly(senior, id, form({ ...fields, act: 'eat' }))).rejects.toMatchObject({ status: 400 });
   });
 });
