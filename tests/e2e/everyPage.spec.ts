@@ -79,6 +79,34 @@ const SCENES: Scene[] = [
     open: at('/procedures/P-0137', (page) => page.context().setOffline(true)),
   },
   { name: 'handbook', who: 'apprentice', open: at('/handbook') },
+  { name: 'the calculators', who: 'apprentice', open: at('/handbook/calculators') },
+  {
+    name: 'a calculator, for who sets the rules of its shop',
+    who: 'sawmillOwner',
+    open: at('/handbook/calculators/clamp', async (page) => {
+      await page.getByRole('button', { name: 'Try a worked case' }).click();
+      await expect(page.getByRole('heading', { name: 'How it is worked out' })).toBeVisible();
+      await expect(page.getByRole('link', { name: 'Set it for your shop' })).toBeVisible();
+    }),
+  },
+  {
+    name: 'a calculator, with something that cannot be',
+    who: 'apprentice',
+    open: at('/handbook/calculators/units?measure=furlongs', (page) =>
+      expect(page.getByText(/One entry cannot be used/)).toBeVisible(),
+    ),
+  },
+  { name: 'rules of thumb', who: 'sawmillOwner', open: at('/shop/rules') },
+  {
+    name: 'rules of thumb, refused, for the steward',
+    who: 'steward',
+    allow: [/status of 422/],
+    open: at('/shop/rules', async (page) => {
+      await page.getByRole('textbox', { name: /Low below this share of proof/ }).fill('a third');
+      await page.getByRole('button', { name: 'Save' }).click();
+      await expect(page.locator('[aria-invalid="true"]').first()).toBeVisible();
+    }),
+  },
   { name: 'profile', who: 'pierOwner', open: at('/profile') },
   {
     name: 'profile, refused',

@@ -25,7 +25,7 @@ export interface RulesState {
 const COLUMNS = [
   { key: 'rule', label: 'Rule' },
   { key: 'usual', label: 'Usual in the trade' },
-  { key: 'set', label: 'Your shop' },
+  { key: 'set', label: 'This shop' },
 ];
 
 function Line({ rule, set, units, typed, error }: RuleLine & { units: Units; typed?: string; error?: string }) {
@@ -47,9 +47,12 @@ function Line({ rule, set, units, typed, error }: RuleLine & { units: Units; typ
         <Field
           name={`value.${name}`}
           label={
-            <VisuallyHidden>
-              {label}, {worksheet.title}, your shop
-            </VisuallyHidden>
+            <span className="font-normal text-ink-2 sm:sr-only">
+              This shop
+              <VisuallyHidden>
+                : {label}, {worksheet.title}
+              </VisuallyHidden>
+            </span>
           }
           defaultValue={typed ?? ruleText(rule, set?.value ?? null, units)}
           error={error}
