@@ -97,4 +97,15 @@ test.describe('without JavaScript', () => {
     await expect(behind.locator('noscript p', { hasText: 'Not accepted' })).toBeVisible();
     await expect(late).toHaveValue('Timed on four engines.');
   });
+
+  test('a new procedure without a title is refused with its status, the form still there', async ({ as }) => {
+    const page = await as('technician', { javaScriptEnabled: false, allow: [/status of 422/] });
+    await page.goto('/procedures/new');
+    // Blanks pass the browser's own check, not ours.
+    await page.getByLabel('Which task?').fill('   ');
+    const answer = page.waitForResponse((one) => one.request().method() === 'POST');
+    await page.getByRole('button', { name: 'Start writing' }).click();
+    expect((await answer).status()).toBe(422);
+    await expect(page.getByText('Write which task it is.')).toBeVisible();
+  });
 });

@@ -112,7 +112,7 @@ describe('the plain form', () => {
     const fields = { source: text({ word: 'dry' }), reason: 'Fluff', version: '1', act: 'keep' };
     const { db } = await app();
     const log = vi.spyOn(console, 'error').mockImplementation(() => undefined);
-    const full = vi.spyOn(db, 'write').mockRejectedValue(new StorageFull(new Error('SQLITE_FULL')));
+    const full = vi.spyOn(db, 'write').mockRejectedValue(new StorageFull('SQLITE_FULL'));
     expect(await writePlainly(senior, id, form(fields))).toMatchObject({
       refusal: { status: 503, detail: expect.stringContaining('cannot write to its disk') as string },
       reason: 'Fluff',
