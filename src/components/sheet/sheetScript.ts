@@ -29,6 +29,8 @@ for (const link of document.querySelectorAll<HTMLAnchorElement>('a[data-copy-lin
       .catch(() => {});
   });
 
-for (const figure of document.querySelectorAll<HTMLElement>('figure[data-order]')) stepThrough(figure);
+// A drawing in an island is the island's to bring to life.
+for (const figure of document.querySelectorAll<HTMLElement>('figure[data-order]'))
+  if (!figure.closest('astro-island')) stepThrough(figure);
 
 for (const button of document.querySelectorAll('[data-print]')) button.addEventListener('click', () => print());

@@ -21,7 +21,8 @@ export const VerdictMark = ({ verdict }: { verdict: Verdict }) => (
 );
 
 function Main({ result, units }: { result: Result; units: Units }) {
-  const [, number = '', rest = ''] = /^(−?[\d.\u202f]+)(.*)$/s.exec(result.text[units]) ?? [];
+  // One number with its unit stands largest; a list of them, or words, reads better in one size.
+  const [, number = '', rest = ''] = /^(−?[\d.\u202f]+)(\D*)$/s.exec(result.text[units]) ?? [];
   return (
     <div>
       <dt className="leading-snug">{result.label}</dt>
@@ -57,11 +58,13 @@ export function Answer({ outcome, units }: { outcome: Outcome; units: Units }) {
   );
 }
 
+/** `F_p` as F with a low p. */
+const withSubscripts = (text: string) =>
+  text.split(/_(\p{L}+|\d+)/u).map((part, i) => (i % 2 ? <sub key={i}>{part}</sub> : part));
+
 const Formula = ({ result, units }: { result: Result; units: Units }): ReactNode =>
   result.formula ? (
-    <p className="font-serif text-[0.9375rem] italic leading-relaxed">
-      <In both={result.formula} units={units} />
-    </p>
+    <p className="font-serif text-[0.9375rem] italic leading-relaxed">{withSubscripts(result.formula[units])}</p>
   ) : null;
 
 /** Every number, with the formula that it comes from and where that comes from. */

@@ -103,7 +103,7 @@ export function Worksheet({
         </section>
       )}
       {outcome.ok && outcome.value.charts.length > 0 && (
-        <section className="work-more flex flex-col gap-7">
+        <section className="work-more work-charts">
           <Charts charts={outcome.value.charts} units={now.units} />
         </section>
       )}

@@ -132,13 +132,19 @@ function readQuantity(
 /** "0.014 in" and "0.356 mm" for what was typed as `.014"`: as it was typed in the one system, converted in the other. */
 function understood(amount: number, unit: Unit, base: number, fieldUnit: Unit): BothUnits {
   const typed = Number(amount.toPrecision(12));
-  const both = formatMeasure(typed, unit);
+  const both = withoutTail(formatMeasure(typed, unit));
   if (sameKind(unit, fieldUnit) && both.metric !== both.inch) return both;
   const inField = withUnit(formatNumber(Number(fromBase(base, fieldUnit).toPrecision(4))), fieldUnit);
   if (unit === fieldUnit || inField === both.metric) return both;
   // Mass taken for volume: what came of it says more than the same mass in another unit.
   return { metric: inField, inch: sameKind(unit, fieldUnit) ? inField : withUnit(formatNumber(typed), unit) };
 }
+
+/** "254 mm" rather than "254.000 mm" for 10 in: what was read is no claim to a fineness. */
+const withoutTail = ({ metric, inch }: BothUnits): BothUnits => {
+  const bare = (text: string) => text.replace(/(\.\d*?)0+(?=\D|$)/, (_, kept: string) => (kept === '.' ? '' : kept));
+  return { metric: bare(metric), inch: bare(inch) };
+};
 
 function outside(
   value: number,

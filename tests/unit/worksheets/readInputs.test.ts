@@ -92,7 +92,7 @@ describe('a measure', () => {
     expect(understood['depth']).toEqual({ metric: '0.356 mm', inch: '14 thou' });
     expect(understood['heat']).toEqual({ metric: '82 °C', inch: '180 °F' });
     expect(understood['injectors.1.before']).toEqual({ metric: '252 cc/min', inch: '252 cc/min' });
-    expect(understood['limit.max']).toEqual({ metric: '0.05 mm', inch: '0.0020 in' });
+    expect(understood['limit.max']).toEqual({ metric: '0.05 mm', inch: '0.002 in' });
     expect(understood).not.toHaveProperty('cylinders');
   });
 

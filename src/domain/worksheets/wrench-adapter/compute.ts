@@ -15,7 +15,8 @@ const SOURCE =
 const STEP_ALLOWED = 0.04;
 
 /** What to set a torque wrench to when an adapter changes how far the bolt stands from the hand. */
-export function compute({ atBolt, step, ...wrench }: Values<typeof fields>): Worked<Outcome> {
+export function compute({ atBolt, step, length, adapter, angle = 0 }: Values<typeof fields>): Worked<Outcome> {
+  const wrench = { length, adapter, angle };
   const setting = wrenchSetting(atBolt, wrench);
   if (!setting.ok) return setting;
   const unadjusted = torqueAtBolt(atBolt, wrench);

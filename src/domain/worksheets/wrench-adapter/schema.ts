@@ -14,9 +14,9 @@ export const fields = {
     least: 0,
     most: 3000,
   }),
-  angle: quantity('°', {
+  angle: quantityIfKnown('°', {
     label: 'Angle of the adapter',
-    hint: '0 points away from the grip, 90 stands square to the wrench, 180 points back at the grip.',
+    hint: 'Left empty: 0, straight on, away from the grip. 90 stands square to the wrench, 180 points back at the grip.',
     least: -360,
     most: 360,
   }),
