@@ -73,6 +73,31 @@ function Line({ rule, set, units, typed, error }: RuleLine & { units: Units; typ
   );
 }
 
+/** What came of the form; first in it, because the page comes back at its top. Leads to each box that cannot be used. */
+function Answer({ lines, saved, refused }: { lines: readonly RuleLine[] } & RulesState) {
+  if (refused)
+    return (
+      <Notice live="alert" title={refused.detail}>
+        <ul className="flex flex-wrap gap-x-5">
+          {lines
+            .filter(({ rule }) => refused.errors[rule.name])
+            .map(({ rule }) => (
+              <li key={rule.name}>
+                <a href={`#${rule.name}`} className="inline-flex min-h-7 items-center">
+                  {rule.worksheet.title}: {rule.label}
+                </a>
+              </li>
+            ))}
+        </ul>
+      </Notice>
+    );
+  return saved === undefined ? null : (
+    <p role="status" className="font-medium">
+      {savedWords(saved)}
+    </p>
+  );
+}
+
 /** All rules of thumb of a shop in one form that works without a script. */
 export function RulesForm({
   lines,
@@ -85,6 +110,11 @@ export function RulesForm({
   return (
     <form method="post" action={`/shop/rules?shop=${shopId}`}>
       <input type="hidden" name="units" value={units} />
+      {(refused || saved !== undefined) && (
+        <div className="px-4 pt-5 sm:px-9">
+          <Answer lines={lines} saved={saved} refused={refused} />
+        </div>
+      )}
       {worksheets.map((worksheet) => (
         <section key={worksheet.name} className="border-b border-rule px-4 pb-3 pt-6 sm:px-9">
           <h2 className="text-lead">
@@ -107,16 +137,10 @@ export function RulesForm({
           </div>
         </section>
       ))}
-      <div className="flex flex-wrap items-center gap-4 px-4 py-6 sm:px-9">
+      <div className="px-4 py-6 sm:px-9">
         <Button type="submit" kind="main">
           Save
         </Button>
-        {saved !== undefined && (
-          <p role="status" className="font-medium">
-            {savedWords(saved)}
-          </p>
-        )}
-        {refused && <Notice live="alert">{refused.detail}</Notice>}
       </div>
     </form>
   );

@@ -86,7 +86,8 @@ export function Box({
       />
     );
   }
-  const unit = unitAfter(column, units);
+  // A text with a unit of its own is not in that of the box.
+  const unit = text.trim() === '' || readBare(text).ok ? unitAfter(column, units) : undefined;
   return (
     <div className="flex min-w-0 flex-col gap-1">
       <Field
