@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { Button } from '@/components/ui/Button';
 import { Segmented } from '@/components/ui/Segmented';
 import type { ShopRules } from '@/domain/worksheets/readInputs';
@@ -22,7 +22,6 @@ const NOTHING: TypedIn = {};
 
 /** Keeps the reader's units in the profile, as the switch of a sheet does; a failure only means that the next page asks again. */
 function remember(units: Units): void {
-  document.documentElement.dataset['units'] = units;
   void fetch('/profile/units', { method: 'POST', body: new URLSearchParams({ units }), redirect: 'manual' }).catch(
     () => {},
   );
@@ -44,6 +43,10 @@ function Named({
   const now = useCase(worksheet, { typed, units: first, rules, fixed: NOTHING });
   const [said, say] = useState('');
   useAddress(worksheet, now.typed, now.units);
+  // A case that was sent in other units than the reader's own is drawn in them too.
+  useEffect(() => {
+    document.documentElement.dataset['units'] = now.units;
+  }, [now.units]);
   const copy = () => {
     const link = location.origin + caseAddress(location.pathname, worksheet.fields, now.typed, now.units);
     void navigator.clipboard
