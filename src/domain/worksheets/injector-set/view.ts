@@ -1,0 +1,30 @@
+export const groups = [
+  { title: 'Readings', fields: ['nominal', 'injectors'] },
+  { title: 'Limits', fields: ['flow', 'spread', 'drops', 'deviation', 'matching'] },
+  { title: 'At the pressure of the engine', fields: ['benchPressure', 'runPressure'] },
+  { title: 'Power that the set can feed', fields: ['density', 'duty', 'bsfc'] },
+] as const;
+
+export const example = {
+  nominal: '250',
+  'injectors.0.before': '248',
+  'injectors.0.after': '251',
+  'injectors.0.drops': '0',
+  'injectors.0.spray': 'even',
+  'injectors.1.before': '186',
+  'injectors.1.after': '249',
+  'injectors.1.drops': '0',
+  'injectors.1.spray': 'even',
+  'injectors.2.before': '131',
+  'injectors.2.after': '231',
+  'injectors.2.drops': '0',
+  'injectors.2.spray': 'one-sided',
+  'injectors.3.before': '245',
+  'injectors.3.after': '250',
+  'injectors.3.drops': '0',
+  'injectors.3.spray': 'even',
+  'flow.min': '243',
+  'flow.max': '257',
+  'spread.max': '2',
+  'drops.max': '0',
+};
