@@ -1,4 +1,4 @@
-import { optionalBandProblems, placeInIfAny, sameWithin, type Band, type Judged } from './band';
+import { nothingFails, optionalBandProblems, placeInIfAny, sameWithin, type Band, type Judged } from './band';
 import { PRESSURE, SIZE, SOME_PRESSURE, TOLERANCE_PERCENT } from './reach';
 import { countProblem } from './readings';
 import { numberProblem, work, type FieldProblem, type Worked } from './worked';
@@ -63,46 +63,53 @@ export const pressureAtLoss = (supply: number, loss: number): Worked<number> =>
     () => supply * (1 - loss / 100),
   );
 
+export interface CylinderLeak {
+  lossPercent: number;
+  judged: Judged | null;
+  /** What each place points at, in the order given. */
+  pointsAt: (typeof HEARD)[Heard][];
+}
+
 export interface LeakDownFound {
-  cylinders: {
-    lossPercent: number;
-    judged: Judged | null;
-    /** What each place points at, in the order given. */
-    pointsAt: (typeof HEARD)[Heard][];
-  }[];
+  /** By the places of the readings; null where a cylinder was not tested. */
+  cylinders: (CylinderLeak | null)[];
   /** Largest loss, per cent. */
   worst: number;
   passes: boolean;
 }
 
 /**
- * A leak-down test of one cylinder or more. Of the loss, `{ max: 25 }` is the published suspicion for aircraft (AC 43.13-1B
+ * A leak-down test of one cylinder or more; null stands for one that was not tested. Of the loss, `{ max: 25 }` is the published suspicion for aircraft (AC 43.13-1B
  * ¶ 8-14, with its own orifice); a shop's limit is its own. A sound at intake, exhaust, coolant or neighbour is a finding
  * at any per cent, but the verdict is on the number alone: every engine sighs a little into its crankcase.
  *
  * Errors name `readings`, `readings.<place>.<supply|cylinder|heard>` or `band`.
  */
-export function judgeLeakDown(readings: readonly LeakReading[], band?: Band): Worked<LeakDownFound> {
+export function judgeLeakDown(readings: readonly (LeakReading | null)[], band?: Band): Worked<LeakDownFound> {
   const count = countProblem('readings', { list: 'The leak-down test', one: 'Cylinder' }, readings, { atMost: 64 });
+  if (count.length === 0 && readings.every((reading) => reading === null))
+    count.push({ field: 'readings', message: 'The leak-down test must hold one cylinder that was tested.' });
   const problems = [
     ...count,
     ...(count.length > 0
       ? []
       : Array.from(readings).flatMap((reading, place) =>
-          readingProblems(reading ?? {}, `readings.${place}.`, ` of cylinder ${place + 1}`),
+          reading === null ? [] : readingProblems(reading ?? {}, `readings.${place}.`, ` of cylinder ${place + 1}`),
         )),
     ...optionalBandProblems('band', 'The loss allowed', band, TOLERANCE_PERCENT),
   ];
   return work(problems, 'readings', () => {
     const cylinders = readings.map((reading) => {
+      if (reading === null) return null;
       const loss = lossOf(reading);
       const pointsAt = (reading.heard ?? []).map((place) => HEARD[place]);
       return { lossPercent: loss, judged: placeInIfAny(loss, band, 100), pointsAt };
     });
+    const tested = cylinders.filter((one) => one !== null);
     return {
       cylinders,
-      worst: Math.max(...cylinders.map((one) => one.lossPercent)),
-      passes: cylinders.every(({ judged }) => judged === null || judged.at === 'in'),
+      worst: Math.max(...tested.map((one) => one.lossPercent)),
+      passes: nothingFails(tested.map(({ judged }) => judged)),
     };
   });
 }

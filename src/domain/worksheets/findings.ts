@@ -64,6 +64,16 @@ export function allowed({ min, max }: Band, unit: Unit, fineness: number): BothU
   return { metric: words(metric), inch: words(inch) };
 }
 
+/** Finer where a value that failed would read like its limit: "15.3 %, too much: the most allowed is 15.0 %", never 15 % twice. */
+function fineEnough(value: number, limit: number | undefined, unit: Unit, fineness: number, { at }: Judged): number {
+  if (at === 'in' || limit === undefined) return fineness;
+  const alike = (step: number) => {
+    const [one, other] = [show(value, unit, step), show(limit, unit, step)];
+    return one.metric === other.metric || one.inch === other.inch;
+  };
+  return [1, 10, 100, 1000].map((times) => fineness / times).find((step) => !alike(step)) ?? fineness / 1000;
+}
+
 interface ToSay {
   /** "The gap is", "Injector 3 flows". */
   subject: string;
@@ -79,8 +89,9 @@ interface ToSay {
 /** The finding of a value that may have been judged: "Taper is 0.018 mm, too much: the most allowed is 0.015 mm." */
 export function judgedFinding({ subject, value, judged, band, unit, fineness }: ToSay): Finding[] {
   if (!judged || !band) return [];
-  const limit = allowed(band, unit, fineness);
-  const shown = show(value, unit, fineness);
+  const step = fineEnough(value, judged.at === 'under' ? band.min : band.max, unit, fineness, judged);
+  const limit = allowed(band, unit, step);
+  const shown = show(value, unit, step);
   const joint = { in: '; ', under: ', too little: ', over: ', too much: ' }[judged.at];
   return [{ verdict: judged.at === 'in' ? 'pass' : 'fail', text: said`${subject} ${shown}${joint}${limit}.` }];
 }

@@ -23,10 +23,22 @@ describe('leak-down', () => {
     const found = valueOf(
       judgeLeakDown([kPa(550, 500, 'crankcase'), kPa(550, 467.5), kPa(550, 400, 'exhaust', 'coolant')], { max: 15 }),
     );
-    expect(found.cylinders.map((one) => one.judged?.at)).toEqual(['in', 'in', 'over']);
+    expect(found.cylinders.map((one) => one?.judged?.at)).toEqual(['in', 'in', 'over']);
     expect(found.cylinders[2]?.pointsAt).toEqual(['exhaust valve', 'head gasket, head or liner']);
     expect(found.worst).toBeCloseTo(27.273, 3);
     expect(found.passes).toBe(false);
+  });
+
+  it('passes over a cylinder that was not tested, and keeps the numbers of the others', () => {
+    const found = valueOf(judgeLeakDown([kPa(550, 500), null, kPa(550, 400)], { max: 15 }));
+    expect(found.cylinders.map((one) => one?.judged?.at ?? null)).toEqual(['in', null, 'over']);
+    expect(judgeLeakDown([kPa(550, 500), null, kPa(550, 560)])).toMatchObject({
+      problems: [{ field: 'readings.2.cylinder' }],
+    });
+    expect(judgeLeakDown([null, null])).toEqual({
+      ok: false,
+      problems: [{ field: 'readings', message: 'The leak-down test must hold one cylinder that was tested.' }],
+    });
   });
 
   it('knows a place for each sound', () => {
@@ -71,7 +83,7 @@ describe('leak-down', () => {
         { field: 'readings.0.heard', message: 'Where air is heard of cylinder 1 must be chosen from the list.' },
       ],
     });
-    expect(judgeLeakDown([null as unknown as LeakReading]).ok).toBe(false);
+    expect(judgeLeakDown([undefined as unknown as LeakReading]).ok).toBe(false);
   });
 
   it('withstands odd input', () => {

@@ -1,9 +1,11 @@
 import { optionalBandProblems, placeInIfAny } from '../../measure/band';
-import { judgeLeakDown, testerOrifice, type LeakReading } from '../../measure/leakDown';
+import type { BothUnits } from '../../measure/format';
+import { judgeLeakDown, testerOrifice, type LeakDownFound } from '../../measure/leakDown';
 import { said, show } from '../../measure/said';
 import { refused, worked, type Worked } from '../../measure/worked';
 import type { Values } from '../fields';
 import {
+  allowed,
   inBoxes,
   inShort,
   judgedFinding,
@@ -36,20 +38,10 @@ export function compute(inputs: Inputs): Worked<Outcome> {
   const orifice = orificeResults(inputs);
   if (!orifice.ok) return orifice;
 
-  const losses = found.value.cylinders.map(({ lossPercent, judged }, place): Finding[] => {
-    const subject = `Cylinder ${place + 1} loses`;
-    if (!band && lossPercent > suspect)
-      return [
-        lookAgain(
-          said`${subject} ${percent(lossPercent)}, more than the ${percent(suspect)} from which it is suspect.`,
-        ),
-      ];
-    return judgedFinding({ subject, value: lossPercent, judged, band, unit: '%', fineness: 1 });
-  });
-  const worstLoss = percent(found.value.worst);
+  const { cylinders, worst } = found.value;
   const findings = [
-    ...inShort(losses.flat(), said`Every cylinder passes; the largest loss is ${worstLoss}.`),
-    ...readings.value.flatMap(({ heard }, place) => (heard ?? []).map((at) => heardFinding(at, place + 1))),
+    ...lossFindings(inputs, cylinders, percent(worst)),
+    ...readings.value.flatMap((one, place) => (one?.heard ?? []).map((at) => heardFinding(at, place + 1))),
     ...(supply === undefined
       ? []
       : judgedFinding({
@@ -61,18 +53,21 @@ export function compute(inputs: Inputs): Worked<Outcome> {
           fineness: 5,
         })),
   ];
-  if (findings.length === 0) findings.push(noted(said`The largest loss is ${worstLoss}; no limit was given.`));
-  const cylinders = found.value.cylinders.map(({ lossPercent, judged }, place) =>
-    measured(`loss-${place + 1}`, `Loss, cylinder ${place + 1}`, lossPercent, '%', 1, {
-      verdict: verdictOf(judged) ?? (!band && lossPercent > suspect ? 'look' : undefined),
-      ...formulaOf(inputs, place, lossPercent),
-      source: LOSS,
-      main: true,
-    }),
-  );
+  const results = cylinders.flatMap((one, place): Result[] => {
+    if (one === null) return [];
+    const { lossPercent, judged } = one;
+    return [
+      measured(`loss-${place + 1}`, `Loss, cylinder ${place + 1}`, lossPercent, '%', 1, {
+        verdict: verdictOf(judged) ?? (!band && lossPercent > suspect ? 'look' : undefined),
+        ...formulaOf(inputs, place, lossPercent),
+        source: LOSS,
+        main: true,
+      }),
+    ];
+  });
   return outcomeOf(
     findings,
-    [...cylinders, ...orifice.value],
+    [...results, ...orifice.value],
     [
       {
         kind: 'bars',
@@ -80,14 +75,32 @@ export function compute(inputs: Inputs): Worked<Outcome> {
         unit: '%',
         fineness: 1,
         items: cylinders.map((_, place) => String(place + 1)),
-        series: [{ label: 'Loss', values: cylinders.map(({ value }) => value) }],
+        series: [{ label: 'Loss', values: cylinders.map((one) => one?.lossPercent ?? null) }],
         ...(band && { band }),
       },
     ],
   );
 }
 
-const cylinderBoxes = (readings: readonly LeakReading[]) =>
+function lossFindings(
+  { loss: band, suspect }: Inputs,
+  cylinders: LeakDownFound['cylinders'],
+  worst: BothUnits,
+): Finding[] {
+  const each = cylinders.flatMap((one, place): Finding[] => {
+    if (one === null) return [];
+    const subject = `Cylinder ${place + 1} loses`;
+    const { lossPercent, judged } = one;
+    if (band) return judgedFinding({ subject, value: lossPercent, judged, band, unit: '%', fineness: 1 });
+    if (!(lossPercent > suspect)) return [];
+    const from = percent(suspect);
+    return [lookAgain(said`${subject} ${percent(lossPercent)}, more than the ${from} from which it is suspect.`)];
+  });
+  if (band) return inShort(each, said`The largest loss is ${worst}; ${allowed(band, '%', 1)}.`);
+  return each.length > 0 ? each : [noted(said`The largest loss is ${worst}; no limit was given.`)];
+}
+
+const cylinderBoxes = (readings: readonly unknown[]) =>
   Object.fromEntries(
     readings.flatMap((_, place) => [
       [`readings.${place}.supply`, 'supply'],

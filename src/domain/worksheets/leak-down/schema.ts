@@ -25,7 +25,7 @@ export const fields = {
     {
       label: 'Cylinders',
       item: 'Cylinder',
-      hint: 'At top dead centre, both valves shut: the pressure on the second gauge, or the loss where the tester shows that.',
+      hint: 'At top dead centre, both valves shut: the pressure on the second gauge, or the loss where the tester shows that. Leave one that was not tested empty.',
       least: 1,
       most: 24,
       start: 4,
