@@ -19,8 +19,8 @@ export const bindingsIn = (of: string | undefined): Binding[] =>
       return at < 0 ? { field: null, key: token } : { field: token.slice(0, at), key: token.slice(at + 1) };
     });
 
-/** Keys of the limits, in order, without their fields. */
-export const limitKeysIn = (of: string | undefined): string[] => bindingsIn(of).map(({ key }) => key);
+/** Keys of the limits without their fields, each once, in the order first named. */
+export const limitKeysIn = (of: string | undefined): string[] => [...new Set(bindingsIn(of).map(({ key }) => key))];
 
 /** Why a limit cannot stand for a field of a worksheet, in a sentence; null where it can. */
 export function bindingFault(kind: string, { field, key }: Binding, limit: Limit | undefined): string | null {

@@ -84,7 +84,9 @@ function worksheetFaults(given: Attributes, head: Frontmatter): AttributeFault[]
         message: 'A worksheet of readings names the limits to read, for example of="end-float preload".',
       },
     ];
-  const twice = keys.find((key, i) => keys.indexOf(key) !== i);
+  // One limit may judge several fields, each of them once.
+  const tokens = bindings.map(({ field, key }) => `${field ?? ''}:${key}`);
+  const twice = keys.find((_, i) => tokens.indexOf(tokens[i] ?? '') !== i);
   if (twice) return [{ attribute: 'of', message: `"${twice}" is named twice in this worksheet.` }];
   return bindings.flatMap((binding) => {
     const wrong = bindingFault(

@@ -71,7 +71,8 @@ function boundLimits(bindings: readonly Binding[], head: Frontmatter): string {
 /** A table to write readings in, on paper as well; without limits only the name of the worksheet. */
 function worksheet(kind: string, bindings: readonly Binding[], head: Frontmatter): HastElement {
   const title = WORKSHEETS[kind as WorksheetKind];
-  const limits = bindings.flatMap(({ key }) => head.limits.filter((l) => l.key === key));
+  const keys = new Set(bindings.map(({ key }) => key));
+  const limits = [...keys].flatMap((key) => head.limits.filter((l) => l.key === key));
   const properties = {
     className: ['worksheet'],
     dataWorksheet: kind,

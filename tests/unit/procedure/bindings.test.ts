@@ -11,7 +11,7 @@ describe('the limits that a worksheet names', () => {
       { field: null, key: 'oil-level' },
     ]);
     expect(bindingsIn(undefined)).toEqual([]);
-    expect(limitKeysIn('a:b c')).toEqual(['b', 'c']);
+    expect(limitKeysIn('a:b c d:b')).toEqual(['b', 'c']);
   });
 
   it('count as used where the form asks what an entry is used for', () => {
