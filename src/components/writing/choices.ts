@@ -1,4 +1,4 @@
-import { WORKSHEETS } from '@/domain/procedure/worksheets';
+import { READINGS, WORKSHEET_KINDS, worksheetTitle } from '@/domain/procedure/worksheets';
 import { boxesOf, entryName, type Draft, type ListName } from '@/domain/writing/draft';
 import type { Piece } from '@/domain/writing/insert';
 
@@ -121,6 +121,9 @@ export const HOLD = block(`<Hold>${HOLD_WORDS}</Hold>`, HOLD_WORDS);
 
 export const readingsOf = (keys: readonly string[]) => block(`<Worksheet kind="readings" of="${keys.join(' ')}" />`);
 
-export const worksheets: Choice[] = Object.entries(WORKSHEETS)
-  .filter(([kind]) => kind !== 'readings')
-  .map(([kind, name]) => ({ key: kind, name, detail: '', piece: block(`<Worksheet kind="${kind}" />`) }));
+export const worksheets: Choice[] = WORKSHEET_KINDS.filter((kind) => kind !== READINGS).map((kind) => ({
+  key: kind,
+  name: worksheetTitle(kind) ?? kind,
+  detail: '',
+  piece: block(`<Worksheet kind="${kind}" />`),
+}));

@@ -1,7 +1,7 @@
 import type { Frontmatter } from './schema';
 import { suggestion } from './nearest';
 import { bindingFault, bindingsIn } from './bindings';
-import { WORKSHEETS } from './worksheets';
+import { READINGS, WORKSHEET_KINDS } from './worksheets';
 
 /** Attributes of a component as written: literal text only. */
 export type Attributes = Readonly<Record<string, string>>;
@@ -73,11 +73,9 @@ function worksheetFaults(given: Attributes, head: Frontmatter): AttributeFault[]
   const kind = given['kind'] ?? '';
   const bindings = bindingsIn(given['of']);
   const keys = bindings.map(({ key }) => key);
-  if (!Object.hasOwn(WORKSHEETS, kind))
-    return [
-      { attribute: 'kind', message: `There is no worksheet "${kind}". ${suggestion(kind, Object.keys(WORKSHEETS))}` },
-    ];
-  if (kind === 'readings' && keys.length === 0)
+  if (!WORKSHEET_KINDS.includes(kind))
+    return [{ attribute: 'kind', message: `There is no worksheet "${kind}". ${suggestion(kind, WORKSHEET_KINDS)}` }];
+  if (kind === READINGS && keys.length === 0)
     return [
       {
         attribute: 'of',

@@ -6,7 +6,7 @@ import { given, referenceOf, valueOf } from './references';
 import type { Frontmatter, Limit } from './schema';
 import type { Reference } from './types';
 import { limitText } from './values';
-import { WORKSHEETS, type WorksheetKind } from './worksheets';
+import { READINGS, worksheetTitle } from './worksheets';
 
 export function h(tagName: string, properties: Properties, ...children: (ElementContent | string)[]): HastElement {
   return {
@@ -70,13 +70,13 @@ function boundLimits(bindings: readonly Binding[], head: Frontmatter): string {
 
 /** A table to write readings in, on paper as well; without limits only the name of the worksheet. */
 function worksheet(kind: string, bindings: readonly Binding[], head: Frontmatter): HastElement {
-  const title = WORKSHEETS[kind as WorksheetKind];
+  const title = worksheetTitle(kind) ?? kind;
   const keys = new Set(bindings.map(({ key }) => key));
   const limits = [...keys].flatMap((key) => head.limits.filter((l) => l.key === key));
   const properties = {
     className: ['worksheet'],
     dataWorksheet: kind,
-    ...(kind !== 'readings' && { dataBound: boundLimits(bindings, head) }),
+    ...(kind !== READINGS && { dataBound: boundLimits(bindings, head) }),
   };
   if (limits.length === 0) return h('p', properties, `Worksheet: ${title.toLowerCase()}`);
   const columns = ['Measure', 'Limit', 'Reading'].map((text) => h('th', { scope: 'col' }, text));

@@ -1,22 +1,16 @@
-/** Worksheets that a step may ask for, and what each is called on a sheet. */
-export const WORKSHEETS = {
-  readings: 'Readings',
-  units: 'Units',
-  clamp: 'Clamp check',
-  'wrench-adapter': 'Wrench with an adapter',
-  'tightening-order': 'Tightening order',
-  'injector-set': 'Injector set',
-  'depth-over-bar': 'Depth over a bar',
-  bore: 'Bore',
-  'bearing-clearance': 'Bearing clearance',
-  'ring-gap': 'Ring end gap',
-  'bucket-shim': 'Bucket shim',
-  flatness: 'Flatness',
-  'compression-ratio': 'Compression ratio',
-  compression: 'Compression',
-  'leak-down': 'Leak-down',
-  'gauge-fit': 'Gauge fit',
-  'viscosity-grade': 'Viscosity grade',
-  vin: 'Vehicle number check',
-} as const;
-export type WorksheetKind = keyof typeof WORKSHEETS;
+import { WORKSHEETS as REGISTERED } from '../worksheets/registry';
+
+/** A table of readings to write down, each beside its limit; computes nothing. */
+export const READINGS = 'readings';
+
+const TITLES: ReadonlyMap<string, string> = new Map([
+  [READINGS, 'Readings'],
+  ...REGISTERED.map(({ name, title }) => [name, title] as const),
+]);
+
+/** Kinds that a step may ask for, in the order of the handbook. */
+export const WORKSHEET_KINDS: readonly string[] = [...TITLES.keys()];
+
+/** What a worksheet is called on a sheet; undefined for a kind that there is not. */
+export const worksheetTitle = (kind: string | undefined): string | undefined =>
+  kind === undefined ? undefined : TITLES.get(kind);

@@ -3,7 +3,7 @@ import { isStage } from '../procedure/components';
 import { worksheetNamed } from '../worksheets/registry';
 import type { Frontmatter } from '../procedure/schema';
 import { limitText, partText, stageText, timerText, torqueText } from '../procedure/values';
-import { WORKSHEETS, type WorksheetKind } from '../procedure/worksheets';
+import { worksheetTitle } from '../procedure/worksheets';
 import { type Found, replaceComponents } from './components';
 
 const PASS_WORDS = ['first pass', 'second pass', 'third pass', 'fourth pass', 'fifth pass', 'sixth pass'];
@@ -44,7 +44,7 @@ function textOf({ name, given, inside }: Found, head: Frontmatter): string | nul
         const name = head.limits.find((l) => l.key === key)?.name ?? key;
         return field === null ? name : `${fields[field]?.label ?? field} by ${name}`;
       });
-      const title = WORKSHEETS[given['kind'] as WorksheetKind] ?? given['kind'] ?? '';
+      const title = worksheetTitle(given['kind']) ?? given['kind'] ?? '';
       return `Worksheet: ${[title, ...names].join('; ')}`;
     }
     case 'Hold':

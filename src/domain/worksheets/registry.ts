@@ -22,7 +22,6 @@ import type { Worksheet } from './worksheet';
  * call of the API and a table that a step can ask for.
  */
 const ALL = [
-  units,
   clamp,
   wrenchAdapter,
   tighteningOrder,
@@ -39,6 +38,7 @@ const ALL = [
   leakDown,
   viscosityGrade,
   vin,
+  units,
 ] as const;
 
 // Each computation takes the values of its own fields; from here on the two travel together, so that they always fit.
