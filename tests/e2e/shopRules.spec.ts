@@ -7,7 +7,7 @@ test('an owner sets a rule of thumb, and the calculators of that shop go by it',
   await owner.goto('/');
   await owner.getByRole('navigation', { name: 'Main' }).getByRole('link', { name: 'Shop' }).click();
   await expect(owner.getByRole('heading', { level: 1, name: 'Rules of thumb' })).toBeVisible();
-  await expect(owner.getByText('No standard stands behind these numbers')).toBeVisible();
+  await expect(owner.getByText('stands behind these numbers')).toBeVisible();
   const box = owner.getByRole('textbox', { name: /Low below this share of proof/ });
   await expect(box).toHaveValue('');
   await box.fill('40');
@@ -68,4 +68,26 @@ test('two who set one rule at once: the second is told and chooses', async ({ as
   await owner.getByRole('button', { name: 'Save' }).click();
   await expect(owner.getByText('Saved. One rule changed.')).toBeVisible();
   await expect(boxOf(owner)).toHaveValue('45');
+});
+
+test('a worksheet that is opened on a sheet goes by the shop too, and says so where it cannot', async ({ as }) => {
+  const owner = await as('sawmillOwner');
+  await owner.goto(RULES);
+  await owner.getByRole('textbox', { name: /Spread allowed/ }).fill('4 %');
+  await owner.getByRole('button', { name: 'Save' }).click();
+  await expect(owner.getByText('Saved. One rule changed.')).toBeVisible();
+
+  const page = await as('sawmillApprentice', { allow: [/Failed to load resource/, /shop\/rules/] });
+  const inset = page.getByRole('region', { name: 'Injector set' });
+  const open = async () => {
+    await page.goto('/procedures/P-0104');
+    await page.getByRole('button', { name: 'Work it out here' }).click();
+    await expect(inset).toBeVisible();
+  };
+  await open();
+  await expect(inset.getByText(/Left empty: 4 %, set by your shop/)).toBeVisible();
+  await page.route('**/api/v1/shop/rules', (route) => route.abort());
+  await open();
+  await expect(inset.getByText(/could not be fetched. The usual values stand/)).toBeVisible();
+  await expect(inset.getByText(/Left empty: 3 %, usual in the trade/)).toBeVisible();
 });
