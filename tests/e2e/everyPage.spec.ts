@@ -1,6 +1,6 @@
 import AxeBuilder from '@axe-core/playwright';
 import type { Page } from '@playwright/test';
-import type { ProposalSummary } from '@/domain/api/schemas';
+import type { ProposalSummary } from '@/domain/api/schemas/proposals';
 import { call } from './support/api';
 import { alive, expect, expectNoSidewaysScroll, test } from './support/book';
 import type { Who } from './support/people';

@@ -1,5 +1,5 @@
 import type { Page } from '@playwright/test';
-import type { ProposalSummary } from '@/domain/api/schemas';
+import type { ProposalSummary } from '@/domain/api/schemas/proposals';
 import { call, readProposal } from './support/api';
 import { alive, expect, test } from './support/book';
 import { WritingDesk } from './support/writing';

@@ -1,5 +1,5 @@
 import { nextLetter } from '@/domain/revision/letters';
-import type { ProposalSummary } from '@/domain/api/schemas';
+import type { ProposalSummary } from '@/domain/api/schemas/proposals';
 import { call, draft, propose, readProposal, readSheet } from './support/api';
 import { alive, expect, test } from './support/book';
 import { WritingDesk } from './support/writing';

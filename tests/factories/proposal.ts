@@ -1,4 +1,5 @@
-import type { PersonRef, Proposal, Remark, TrailEntry } from '@/domain/api/schemas';
+import type { PersonRef } from '@/domain/api/schemas/common';
+import type { Proposal, Remark, TrailEntry } from '@/domain/api/schemas/proposals';
 
 export const AUTHOR: PersonRef = { id: 'author', name: 'Wren Castellan', shop: 'Hollow Road Engines' };
 export const EDITOR: PersonRef = { id: 'editor', name: 'Otto Lindqvist', shop: null };

@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import type { Me } from '@/domain/api/schemas';
+import type { Me } from '@/domain/api/schemas/me';
 import { ROLE_NAMES } from '@/domain/people/roleNames';
 import { Button } from '@/components/ui/Button';
 import { Field } from '@/components/ui/Field';

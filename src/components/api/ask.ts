@@ -1,4 +1,4 @@
-import type { Problem } from '@/domain/api/schemas';
+import type { Problem } from '@/domain/api/schemas/common';
 
 /** The server said no, and why. */
 export class Refused extends Error {

@@ -1,6 +1,6 @@
 import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { ACT_WORDS, whyNotYet, type ReviewAct } from './words';
 
 interface ActsProps {

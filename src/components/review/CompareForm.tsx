@@ -1,7 +1,7 @@
 import { Button } from '@/components/ui/Button';
 import { dayOf } from '@/components/ui/day';
 import { Select } from '@/components/ui/Select';
-import type { RevisionSummary } from '@/domain/api/schemas';
+import type { RevisionSummary } from '@/domain/api/schemas/book';
 
 /** Which two revisions; a plain form, so that the comparison has an address. */
 export function CompareForm({

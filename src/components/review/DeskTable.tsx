@@ -1,6 +1,6 @@
 import { dayOf } from '@/components/ui/day';
 import { Cell, Row, Table, type Column } from '@/components/ui/Table';
-import type { DeskItem, ProposalSummary } from '@/domain/api/schemas';
+import type { DeskItem, ProposalSummary } from '@/domain/api/schemas/proposals';
 import { daysSince, severityWords, takenBackWords } from '@/domain/review/desk';
 import { nextLetter } from '@/domain/revision/letters';
 

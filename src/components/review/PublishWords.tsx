@@ -1,4 +1,4 @@
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 
 /** What publishing does, said before it is done. */
 export function PublishWords({ proposal, letter, me }: { proposal: Proposal; letter: string; me: string }) {

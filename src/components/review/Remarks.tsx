@@ -1,5 +1,5 @@
 import { dayOf } from '@/components/ui/day';
-import type { Remark } from '@/domain/api/schemas';
+import type { Remark } from '@/domain/api/schemas/proposals';
 import { REMARK_WORDS } from './words';
 
 /** What a reviewer wrote, where it belongs; `about` says so where it cannot stand there. */

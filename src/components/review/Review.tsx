@@ -1,7 +1,7 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
 import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { Notice } from '@/components/ui/Notice';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import type { StepPair } from '@/domain/revision/twoTexts';
 import type { ClampChange } from '@/domain/revision/types';
 import type { ValueRow } from '@/domain/revision/valueRows';

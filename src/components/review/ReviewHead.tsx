@@ -4,7 +4,7 @@ import { ButtonLink } from '@/components/ui/ButtonLink';
 import { dayOf } from '@/components/ui/day';
 import { Notice } from '@/components/ui/Notice';
 import { Status } from '@/components/ui/Status';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { takenBackWords } from '@/domain/review/desk';
 import { Acts, isReviewer } from './Acts';
 import type { Trouble } from './useReviewActs';

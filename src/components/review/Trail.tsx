@@ -1,5 +1,5 @@
 import { dayOf } from '@/components/ui/day';
-import type { TrailEntry } from '@/domain/api/schemas';
+import type { TrailEntry } from '@/domain/api/schemas/proposals';
 import { trailWords } from './words';
 
 /** What became of a proposal so far, in one line. */

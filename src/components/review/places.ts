@@ -1,5 +1,5 @@
 import type { Option } from '@/components/ui/Select';
-import type { Remark } from '@/domain/api/schemas';
+import type { Remark } from '@/domain/api/schemas/proposals';
 import type { StepPair } from '@/domain/revision/twoTexts';
 import type { ValueRow } from '@/domain/revision/valueRows';
 

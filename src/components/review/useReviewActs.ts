@@ -1,7 +1,7 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useRef, useState } from 'react';
 import { ask, Refused } from '@/components/api/ask';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import type { ReviewAct } from './words';
 
 export interface Wanted {

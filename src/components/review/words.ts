@@ -1,4 +1,4 @@
-import type { Proposal, Remark, TrailEntry } from '@/domain/api/schemas';
+import type { Proposal, Remark, TrailEntry } from '@/domain/api/schemas/proposals';
 import { dayOf } from '@/components/ui/day';
 
 /** What a reviewer does, each with the words of its button and of what was done. */

@@ -1,6 +1,6 @@
 import { keepPreviousData, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useEffect, useState } from 'react';
-import type { SearchReply } from '@/domain/api/schemas';
+import type { SearchReply } from '@/domain/api/schemas/search';
 import type { SearchAnswer } from '@/domain/search/engine';
 import type { Matched } from '@/domain/search/explain';
 import { type Asked, parametersOf } from './address';

@@ -1,4 +1,4 @@
-import type { RevisionSummary } from '@/domain/api/schemas';
+import type { RevisionSummary } from '@/domain/api/schemas/book';
 import { Button } from '@/components/ui/Button';
 import { dayOf } from '@/components/ui/day';
 import { Cell, Row, Table } from '@/components/ui/Table';

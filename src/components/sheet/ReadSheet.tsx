@@ -1,4 +1,4 @@
-import type { Sheet as SheetData } from '@/domain/api/schemas';
+import type { Sheet as SheetData } from '@/domain/api/schemas/book';
 import { dayOf } from '@/components/ui/day';
 import { Actions, ProposeStep } from './Actions';
 import type { EngineName } from './engineNames';

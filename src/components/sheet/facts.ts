@@ -1,5 +1,5 @@
 import { dayOf } from '@/components/ui/day';
-import type { Sheet } from '@/domain/api/schemas';
+import type { Sheet } from '@/domain/api/schemas/book';
 import type { TitleBlockFacts } from './TitleBlock';
 import { counted } from './words';
 

@@ -1,6 +1,6 @@
 import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import type { Comparison } from '@/domain/revision/types';
 import { sourceOf } from '@/domain/writing/readDraft';
 import { Checks } from './Checks';

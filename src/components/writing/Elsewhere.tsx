@@ -1,5 +1,5 @@
 import { Button } from '@/components/ui/Button';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { BothTexts } from './BothTexts';
 
 /** The draft was saved in another tab meanwhile: the author says which text goes on, and loses neither. */

@@ -3,7 +3,7 @@ import { ButtonLink } from '@/components/ui/ButtonLink';
 import { dayOf } from '@/components/ui/day';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { Cell, Row, Table, type Column } from '@/components/ui/Table';
-import type { ProposalSummary } from '@/domain/api/schemas';
+import type { ProposalSummary } from '@/domain/api/schemas/proposals';
 import {
   MINE_SHOWN,
   mineAddress,

@@ -1,7 +1,7 @@
 import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
 import { TextArea } from '@/components/ui/TextArea';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 
 /** What the last press of a button came to; null on a fresh page. */
 type Outcome =

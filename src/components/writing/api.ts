@@ -1,7 +1,9 @@
 import type { z } from 'zod';
 import { ask } from '@/components/api/ask';
-import type { CheckResult, Proposal, SavedProposal } from '@/domain/api/schemas';
-import type { CheckRequest, SaveProposal } from '@/domain/api/schemas';
+import type { CheckResult } from '@/domain/api/schemas/check';
+import type { Proposal, SavedProposal } from '@/domain/api/schemas/proposals';
+import type { CheckRequest } from '@/domain/api/schemas/check';
+import type { SaveProposal } from '@/domain/api/schemas/proposals';
 
 export { Refused } from '@/components/api/ask';
 

@@ -1,7 +1,7 @@
 import { createContext, use } from 'react';
 import { useFormContext } from 'react-hook-form';
 import type { z } from 'zod';
-import type { Remark } from '@/domain/api/schemas';
+import type { Remark } from '@/domain/api/schemas/proposals';
 import type { SourceProblem } from '@/domain/procedure/types';
 import type { Draft } from '@/domain/writing/draft';
 import type { Place } from './places';

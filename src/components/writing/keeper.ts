@@ -1,4 +1,4 @@
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { sizeProblem } from '@/domain/procedure/bounds';
 import { Refused } from './api';
 import type { Held, Words } from './heldCopy';

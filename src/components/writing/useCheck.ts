@@ -1,6 +1,6 @@
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useEffect, useMemo, useState } from 'react';
-import type { CheckResult } from '@/domain/api/schemas';
+import type { CheckResult } from '@/domain/api/schemas/check';
 import { sizeProblem } from '@/domain/procedure/bounds';
 import type { Procedure, SourceProblem } from '@/domain/procedure/types';
 import { headProblems } from '@/domain/writing/problems';

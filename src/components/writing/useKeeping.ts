@@ -1,5 +1,5 @@
 import { useEffect, useRef, useState, useSyncExternalStore } from 'react';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { readProposal, saveProposal } from './api';
 import { HeldCopy, type Words } from './heldCopy';
 import { Keeper } from './keeper';

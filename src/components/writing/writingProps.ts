@@ -1,4 +1,4 @@
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import type { Drawing } from './desk';
 
 /** A published text with its letter. */

@@ -2,7 +2,13 @@ import { z } from 'zod';
 import { zodToJsonSchema } from 'zod-to-json-schema';
 import type { Operation } from './operation';
 import { OPERATIONS } from './operations/all';
-import * as schemas from './schemas';
+import * as book from './schemas/book';
+import * as check from './schemas/check';
+import * as common from './schemas/common';
+import * as compare from './schemas/compare';
+import * as me from './schemas/me';
+import * as proposals from './schemas/proposals';
+import * as search from './schemas/search';
 
 /** What each refusal means; the key is the status. */
 const REFUSALS: Record<number, string> = {
@@ -22,10 +28,13 @@ const REFUSALS: Record<number, string> = {
 const capital = (word: string) => word.charAt(0).toUpperCase() + word.slice(1);
 const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
 
-/** Named schemas: those that schemas.ts exports, then what single calls take and answer beyond them. */
+/** Named schemas: those that `schemas/` exports, by name, then what single calls take and answer beyond them. */
 function names(): Map<z.ZodTypeAny, string> {
   const named = new Map<z.ZodTypeAny, string>();
-  for (const [name, schema] of Object.entries(schemas)) if (schema instanceof z.ZodType) named.set(schema, name);
+  const exported = [book, check, common, compare, me, proposals, search].flatMap((area) => Object.entries(area));
+  // By code unit, so that the document does not depend on which file holds what.
+  exported.sort(([a], [b]) => (a < b ? -1 : 1));
+  for (const [name, schema] of exported) if (schema instanceof z.ZodType) named.set(schema, name);
   for (const { id, body, reply } of OPERATIONS) {
     if (!isEmpty(body) && !named.has(body)) named.set(body, `${capital(id)}Body`);
     if (!isEmpty(reply) && !named.has(reply)) named.set(reply, `${capital(id)}Reply`);
@@ -117,7 +126,7 @@ function describe(op: Operation, refOf: (schema: z.ZodTypeAny) => object) {
     String(status),
     {
       description: REFUSALS[status] ?? 'Refused',
-      content: { 'application/problem+json': { schema: refOf(schemas.Problem) } },
+      content: { 'application/problem+json': { schema: refOf(common.Problem) } },
     },
   ]);
   return {

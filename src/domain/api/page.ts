@@ -1,4 +1,4 @@
-import type { ListQuery, Page } from './schemas';
+import type { ListQuery, Page } from './schemas/common';
 
 /**
  * The part of a sorted list that a caller asked for. The cursor is the key of the last entry that the

@@ -1,4 +1,5 @@
-import type { BookRef, ProposalSummary } from '../api/schemas';
+import type { BookRef } from '../api/schemas/common';
+import type { ProposalSummary } from '../api/schemas/proposals';
 
 /** What the address of the desk can ask for. */
 export const DESK_SORTS = ['worst', 'title', 'author', 'agreed', 'waiting'] as const;

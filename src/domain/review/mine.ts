@@ -1,4 +1,4 @@
-import type { ProposalSummary } from '../api/schemas';
+import type { ProposalSummary } from '../api/schemas/proposals';
 
 /** How somebody looks through their own proposals. Stands in the address of the page. */
 export const MINE_SHOWN = {

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import type { Person } from '@db/models/people';
-import { UnitSystem } from '@/domain/api/schemas';
+import { UnitSystem } from '@/domain/api/schemas/common';
 import type { Actor } from '@/domain/people/may';
 import { isOneLine, NOT_ONE_LINE } from '@/domain/procedure/characters';
 import { appendAudit } from '../audit/append';

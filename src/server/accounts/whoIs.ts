@@ -1,4 +1,4 @@
-import type { Me } from '@/domain/api/schemas';
+import type { Me } from '@/domain/api/schemas/me';
 import { ROLES, type Actor, type Membership } from '@/domain/people/may';
 import { app } from '../context';
 import type { SignedIn } from './checkSignIn';

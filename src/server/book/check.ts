@@ -1,4 +1,4 @@
-import type { CheckResult } from '@/domain/api/schemas';
+import type { CheckResult } from '@/domain/api/schemas/check';
 import type { Actor } from '@/domain/people/may';
 import { sizeProblem } from '@/domain/procedure/bounds';
 import { clampChecks } from '@/domain/procedure/clamp';

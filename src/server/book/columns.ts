@@ -1,4 +1,5 @@
-import type { BookRef, PersonRef, RevisionSummary } from '@/domain/api/schemas';
+import type { RevisionSummary } from '@/domain/api/schemas/book';
+import type { BookRef, PersonRef } from '@/domain/api/schemas/common';
 import type { Book } from '@/domain/people/may';
 import type { RevisionState } from '@/domain/revision/types';
 

@@ -1,4 +1,4 @@
-import type { RevisionSummary } from '@/domain/api/schemas';
+import type { RevisionSummary } from '@/domain/api/schemas/book';
 import type { Actor } from '@/domain/people/may';
 import { compareRevisions, type ComparedRevisions } from './compare';
 import { readHistory } from './history';

@@ -1,4 +1,4 @@
-import type { RevisionSummary } from '@/domain/api/schemas';
+import type { RevisionSummary } from '@/domain/api/schemas/book';
 import type { Actor } from '@/domain/people/may';
 import { app } from '../context';
 import { REVISION_COLUMNS, revisionSummary, type BookRow, type RevisionRow } from './columns';

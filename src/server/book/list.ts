@@ -1,5 +1,6 @@
 import type { RevisionHead } from '@db/models/book';
-import type { ListQuery, Page, ProcedureSummary } from '@/domain/api/schemas';
+import type { ProcedureSummary } from '@/domain/api/schemas/book';
+import type { ListQuery, Page } from '@/domain/api/schemas/common';
 import type { Actor } from '@/domain/people/may';
 import { app } from '../context';
 import { BOOK_COLUMNS, bookRef, type BookRow } from './columns';

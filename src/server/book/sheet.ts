@@ -1,4 +1,4 @@
-import type { Sheet } from '@/domain/api/schemas';
+import type { Sheet } from '@/domain/api/schemas/book';
 import type { Actor } from '@/domain/people/may';
 import { app } from '../context';
 import {

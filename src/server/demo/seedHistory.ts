@@ -1,6 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import { join } from 'node:path';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import type { Actor } from '@/domain/people/may';
 import { toSource } from '@/domain/procedure/canonical';
 import { whoIs } from '../accounts/whoIs';

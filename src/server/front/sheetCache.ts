@@ -1,7 +1,7 @@
 import { createHash, randomBytes } from 'node:crypto';
 import { promisify } from 'node:util';
 import { brotliCompress, constants, gzip } from 'node:zlib';
-import type { Me } from '@/domain/api/schemas';
+import type { Me } from '@/domain/api/schemas/me';
 import type { Actor } from '@/domain/people/may';
 import { LRUCache } from 'lru-cache';
 import { readSheetKey } from '../book/sheet';

@@ -1,4 +1,4 @@
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { versionTag } from './preconditions';
 
 /** A proposal with its version as ETag, for the `If-Match` of the next call. */

@@ -1,4 +1,4 @@
-import type { ProposalSummary } from '@/domain/api/schemas';
+import type { ProposalSummary } from '@/domain/api/schemas/proposals';
 import { may, type Actor } from '@/domain/people/may';
 import { subjectOf } from '@/domain/review/rules';
 import { loadProposals } from './proposals';

@@ -1,4 +1,4 @@
-import type { DeskItem } from '@/domain/api/schemas';
+import type { DeskItem } from '@/domain/api/schemas/proposals';
 import { may, type Actor } from '@/domain/people/may';
 import { offers } from '@/domain/review/decide';
 import { deskOrder } from '@/domain/review/desk';

@@ -1,4 +1,4 @@
-import { GiveReason } from '@/domain/api/schemas';
+import { GiveReason } from '@/domain/api/schemas/proposals';
 import type { Actor } from '@/domain/people/may';
 import { malformed, Refusal } from '../refusal';
 import { agree } from './agree';

@@ -1,4 +1,4 @@
-import type { SavedProposal } from '@/domain/api/schemas';
+import type { SavedProposal } from '@/domain/api/schemas/proposals';
 import type { Actor } from '@/domain/people/may';
 import { checkResult, refuseOverlong } from '../book/check';
 import { app } from '../context';

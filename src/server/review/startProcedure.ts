@@ -1,4 +1,4 @@
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { may, type Actor, type Book } from '@/domain/people/may';
 import { refuseOverlong } from '../book/check';
 import { app } from '../context';

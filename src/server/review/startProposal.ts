@@ -1,4 +1,4 @@
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { may, type Actor } from '@/domain/people/may';
 import { bookOf, type BookRow } from '../book/columns';
 import { refuseOverlong } from '../book/check';

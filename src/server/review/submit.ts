@@ -1,4 +1,4 @@
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import type { Actor } from '@/domain/people/may';
 import type { ProposalFacts } from '@/domain/review/rules';
 import { keepRendering } from '../book/rendering';

@@ -1,4 +1,4 @@
-import type { TrailEntry } from '@/domain/api/schemas';
+import type { TrailEntry } from '@/domain/api/schemas/proposals';
 import { personColumn, personRef } from '../book/columns';
 import { app } from '../context';
 

@@ -1,4 +1,4 @@
-import type { Proposal, ProposalSummary } from '@/domain/api/schemas';
+import type { Proposal, ProposalSummary } from '@/domain/api/schemas/proposals';
 import type { Actor } from '@/domain/people/may';
 import { offers, type ProposalAct } from '@/domain/review/decide';
 import { agreementsNeeded, isStale, standing, tally } from '@/domain/review/rules';

@@ -1,4 +1,5 @@
-import type { Me, Proposal } from '@/domain/api/schemas';
+import type { Me } from '@/domain/api/schemas/me';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { may, type Actor, type Book } from '@/domain/people/may';
 import { BLANK_PROCEDURE } from '@/domain/procedure/blank';
 import { readDraft, sourceOf } from '@/domain/writing/readDraft';

@@ -1,5 +1,6 @@
 import { expect, type APIResponse, type Page } from '@playwright/test';
-import type { Proposal, ProcedureSummary, Sheet } from '@/domain/api/schemas';
+import type { ProcedureSummary, Sheet } from '@/domain/api/schemas/book';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 
 /** Calls the API as the person whose browser the page is in. `path` begins after `/api/v1`. */
 export const call = (

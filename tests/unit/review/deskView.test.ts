@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { deskColumns, OWN_COLUMNS } from '@/components/review/deskColumns';
-import type { ProposalSummary } from '@/domain/api/schemas';
+import type { ProposalSummary } from '@/domain/api/schemas/proposals';
 import { booksOf, DESK_SORTS, deskAddress, deskItems, readDeskView, type DeskView } from '@/domain/review/deskView';
 import { AUTHOR, EDITOR, proposal, SECOND } from '../../factories/proposal';
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { ProposalSummary } from '@/domain/api/schemas';
+import type { ProposalSummary } from '@/domain/api/schemas/proposals';
 import { mineAddress, readMineView, viewMine, waitsFor } from '@/domain/review/mine';
 
 const one = (more: Partial<ProposalSummary>): ProposalSummary =>

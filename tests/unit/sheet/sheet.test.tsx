@@ -2,7 +2,7 @@ import { renderToStaticMarkup } from 'react-dom/server';
 import { describe, expect, it } from 'vitest';
 import { BigValue } from '@/components/sheet/Value';
 import { ReadSheet } from '@/components/sheet/ReadSheet';
-import type { Sheet } from '@/domain/api/schemas';
+import type { Sheet } from '@/domain/api/schemas/book';
 import { parseProcedure } from '@/domain/procedure/parse';
 
 const SOURCE = `---

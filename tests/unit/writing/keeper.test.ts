@@ -1,5 +1,5 @@
 import { describe, expect, it, vi } from 'vitest';
-import type { Proposal } from '@/domain/api/schemas';
+import type { Proposal } from '@/domain/api/schemas/proposals';
 import { Refused } from '@/components/writing/api';
 import { HeldCopy, type Store } from '@/components/writing/heldCopy';
 import { Keeper, type Surroundings } from '@/components/writing/keeper';

@@ -1,21 +1,10 @@
 import { z } from 'zod';
 import { operation } from '../operation';
-import {
-  CheckRequest,
-  CheckResult,
-  CompareQuery,
-  ListQuery,
-  ProcedureNumber,
-  ProcedureSummary,
-  Proposal,
-  RevisionComparison,
-  RevisionLetter,
-  RevisionSummary,
-  Sheet,
-  StartProcedure,
-  StartProposal,
-  pageOf,
-} from '../schemas';
+import { ProcedureSummary, RevisionSummary, Sheet } from '../schemas/book';
+import { CheckRequest, CheckResult } from '../schemas/check';
+import { ListQuery, ProcedureNumber, RevisionLetter, pageOf } from '../schemas/common';
+import { CompareQuery, RevisionComparison } from '../schemas/compare';
+import { Proposal, StartProcedure, StartProposal } from '../schemas/proposals';
 
 const OfProcedure = z.object({ number: ProcedureNumber });
 const OfRevision = OfProcedure.extend({ letter: RevisionLetter });

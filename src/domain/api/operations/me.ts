@@ -1,5 +1,5 @@
 import { operation } from '../operation';
-import { ChangePassword, Me, UpdateMe } from '../schemas';
+import { ChangePassword, Me, UpdateMe } from '../schemas/me';
 
 export const readMe = operation({
   id: 'readMe',

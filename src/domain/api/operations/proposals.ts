@@ -1,17 +1,8 @@
 import { z } from 'zod';
 import { operation } from '../operation';
-import {
-  DeskItem,
-  GiveReason,
-  Id,
-  ListQuery,
-  Proposal,
-  ProposalComparison,
-  ProposalSummary,
-  SaveProposal,
-  SavedProposal,
-  pageOf,
-} from '../schemas';
+import { Id, ListQuery, pageOf } from '../schemas/common';
+import { ProposalComparison } from '../schemas/compare';
+import { DeskItem, GiveReason, Proposal, ProposalSummary, SaveProposal, SavedProposal } from '../schemas/proposals';
 
 const OfProposal = z.object({ id: Id });
 

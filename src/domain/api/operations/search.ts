@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { operation } from '../operation';
-import { SearchQuery, SearchReply } from '../schemas';
+import { SearchQuery, SearchReply } from '../schemas/search';
 
 export const searchBook = operation({
   id: 'searchBook',

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { operation } from '../operation';
-import { Id } from '../schemas';
+import { Id } from '../schemas/common';
 
 const RuleName = z
   .string()
