@@ -12,9 +12,9 @@ for (const form of document.querySelectorAll<HTMLFormElement>('form[data-units-s
     for (const button of form.querySelectorAll('button'))
       button.setAttribute('aria-pressed', String(button.value === units));
     // Kept in the profile too. Where that fails the page still shows them, and the next page asks again.
-    void fetch(form.action, { method: 'POST', body: new URLSearchParams({ units }), redirect: 'manual' }).catch(
-      () => {},
-    );
+    // It outlives the page, for whoever switches and goes on at once.
+    const body = new URLSearchParams({ units });
+    void fetch(form.action, { method: 'POST', body, redirect: 'manual', keepalive: true }).catch(() => {});
   });
 
 for (const link of document.querySelectorAll<HTMLAnchorElement>('a[data-copy-link]'))

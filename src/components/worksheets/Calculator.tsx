@@ -22,9 +22,9 @@ const NOTHING: TypedIn = {};
 
 /** Keeps the reader's units in the profile, as the switch of a sheet does; a failure only means that the next page asks again. */
 function remember(units: Units): void {
-  void fetch('/profile/units', { method: 'POST', body: new URLSearchParams({ units }), redirect: 'manual' }).catch(
-    () => {},
-  );
+  // It outlives the page, for whoever switches and goes on at once.
+  const body = new URLSearchParams({ units });
+  void fetch('/profile/units', { method: 'POST', body, redirect: 'manual', keepalive: true }).catch(() => {});
 }
 
 /** A worksheet as a page of the handbook. Without a script it is a form that the server answers with the same page. */
