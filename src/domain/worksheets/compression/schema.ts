@@ -41,10 +41,11 @@ export const fields = {
   air: quantityIfKnown('kPa', {
     label: 'Air pressure in the shop',
     hint: 'By a barometer that is not set to sea level; better than the altitude.',
-    above: 0,
+    least: 40,
     most: 120,
   }),
-  compression: bandIfKnown('kPa', { label: 'Compression allowed' }),
+  compression: bandIfKnown('kPa', { label: 'Compression allowed', nominal: 'nominal' }),
+  nominal: quantityIfKnown('kPa', { label: 'Compression when new', above: 0, most: 20_000 }),
   share: bandIfKnown('%', { label: 'Lowest as a share of the highest allowed' }),
   rule: choice(
     [
@@ -52,7 +53,10 @@ export const fields = {
       { value: 'average', label: 'Each against the average' },
       { value: 'difference', label: 'Between any two' },
     ],
-    { label: 'Where no share is given, compare', hint: 'Manuals differ; these three are published, and do not agree.' },
+    {
+      label: 'Where no share is given, compare',
+      hint: 'Manuals differ; these three are published, and do not agree. A rule that is missed only asks to look again.',
+    },
   ),
   leastShare: quantity('%', {
     label: 'Lowest, of the highest, at least',

@@ -1,6 +1,6 @@
 export const groups = [
   { title: 'Readings', fields: ['cylinders', 'layout', 'scale', 'air', 'altitude'] },
-  { title: 'Limits', fields: ['compression', 'share'] },
+  { title: 'Limits', fields: ['compression', 'nominal', 'share'] },
   { title: 'Rules', fields: ['rule', 'leastShare', 'mostBelow', 'mostDifference', 'rise'] },
 ] as const;
 
@@ -11,4 +11,6 @@ export const example = {
   'cylinders.2.wet': '950',
   'cylinders.3.dry': '1260',
   'compression.min': '1050',
+  nominal: '1300',
+  'share.min': '75',
 };

@@ -1,44 +1,41 @@
-import { said, show } from '../../measure/said';
-import { wetTest } from '../../measure/wetTest';
-import { worked, type Worked } from '../../measure/worked';
-import type { Values } from '../fields';
-import { inBoxes, measured, noted, type Finding } from '../findings';
-import type { Result } from '../outcome';
-import type { fields } from './schema';
+import { said } from '../../measure/said';
+import { wetTest, type WetFound } from '../../measure/wetTest';
+import type { Worked } from '../../measure/worked';
+import { inBoxes, lookAgain, type Finding } from '../findings';
+import { kPa, percent, type GaugeReadings, type Inputs } from './readings';
 
-const percent = (share: number) => show(share, '%', 1);
+/**
+ * The repeat with oil; see `measure/wetTest.ts`. Only two that are low and stand side by side can share a leak.
+ *
+ * @param low places from 0 of the cylinders that are low
+ */
+export function wetOf({ layout, rise }: Inputs, { dry, wet }: GaugeReadings, low: readonly number[]): Worked<WetFound> {
+  const beside = low.flatMap((place): [number, number][] => (low.includes(place + 1) ? [[place, place + 1]] : []));
+  const found = wetTest({ dry, wet, risePercent: rise, neighbours: layout === 'line' ? beside : [] });
+  return found.ok ? found : inBoxes(found, { risePercent: 'rise', dry: 'cylinders', wet: 'cylinders' });
+}
 
-/** What the repeat with oil says, for the cylinders that have one. */
-export function wetFindings({
-  cylinders,
-  layout,
-  rise,
-}: Values<typeof fields>): Worked<{ findings: Finding[]; results: Result[] }> {
-  if (cylinders.every(({ wet }) => wet === undefined)) return worked({ findings: [], results: [] });
-  const neighbours = layout === 'line' ? cylinders.slice(1).map((_, i): [number, number] => [i, i + 1]) : [];
-  const found = wetTest({
-    dry: cylinders.map(({ dry }) => dry),
-    wet: cylinders.map(({ wet }) => wet ?? null),
-    risePercent: rise,
-    neighbours,
+/** What oil says about the cylinders that are low; one that is well has nothing to tell. */
+export function wetFindings(
+  { cylinders, gasketBetween }: WetFound,
+  { wet }: GaugeReadings,
+  low: readonly number[],
+): Finding[] {
+  const each = low.flatMap((place) => {
+    const one = cylinders[place];
+    if (!one?.pointsAt || one.rise === null) return [];
+    const rises =
+      one.rise <= 0
+        ? 'does not rise'
+        : one.risePercent === null
+          ? said`rises from nothing to ${kPa(wet[place] ?? 0)}`
+          : said`rises by ${percent(one.risePercent)}`;
+    const leaks = one.pointsAt === 'rings' ? 'the rings leak' : 'a valve or the gasket leaks';
+    return [lookAgain(said`Cylinder ${place + 1} ${rises} with oil: ${leaks}.`)];
   });
-  if (!found.ok) return inBoxes(found, { risePercent: 'rise', dry: 'cylinders', wet: 'cylinders' });
-  const results: Result[] = [];
-  const findings = found.value.cylinders.flatMap(({ pointsAt, risePercent, rise: gained }, place): Finding[] => {
-    if (pointsAt === null || gained === null) return [];
-    const who = `cylinder ${place + 1}`;
-    results.push(measured(`rise-${place + 1}`, `Rise with oil, ${who}`, gained, 'kPa', 10));
-    const by = risePercent === null ? show(gained, 'kPa', 10) : percent(risePercent);
-    return [
-      pointsAt === 'rings'
-        ? noted(said`With oil, ${who} rises by ${by}: the rings.`)
-        : noted(said`With oil, ${who} changes by ${by}, less than ${percent(rise)}: a valve or the gasket.`),
-    ];
+  const between = gasketBetween.map(([one, other]) => {
+    const both = said`Cylinders ${one + 1} and ${other + 1} are low side by side`;
+    return lookAgain(said`${both} and neither rises: suspect the gasket between them.`);
   });
-  const between = found.value.gasketBetween.map(([a, b]) =>
-    noted(
-      said`Cylinders ${a + 1} and ${b + 1} are neighbours and neither rises: look at the gasket between them first.`,
-    ),
-  );
-  return worked({ findings: [...findings, ...between], results });
+  return [...each, ...between];
 }
