@@ -63,6 +63,7 @@ describe('bearing clearance', () => {
     expect(microns(valueOf(clearanceFromShells(built)).least)).toBe(32);
     expect(microns(valueOf(clearanceFromShells({ ...built, shell: mm(2) })).least)).toBe(32);
     expect(microns(valueOf(clearanceFromShells({ ...built, shell: mm(2, 2.004) })).least)).toBe(28);
+    expect(clearanceFromShells({ ...built, housing: mm(56.022, 3), journal: mm(1) }).ok).toBe(false);
     expect(clearanceFromShells({ ...built, shell: mm(30) })).toEqual({
       ok: false,
       problems: [{ field: 'shell', message: 'The shell walls fill the whole housing bore.' }],

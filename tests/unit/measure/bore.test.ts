@@ -159,6 +159,12 @@ describe('a journal', () => {
     expect(short.passes).toBe(false);
   });
 
+  it('works out the taper for a length also where nothing limits it', () => {
+    const found = valueOf(judgeJournal({ readings: journal.readings, length: 25.4 * MM }));
+    expect(found.taperPerLength).toBeCloseTo(0.004 / 25.4, 12);
+    expect(found.judged.taperPerLength).toBeNull();
+  });
+
   it('wants the length where a limit is for one', () => {
     expect(judgeJournal({ ...journal, length: undefined })).toEqual({
       ok: false,

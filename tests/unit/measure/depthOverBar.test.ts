@@ -138,6 +138,14 @@ describe('depth across a joint', () => {
     expect(found).toMatchObject({ judged: { at: 'under' }, onlyMistakePasses: true });
   });
 
+  it('does not warn where the truth passes too, or where the mistake fails as well', () => {
+    const wide = valueOf(depthAcrossJoint({ first, second, band: band(36, 100) }));
+    expect(wide).toMatchObject({ judged: { at: 'in' }, onlyMistakePasses: false });
+    const far = valueOf(depthAcrossJoint({ first, second, band: band(1, 2) }));
+    expect(far).toMatchObject({ judged: { at: 'over' }, onlyMistakePasses: false });
+    expect(valueOf(depthAcrossJoint({ first, second })).onlyMistakePasses).toBe(false);
+  });
+
   it('does not depend on which reading comes first', () => {
     fc.assert(
       fc.property(between(0, 0.2), between(0, 0.2), (a, b) => {

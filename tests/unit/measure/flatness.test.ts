@@ -116,6 +116,28 @@ describe('best-fit plane', () => {
     );
   });
 
+  it('fits places that lie anyhow', () => {
+    const places = fc.array(fc.tuple(between(-0.2, 0.2), between(-0.2, 0.2)), { minLength: 4, maxLength: 12 });
+    fc.assert(
+      fc.property(places, between(-0.01, 0.01), between(-0.01, 0.01), (list, a, b) => {
+        const found = bestFitPlane(list.map(([x, y]) => ({ x, y, height: a * x + b * y + 0.001 })));
+        // Places that lie on one line, or nearly so, make no plane.
+        fc.pre(found.ok);
+        expect(found.value.flatness).toBeLessThan(1e-9);
+      }),
+    );
+    const skewed = [
+      [0, 0],
+      [0.1, 0.02],
+      [0.03, 0.2],
+      [0.25, 0.15],
+      [0.12, 0.11],
+    ].map(([x = 0, y = 0]) => ({ x, y, height: 0.003 * x - 0.002 * y }));
+    const { slope, flatness } = valueOf(bestFitPlane(skewed));
+    expect([slope.x, slope.y]).toEqual([expect.closeTo(0.003, 12), expect.closeTo(-0.002, 12)]);
+    expect(flatness).toBeLessThan(1e-15);
+  });
+
   it('has deviations that sum to nothing, and about which no other plane is better', () => {
     const heights = fc.array(between(-0.05, 0.05), { minLength: 9, maxLength: 9 });
     fc.assert(

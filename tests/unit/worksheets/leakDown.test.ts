@@ -23,6 +23,9 @@ describe('leak-down', () => {
     const [first] = answer(['60 psi'], { supply: '80 psi' }).results;
     expect(first?.value).toBeCloseTo(25, 9);
     expect(first?.text.inch).toBe('25 %');
+    // On the suspicion and not a hair over it, whatever the conversion of the pressures leaves behind.
+    const at = (pressure: string) => answer([pressure], { supply: '80 psi' }).verdict;
+    expect([at('60.5 psi'), at('60 psi'), at('59.5 psi')]).toEqual(['none', 'none', 'look']);
   });
 
   it.each([

@@ -40,6 +40,7 @@ export const fields = {
       start: 4,
     },
   ),
+  every: bandIfKnown('mm', { label: 'Allowed in every direction', hint: 'Where a direction has no limit of its own.' }),
   along: bandIfKnown('mm', { label: 'Allowed along' }),
   across: bandIfKnown('mm', { label: 'Allowed across' }),
   diagonal: bandIfKnown('mm', { label: 'Allowed diagonally' }),

@@ -28,13 +28,11 @@ export function straightedge(inputs: Inputs): Worked<{ findings: Finding[]; resu
   if (inputs.gaps.length === 0) return worked({ findings: [], results: [] });
   const local = localOf(inputs);
   if (!local.ok) return local;
-  const { along, across, diagonal } = inputs;
-  const found = judgeFlatness(inputs.gaps, { along, across, diagonal, local: local.value });
+  const limits = Object.fromEntries(DIRECTIONS.map((one) => [one, inputs[one] ?? inputs.every]));
+  const found = judgeFlatness(inputs.gaps, { ...limits, local: local.value });
   if (!found.ok)
     return inBoxes(found, {
-      'limits.along': 'along',
-      'limits.across': 'across',
-      'limits.diagonal': 'diagonal',
+      ...Object.fromEntries(DIRECTIONS.map((one) => [`limits.${one}`, inputs[one] ? one : 'every'])),
       'limits.local.max': 'local.max',
       'limits.local.over': 'over',
     });
@@ -46,7 +44,7 @@ export function straightedge(inputs: Inputs): Worked<{ findings: Finding[]; resu
         subject: `Gap ${place + 1}, ${WAYS[direction]}, is`,
         value: gap,
         judged,
-        band: inputs[direction],
+        band: limits[direction],
         unit: 'mm',
         fineness: FINE,
       }),

@@ -1,6 +1,6 @@
 export const groups = [
   { title: 'Straightedge and feeler gauge', fields: ['gaps'] },
-  { title: 'Limits', fields: ['along', 'across', 'diagonal', 'local', 'over', 'whole'] },
+  { title: 'Limits', fields: ['every', 'along', 'across', 'diagonal', 'local', 'over', 'whole'] },
   { title: 'Surface plate and dial', fields: ['points'] },
 ] as const;
 
@@ -15,7 +15,6 @@ export const example = {
   'gaps.3.gap': '0.06',
   'gaps.4.direction': 'across',
   'gaps.4.gap': '0.02',
-  'along.max': '0.05',
-  'diagonal.max': '0.05',
+  'every.max': '0.05',
   'across.max': '0.03',
 };

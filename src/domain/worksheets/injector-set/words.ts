@@ -45,7 +45,7 @@ function oneInjector(inputs: Inputs, found: InjectorSetFound, by: JudgedBy, plac
     const texts = {
       'flows too little': said`${who} flows ${flowOf(flow.flow)}, ${off} below nominal, too little: ${limit}.`,
       'flows too much': said`${who} flows ${flowOf(flow.flow)}, ${off} above nominal, too much: ${limit}.`,
-      drips: said`${who} drips, ${row?.drops ?? 0} in the hold; ${allowed(by.drops ?? {}, 'drops', 1)}.`,
+      drips: said`${who} drips, ${row?.drops ?? 0} in the hold; the most allowed is ${by.drops?.max ?? 0}.`,
       'sprays badly': said`${who} sprays ${SPRAYS[row?.spray ?? 'none']}; only an even spray passes.`,
     };
     return { verdict: 'fail', text: texts[fault] };

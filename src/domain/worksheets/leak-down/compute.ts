@@ -1,4 +1,4 @@
-import { optionalBandProblems, placeInIfAny } from '../../measure/band';
+import { optionalBandProblems, placeIn, placeInIfAny } from '../../measure/band';
 import type { BothUnits } from '../../measure/format';
 import { judgeLeakDown, testerOrifice, type LeakDownFound } from '../../measure/leakDown';
 import { said, show } from '../../measure/said';
@@ -30,7 +30,7 @@ const LOSS = 'Loss = (supply − cylinder) / supply: AC 43.13-1B ¶ 8-14 (80 ove
 export function compute(inputs: Inputs): Worked<Outcome> {
   const readings = leakReadings(inputs);
   if (!readings.ok) return readings;
-  const { loss: band, suspect, supply, supplied } = inputs;
+  const { loss: band, supply, supplied } = inputs;
   const found = judgeLeakDown(readings.value, band);
   if (!found.ok) return inBoxes(found, { band: 'loss', ...cylinderBoxes(readings.value) });
   const problems = optionalBandProblems('supplied', 'The supply pressure allowed', supplied, { least: 0, most: 1e9 });
@@ -58,7 +58,7 @@ export function compute(inputs: Inputs): Worked<Outcome> {
     const { lossPercent, judged } = one;
     return [
       measured(`loss-${place + 1}`, `Loss, cylinder ${place + 1}`, lossPercent, '%', 1, {
-        verdict: verdictOf(judged) ?? (!band && lossPercent > suspect ? 'look' : undefined),
+        verdict: verdictOf(judged) ?? (!band && isSuspect(inputs, lossPercent) ? 'look' : undefined),
         ...formulaOf(inputs, place, lossPercent),
         source: LOSS,
         main: true,
@@ -82,17 +82,17 @@ export function compute(inputs: Inputs): Worked<Outcome> {
   );
 }
 
-function lossFindings(
-  { loss: band, suspect }: Inputs,
-  cylinders: LeakDownFound['cylinders'],
-  worst: BothUnits,
-): Finding[] {
+/** 80 over 60 psi is 25 % and not a hair more, whatever the conversion of the pressures leaves behind. */
+const isSuspect = ({ suspect }: Inputs, loss: number) => placeIn(loss, { max: suspect }, 100).at === 'over';
+
+function lossFindings(inputs: Inputs, cylinders: LeakDownFound['cylinders'], worst: BothUnits): Finding[] {
+  const { loss: band, suspect } = inputs;
   const each = cylinders.flatMap((one, place): Finding[] => {
     if (one === null) return [];
     const subject = `Cylinder ${place + 1} loses`;
     const { lossPercent, judged } = one;
     if (band) return judgedFinding({ subject, value: lossPercent, judged, band, unit: '%', fineness: 1 });
-    if (!(lossPercent > suspect)) return [];
+    if (!isSuspect(inputs, lossPercent)) return [];
     const from = percent(suspect);
     return [lookAgain(said`${subject} ${percent(lossPercent)}, more than the ${from} from which it is suspect.`)];
   });

@@ -1,3 +1,4 @@
+import { placeIn } from '../../measure/band';
 import { judgeRingGaps } from '../../measure/rings';
 import { said, show } from '../../measure/said';
 import { refused, worked, type Worked } from '../../measure/worked';
@@ -84,7 +85,7 @@ function oneRing(
       text: said`The ends of the ${who} would meet: its gap of ${mm(read)} loses ${mm(-shift)} in the smaller bore.`,
     });
   else if (judged && band) findings.push(judgedRing(who, gap, judged, said`${allowed(band, 'mm', FINE)}`));
-  else if (limit === 'top' && wanted !== null && gap < wanted)
+  else if (limit === 'top' && wanted !== null && placeIn(gap, { min: wanted }).at === 'under')
     findings.push(
       lookAgain(said`The ${who} has a gap of ${mm(gap)}; by the factor it should have ${mm(wanted)} or more.`),
     );
