@@ -48,7 +48,7 @@ export function DeskTable({
                 {item.book.kind === 'common' ? 'common book' : `book of ${item.book.name}`}
               </span>
             </Cell>
-            <Cell label="By">
+            <Cell label="By" className="lg:w-[17%]">
               {item.author.name}
               {item.author.shop && (
                 <span className="text-ink-2 max-sm:before:content-[',_'] sm:block">{item.author.shop}</span>
@@ -62,7 +62,7 @@ export function DeskTable({
                 </span>
               ))}
             </Cell>
-            <Cell label="Agreed">
+            <Cell label="Agreed" className="lg:w-[14%]">
               {item.agreements} of {item.agreementsNeeded}
               {item.next && (
                 <span className="text-ink-2 max-sm:before:content-['._'] sm:block">
@@ -70,7 +70,7 @@ export function DeskTable({
                 </span>
               )}
             </Cell>
-            <Cell label="Waiting">
+            <Cell label="Waiting" className="lg:w-[13%]">
               {waiting(since, now)}
               <span className="whitespace-nowrap text-ink-2 max-sm:before:content-[',_'] sm:block">
                 since {dayOf(since)}
