@@ -11,7 +11,7 @@ export const fields = {
           { value: 'intake', label: 'Intake' },
           { value: 'exhaust', label: 'Exhaust' },
         ],
-        { label: 'Valve' },
+        { label: 'Side' },
       ),
       lash: quantity('mm', { label: 'Lash measured', ...lash }),
       shim: quantityIfKnown('mm', { label: 'Shim that is in', ...shim }),

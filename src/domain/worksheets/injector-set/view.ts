@@ -1,6 +1,7 @@
 export const groups = [
   { title: 'Readings', fields: ['nominal', 'injectors'] },
-  { title: 'Limits', fields: ['flow', 'spread', 'drops', 'deviation', 'matching'] },
+  { title: 'Limits', fields: ['flow', 'spread', 'drops'] },
+  { title: 'Rules, where no limit is given', fields: ['deviation', 'matching'] },
   { title: 'At the pressure of the engine', fields: ['benchPressure', 'runPressure'] },
   { title: 'Power that the set can feed', fields: ['density', 'duty', 'bsfc'] },
 ] as const;
