@@ -1,4 +1,5 @@
 import type { Worksheet as Described } from '@/domain/worksheets/worksheet';
+import { VERDICT_WORDS } from '@/domain/worksheets/outcome';
 import type { ShopRules } from '@/domain/worksheets/readInputs';
 import { Answer, Working } from './Answer';
 import { Charts } from './charts/Charts';
@@ -22,6 +23,26 @@ function Waiting({ worksheet, now }: { worksheet: Described; now: Case }) {
       ))}
       {open.length > 6 && <p className="text-ink-2">And {open.length - 6} more.</p>}
     </div>
+  );
+}
+
+const answerId = ({ name }: Described) => `answer-${name}`;
+
+/** Where the answer stands below the boxes, its gist stays in sight over them and leads to the whole. */
+function Peek({ worksheet, now: { outcome, units } }: { worksheet: Described; now: Case }) {
+  if (!outcome.ok) return null;
+  const { verdict, results } = outcome.value;
+  const first = results.find(({ main }) => main);
+  return (
+    <a href={`#${answerId(worksheet)}`} className="work-peek">
+      {verdict !== 'none' && <b className="font-semibold">{VERDICT_WORDS[verdict]}</b>}
+      {first && (
+        <span className="min-w-0 truncate">
+          {first.label} {first.text[units]}
+        </span>
+      )}
+      {verdict === 'none' && !first && 'Answer'}
+    </a>
   );
 }
 
@@ -82,8 +103,9 @@ export function Worksheet({
               </section>
             );
           })}
+          <Peek worksheet={worksheet} now={now} />
         </div>
-        <div className="work-answer">
+        <div id={answerId(worksheet)} className="work-answer">
           <h2 className="font-serif text-lead font-bold">Answer</h2>
           <div role="status" aria-live="polite" className="mt-3">
             {outcome.ok ? (

@@ -107,18 +107,25 @@ function stepLike(resolution: number, from: Unit, to: Unit): number {
   return Number(`1e${Math.max(exponent, to === 'in' ? -4 : to === 'mm' ? -3 : -6)}`);
 }
 
-function written(values: readonly number[], unit: Unit, resolution: number | undefined): Texts {
-  const places =
-    resolution === undefined ? Math.max(0, ...values.map((value) => decimalsOf(value))) : decimalsOf(resolution);
-  const shown = resolution === undefined ? values : values.map((value) => roundTo(value, resolution));
+function written(values: readonly number[], unit: Unit, resolution: number | undefined, stated: boolean): Texts {
+  const own = Math.max(0, ...values.map((value) => decimalsOf(value)));
+  const tool = resolution === undefined ? own : decimalsOf(resolution);
+  const places = stated ? Math.max(own, tool) : tool;
+  const shown = resolution === undefined || stated ? values : values.map((value) => roundTo(value, resolution));
   return { numbers: shown.map((value) => formatNumber(value, places)), unit };
 }
 
-function converted(values: readonly number[], from: Unit, to: Unit, resolution: number | undefined): Texts {
+function converted(
+  values: readonly number[],
+  from: Unit,
+  to: Unit,
+  resolution: number | undefined,
+  stated: boolean,
+): Texts {
   const results = values.map((value) => convert(value, from, to));
   const exact = results.flatMap((result) => (result.ok ? [result.value] : []));
   // What cannot be converted (colder than absolute zero) is shown as it was written; the check of the text speaks up.
-  if (to === from || exact.length < values.length) return written(values, from, resolution);
+  if (to === from || exact.length < values.length) return written(values, from, resolution, stated);
   const step =
     resolution === undefined ? sensibleStep(to, Math.max(0, ...exact.map(Math.abs))) : stepLike(resolution, from, to);
   const rounded = exact.map((value) => roundTo(value, step));
@@ -134,16 +141,19 @@ function converted(values: readonly number[], from: Unit, to: Unit, resolution: 
  *
  * @param values in `unit`, finite
  * @param resolution of the tool, in `unit`
+ * @param stated true for a value that a sheet states: in its own unit it is never rounded, or a limit of 0.015 mm
+ *   read in steps of 0.002 mm would be printed as 0.016 mm
  */
 export function inBothUnits(
   values: readonly number[],
   unit: Unit,
   resolution?: number,
+  stated = false,
 ): { metric: Texts; inch: Texts } {
   const largest = Math.max(0, ...values.map(Math.abs));
   return {
-    metric: converted(values, unit, METRIC_UNIT[unit] ?? unit, resolution),
-    inch: converted(values, unit, inchUnit(unit, largest), resolution),
+    metric: converted(values, unit, METRIC_UNIT[unit] ?? unit, resolution, stated),
+    inch: converted(values, unit, inchUnit(unit, largest), resolution, stated),
   };
 }
 

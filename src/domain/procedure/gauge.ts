@@ -54,3 +54,14 @@ export function coarseTool(limit: Limit): string | null {
   if (!fit.ok || fit.value.verdict !== 'too coarse') return null;
   return `Fewer than four steps of ${withUnit(formatNumber(limit.resolution), found.unit)} fit into this tolerance; a reading near its end is a guess.`;
 }
+
+/** Why the tool that a limit names cannot show one of its ends, in a sentence; null where it can. */
+export function betweenSteps({ unit, min, nominal, max, resolution }: Limit): string | null {
+  if (resolution === undefined || !unit || !isUnit(unit)) return null;
+  const off = [min, nominal, max].find(
+    (value) => value !== undefined && Math.abs(value / resolution - Math.round(value / resolution)) > 1e-6,
+  );
+  if (off === undefined) return null;
+  const text = (value: number) => withUnit(formatNumber(value), unit);
+  return `${text(off)} lies between two steps of a tool that reads to ${text(resolution)}.`;
+}

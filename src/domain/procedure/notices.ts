@@ -3,7 +3,7 @@ import { limitKeysIn } from './bindings';
 import { checkOrder } from '../measure/order/check';
 import type { DraftBody } from './body';
 import { clampChecks } from './clamp';
-import { coarseTool } from './gauge';
+import { betweenSteps, coarseTool } from './gauge';
 import { elementsIn, given } from './references';
 import { problem, type PlaceOf } from './problems';
 import { figuresInProse } from './proseFigures';
@@ -130,10 +130,10 @@ const implausibleTorques: Rule = ({ frontmatter, placeOf }) =>
     return [problem(placeOf(['torques', i, 'nm']), `Torque ${i + 1} (${name}): ${said.join(' ')}`, `${path}.nm`)];
   });
 
-/** A limit that its own tool cannot read. */
+/** A limit that its own tool cannot read, or not to the figure that it states. */
 const coarseTools: Rule = ({ frontmatter, placeOf }) =>
   frontmatter.limits.flatMap((limit, i) => {
-    const why = coarseTool(limit);
+    const why = coarseTool(limit) ?? betweenSteps(limit);
     if (!why) return [];
     const place = placeOf(['limits', i, 'resolution']);
     return [problem(place, `Limit ${i + 1} (${limit.name}): ${why}`, `limits.${i}.resolution`)];

@@ -42,7 +42,7 @@ export function limitText(limit: Limit): BothUnits {
   const { unit, min, max, nominal, resolution } = limit;
   if (unit === undefined || !isUnit(unit)) return same(limit.expect ?? '');
   const values = [min, max, nominal].filter((v): v is number => v !== undefined);
-  const shown = inBothUnits(values, unit, resolution);
+  const shown = inBothUnits(values, unit, resolution, true);
   return both((system) => {
     const { numbers, unit: shownUnit } = shown[system];
     const at = (value: number | undefined) => (value === undefined ? undefined : numbers[values.indexOf(value)]);

@@ -197,7 +197,7 @@ function sayLimit(limit: SearchLimit, value: number | null, units: UnitSystem): 
   const { min, nominal, max, resolution } = limit;
   const unit = limit.unit as Unit;
   const say = (...ends: number[]): string => {
-    const texts = inBothUnits(ends, unit, resolution ?? undefined)[units];
+    const texts = inBothUnits(ends, unit, resolution ?? undefined, true)[units];
     return withUnit(texts.numbers.join(' to '), texts.unit);
   };
   const span = min !== null && max !== null ? say(min, max) : '';

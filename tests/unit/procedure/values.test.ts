@@ -26,6 +26,9 @@ describe('limitText', () => {
   it.each([
     [{ min: 0.02, max: 0.06, resolution: 0.01 }, '0.02 to 0.06 mm', '0.0008 to 0.0024 in'],
     [{ max: 0.05, resolution: 0.01 }, '0.05 mm or less', '0.0020 in or less'],
+    // Never rounded to the steps of the tool: that would allow more than the sheet does.
+    [{ max: 0.015, resolution: 0.002 }, '0.015 mm or less', '0.0006 in or less'],
+    [{ min: 0.125, max: 0.5, resolution: 0.1 }, '0.125 to 0.500 mm', '0.005 to 0.020 in'],
     [{ min: 40 }, '40 mm or more', '1.575 in or more'],
     [{ nominal: 2.5, resolution: 0.05 }, '2.50 mm', '0.098 in'],
     [{ min: 345, nominal: 350, max: 355, quantity: 'pressure', unit: 'kPa' }, '350 (345 to 355) kPa', '51 (50 to 51) psi'],

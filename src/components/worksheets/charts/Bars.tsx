@@ -1,16 +1,24 @@
 import { scaleBand, scaleLinear } from 'd3-scale';
 import { fromBase } from '@/domain/measure/convert';
-import { formatMeasure } from '@/domain/measure/format';
+import { formatNumber, withUnit } from '@/domain/measure/format';
 import { show } from '@/domain/measure/said';
 import type { BarsChart } from '@/domain/worksheets/charts';
+import { boxUnit } from '@/domain/worksheets/readInputs';
 import type { Units } from '../asked';
 
 const WIDTH = 620;
 const HEIGHT = 260;
+/** Height of a label beside a line. */
+const LABEL = 15;
 const EDGE = { top: 22, right: 84, bottom: 30, left: 64 };
 
-/** Fills that stay apart without colour and in print: outline, solid, hatched. */
-const LOOKS = ['fill-white stroke-ink', 'fill-petrol stroke-petrol', 'fill-side stroke-ink'] as const;
+/** Fills that stay apart without colour and in print: outline for what was, solid for what is. */
+const OUTLINE = 'fill-white stroke-ink';
+const SOLID = 'fill-petrol stroke-petrol';
+const LOOKS = [OUTLINE, SOLID, 'fill-side stroke-ink'] as const;
+
+/** The last of several series is the one that counts, and a single one is it. */
+const lookOf = (series: number, of: number): string => (of === 1 ? SOLID : (LOOKS[series % LOOKS.length] ?? OUTLINE));
 
 /** Where the bars begin: zero, or a little below the least where all stand high and near each other. */
 function extent(chart: BarsChart): [number, number] {
@@ -24,6 +32,17 @@ function extent(chart: BarsChart): [number, number] {
   return [from, most + (most - from) * 0.06 || 1];
 }
 
+/** Lines at one height share a label; labels of near ones move apart so that each can be read. */
+function lineLabels(lines: readonly { value: number; word: string }[], y: (value: number) => number) {
+  const merged: { value: number; words: string[]; at: number }[] = [];
+  for (const { value, word } of [...lines].sort((a, b) => b.value - a.value)) {
+    const same = merged.find((label) => label.value === value);
+    if (same) same.words.push(word);
+    else merged.push({ value, words: [word], at: Math.max(y(value), (merged.at(-1)?.at ?? -Infinity) + LABEL) });
+  }
+  return merged;
+}
+
 /** Bars beside each other for each item, limits as lines across. Drawn in the reader's units. */
 export function Bars({ chart, units }: { chart: BarsChart; units: Units }) {
   const groups = scaleBand<string>()
@@ -34,17 +53,21 @@ export function Bars({ chart, units }: { chart: BarsChart; units: Units }) {
   const bars = scaleBand<string>()
     .domain(chart.series.map(({ label }) => label))
     .range([0, groups.bandwidth()]);
-  const y = scaleLinear()
-    .domain(extent(chart))
+  // The axis is divided in the unit that is read, so that its marks stand at round figures.
+  const unit = boxUnit(chart.unit, units);
+  const scale = scaleLinear()
+    .domain(extent(chart).map((base) => fromBase(base, unit)))
     .range([HEIGHT - EDGE.bottom, EDGE.top])
     .nice(5);
+  const y = (base: number) => scale(fromBase(base, unit));
   const lines = [
     { value: chart.band?.max, word: 'most' },
     { value: chart.nominal, word: 'nominal' },
     { value: chart.band?.min, word: 'least' },
   ].filter((line): line is { value: number; word: string } => line.value !== undefined);
   const label = (base: number) => show(base, chart.unit, chart.fineness)[units];
-  const ticks = y.ticks(5);
+  const ticks = scale.ticks(5);
+  const floor = HEIGHT - EDGE.bottom;
   return (
     <svg
       viewBox={`0 0 ${WIDTH} ${HEIGHT}`}
@@ -53,9 +76,9 @@ export function Bars({ chart, units }: { chart: BarsChart; units: Units }) {
     >
       {ticks.map((tick) => (
         <g key={tick}>
-          <line x1={EDGE.left} x2={WIDTH - EDGE.right} y1={y(tick)} y2={y(tick)} className="stroke-hair" />
-          <text x={EDGE.left - 8} y={y(tick) + 4} textAnchor="end" className="fill-ink-2">
-            {tickText(tick, chart, units)}
+          <line x1={EDGE.left} x2={WIDTH - EDGE.right} y1={scale(tick)} y2={scale(tick)} className="stroke-hair" />
+          <text x={EDGE.left - 8} y={scale(tick) + 4} textAnchor="end" className="fill-ink-2">
+            {withUnit(formatNumber(Number(tick.toPrecision(9))), unit)}
           </text>
         </g>
       ))}
@@ -64,7 +87,7 @@ export function Bars({ chart, units }: { chart: BarsChart; units: Units }) {
           {chart.series.map(({ label: name, values }, s) => {
             const value = values[chart.items.indexOf(item)] ?? null;
             const x = (groups(item) ?? 0) + (bars(name) ?? 0);
-            const bottom = y(Math.max(y.domain()[0] ?? 0, Math.min(0, y.domain()[1] ?? 0)));
+            const bottom = Math.min(floor, scale(Math.max(scale.domain()[0] ?? 0, 0)));
             return value === null ? (
               <text key={name} x={x + bars.bandwidth() / 2} y={bottom - 6} textAnchor="middle" className="fill-ink-2">
                 –
@@ -77,7 +100,7 @@ export function Bars({ chart, units }: { chart: BarsChart; units: Units }) {
                 y={Math.min(y(value), bottom)}
                 height={Math.max(0.5, Math.abs(bottom - y(value)))}
                 strokeWidth={1.4}
-                className={`${LOOKS[s % LOOKS.length] ?? ''} [print-color-adjust:exact]`}
+                className={`${lookOf(s, chart.series.length)} [print-color-adjust:exact]`}
               />
             );
           })}
@@ -102,10 +125,12 @@ export function Bars({ chart, units }: { chart: BarsChart; units: Units }) {
             strokeDasharray={word === 'nominal' ? '5 4' : undefined}
             className="stroke-ink"
           />
-          <text x={WIDTH - EDGE.right + 6} y={y(value) + 4} className="fill-ink">
-            {word} {label(value).replace(/ .*$/, '')}
-          </text>
         </g>
+      ))}
+      {lineLabels(lines, y).map(({ value, words, at }) => (
+        <text key={value} x={WIDTH - EDGE.right + 6} y={at + 4} className="fill-ink">
+          {words.join(', ')} {label(value).replace(/ .*$/, '')}
+        </text>
       ))}
       <line
         x1={EDGE.left}
@@ -117,12 +142,6 @@ export function Bars({ chart, units }: { chart: BarsChart; units: Units }) {
       />
     </svg>
   );
-}
-
-/** A tick in the reader's units. Ticks stand at round values of the base unit; three digits are plenty on an axis. */
-function tickText(tick: number, chart: BarsChart, units: Units): string {
-  const own = Number(fromBase(tick, chart.unit).toPrecision(12));
-  return formatMeasure(own, chart.unit)[units];
 }
 
 /** What each fill stands for. */
@@ -138,7 +157,7 @@ export const BarsKey = ({ chart }: { chart: BarsChart }) =>
               width="16"
               height="12"
               strokeWidth={1.4}
-              className={`${LOOKS[s % LOOKS.length] ?? ''} [print-color-adjust:exact]`}
+              className={`${lookOf(s, chart.series.length)} [print-color-adjust:exact]`}
             />
           </svg>
           {label}

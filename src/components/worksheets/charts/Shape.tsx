@@ -12,6 +12,17 @@ const LOOKS = [
   { line: 'stroke-ink', dot: 'fill-white stroke-ink', dash: '6 4' },
 ] as const;
 
+/** Limits at one place share a line. */
+function marked(lines: readonly { at: number; word: string }[]) {
+  const merged: { at: number; words: string[] }[] = [];
+  for (const { at, word } of lines) {
+    const same = merged.find((line) => line.at === at);
+    if (same) same.words.push(word);
+    else merged.push({ at, words: [word] });
+  }
+  return merged;
+}
+
 /** A bore seen from the side, top first: how far each diameter lies from the least, many times too large. */
 export function Shape({ chart, units }: { chart: ShapeChart; units: Units }) {
   const known = chart.axes.flatMap(({ diameters }) => diameters).filter((d): d is number => d !== null);
@@ -23,6 +34,14 @@ export function Shape({ chart, units }: { chart: ShapeChart; units: Units }) {
   const y = (row: number) => EDGE.top + row * ROW + ROW / 2;
   const height = EDGE.top + chart.heights.length * ROW + EDGE.bottom;
   const text = (base: number) => show(base, chart.unit, chart.fineness)[units];
+  /** Outward from the other axis's point at that height, so that the two never cover each other. */
+  const labelAt = (axis: number, row: number, px: number, py: number) => {
+    const own = chart.axes[axis]?.diameters[row] ?? 0;
+    const other = chart.axes[1 - axis]?.diameters[row] ?? null;
+    if (other === own) return { x: px, y: py + (axis === 0 ? -11 : 22), textAnchor: 'middle' as const };
+    const left = other === null ? axis === 0 : own < other;
+    return { x: px + (left ? -11 : 11), y: py + 4, textAnchor: left ? ('end' as const) : ('start' as const) };
+  };
   const lines = [
     { at: chart.band?.min, word: 'least' },
     { at: chart.nominal, word: 'nominal' },
@@ -34,19 +53,19 @@ export function Shape({ chart, units }: { chart: ShapeChart; units: Units }) {
       className="block w-full max-w-[46rem] font-sans text-[13px]"
       aria-hidden="true"
     >
-      {lines.map(({ at, word }) => (
-        <g key={word}>
+      {marked(lines).map(({ at, words }) => (
+        <g key={at}>
           <line
             x1={x(at)}
             x2={x(at)}
             y1={EDGE.top}
             y2={height - EDGE.bottom}
             className="stroke-rule"
-            strokeDasharray={word === 'nominal' ? '5 4' : undefined}
+            strokeDasharray={words.join() === 'nominal' ? '5 4' : undefined}
             strokeWidth={1.5}
           />
           <text x={x(at)} y={EDGE.top - 22} textAnchor="middle" className="fill-ink-2">
-            {word}
+            {words.join(', ')}
           </text>
           <text x={x(at)} y={EDGE.top - 7} textAnchor="middle" className="fill-ink-2">
             {text(at)}
@@ -60,7 +79,7 @@ export function Shape({ chart, units }: { chart: ShapeChart; units: Units }) {
       ))}
       {chart.axes.map(({ label, diameters }, a) => {
         const look = LOOKS[a % LOOKS.length] ?? LOOKS[0];
-        const points = diameters.flatMap((d, row) => (d === null ? [] : [[x(d), y(row), d] as const]));
+        const points = diameters.flatMap((d, row) => (d === null ? [] : [[x(d), y(row), d, row] as const]));
         return (
           <g key={label}>
             <polyline
@@ -70,15 +89,10 @@ export function Shape({ chart, units }: { chart: ShapeChart; units: Units }) {
               strokeDasharray={look.dash}
               className={look.line}
             />
-            {points.map(([px, py, d]) => (
+            {points.map(([px, py, d, row]) => (
               <g key={py}>
                 <circle cx={px} cy={py} r={5} strokeWidth={1.6} className={`${look.dot} [print-color-adjust:exact]`} />
-                <text
-                  x={px + (a === 0 ? -10 : 10)}
-                  y={py + (a === 0 ? -9 : 19)}
-                  textAnchor={a === 0 ? 'end' : 'start'}
-                  className="fill-ink"
-                >
+                <text {...labelAt(a, row, px, py)} className="fill-ink">
                   {text(d)}
                 </text>
               </g>
