@@ -5,12 +5,13 @@ import { show } from '@/domain/measure/said';
 import type { BarsChart } from '@/domain/worksheets/charts';
 import { boxUnit } from '@/domain/worksheets/readInputs';
 import type { Units } from '../asked';
+import { apart } from './apart';
 
 const WIDTH = 620;
 const HEIGHT = 260;
 /** Height of a label beside a line. */
-const LABEL = 15;
-const EDGE = { top: 22, right: 84, bottom: 30, left: 64 };
+const LABEL = 16;
+const EDGE = { top: 22, right: 92, bottom: 30, left: 74 };
 
 /** Fills that stay apart without colour and in print: outline for what was, solid for what is. */
 const OUTLINE = 'fill-white stroke-ink';
@@ -34,13 +35,17 @@ function extent(chart: BarsChart): [number, number] {
 
 /** Lines at one height share a label; labels of near ones move apart so that each can be read. */
 function lineLabels(lines: readonly { value: number; word: string }[], y: (value: number) => number) {
-  const merged: { value: number; words: string[]; at: number }[] = [];
-  for (const { value, word } of [...lines].sort((a, b) => b.value - a.value)) {
+  const merged: { value: number; words: string[] }[] = [];
+  for (const { value, word } of lines) {
     const same = merged.find((label) => label.value === value);
     if (same) same.words.push(word);
-    else merged.push({ value, words: [word], at: Math.max(y(value), (merged.at(-1)?.at ?? -Infinity) + LABEL) });
+    else merged.push({ value, words: [word] });
   }
-  return merged;
+  const places = apart(
+    merged.map(({ value }) => y(value)),
+    LABEL,
+  );
+  return merged.map((label, i) => ({ ...label, at: places[i] ?? y(label.value) }));
 }
 
 /** Bars beside each other for each item, limits as lines across. Drawn in the reader's units. */
@@ -128,9 +133,19 @@ export function Bars({ chart, units }: { chart: BarsChart; units: Units }) {
         </g>
       ))}
       {lineLabels(lines, y).map(({ value, words, at }) => (
-        <text key={value} x={WIDTH - EDGE.right + 6} y={at + 4} className="fill-ink">
-          {words.join(', ')} {label(value).replace(/ .*$/, '')}
-        </text>
+        <g key={value}>
+          <line
+            x1={WIDTH - EDGE.right}
+            x2={WIDTH - EDGE.right + 8}
+            y1={y(value)}
+            y2={at}
+            strokeWidth={1}
+            className="stroke-ink"
+          />
+          <text x={WIDTH - EDGE.right + 12} y={at + 4} className="fill-ink">
+            {words.join(', ')} {label(value).replace(/ .*$/, '')}
+          </text>
+        </g>
       ))}
       <line
         x1={EDGE.left}
