@@ -75,11 +75,19 @@ describe('compression ratio', () => {
     expect(found).toMatchObject({
       verdict: 'none',
       results: { ratio: '9.91:1', clearance: '50.4 cm³', squish: '1.00 mm', 'chamber-wanted': '38.9 cm³' },
+      reasons: [
+        'The compression ratio is 9.91:1.',
+        'For 10.5:1 the chamber must hold 38.9 cm³: 3.1 cm³ less than it does.',
+      ],
     });
+    expect(seen(compressionRatio, { ...example, wanted: '9.0:1' }).reasons[1]).toBe(
+      'For 9:1 the chamber must hold 47.7 cm³: 5.7 cm³ more than it does.',
+    );
+    expect(seen(compressionRatio, { ...example, wanted: '9.9092' }).reasons[1]).toContain('42.0 cm³, as it does.');
   });
 
   it('judges by a limit where there is one', () => {
-    expect(seen(compressionRatio, { ...example, 'ratio.max': '9.5' })).toMatchObject({
+    expect(seen(compressionRatio, { ...example, wanted: undefined, 'ratio.max': '9.5' })).toMatchObject({
       verdict: 'fail',
       reasons: ['The compression ratio is 9.91:1, too much: the most allowed is 9.50:1.'],
     });
@@ -98,6 +106,18 @@ describe('compression ratio', () => {
     expect(ratio({ crown: 'dome' })).toBeGreaterThan(ratio({ crown: 'flat' }));
     expect(ratio({ crown: 'flat' })).toBeGreaterThan(ratio({ crown: 'dish' }));
     expect(ratio({ deck: '-0.2' })).toBeGreaterThan(ratio({ deck: '0.2' }));
+  });
+
+  it('looks again at a piston that would meet a flat head', () => {
+    expect(seen(compressionRatio, { ...example, deck: '-0.9' })).toMatchObject({
+      verdict: 'look',
+      reasons: [
+        'A flat crown would stand 0.10 mm above the face of the gasket and meet a flat head.',
+        expect.any(String),
+        expect.any(String),
+      ],
+    });
+    expect(seen(compressionRatio, { ...example, deck: '-0.7' }).verdict).toBe('none');
   });
 
   it.each([

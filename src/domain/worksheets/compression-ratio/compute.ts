@@ -3,7 +3,7 @@ import { chamberForRatio, compressionRatio, deckClearance, type CylinderVolumes 
 import { said, show } from '../../measure/said';
 import { refused, worked, type Worked } from '../../measure/worked';
 import type { Values } from '../fields';
-import { inBoxes, judgedFinding, measured, noted, outcomeOf, verdictOf } from '../findings';
+import { inBoxes, judgedFinding, lookAgain, measured, noted, outcomeOf, verdictOf, type Finding } from '../findings';
 import type { Outcome, Result } from '../outcome';
 import type { fields } from './schema';
 
@@ -12,6 +12,7 @@ type Inputs = Values<typeof fields>;
 const cc = (volume: number) => show(volume, 'cm³', 0.1);
 const mm = (metres: number) => show(metres, 'mm', 0.01);
 const BOXES = { deckClearance: 'deck', pistonVolume: 'crownVolume' };
+const ratioText = (ratio: number) => show(ratio, ':1').metric;
 const GEOMETRY = 'Geometry; the gap above the top ring is left out, as is usual.';
 
 /** Dish more, dome less, m³. */
@@ -88,16 +89,42 @@ export function compute(inputs: Inputs): Worked<Outcome> {
     unit: ':1',
     fineness: 0.01,
   });
-  return outcomeOf(judgement.length > 0 ? judgement : [noted(said`The compression ratio is ${shown}.`)], [
-    ...results,
-    ...wanted.value,
-  ]);
+  const findings = [
+    ...(judgement.length > 0 ? judgement : [noted(said`The compression ratio is ${shown}.`)]),
+    ...touching(squish),
+    ...(wanted.value ? [wantedFinding(inputs, wanted.value)] : []),
+  ];
+  return outcomeOf(findings, [...results, ...(wanted.value ? [wanted.value.result] : [])]);
 }
 
-function chamberWanted({ wanted }: Inputs, volumes: CylinderVolumes): Worked<Result[]> {
-  if (wanted === undefined) return worked([]);
+/** How near the parts may come is the builder's to say; less than nothing is not. */
+const touching = (squish: number): Finding[] =>
+  squish > 0
+    ? []
+    : [lookAgain(said`A flat crown would stand ${mm(-squish)} above the face of the gasket and meet a flat head.`)];
+
+interface Wanted {
+  /** m³ */
+  chamber: number;
+  result: Result;
+}
+
+function chamberWanted({ wanted }: Inputs, volumes: CylinderVolumes): Worked<Wanted | null> {
+  if (wanted === undefined) return worked(null);
   const found = chamberForRatio(wanted, volumes);
   if (!found.ok) return inBoxes(found, { ...BOXES, ratio: 'wanted' });
-  const label = `Chamber for ${wanted}:1, all else the same`;
-  return worked([measured('chamber-wanted', label, found.value, 'cm³', 0.1, { source: GEOMETRY })]);
+  const label = `Chamber for ${ratioText(wanted)}, all else the same`;
+  return worked({
+    chamber: found.value,
+    result: measured('chamber-wanted', label, found.value, 'cm³', 0.1, { source: GEOMETRY }),
+  });
+}
+
+function wantedFinding({ chamber, wanted = 0 }: Inputs, { chamber: other }: Wanted): Finding {
+  const change = other - chamber;
+  const opening = `For ${ratioText(wanted)} the chamber must hold`;
+  const size = cc(Math.abs(change));
+  // Less than a burette shows is no change to make.
+  if (Math.abs(change) < 0.05e-6) return noted(said`${opening} ${cc(other)}, as it does.`);
+  return noted(said`${opening} ${cc(other)}: ${size} ${change < 0 ? 'less' : 'more'} than it does.`);
 }

@@ -1,4 +1,4 @@
-import { bandIfKnown, choice, numberIfKnown, quantity, quantityIfKnown } from '../fields';
+import { bandIfKnown, choice, quantity, quantityIfKnown } from '../fields';
 
 const size = { above: 0, most: 2000 };
 const volume = { least: 0, most: 100_000 };
@@ -31,8 +31,8 @@ export const fields = {
   blockHeight: quantityIfKnown('mm', { label: 'Block, crankshaft centre to deck', ...size }),
   rodLength: quantityIfKnown('mm', { label: 'Rod, centre to centre', ...size }),
   pinHeight: quantityIfKnown('mm', { label: 'Piston, pin centre to crown', ...size }),
-  ratio: bandIfKnown(':1', { label: 'Compression ratio allowed' }),
-  wanted: numberIfKnown({
+  ratio: bandIfKnown(':1', { label: 'Compression ratio allowed', nominal: 'wanted' }),
+  wanted: quantityIfKnown(':1', {
     label: 'Ratio wanted',
     hint: 'To be told the chamber that gives it.',
     above: 1,
