@@ -68,20 +68,28 @@ describe('depth over a bar', () => {
     });
   });
 
+  it.each(['total.min', 'facingDistance.min'])(
+    'judges one reading alone, but lets it not pass for the whole (%s)',
+    (limit) => {
+      expect(seen(depthOverBar, { ...one, [limit]: '20' })).toMatchObject({
+        verdict: 'look',
+        reasons: [
+          'The reading from the face that meets it is missing, so what lies between the two is not known yet.',
+          'The distance is 28.00 mm; 24.00 to 32.00 mm is allowed.',
+        ],
+      });
+      expect(seen(depthOverBar, { ...one, reading: '28', [limit]: '20' }).verdict).toBe('fail');
+    },
+  );
+
   it.each([
     [
       { ...one, facing: '30', direction: 'above' },
       'direction',
       'Two depths add up over a joint only where both lie below their faces.',
     ],
-    [{ ...one, 'total.min': '3' }, 'facing', 'Both distances together need the reading from the face that meets it.'],
     [{ ...one, reading: '-1' }, 'reading', 'The reading cannot be less than zero.'],
     [{ ...one, bar: undefined }, 'bar', 'Thickness of the bar is missing.'],
-    [
-      { ...one, 'facingDistance.max': '3' },
-      'facing',
-      'Its limit is given, so the reading from the face that meets it is needed.',
-    ],
   ])('refuses %j', (filled, box, message) => {
     expect(refusedBoxes(depthOverBar, filled)).toMatchObject({ [box]: message });
   });

@@ -29,11 +29,6 @@ export function compute(inputs: Values<typeof fields>): Worked<Outcome> {
     findings.push(...depth.value.findings);
     results.push(...depth.value.results);
   }
-  if (facing === undefined && inputs.facingDistance)
-    return refused({
-      field: 'facing',
-      message: 'Its limit is given, so the reading from the face that meets it is needed.',
-    });
   const joint = acrossJoint(inputs);
   if (!joint.ok) return joint;
   const problems = optionalBandProblems('thickness', 'The thickness allowed', thickness, { above: 0, most: 10 });

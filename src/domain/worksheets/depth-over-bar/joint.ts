@@ -2,7 +2,7 @@ import { depthAcrossJoint, type BarReading } from '../../measure/depthOverBar';
 import { said } from '../../measure/said';
 import { refused, worked, type Worked } from '../../measure/worked';
 import type { Values } from '../fields';
-import { inBoxes, judgedFinding, measured, verdictOf, type Finding } from '../findings';
+import { inBoxes, judgedFinding, lookAgain, measured, verdictOf, type Finding } from '../findings';
 import type { Result } from '../outcome';
 import { FINE, mistakeFinding, mm, SOURCE } from './depth';
 import type { fields } from './schema';
@@ -10,10 +10,11 @@ import type { fields } from './schema';
 /** The two depths added, where there is a second reading. Two readings, so two bars. */
 export function acrossJoint(inputs: Values<typeof fields>): Worked<{ findings: Finding[]; results: Result[] }> {
   const { facing, reading, bar, from: readFrom, zero: zeroOffset, direction, total: band } = inputs;
-  if (facing === undefined)
-    return band
-      ? refused({ field: 'facing', message: 'Both distances together need the reading from the face that meets it.' })
-      : worked({ findings: [], results: [] });
+  if (facing === undefined) {
+    // The first reading alone may be judged, but must not pass for the whole.
+    const missing = said`The reading from the face that meets it is missing, so what lies between the two is not known yet.`;
+    return worked({ findings: band || inputs.facingDistance ? [lookAgain(missing)] : [], results: [] });
+  }
   if (direction === 'above')
     return refused({
       field: 'direction',
