@@ -88,6 +88,7 @@ describe('leak-down', () => {
     const made = answer(['510', '', '400'], limit);
     expect(reasonsOf(made)).toEqual(['Cylinder 3 loses 27 %, too much: the most allowed is 15 %.']);
     expect(textOf(made, 'loss-2')).toBeUndefined();
+    expect(made.results.filter(({ main }) => main).map(({ key }) => key)).toEqual(['loss-3']);
     expect(made.charts).toMatchObject([{ items: ['1', '2', '3'] }]);
     expect(made.charts[0]?.kind === 'bars' && made.charts[0].series[0]?.values[1]).toBeNull();
   });

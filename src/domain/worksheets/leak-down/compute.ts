@@ -61,7 +61,8 @@ export function compute(inputs: Inputs): Worked<Outcome> {
         verdict: verdictOf(judged) ?? (!band && isSuspect(inputs, lossPercent) ? 'look' : undefined),
         ...formulaOf(inputs, place, lossPercent),
         source: LOSS,
-        main: true,
+        // The one that decides, alone: a screen that shows a single number shows this one.
+        main: place === cylinders.findIndex((other) => other?.lossPercent === worst),
       }),
     ];
   });
