@@ -129,3 +129,26 @@ test('a tightening order is gone through bolt by bolt and pass by pass on the sh
   await expect(figure.getByRole('status')).toHaveText(/^Bolt 11 of 11, first pass/);
   await expectNoSidewaysScroll(page, 320);
 });
+
+test("a worksheet is opened inside a sheet, judged by the sheet's own limits, and keeps nothing", async ({ as }) => {
+  const page = await as('apprentice');
+  await page.goto('/procedures/P-0154');
+  const step = page.getByRole('region', { name: /Take six readings a bore/ });
+  await step.getByRole('button', { name: 'Work it out here' }).click();
+  const bore = step.getByRole('region', { name: 'Bore' });
+  await expect(bore).toBeVisible();
+  const boxes = bore.getByRole('table').first().getByRole('textbox');
+  for (const [i, text] of ['82.012', '82.006', '82.010', '82.006', '82.030', '82.002'].entries())
+    await boxes.nth(i).fill(text);
+  await expect(bore.getByRole('status').first()).toContainText('Out of limits');
+  await expect(bore.getByRole('status').first()).toContainText(
+    'Taper is 0.020 mm, too much: the most allowed is 0.015 mm.',
+  );
+  await expectNoSidewaysScroll(page, 390);
+  // The same readings are far too small for the other engine.
+  await bore.getByLabel('Judged by').selectOption({ label: 'Bore diameter, T24D, 90.000 to 90.022 mm' });
+  await expect(bore.getByRole('status').first()).toContainText('90.000 to 90.022 mm is allowed');
+  await bore.getByRole('button', { name: 'Close' }).click();
+  await expect(bore).toBeHidden();
+  await expect(step.getByRole('button', { name: 'Work it out here' })).toBeFocused();
+});

@@ -55,7 +55,7 @@ test.describe('without JavaScript', () => {
     await expect(page.getByText('Do not work from this sheet')).toBeVisible();
 
     await page.getByRole('navigation', { name: 'Main' }).getByRole('link', { name: 'Handbook' }).click();
-    const first = page.locator('main').getByRole('link').first();
+    const first = page.locator('main').getByRole('listitem').getByRole('link').first();
     await first.click();
     await expect(page.getByRole('heading', { level: 1 })).toBeVisible();
     await expect(page.getByRole('heading', { name: 'Where this comes from' })).toBeVisible();
