@@ -86,7 +86,7 @@ const METRIC_UNIT: Partial<Record<Unit, Unit>> = {
   'lb/hp·h': 'g/kWh',
 };
 
-/** The step a converted value is shown to where no tool is named: never worse than about 1.3 % of a value from 4 up. */
+/** The step a converted value is shown to where no tool is named: never worse than about 1.3 % of a value from 4 up, 2.5 % in lbf·in. */
 function sensibleStep(unit: Unit, largest: number): number {
   if (unit === 'in') return largest < 1 ? 1e-4 : 1e-3;
   if (unit === 'mm') return 1e-3;
