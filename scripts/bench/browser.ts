@@ -17,6 +17,8 @@ export async function openPage(address: string, cookie: string): Promise<{ page:
   const browser = await chromium.launch({ executablePath, args: ARGS });
   const context = await browser.newContext();
   await context.addCookies(cookies(address, cookie));
+  // tsx names functions through a helper of its own, which a function handed to the page does not find there.
+  await context.addInitScript('globalThis.__name = (named) => named');
   return { page: await context.newPage(), close: () => browser.close() };
 }
 

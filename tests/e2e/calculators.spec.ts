@@ -89,7 +89,7 @@ test('every calculator shows its worked case, fits a phone and is for everybody'
 test('a box says how it was read, keeps what was typed when it cannot, and stays the same length in other units', async ({
   as,
 }) => {
-  const page = await as('sawmillEditor');
+  const page = await as('pierOwner');
   await page.goto('/handbook/calculators/wrench-adapter');
   await alive(page);
   const length = page.getByLabel(/^Length of the wrench/);

@@ -73,7 +73,7 @@ test('two who set one rule at once: the second is told and chooses', async ({ as
 test('a worksheet that is opened on a sheet goes by the shop too, and says so where it cannot', async ({ as }) => {
   const owner = await as('sawmillOwner');
   await owner.goto(RULES);
-  await owner.getByRole('textbox', { name: /Spread allowed/ }).fill('4 %');
+  await owner.getByRole('textbox', { name: /Spread of the set allowed by rule/ }).fill('4 %');
   await owner.getByRole('button', { name: 'Save' }).click();
   await expect(owner.getByText('Saved. One rule changed.')).toBeVisible();
 

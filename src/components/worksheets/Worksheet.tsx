@@ -26,23 +26,24 @@ function Waiting({ worksheet, now }: { worksheet: Described; now: Case }) {
   );
 }
 
-const answerId = ({ name }: Described) => `answer-${name}`;
-
-/** Where the answer stands below the boxes, its gist stays in sight over them and leads to the whole. */
-function Peek({ worksheet, now: { outcome, units } }: { worksheet: Described; now: Case }) {
+/**
+ * Where the answer stands below the boxes, its gist stays in sight over them. It lets every press through to the box
+ * that it covers, and is silent: the answer itself is read out.
+ */
+function Peek({ now: { outcome, units } }: { now: Case }) {
   if (!outcome.ok) return null;
   const { verdict, results } = outcome.value;
   const first = results.find(({ main }) => main);
+  if (verdict === 'none' && !first) return null;
   return (
-    <a href={`#${answerId(worksheet)}`} className="work-peek">
+    <p aria-hidden="true" className="work-peek">
       {verdict !== 'none' && <b className="font-semibold">{VERDICT_WORDS[verdict]}</b>}
       {first && (
         <span className="min-w-0 truncate">
           {first.label} {first.text[units]}
         </span>
       )}
-      {verdict === 'none' && !first && 'Answer'}
-    </a>
+    </p>
   );
 }
 
@@ -103,9 +104,9 @@ export function Worksheet({
               </section>
             );
           })}
-          <Peek worksheet={worksheet} now={now} />
+          <Peek now={now} />
         </div>
-        <div id={answerId(worksheet)} className="work-answer">
+        <div className="work-answer">
           <h2 className="font-serif text-lead font-bold">Answer</h2>
           <div role="status" aria-live="polite" className="mt-3">
             {outcome.ok ? (
