@@ -89,9 +89,10 @@ test('every calculator shows its worked case, fits a phone and is for everybody'
 test('a box says how it was read, keeps what was typed when it cannot, and stays the same length in other units', async ({
   as,
 }) => {
-  const page = await as('pierOwner');
+  const page = await as('sawmillOwner');
   await page.goto('/handbook/calculators/wrench-adapter');
   await alive(page);
+  await page.getByRole('button', { name: 'Metric units' }).click();
   const length = page.getByLabel(/^Length of the wrench/);
   await length.fill('10"');
   await expect(page.getByText('254 mm, 10 in')).toBeVisible();

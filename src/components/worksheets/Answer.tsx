@@ -6,9 +6,9 @@ import type { Units } from './asked';
 
 /** Out of limits is told by words, weight, hatching and a heavy edge; the signal colours belong to cautions alone. */
 const EDGE: Record<Verdict, string> = {
-  fail: 'border-l-[14px] border-ink work-hatch',
-  look: 'border-l-[8px] border-ink',
-  pass: 'border-l-[8px] border-petrol',
+  fail: 'border-l-[14px] border-ink pl-7 work-hatch',
+  look: 'border-l-[8px] border-ink pl-4',
+  pass: 'border-l-[8px] border-petrol pl-4',
   none: '',
 };
 
@@ -38,7 +38,7 @@ function Main({ result, units }: { result: Result; units: Units }) {
 export function Answer({ outcome, units }: { outcome: Outcome; units: Units }) {
   const main = outcome.results.filter((result) => result.main);
   return (
-    <div className={classes(outcome.verdict !== 'none' && 'py-1 pl-4', EDGE[outcome.verdict])}>
+    <div className={classes(outcome.verdict !== 'none' && 'py-1', EDGE[outcome.verdict])}>
       {outcome.verdict !== 'none' && <p className="text-lead font-semibold">{VERDICT_WORDS[outcome.verdict]}</p>}
       {main.length > 0 && (
         <dl className="mt-1 flex flex-wrap gap-x-8 gap-y-3">
