@@ -33,8 +33,11 @@ export const tokensOf = (text: string): string[] => text.match(TOKENS) ?? [];
 
 /** Beyond this many changed words or lines in one place the texts have little in common; and never a slow reply. */
 const BOUNDS = { maxEditLength: 600, timeout: 200 };
-/** A place that keeps less than this share of its letters reads better as struck out and written anew. */
-const WORTH_KEEPING = 0.25;
+/**
+ * A place where telling the kept words apart would save no more than this share of the changed ones reads better as
+ * struck out and written anew. The same tenth that the comparison may be coarser than git's.
+ */
+const WORTH_TELLING = 0.1;
 
 function push(runs: WordRun[], kind: WordRun['kind'], text: string): void {
   if (!text) return;
@@ -43,56 +46,139 @@ function push(runs: WordRun[], kind: WordRun['kind'], text: string): void {
   else runs.push({ kind, text });
 }
 
-/** Removed before added, and nothing but blanks kept between two changes: "a b" to "c d" is one change, not two. */
+/** Tells a word or a value from a mark or a blank: what has a letter or a digit. */
+const isWord = (token: string) => /[\p{L}\p{N}]/u.test(token);
+
+/** How many letters of two texts are the same marks and blanks at their beginning. A sign belongs to its number. */
+function likeStart(a: string, b: string): number {
+  if (!a || !b || a.charAt(0) !== b.charAt(0)) return 0;
+  const others = tokensOf(b);
+  let length = 0;
+  for (const [i, token] of tokensOf(a).entries()) {
+    if (token !== others[i] || isWord(token)) break;
+    length += token.length;
+  }
+  return length;
+}
+
+/** Removed before added; marks and blanks that both sides of a change begin with are no part of it. */
 function settle(runs: readonly WordRun[]): WordRun[] {
   const out: WordRun[] = [];
   let removed = '';
   let added = '';
-  const flush = () => {
-    push(out, 'removed', removed);
-    push(out, 'added', added);
+  const flush = (next = '') => {
+    const like = likeStart(removed, added);
+    push(out, 'same', removed.slice(0, like));
+    const parts = [removed.slice(like), added.slice(like)] as const;
+    const only = parts[0] || parts[1];
+    // "it" to "it. Dry it" before "." ends a sentence: ". Dry it" and "Dry it." are the same words, the second reads better.
+    const stop =
+      !(parts[0] && parts[1]) && only.length > 1 && /^[.!?:;]/.test(only) && only.charAt(0) === next.charAt(0);
+    const turned = (part: string) => (stop && part ? part.slice(1) + part.charAt(0) : part);
+    push(out, 'same', stop ? only.charAt(0) : '');
+    push(out, 'removed', turned(parts[0]));
+    push(out, 'added', turned(parts[1]));
     removed = added = '';
+    return stop ? next.slice(1) : next;
   };
-  runs.forEach((run, i) => {
+  for (const run of runs) {
     if (run.kind === 'removed') removed += run.text;
     else if (run.kind === 'added') added += run.text;
-    else if (/^[^\S\n]+$/.test(run.text) && removed && added && i < runs.length - 1) {
-      removed += run.text;
-      added += run.text;
-    } else {
-      flush();
-      push(out, 'same', run.text);
-    }
-  });
+    else push(out, 'same', flush(run.text));
+  }
   flush();
   return out;
 }
 
-const linesOf = (text: string): string[] => text.match(/[^\n]*\n|[^\n]+/g) ?? [];
+/** What is compared is the words and values; the marks and blanks ahead of each only follow it. */
+interface Spaced {
+  words: string[];
+  /** As many as `words`. */
+  leads: string[];
+}
+
+/** The text in words, with an empty one at its end. */
+function spacedWords(text: string): Spaced {
+  const words: string[] = [];
+  const leads: string[] = [];
+  let lead = '';
+  for (const token of tokensOf(text)) {
+    if (isWord(token)) {
+      words.push(token);
+      leads.push(lead);
+      lead = '';
+    } else lead += token;
+  }
+  return { words: [...words, ''], leads: [...leads, lead] };
+}
+
+/** Marks and blanks ahead of a word that both texts have. */
+function changedLead(runs: WordRun[], from: string, to: string): void {
+  if (from === to) return push(runs, 'same', from);
+  for (const { added, removed, value } of diffArrays(tokensOf(from), tokensOf(to)))
+    push(runs, added ? 'added' : removed ? 'removed' : 'same', value.join(''));
+}
+
+/** A line with the empty ones after it: those are alike everywhere, and would tie the wrong lines to one another. */
+const linesOf = (text: string): string[] => text.match(/\n+|[^\n]+\n*/g) ?? [];
 
 function changedLine(from: string, to: string): WordRun[] {
   const whole: WordRun[] = [];
   push(whole, 'removed', from);
   push(whole, 'added', to);
   if (!from || !to) return whole;
-  const parts = diffArrays(tokensOf(from), tokensOf(to), BOUNDS);
+  const before = spacedWords(from);
+  const after = spacedWords(to);
+  const parts = diffArrays(before.words, after.words, BOUNDS);
   if (!parts) return whole;
-  const letters = (text: string) => text.replace(/\P{L}+/gu, '').length;
-  const kept = parts.reduce((sum, p) => (p.added || p.removed ? sum : sum + letters(p.value.join(''))), 0);
-  const all = Math.max(letters(from), letters(to));
-  if (all > 0 && kept < WORTH_KEEPING * all) return whole;
-  return parts.map((p): WordRun => ({
-    kind: p.added ? 'added' : p.removed ? 'removed' : 'same',
-    text: p.value.join(''),
-  }));
+  const kept = parts.reduce((sum, part) => (part.added || part.removed ? sum : sum + part.value.length), 0) - 1;
+  const changed = before.words.length + after.words.length - 2 - 2 * kept;
+  if (changed > 0 && 2 * kept <= WORTH_TELLING * changed) return whole;
+  const runs: WordRun[] = [];
+  let [i, j] = [0, 0];
+  for (const { added, removed, value } of parts)
+    for (const word of value) {
+      const old = added ? '' : (before.leads[i++] ?? '');
+      const now = removed ? '' : (after.leads[j++] ?? '');
+      if (added) push(runs, 'added', now + word);
+      else if (removed) push(runs, 'removed', old + word);
+      else {
+        changedLead(runs, old, now);
+        push(runs, 'same', word);
+      }
+    }
+  return runs;
 }
 
-/** A line of canonical text is a paragraph: as many for as many are taken one by one, which is also the faster way. */
+/** How many words of two lines are the same ones, wherever they stand, as a share of the longer line. */
+function wordsShared(a: string, b: string): number {
+  const words = tokensOf(a).filter(isWord);
+  const others = tokensOf(b).filter(isWord);
+  const left = new Map<string, number>();
+  for (const word of words) left.set(word, (left.get(word) ?? 0) + 1);
+  let shared = 0;
+  for (const word of others) {
+    const more = left.get(word) ?? 0;
+    if (more > 0) shared += 1;
+    left.set(word, more - 1);
+  }
+  const longer = Math.max(words.length, others.length);
+  return longer === 0 ? 1 : shared / longer;
+}
+
+/** Two lines that share less than this may not be the same paragraph. */
+const SAME_PARAGRAPH = 0.6;
+
+/**
+ * A line of canonical text is a paragraph: as many for as many, each alike, are taken one by one, which is the faster
+ * way. Otherwise one may have come and another gone, and the words of all of them are set against each other.
+ */
 function changedPlace(from: string, to: string): WordRun[] {
   const before = linesOf(from);
   const after = linesOf(to);
-  if (before.length !== after.length) return changedLine(from, to);
-  return before.flatMap((line, i) => changedLine(line, after[i] ?? ''));
+  const oneByOne =
+    before.length === after.length && before.every((line, i) => wordsShared(line, after[i] ?? '') >= SAME_PARAGRAPH);
+  return oneByOne ? before.flatMap((line, i) => changedLine(line, after[i] ?? '')) : changedLine(from, to);
 }
 
 /**
