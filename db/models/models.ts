@@ -3,7 +3,7 @@ import { Procedure, Rendering, Revision, SearchDocument } from './book';
 import { flag, id, optionalText, text, times } from './columns';
 import { Membership, Person, Shop, ShopRule } from './people';
 import { AuditEntry, IdempotencyKey, Setting } from './records';
-import { Agreement, Remark } from './review';
+import { Agreement, Remark, Thread, ThreadMessage } from './review';
 
 const key = { ...text, primaryKey: true };
 const integer = { type: DataTypes.INTEGER, allowNull: false };
@@ -109,6 +109,30 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
     Remark: class extends Remark {}.init(
       own({ id, revisionId: text, personId: text, kind: text, text, anchor: optionalText, at: text, ...stamps }),
       bind('Remark', 'remarks'),
+    ),
+    Thread: class extends Thread {}.init(
+      own({
+        id,
+        revisionId: text,
+        personId: text,
+        kind: text,
+        anchor: optionalText,
+        place: text,
+        suggestion: { type: DataTypes.JSON, allowNull: true },
+        state: { ...text, defaultValue: 'open' },
+        openedAt: { ...integer, defaultValue: 1 },
+        resolvedById: optionalText,
+        resolvedAt: optionalText,
+        acceptedAt: optionalText,
+        version: { ...integer, defaultValue: 1 },
+        at: text,
+        ...stamps,
+      }),
+      bind('Thread', 'threads'),
+    ),
+    ThreadMessage: class extends ThreadMessage {}.init(
+      own({ id, threadId: text, personId: text, text, mentions: { ...json, defaultValue: [] }, at: text, ...stamps }),
+      bind('ThreadMessage', 'threadMessages'),
     ),
     AuditEntry: class extends AuditEntry {}.init(
       own({

@@ -1,4 +1,6 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
+import type { Suggestion } from '@/domain/review/suggestions';
+import type { ThreadKind } from '@/domain/review/threads';
 
 /** A reviewer's yes to one exact text on one base. It counts while both are still those of the revision. */
 export class Agreement extends Model<InferAttributes<Agreement>, InferCreationAttributes<Agreement>> {
@@ -22,6 +24,41 @@ export class Remark extends Model<InferAttributes<Remark>, InferCreationAttribut
   declare text: string;
   /** `step:<id>`, the path of a value, or null for the whole text. */
   declare anchor: CreationOptional<string | null>;
+  declare at: string;
+  declare createdAt: CreationOptional<string>;
+  declare updatedAt: CreationOptional<string>;
+}
+
+/** A remark, a question or a suggestion on a proposed text. */
+export class Thread extends Model<InferAttributes<Thread>, InferCreationAttributes<Thread>> {
+  declare id: CreationOptional<string>;
+  declare revisionId: string;
+  declare personId: string;
+  declare kind: ThreadKind;
+  /** `step:<id>`, the path of a value, or null for the whole text. */
+  declare anchor: string | null;
+  /** What the anchor was called when it was written, for when it is gone. */
+  declare place: string;
+  declare suggestion: Suggestion | null;
+  declare state: CreationOptional<'open' | 'resolved'>;
+  /** How many messages stood when it was last opened. */
+  declare openedAt: CreationOptional<number>;
+  declare resolvedById: CreationOptional<string | null>;
+  declare resolvedAt: CreationOptional<string | null>;
+  declare acceptedAt: CreationOptional<string | null>;
+  declare version: CreationOptional<number>;
+  declare at: string;
+  declare createdAt: CreationOptional<string>;
+  declare updatedAt: CreationOptional<string>;
+}
+
+export class ThreadMessage extends Model<InferAttributes<ThreadMessage>, InferCreationAttributes<ThreadMessage>> {
+  declare id: CreationOptional<string>;
+  declare threadId: string;
+  declare personId: string;
+  declare text: string;
+  /** Who is named in it as `@Name`. */
+  declare mentions: CreationOptional<{ id: string; name: string }[]>;
   declare at: string;
   declare createdAt: CreationOptional<string>;
   declare updatedAt: CreationOptional<string>;

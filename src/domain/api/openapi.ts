@@ -9,6 +9,7 @@ import * as compare from './schemas/compare';
 import * as me from './schemas/me';
 import * as proposals from './schemas/proposals';
 import * as search from './schemas/search';
+import * as threads from './schemas/threads';
 
 /** What each refusal means; the key is the status. */
 const REFUSALS: Record<number, string> = {
@@ -31,7 +32,9 @@ const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
 /** Named schemas: those that `schemas/` exports, by name, then what single calls take and answer beyond them. */
 function names(): Map<z.ZodTypeAny, string> {
   const named = new Map<z.ZodTypeAny, string>();
-  const exported = [book, check, common, compare, me, proposals, search].flatMap((area) => Object.entries(area));
+  const exported = [book, check, common, compare, me, proposals, search, threads].flatMap((area) =>
+    Object.entries(area),
+  );
   // By code unit, so that the document does not depend on which file holds what.
   exported.sort(([a], [b]) => (a < b ? -1 : 1));
   for (const [name, schema] of exported) if (schema instanceof z.ZodType) named.set(schema, name);

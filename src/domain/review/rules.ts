@@ -1,5 +1,6 @@
 import type { Book, ProposalSubject } from '../people/may';
 import type { RevisionState } from '../revision/types';
+import { openQuestionWords } from './openQuestions';
 
 /** An agreement is to one exact text on one exact base; when either changes, it no longer stands. */
 export interface Agreement {
@@ -33,6 +34,8 @@ export interface ProposalFacts {
   editorIds: readonly string[];
   /** In a shop book: its senior technicians and owners now. Empty in the common book. */
   standInIds: readonly string[];
+  /** What each open question is tied to, in words: no text is published over one. */
+  openQuestions?: readonly string[];
 }
 
 /** A critical change needs two different people, any other one. */
@@ -100,8 +103,8 @@ function missing(facts: ProposalFacts, editors: number, short: number): string {
 /** Whether it may be published as it stands, and if not, why not in words. */
 export function canPublish(facts: ProposalFacts): { ok: true } | { ok: false; why: string } {
   if (isStale(facts)) return { ok: false, why: staleWords(facts) };
-  const { missing: why } = tally(facts);
-  return why === null ? { ok: true } : { ok: false, why };
+  const why = [tally(facts).missing, openQuestionWords(facts.openQuestions ?? [])].filter((one) => one !== null);
+  return why.length === 0 ? { ok: true } : { ok: false, why: why.join(' ') };
 }
 
 export function staleWords({ base, current }: Pick<ProposalFacts, 'base' | 'current'>): string {

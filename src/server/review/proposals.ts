@@ -58,7 +58,7 @@ const SELECT = `SELECT r.id, p.number, p.id AS procedureId, p.currentRevisionId,
   LEFT JOIN revisions c ON c.id = p.currentRevisionId`;
 
 /**
- * Proposals that meet a condition on `r` (revision) and `p` (procedure), with their facts, in three reads
+ * Proposals that meet a condition on `r` (revision) and `p` (procedure), with their facts, in four reads
  * however many they are. Nobody is asked whether they may see them: that is the caller's part.
  */
 export async function loadProposals(where: string, replacements: Record<string, unknown>): Promise<Loaded[]> {
@@ -72,11 +72,17 @@ export async function loadProposals(where: string, replacements: Record<string, 
   const holders = await db.read<Holder>(
     `SELECT personId, scope, shopId, role FROM memberships WHERE role IN ('editor', 'senior', 'owner')`,
   );
+  const questions = await db.read<{ revisionId: string; place: string }>(
+    `SELECT revisionId, place FROM threads
+     WHERE revisionId IN (:ids) AND kind = 'question' AND state = 'open' ORDER BY at, id`,
+    { ids: rows.map((row) => row.id) },
+  );
   return rows.map((row) =>
     loaded(
       row,
       given.filter((g) => g.revisionId === row.id),
       holders,
+      questions.filter((q) => q.revisionId === row.id).map(({ place }) => place),
     ),
   );
 }
@@ -107,6 +113,7 @@ function loaded(
   { head, criticalReasons, takesBack, everProposed, ...row }: Row,
   given: GivenAgreement[],
   holders: Holder[],
+  openQuestions: string[],
 ): Loaded {
   const book = bookOf(row);
   const reasons = JSON.parse(criticalReasons) as string[];
@@ -128,6 +135,7 @@ function loaded(
       reason: row.reason,
       criticalReasons: reasons,
       agreements: given,
+      openQuestions,
       ...answerable(book, holders),
     },
   };

@@ -3,10 +3,11 @@ import * as me from './me';
 import * as proposals from './proposals';
 import * as search from './search';
 import * as shop from './shop';
+import * as threads from './threads';
 import * as worksheets from './worksheets';
 import type { Operation } from '../operation';
 
 /** Every call of the API, in the order the OpenAPI document lists them. An area adds its file here. */
-export const OPERATIONS: readonly Operation[] = [me, book, proposals, search, worksheets, shop].flatMap((area) =>
-  Object.values(area),
+export const OPERATIONS: readonly Operation[] = [me, book, proposals, threads, search, worksheets, shop].flatMap(
+  (area) => Object.values(area),
 );
