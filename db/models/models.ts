@@ -1,5 +1,6 @@
 import { DataTypes, type Sequelize } from 'sequelize';
 import { Procedure, Rendering, Revision, SearchDocument } from './book';
+import { Bulletin, ReadAndSign } from './bulletins';
 import { flag, id, optionalText, text, times } from './columns';
 import { Membership, Person, Shop, ShopRule } from './people';
 import { AuditEntry, IdempotencyKey, Setting } from './records';
@@ -133,6 +134,24 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
     ThreadMessage: class extends ThreadMessage {}.init(
       own({ id, threadId: text, personId: text, text, mentions: { ...json, defaultValue: [] }, at: text, ...stamps }),
       bind('ThreadMessage', 'threadMessages'),
+    ),
+    Bulletin: class extends Bulletin {}.init(
+      own({
+        id,
+        kind: text,
+        procedureId: text,
+        revisionId: text,
+        shopId: optionalText,
+        words: json,
+        byId: text,
+        at: text,
+        ...stamps,
+      }),
+      bind('Bulletin', 'bulletins'),
+    ),
+    ReadAndSign: class extends ReadAndSign {}.init(
+      own({ id, personId: text, bulletinId: text, at: text, ...stamps }),
+      bind('ReadAndSign', 'readAndSigned'),
     ),
     AuditEntry: class extends AuditEntry {}.init(
       own({

@@ -26,7 +26,8 @@ export async function start(config: Config): Promise<App> {
       const { problems } = await importing(running);
       for (const { file, message } of problems) console.warn(`${file} was left out of the book. ${message}`);
       if (!config.demo) return;
-      await seedNetwork(running.db, () => hashPassword(DEMONSTRATION_PASSWORD));
+      // Its people were there from the first issue, so what changed since is a change to them.
+      await atTime(daysAgo(FIRST_ISSUE), () => seedNetwork(running.db, () => hashPassword(DEMONSTRATION_PASSWORD)));
       await seedHistory();
     });
   } catch (error) {

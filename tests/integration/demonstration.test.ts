@@ -4,6 +4,7 @@ import { join, resolve } from 'node:path';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { PEOPLE } from '@db/seeders/demonstration';
 import { whoIs } from '@/server/accounts/whoIs';
+import { unreadBulletins } from '@/server/bulletins/read';
 import { verifyAudit } from '@/server/audit/verify';
 import { parsedText } from '@/server/book/parsed';
 import { readHistory } from '@/server/book/history';
@@ -69,6 +70,24 @@ test('the review desk of the common book has work, worst first', async () => {
     ['P-0142', true, 1],
     ['P-0137', false, 0],
   ]);
+});
+
+test('one sheet is withdrawn, and a critical change waits to be read and signed', async () => {
+  const unread = async (email: string) => {
+    const who = await actor(email);
+    return (await inBook(() => unreadBulletins(who))).map(({ kind, number, revision }) => [
+      kind,
+      number,
+      revision.letter,
+    ]);
+  };
+  expect(await unread('apprentice@northgate.example')).toEqual([
+    ['withdrawn', 'P-0173', 'A'],
+    ['critical change', 'P-0137', 'B'],
+  ]);
+  // Whoever made or agreed to a change has read it.
+  expect(await unread('editor@halden.example')).toEqual([['withdrawn', 'P-0173', 'A']]);
+  expect(await unread('editor2@halden.example')).toEqual([]);
 });
 
 test("a shop's own sheet is in that shop's book alone", async () => {

@@ -3,6 +3,7 @@ import { zodToJsonSchema } from 'zod-to-json-schema';
 import type { Operation } from './operation';
 import { OPERATIONS } from './operations/all';
 import * as book from './schemas/book';
+import * as bulletins from './schemas/bulletins';
 import * as check from './schemas/check';
 import * as common from './schemas/common';
 import * as compare from './schemas/compare';
@@ -32,7 +33,7 @@ const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
 /** Named schemas: those that `schemas/` exports, by name, then what single calls take and answer beyond them. */
 function names(): Map<z.ZodTypeAny, string> {
   const named = new Map<z.ZodTypeAny, string>();
-  const exported = [book, check, common, compare, me, proposals, search, threads].flatMap((area) =>
+  const exported = [book, bulletins, check, common, compare, me, proposals, search, threads].flatMap((area) =>
     Object.entries(area),
   );
   // By code unit, so that the document does not depend on which file holds what.

@@ -39,6 +39,8 @@ export interface Subjects {
   decline: ProposalSubject;
   agree: ProposalSubject;
   publish: ProposalSubject;
+  withdraw: { book: Book };
+  bringBack: { book: Book };
   /** Shops with exactly one editor, where a senior technician or the owner gives the second agreement. */
   seeReviewDesk: { shopsWithOneEditor: readonly string[] };
   readAudit: null;
@@ -107,6 +109,13 @@ function asReviewer(actor: Actor, p: ProposalSubject, doing: string, secondAgree
   return no(`Only ${who} ${doing} a proposal.`);
 }
 
+/** Withdrawing takes the book's word back, and bringing back gives it again: both are for those who publish. */
+function asEditor(actor: Actor, book: Book, doing: string): Permission {
+  if (!reads(actor, book)) return HIDDEN;
+  const who = book.kind === 'common' ? 'An editor of the common book' : "This shop's editor";
+  return edits(actor, book) ? YES : no(`${who} ${doing}. Tell them what is wrong with it.`);
+}
+
 /** In a shop: hidden from others, refused to members without the role. */
 function inShop(actor: Actor, shopId: string, roles: readonly ShopRole[], why: string): Permission {
   if (!isMember(actor, shopId)) return HIDDEN;
@@ -126,6 +135,8 @@ const RULES: { [A in Act]: (actor: Actor, subject: Subjects[A]) => Permission } 
   decline: (actor, p) => asReviewer(actor, p, 'declines'),
   agree: (actor, p) => asReviewer(actor, p, 'agrees to', true),
   publish: (actor, p) => asReviewer(actor, p, 'publishes'),
+  withdraw: (actor, { book }) => asEditor(actor, book, 'withdraws a sheet'),
+  bringBack: (actor, { book }) => asEditor(actor, book, 'brings a withdrawn sheet back'),
   seeReviewDesk: (actor, { shopsWithOneEditor }) =>
     actor.memberships.some(
       (m) =>

@@ -1,3 +1,4 @@
+import { WITHDRAWN_WAITS } from '../bulletins/withdrawal';
 import type { Book, ProposalSubject } from '../people/may';
 import type { RevisionState } from '../revision/types';
 import { openQuestionWords } from './openQuestions';
@@ -30,6 +31,8 @@ export interface ProposalFacts {
   /** From the comparison with the base; empty for an ordinary change. */
   criticalReasons: readonly string[];
   agreements: readonly Agreement[];
+  /** The procedure is withdrawn: a proposal waits. */
+  withdrawn?: boolean;
   /** People who are editors of this book now. */
   editorIds: readonly string[];
   /** In a shop book: its senior technicians and owners now. Empty in the common book. */
@@ -102,6 +105,7 @@ function missing(facts: ProposalFacts, editors: number, short: number): string {
 
 /** Whether it may be published as it stands, and if not, why not in words. */
 export function canPublish(facts: ProposalFacts): { ok: true } | { ok: false; why: string } {
+  if (facts.withdrawn) return { ok: false, why: WITHDRAWN_WAITS };
   if (isStale(facts)) return { ok: false, why: staleWords(facts) };
   const why = [tally(facts).missing, openQuestionWords(facts.openQuestions ?? [])].filter((one) => one !== null);
   return why.length === 0 ? { ok: true } : { ok: false, why: why.join(' ') };

@@ -28,6 +28,8 @@ export interface PackedBook {
     system: number[];
     skill: number[];
   };
+  /** Places of sheets that are withdrawn; left out where none is. */
+  withdrawn?: number[];
   steps: Lists<{ title: string }>;
   engineOf: Lists<{ key: number }>;
   tools: Lists<{ name: number }>;
@@ -140,7 +142,8 @@ export function packBook({ documents, vocabulary, engines }: SearchBook): Packed
       ['name', 'minutes', 'step'],
     ),
   };
-  return { version: 1, vocabulary, engines, shared, ...packed };
+  const withdrawn = documents.flatMap((document, place) => (document.withdrawn ? [place] : []));
+  return { version: 1, vocabulary, engines, shared, ...packed, ...(withdrawn.length > 0 && { withdrawn }) };
 }
 
 export function unpackBook(packed: PackedBook): SearchBook {
@@ -166,6 +169,7 @@ export function unpackBook(packed: PackedBook): SearchBook {
     step: step(l.step),
   }));
   const timers = unpackLists(packed.timers, (t) => ({ ...t, name: text(t.name), step: step(t.step) }));
+  const withdrawn = new Set(packed.withdrawn);
   const documents = sheets.number.map((number, i): SearchDocument => {
     const of = <T>(column: readonly T[]): T => column[i] as T;
     return {
@@ -177,6 +181,7 @@ export function unpackBook(packed: PackedBook): SearchBook {
       minutes: of(sheets.minutes),
       holds: of(sheets.holds),
       book: text(of(sheets.book)),
+      ...(withdrawn.has(i) && { withdrawn: true }),
       system: text(of(sheets.system)) as SearchDocument['system'],
       skill: text(of(sheets.skill)) as SearchDocument['skill'],
       engines: enginesOf(i),

@@ -13,6 +13,8 @@ export interface SearchDocument {
   publishedAt: string;
   /** "Common book" or the name of the shop. */
   book: string;
+  /** Nobody works from it now; said on its row, and it stands last. */
+  withdrawn?: true;
   title: string;
   summary: string;
   system: System;

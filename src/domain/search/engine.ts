@@ -6,7 +6,7 @@ import { sayQuantity } from './quantities';
 import { type Answer, answerAsked, mostly, together } from './match';
 import { Postings } from './postings';
 import { type Query, readQuery } from './query';
-import { best, rank, type Ranked, withProse } from './ranking';
+import { best, rank, type Ranked, sink, withProse } from './ranking';
 import { tokensIn } from './tokens';
 import { type UnitSystem, ValueIndex } from './values';
 import { Phrases } from './phrases';
@@ -39,7 +39,7 @@ export type SearchHit = Pick<
   | 'letter'
   | 'publishedAt'
   | 'book'
-> & { matched: Matched[] };
+> & { withdrawn: boolean; matched: Matched[] };
 
 export interface SearchAnswer {
   hits: SearchHit[];
@@ -177,6 +177,7 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
     });
   });
 
+  const withdrawn = documents.flatMap((document, at) => (document.withdrawn ? [at] : []));
   const placeOf = new Map(documents.map((document, at) => [document.number, at]));
   const synonymsOf = ({ asked }: Query): string[][] =>
     asked.flatMap(({ groups, completing }) =>
@@ -195,7 +196,7 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
       }));
     },
     query(text, filters = NO_FILTERS, { limit = 20, units = 'metric', inProse = NO_PROSE } = {}) {
-      const ranked = withProse(rankOnce(text.slice(0, LONGEST_QUERY)), inProse, placeOf);
+      const ranked = sink(withProse(rankOnce(text.slice(0, LONGEST_QUERY)), inProse, placeOf), withdrawn);
       const { query, near } = ranked;
       const { kept, facets } = sieve.sift(ranked.scores, filters);
       const first = best(kept, limit, ranked, (at) => tokensOf(documents[at]?.title ?? ''));
@@ -216,6 +217,7 @@ export function createSearch({ documents, vocabulary, engines }: SearchBook): Se
           return {
             ...{ number, title, summary, system, minutes, skill, holds, letter, publishedAt, book },
             engines: document.engines,
+            withdrawn: document.withdrawn ?? false,
             matched: prose ? [...matched, prose] : matched,
           };
         }),

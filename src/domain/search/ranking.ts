@@ -119,6 +119,17 @@ export function withProse(
   return { ...ranked, scores, proseOnly, near: ranked.near && places.length === 0 };
 }
 
+/**
+ * Puts withdrawn sheets last, in their own order. They stay on the list: whoever looks for one must learn that it is
+ * withdrawn, and not think that the book never had it.
+ */
+export function sink<R extends Ranked>(ranked: R, withdrawn: readonly number[]): R {
+  if (withdrawn.length === 0) return ranked;
+  const scores = ranked.scores.slice();
+  for (const at of withdrawn) scores[at] = (scores[at] as number) * 1e-9;
+  return { ...ranked, scores };
+}
+
 /** Share of what was asked for that stands in the title, and share of the title that was asked for. */
 function inTitle(title: readonly string[], asked: readonly Asked[]): { met: number; covered: number } {
   const tokens = new Set(title);

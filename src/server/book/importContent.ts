@@ -80,14 +80,15 @@ async function readShipped(file: ContentFile): Promise<Shipped> {
 async function take({ number, hash, standing, text, rendered }: Shipped, before: string | null, imported: Imported) {
   const { db } = await app();
   const current = standing?.current ?? null;
+  // On a withdrawn sheet a later text waits for review too.
   const step = releaseStep({ shipped: text.hash, before, current: current?.hash ?? null });
   if (step === 'add') {
     await addFromRelease(number, text, rendered);
     imported.added.push(number);
-  } else if (standing && current && step === 'revise') {
+  } else if (standing && current && step === 'revise' && !standing.withdrawn) {
     await reviseFromRelease({ ...standing, current }, text, rendered);
     imported.revised.push(number);
-  } else if (standing && current && step === 'propose') {
+  } else if (standing && current && step !== 'none') {
     await proposeFromRelease({ ...standing, current }, text, rendered);
     imported.proposed.push(number);
   }

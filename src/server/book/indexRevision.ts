@@ -39,3 +39,14 @@ export async function indexRevision(procedureId: string, rendered: RenderedProce
     });
   });
 }
+
+/** Makes the search say that a procedure is withdrawn, or no longer. Call it in the `write` that does it. */
+export async function markWithdrawn(procedureId: string, withdrawn: boolean): Promise<void> {
+  const { db } = await app();
+  await db.sequelize.query(
+    `UPDATE searchDocuments SET updatedAt = :at,
+       json = CASE WHEN :withdrawn THEN json_set(json, '$.withdrawn', json('true')) ELSE json_remove(json, '$.withdrawn') END
+     WHERE procedureId = :procedureId`,
+    { replacements: { procedureId, withdrawn, at: now() } },
+  );
+}

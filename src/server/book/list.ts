@@ -12,6 +12,7 @@ interface Row extends BookRow {
   hash: string;
   publishedAt: string;
   head: string;
+  withdrawn: 0 | 1;
 }
 
 /** The published procedures of the books a person may read, by number; the cursor is the last number of the page before. */
@@ -19,7 +20,7 @@ export async function listProcedures(actor: Actor, { cursor, limit }: ListQuery)
   const { db } = await app();
   const books = inReadableBooks(readableBooks(actor));
   const rows = await db.read<Row>(
-    `SELECT p.number, ${BOOK_COLUMNS}, r.letter, r.hash, r.publishedAt, r.head
+    `SELECT p.number, ${BOOK_COLUMNS}, r.letter, r.hash, r.publishedAt, r.head, p.withdrawnAt IS NOT NULL AS withdrawn
      FROM procedures p JOIN revisions r ON r.id = p.currentRevisionId
      WHERE ${books.where} AND (length(p.number), p.number) > (length(:after), :after)
      ORDER BY length(p.number), p.number LIMIT :limit`,
@@ -36,5 +37,6 @@ function summary(row: Row): ProcedureSummary {
     book: bookRef(row),
     ...head,
     revision: { letter: row.letter, hash: row.hash, publishedAt: row.publishedAt },
+    withdrawn: row.withdrawn === 1,
   };
 }

@@ -1,6 +1,7 @@
 import type { RenderedProcedure } from '@/domain/procedure/types';
 import { nextLetter } from '@/domain/revision/letters';
 import { appendAudit } from '../audit/append';
+import { tellOfChange } from '../bulletins/write';
 import { now } from '../clock';
 import { app } from '../context';
 import { columnsOf, type Weighed } from '../review/draftText';
@@ -11,6 +12,8 @@ export interface Standing {
   procedureId: string;
   number: string;
   bookKind: 'common' | 'shop';
+  /** Nothing is published on it, by a release neither. */
+  withdrawn: boolean;
   current: { id: string; letter: string; hash: string } | null;
 }
 type Published = Standing & { current: NonNullable<Standing['current']> };
@@ -18,15 +21,15 @@ type Published = Standing & { current: NonNullable<Standing['current']> };
 /** A procedure by its number, and what is published of it; null where the number is free. */
 export async function standingOf(number: string): Promise<Standing | null> {
   const { db } = await app();
-  const [row] = await db.read<{ id: string; bookKind: Standing['bookKind']; current: string | null }>(
-    `SELECT p.id, p.bookKind, (SELECT json_object('id', r.id, 'letter', r.letter, 'hash', r.hash)
+  const [row] = await db.read<{ id: string; bookKind: Standing['bookKind']; withdrawn: 0 | 1; current: string | null }>(
+    `SELECT p.id, p.bookKind, p.withdrawnAt IS NOT NULL AS withdrawn, (SELECT json_object('id', r.id, 'letter', r.letter, 'hash', r.hash)
        FROM revisions r WHERE r.id = p.currentRevisionId) AS current
      FROM procedures p WHERE p.number = :number`,
     { number },
   );
   if (!row) return null;
   const current = row.current === null ? null : (JSON.parse(row.current) as Published['current']);
-  return { procedureId: row.id, number, bookKind: row.bookKind, current };
+  return { procedureId: row.id, number, bookKind: row.bookKind, withdrawn: row.withdrawn === 1, current };
 }
 
 /** The author of what comes with the product. It is no person and never signs in. */
@@ -43,7 +46,11 @@ async function releaseId(): Promise<string> {
 export async function addFromRelease(number: string, text: Weighed, rendered: RenderedProcedure): Promise<void> {
   const { db } = await app();
   const { id } = await db.models.Procedure.create({ number, bookKind: 'common' });
-  await publishFromRelease({ procedureId: id, number, bookKind: 'common', current: null }, text, rendered);
+  await publishFromRelease(
+    { procedureId: id, number, bookKind: 'common', withdrawn: false, current: null },
+    text,
+    rendered,
+  );
 }
 
 /** The next revision of a procedure that the book has not changed since the last release. */
@@ -76,6 +83,14 @@ async function publishFromRelease(
     publishedAt: now(),
   });
   await db.models.Procedure.update({ currentRevisionId: revision.id }, { where: { id: procedureId } });
+  await tellOfChange({
+    procedureId,
+    shopId: null,
+    revisionId: revision.id,
+    criticalReasons: text.criticalReasons,
+    supersedes: current?.letter ?? null,
+    byId: authorId,
+  });
   await keepRendering(text.hash, rendered);
   await indexRevision(procedureId, rendered);
   await appendAudit({
@@ -91,7 +106,7 @@ async function publishFromRelease(
  * proposal of an earlier release that still waits takes the new text, so that the desk holds one.
  */
 export async function proposeFromRelease(
-  { procedureId, number, current }: Published,
+  { procedureId, number, withdrawn, current }: Published,
   text: Weighed,
   rendered: RenderedProcedure,
 ): Promise<void> {
@@ -107,8 +122,9 @@ export async function proposeFromRelease(
         procedureId,
         authorId,
         everProposed: true,
-        reason:
-          'A later release of the common book changed this sheet, and so did this book. Judge what of it to take over.',
+        reason: withdrawn
+          ? 'A later release of the common book changed this sheet, which is withdrawn. Judge whether it mends what it was withdrawn for.'
+          : 'A later release of the common book changed this sheet, and so did this book. Judge what of it to take over.',
       });
   await keepRendering(text.hash, rendered);
   await appendAudit({

@@ -5,6 +5,7 @@ import {
   BOOK_COLUMNS,
   bookRef,
   byLetter,
+  personColumn,
   REVISION_COLUMNS,
   revisionSummary,
   type BookRow,
@@ -18,7 +19,14 @@ const FROM = `FROM procedures p
   JOIN revisions r ON r.procedureId = p.id AND r.letter = ifnull(:letter, c.letter)
   WHERE p.number = :number`;
 const OPEN = `(SELECT count(*) FROM revisions o WHERE o.procedureId = p.id AND o.state = 'proposed') AS openProposals`;
+/** Who withdrew it, when and why, as JSON; null while it is in use. */
+const WITHDRAWN = `(SELECT json_object('at', b.at, 'reason', json_extract(b.words, '$[0]'),
+    'by', (SELECT json(${personColumn('a')}) FROM people a WHERE a.id = b.byId))
+  FROM bulletins b WHERE b.procedureId = p.id AND b.kind = 'withdrawn' AND b.at = p.withdrawnAt
+  ORDER BY b.rowid DESC LIMIT 1) AS withdrawn`;
 const CURRENT = `c.letter AS currentLetter, c.publishedAt AS currentAt`;
+
+const inShort = (time: string): string => Date.parse(time).toString(36);
 
 interface KeyRow extends BookRow {
   revisionId: string;
@@ -44,9 +52,10 @@ export interface SheetKey {
 /** One cheap read, for an ETag or the key of a cache. Refuses 404 what is unknown or not readable. */
 export async function readSheetKey(actor: Actor, number: string, letter?: string): Promise<SheetKey> {
   const { db } = await app();
-  const [found] = await db.read<KeyRow & { peopleAt: string }>(
-    `SELECT p.bookKind, p.shopId, NULL AS shopName, r.id AS revisionId, r.hash, r.letter, ${CURRENT}, ${OPEN},
+  const [found] = await db.read<KeyRow & { peopleAt: string; withdrawnAt: string | null }>(
+    `SELECT p.bookKind, p.shopId, NULL AS shopName, r.id AS revisionId, r.hash, r.letter, ${CURRENT}, ${OPEN}, p.withdrawnAt,
        (SELECT max(updatedAt) FROM people WHERE id = r.authorId
+          OR id IN (SELECT byId FROM bulletins WHERE procedureId = p.id)
           OR id IN (SELECT personId FROM agreements WHERE revisionId = r.id)) AS peopleAt
      ${FROM}`,
     { number, letter: letter ?? null },
@@ -60,7 +69,7 @@ export async function readSheetKey(actor: Actor, number: string, letter?: string
     currentLetter,
     isCurrent: row.letter === currentLetter,
     openProposals,
-    tag: `"${hash.slice(0, 16)}-${currentLetter}-${openProposals}-${RENDERING_FORM}-${Date.parse(row.peopleAt).toString(36)}"`,
+    tag: `"${hash.slice(0, 16)}-${currentLetter}-${openProposals}-${RENDERING_FORM}-${inShort(row.peopleAt)}${row.withdrawnAt === null ? '' : `-w${inShort(row.withdrawnAt)}`}"`,
   };
 }
 
@@ -68,9 +77,17 @@ export async function readSheetKey(actor: Actor, number: string, letter?: string
 export async function readSheet(actor: Actor, number: string, letter?: string): Promise<Sheet> {
   const { db } = await app();
   const [found] = await db.read<
-    KeyRow & RevisionRow & { number: string; earlier: number; source: string; form: number | null; json: string | null }
+    KeyRow &
+      RevisionRow & {
+        number: string;
+        earlier: number;
+        withdrawn: string | null;
+        source: string;
+        form: number | null;
+        json: string | null;
+      }
   >(
-    `SELECT p.number, ${BOOK_COLUMNS}, r.id AS revisionId, ${REVISION_COLUMNS}, r.source, ${CURRENT}, ${OPEN},
+    `SELECT p.number, ${BOOK_COLUMNS}, r.id AS revisionId, ${REVISION_COLUMNS}, r.source, ${CURRENT}, ${OPEN}, ${WITHDRAWN},
        (SELECT count(*) FROM revisions e WHERE e.procedureId = p.id AND e.letter IS NOT NULL
           AND (${byLetter('e')}) < (${byLetter('r')})) AS earlier,
        (SELECT form FROM renderings WHERE hash = r.hash) AS form,
@@ -87,6 +104,7 @@ export async function readSheet(actor: Actor, number: string, letter?: string): 
     revision: revisionSummary(row),
     current: { letter: row.currentLetter, publishedAt: row.currentAt },
     earlier: row.earlier,
+    withdrawn: row.withdrawn === null ? null : (JSON.parse(row.withdrawn) as Sheet['withdrawn']),
     openProposals: row.openProposals,
     frontmatter,
     introHtml,

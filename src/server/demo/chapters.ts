@@ -28,7 +28,15 @@ export interface NewSheet extends Told {
   file: string;
 }
 
-export type Chapter = Change | NewSheet;
+/** A sheet that is taken out of use, and stays so. */
+export interface Withdrawal {
+  number: string;
+  withdrawn: number;
+  by: string;
+  reason: string;
+}
+
+export type Chapter = Change | NewSheet | Withdrawal;
 
 /** What happened in the demonstration network before today, oldest first. All of it is invented. */
 export const CHAPTERS: readonly Chapter[] = [
@@ -80,6 +88,13 @@ export const CHAPTERS: readonly Chapter[] = [
       entry(p, 'timers', 'stand').minutes = 15;
     },
     end: { published: 17, by: 'editor@halden.example' },
+  },
+  {
+    number: 'P-0173',
+    withdrawn: 12,
+    by: 'editor2@halden.example',
+    reason:
+      'Northgate and Pier Street caught the return of the same four injectors and read them up to 6 mL apart, warm and at the same idle. One of us would have scrapped a good set. Until we know what makes the difference, send a doubtful injector out to be tested.',
   },
   {
     number: 'P-0181',

@@ -6,6 +6,7 @@ import { toSource } from '@/domain/procedure/canonical';
 import { whoIs } from '../accounts/whoIs';
 import { acceptedProcedure } from '../book/compare';
 import { readSheet } from '../book/sheet';
+import { withdraw } from '../bulletins/withdraw';
 import { atTime } from '../clock';
 import { app } from '../context';
 import { agree } from '../review/agree';
@@ -14,7 +15,7 @@ import { publish } from '../review/publish';
 import { startProcedure } from '../review/startProcedure';
 import { startProposal } from '../review/startProposal';
 import { submit } from '../review/submit';
-import { CHAPTERS, type Chapter } from './chapters';
+import { CHAPTERS, type Change, type Chapter, type NewSheet } from './chapters';
 
 const DONE = 'demonstration.history';
 const DAY = 86_400_000;
@@ -59,6 +60,11 @@ export async function seedHistory(): Promise<void> {
 }
 
 async function actOut(chapter: Chapter): Promise<void> {
+  if ('withdrawn' in chapter) {
+    const { number, by, reason } = chapter;
+    await atTime(daysAgo(chapter.withdrawn), async () => withdraw(await person(by), number, reason));
+    return;
+  }
   const author = await person(chapter.author);
   const draft = await atTime(daysAgo(chapter.sentIn), () => start(chapter, author));
   const { id } = await atTime(daysAgo(chapter.sentIn, 1), () => submit(author, draft.id));
@@ -73,7 +79,7 @@ async function actOut(chapter: Chapter): Promise<void> {
     );
 }
 
-async function start(chapter: Chapter, author: Actor): Promise<Proposal> {
+async function start(chapter: Change | NewSheet, author: Actor): Promise<Proposal> {
   const { reason } = chapter;
   if ('file' in chapter) {
     const { config } = await app();

@@ -4,11 +4,13 @@ import { brotliCompress, constants, gzip } from 'node:zlib';
 import type { Me } from '@/domain/api/schemas/me';
 import type { Actor } from '@/domain/people/may';
 import { LRUCache } from 'lru-cache';
+import { unreadKey } from '../bulletins/read';
 import { readSheetKey } from '../book/sheet';
 
 /**
  * Whole sheets, kept as they were sent. A sheet's page is a function of the sheet and of who reads it, so it is kept
- * under both: what decides the sheet (`readSheetKey`, read anew each time) and what the frame shows of the person.
+ * under both: what decides the sheet (`readSheetKey`, read anew each time), what the frame shows of the person and which
+ * bulletins that person has still to sign (`unreadKey`).
  * A publication, a proposal, a changed role or another unit system thus finds no entry and the page is made again.
  */
 
@@ -61,8 +63,9 @@ export async function keptSheet(
   const match = SHEET_PATH.exec(url.pathname);
   if (!match?.[1] || url.search || request.method !== 'GET') return undefined;
   const { tag } = await readSheetKey(actor, match[1], match[2]);
+  const unread = await unreadKey(actor);
   const key = createHash('sha256')
-    .update(JSON.stringify([RUN, url.pathname, tag, identity(me)]))
+    .update(JSON.stringify([RUN, url.pathname, tag, identity(me), unread]))
     .digest('base64url');
   const etag = `W/"${key.slice(0, 22)}"`;
   if (request.headers.get('if-none-match') === etag) return new Response(null, { status: 304, headers: { etag } });

@@ -10,6 +10,7 @@ interface Row extends BookRow {
   number: string;
   procedureId: string;
   currentRevisionId: string | null;
+  withdrawnAt: string | null;
   letter: string | null;
   state: RevisionState;
   version: number;
@@ -49,7 +50,7 @@ export interface Loaded extends Omit<Row, 'head' | 'criticalReasons' | 'takesBac
   facts: ProposalFacts;
 }
 
-const SELECT = `SELECT r.id, p.number, p.id AS procedureId, p.currentRevisionId, ${BOOK_COLUMNS}, r.letter, r.state,
+const SELECT = `SELECT r.id, p.number, p.id AS procedureId, p.currentRevisionId, p.withdrawnAt, ${BOOK_COLUMNS}, r.letter, r.state,
     r.version, r.source, r.hash, r.head, r.parentId, b.hash AS parentHash, b.letter AS base,
     json_extract(b.head, '$.title') AS parentTitle, c.letter AS current, r.authorId, ${AUTHOR_COLUMN}, r.reason,
     r.criticalReasons, r.takesBack, r.everProposed, r.createdAt, r.updatedAt, r.proposedAt
@@ -134,6 +135,7 @@ function loaded(
       identical: row.hash === row.parentHash,
       reason: row.reason,
       criticalReasons: reasons,
+      withdrawn: row.withdrawnAt !== null,
       agreements: given,
       openQuestions,
       ...answerable(book, holders),

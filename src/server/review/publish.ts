@@ -3,6 +3,7 @@ import type { Actor } from '@/domain/people/may';
 import { nextLetter } from '@/domain/revision/letters';
 import { indexRevision } from '../book/indexRevision';
 import { readRendering } from '../book/rendering';
+import { tellOfChange } from '../bulletins/write';
 import { now } from '../clock';
 import { app } from '../context';
 import { recordAgreement } from './agree';
@@ -32,6 +33,7 @@ export async function publish(actor: Actor, id: string, version: number | null =
       await Revision.update({ state: 'superseded' }, { where: { id: proposal.currentRevisionId } });
     await Revision.update({ state, letter, publishedAt: now(), version: proposal.version + 1 }, { where: { id } });
     await Procedure.update({ currentRevisionId: id }, { where: { id: proposal.procedureId } });
+    await tellOfChange({ ...proposal, revisionId: id, supersedes: proposal.current, byId: actor.personId });
     await indexRevision(proposal.procedureId, rendered);
     await record(actor, 'revision.published', proposal, { letter, hash: proposal.hash, supersedes: proposal.current });
   });

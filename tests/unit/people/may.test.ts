@@ -73,6 +73,11 @@ const TABLE: Row[] = [
   row('change the settings of another shop', '......Y.', 'changeShopSettings', { shopId: THERE }),
   row('look after shops and common editors', 'nnnnnnYn', 'manageShops', null),
   row('read the audit trail', 'nnnnnnYn', 'readAudit', null),
+  ...(['withdraw', 'bringBack'] as const).flatMap((act) => [
+    row(`${act} a common sheet`, 'nnnnnYn.', act, { book: common }),
+    row(`${act} a sheet of the shop`, 'nnnYn...', act, { book: here }),
+    row(`${act} another shop's sheet`, '........', act, { book: there }),
+  ]),
   row('see the review desk', 'nnnYnYnn', 'seeReviewDesk', { shopsWithOneEditor: [] }),
   row('see it where the shop has one editor', 'nnYYYYnn', 'seeReviewDesk', { shopsWithOneEditor: [HERE] }),
   row('see it where another shop has one editor', 'nnnYnYnn', 'seeReviewDesk', { shopsWithOneEditor: [THERE] }),

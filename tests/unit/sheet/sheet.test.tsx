@@ -67,6 +67,7 @@ function sheetOf(letter: string): Sheet {
     },
     current: { letter: 'B', publishedAt: '2026-11-20T08:00:00.000Z' },
     earlier: letter === 'B' ? 1 : 0,
+    withdrawn: null,
     openProposals: 0,
     ...parsed.rendered,
     source: SOURCE,

@@ -1,4 +1,5 @@
 import * as book from './book';
+import * as bulletins from './bulletins';
 import * as me from './me';
 import * as proposals from './proposals';
 import * as search from './search';
@@ -8,6 +9,13 @@ import * as worksheets from './worksheets';
 import type { Operation } from '../operation';
 
 /** Every call of the API, in the order the OpenAPI document lists them. An area adds its file here. */
-export const OPERATIONS: readonly Operation[] = [me, book, proposals, threads, search, worksheets, shop].flatMap(
-  (area) => Object.values(area),
-);
+export const OPERATIONS: readonly Operation[] = [
+  me,
+  book,
+  bulletins,
+  proposals,
+  threads,
+  search,
+  worksheets,
+  shop,
+].flatMap((area) => Object.values(area));

@@ -29,6 +29,7 @@ export const ProcedureSummary = z.object({
   critical: z.boolean(),
   holds: z.number().int(),
   revision: z.object({ letter: RevisionLetter, hash: z.string(), publishedAt: z.string() }),
+  withdrawn: z.boolean().describe('Nobody works from it while this is true'),
 });
 export type ProcedureSummary = z.infer<typeof ProcedureSummary>;
 
@@ -60,6 +61,10 @@ export const Sheet = z.object({
     .object({ letter: RevisionLetter, publishedAt: z.string() })
     .describe('The revision to work from; the same as `revision` on a current sheet'),
   earlier: z.number().int().describe('How many revisions stand before this one'),
+  withdrawn: z
+    .object({ at: z.string(), reason: z.string(), by: PersonRef })
+    .nullable()
+    .describe('Set while the procedure is withdrawn: nobody works from any revision of it'),
   openProposals: z.number().int().describe('Proposals waiting for review on this procedure'),
   frontmatter: FrontmatterFields,
   introHtml: z.string(),

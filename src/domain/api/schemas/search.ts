@@ -29,6 +29,7 @@ export const SearchHit = z.object({
   letter: RevisionLetter,
   publishedAt: z.string(),
   book: z.string(),
+  withdrawn: z.boolean().describe('Nobody works from it while this is true; such sheets stand last'),
   matched: z
     .array(
       z.object({
