@@ -6,12 +6,22 @@ import { rules } from './0002-rules';
 import { shopRules } from './0003-shop-rules';
 import { takesBack } from './0004-takes-back';
 import { shortcuts } from './0005-shortcuts';
+import { clampOverrides } from './0007-clamp-overrides';
 import { threads } from './0008-threads';
 import { bulletins } from './0009-bulletins';
 import type { Migration } from './migration';
 
 // A list, not a folder read at run time: it is bundled with the server and runs from scripts alike.
-const MIGRATIONS: readonly Migration[] = [tables, rules, shopRules, takesBack, shortcuts, threads, bulletins];
+const MIGRATIONS: readonly Migration[] = [
+  tables,
+  rules,
+  shopRules,
+  takesBack,
+  shortcuts,
+  clampOverrides,
+  threads,
+  bulletins,
+];
 
 type Handle = Pick<Database, 'sequelize' | 'write'>;
 

@@ -1,5 +1,6 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import type { SKILLS, System } from '@/domain/procedure/schema';
+import type { FailingTorque } from '@/domain/revision/failingTorques';
 import type { RevisionState, TakenBackFrom } from '@/domain/revision/types';
 
 /** What lists show of a revision, so that they need not read its text. */
@@ -51,6 +52,8 @@ export class Revision extends Model<InferAttributes<Revision>, InferCreationAttr
   declare criticalReasons: CreationOptional<string[]>;
   /** What of earlier revisions the text sets back, latest first. Kept right like `critical`. */
   declare takesBack: CreationOptional<TakenBackFrom[]>;
+  /** Its torques that fail the clamp check, kept right like `critical`; null where that was never judged. */
+  declare failingTorques: CreationOptional<FailingTorque[] | null>;
   /** Rises with every change of text, reason, base or state; a writer names the one it read. */
   declare version: CreationOptional<number>;
   /** True from the first submission on; such a revision is never deleted. */

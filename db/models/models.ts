@@ -4,7 +4,7 @@ import { Bulletin, ReadAndSign } from './bulletins';
 import { flag, id, optionalText, text, times } from './columns';
 import { Membership, Person, Shop, ShopRule } from './people';
 import { AuditEntry, IdempotencyKey, Setting } from './records';
-import { Agreement, Remark, Thread, ThreadMessage } from './review';
+import { Agreement, ClampOverride, Remark, Thread, ThreadMessage } from './review';
 
 const key = { ...text, primaryKey: true };
 const integer = { type: DataTypes.INTEGER, allowNull: false };
@@ -91,6 +91,7 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
         critical: flag,
         criticalReasons: { ...json, defaultValue: [] },
         takesBack: { ...json, defaultValue: [] },
+        failingTorques: { type: DataTypes.JSON, allowNull: true, defaultValue: [] },
         version: { ...integer, defaultValue: 1 },
         everProposed: flag,
         proposedAt: optionalText,
@@ -106,6 +107,20 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
     Agreement: class extends Agreement {}.init(
       own({ id, revisionId: text, personId: text, hash: text, base: optionalText, at: text, ...stamps }),
       bind('Agreement', 'agreements'),
+    ),
+    ClampOverride: class extends ClampOverride {}.init(
+      own({
+        id,
+        revisionId: text,
+        hash: text,
+        torqueKey: text,
+        personId: text,
+        reason: text,
+        share: { type: DataTypes.DOUBLE, allowNull: false },
+        at: text,
+        ...stamps,
+      }),
+      bind('ClampOverride', 'clampOverrides'),
     ),
     Remark: class extends Remark {}.init(
       own({ id, revisionId: text, personId: text, kind: text, text, anchor: optionalText, at: text, ...stamps }),

@@ -15,6 +15,21 @@ export class Agreement extends Model<InferAttributes<Agreement>, InferCreationAt
   declare updatedAt: CreationOptional<string>;
 }
 
+/** An editor's written reason why one torque of one exact text stays although it fails the clamp check. */
+export class ClampOverride extends Model<InferAttributes<ClampOverride>, InferCreationAttributes<ClampOverride>> {
+  declare id: CreationOptional<string>;
+  declare revisionId: string;
+  declare hash: string;
+  declare torqueKey: string;
+  declare personId: string;
+  declare reason: string;
+  /** Clamp load over proof load, as it was judged: more than 1. */
+  declare share: number;
+  declare at: string;
+  declare createdAt: CreationOptional<string>;
+  declare updatedAt: CreationOptional<string>;
+}
+
 /** The written reason of a return or a decline. */
 export class Remark extends Model<InferAttributes<Remark>, InferCreationAttributes<Remark>> {
   declare id: CreationOptional<string>;

@@ -9,6 +9,7 @@ import { atTime, now } from './clock';
 import { readConfig, type Config } from './config';
 import { openOnce, within, type App } from './context';
 import { daysAgo, FIRST_ISSUE, seedHistory } from './demo/seedHistory';
+import { judgeUnjudged } from './review/judgeUnjudged';
 import { readSecret } from './secret';
 
 /** Opens the book under `config.dataDir`, making it and its secret where they are missing; brings nothing in. */
@@ -23,6 +24,7 @@ export async function start(config: Config): Promise<App> {
   const running = await openBook(config);
   try {
     await within(running, async () => {
+      await judgeUnjudged();
       const { problems } = await importing(running);
       for (const { file, message } of problems) console.warn(`${file} was left out of the book. ${message}`);
       if (!config.demo) return;

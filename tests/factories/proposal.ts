@@ -27,11 +27,12 @@ export const proposal = (change: Partial<Proposal> = {}): Proposal => ({
   proposedAt: '2026-11-28T09:00:00.000Z',
   source: '',
   agreed: [],
+  failing: [],
   remarks: [],
   trail: [],
   currentLetter: 'C',
   publishedLetter: null,
-  may: { edit: false, submit: false, return: true, decline: true, agree: true, publish: false },
+  may: { edit: false, submit: false, return: true, decline: true, agree: true, override: false, publish: false },
   whyNot: {},
   ...change,
 });

@@ -6,6 +6,7 @@ import { nextLetter } from '@/domain/revision/letters';
 
 const NEXT_WORDS: Record<DeskItem['next'], string> = {
   agree: 'Yours to judge',
+  override: 'A failed clamp check, yours to judge',
   publish: 'Yours to publish',
   wait: 'Waits for another editor',
 };

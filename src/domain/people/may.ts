@@ -38,6 +38,8 @@ export interface Subjects {
   return: ProposalSubject;
   decline: ProposalSubject;
   agree: ProposalSubject;
+  /** Of a failed clamp check. */
+  override: ProposalSubject;
   publish: ProposalSubject;
   withdraw: { book: Book };
   bringBack: { book: Book };
@@ -134,6 +136,7 @@ const RULES: { [A in Act]: (actor: Actor, subject: Subjects[A]) => Permission } 
   return: (actor, p) => asReviewer(actor, p, 'returns'),
   decline: (actor, p) => asReviewer(actor, p, 'declines'),
   agree: (actor, p) => asReviewer(actor, p, 'agrees to', true),
+  override: (actor, p) => asReviewer(actor, p, 'overrides the clamp check of'),
   publish: (actor, p) => asReviewer(actor, p, 'publishes'),
   withdraw: (actor, { book }) => asEditor(actor, book, 'withdraws a sheet'),
   bringBack: (actor, { book }) => asEditor(actor, book, 'brings a withdrawn sheet back'),

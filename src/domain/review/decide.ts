@@ -1,6 +1,7 @@
 import { may, type Actor } from '../people/may';
 import { move } from '../revision/states';
 import type { RevisionState } from '../revision/types';
+import { openTorques, type Override } from './overrides';
 import { type Agreement, canPublish, isStale, type ProposalFacts, staleWords, subjectOf } from './rules';
 
 /** What somebody does to a proposal, with what it takes. */
@@ -10,6 +11,8 @@ export type ProposalAct =
   | { act: 'return'; reason: string }
   | { act: 'decline'; reason: string }
   | { act: 'agree' }
+  /** Of the failed clamp check of one torque, by its key. */
+  | { act: 'override'; torque: string; reason: string }
   | { act: 'publish' };
 
 /**
@@ -26,6 +29,8 @@ export type Decision =
       agreements: readonly Agreement[];
       /** The agreement to record, or null. Publishing records the publisher's own where it was not given before. */
       given: Agreement | null;
+      /** The override to record, or null. */
+      overridden: Override | null;
     }
   | { ok: false; kind: RefusalKind; why: string };
 
@@ -35,6 +40,7 @@ const MAY = {
   return: 'return',
   decline: 'decline',
   agree: 'agree',
+  override: 'override',
   publish: 'publish',
 } as const;
 
@@ -53,11 +59,12 @@ export function decide(what: ProposalAct, actor: Actor, facts: ProposalFacts): D
   const { agreements } = facts;
   const own: Agreement = { personId: actor.personId, hash: facts.hash, base: facts.base };
   const agreed = agreements.some((a) => a.personId === own.personId && a.hash === own.hash && a.base === own.base);
-  const done = (given: Agreement | null = null): Decision => ({
+  const done = (given: Agreement | null = null, overridden: Override | null = null): Decision => ({
     ok: true,
     state: moved.state,
     agreements: given ? [...agreements, given] : agreements,
     given,
+    overridden,
   });
 
   switch (what.act) {
@@ -74,6 +81,17 @@ export function decide(what: ProposalAct, actor: Actor, facts: ProposalFacts): D
     case 'agree':
       if (isStale(facts)) return refuse('conflict', staleWords(facts));
       return agreed ? refuse('conflict', 'You have agreed to this text already.') : done(own);
+    case 'override': {
+      const { torque, reason } = what;
+      if (isStale(facts)) return refuse('conflict', staleWords(facts));
+      if (facts.failing.length === 0) return refuse('conflict', 'No torque of this text fails the clamp check.');
+      if (!facts.failing.some(({ key }) => key === torque))
+        return refuse('invalid', `The clamp check of this text does not fail at “${torque}”.`);
+      if (!openTorques(facts).some(({ key }) => key === torque))
+        return refuse('conflict', 'The clamp check of this torque has been overridden already.');
+      if (!reason.trim()) return refuse('invalid', 'Write why this torque is right all the same.');
+      return done(null, { personId: actor.personId, hash: facts.hash, torque, reason: reason.trim() });
+    }
     case 'publish': {
       const given = agreed ? null : own;
       const verdict = canPublish(given ? { ...facts, agreements: [...agreements, given] } : facts);
@@ -93,6 +111,7 @@ export function offers(actor: Actor, facts: ProposalFacts): Record<ProposalAct['
     return: ask({ act: 'return', reason }),
     decline: ask({ act: 'decline', reason }),
     agree: ask({ act: 'agree' }),
+    override: ask({ act: 'override', torque: (openTorques(facts)[0] ?? facts.failing[0])?.key ?? '', reason }),
     publish: ask({ act: 'publish' }),
   };
 }

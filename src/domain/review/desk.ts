@@ -76,7 +76,9 @@ const proposals = (count: number) => (count === 1 ? '1 proposal waits' : `${coun
  * How much of a desk is the reader's to do, and how much waits for its author or for another editor: "2 proposals wait
  * for you, 1 for others." Empty for an empty desk.
  */
-export function deskCount(items: readonly { next: 'agree' | 'publish' | 'wait'; stale: boolean }[]): string {
+export function deskCount(
+  items: readonly { next: 'agree' | 'override' | 'publish' | 'wait'; stale: boolean }[],
+): string {
   const yours = items.filter(({ next, stale }) => next !== 'wait' && !stale).length;
   const others = items.length - yours;
   if (items.length === 0) return '';

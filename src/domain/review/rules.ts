@@ -1,7 +1,9 @@
 import { WITHDRAWN_WAITS } from '../bulletins/withdrawal';
 import type { Book, ProposalSubject } from '../people/may';
+import type { FailingTorque } from '../revision/failingTorques';
 import type { RevisionState } from '../revision/types';
 import { openQuestionWords } from './openQuestions';
+import { openTorques, type Override, overrideMissing } from './overrides';
 
 /** An agreement is to one exact text on one exact base; when either changes, it no longer stands. */
 export interface Agreement {
@@ -33,6 +35,9 @@ export interface ProposalFacts {
   agreements: readonly Agreement[];
   /** The procedure is withdrawn: a proposal waits. */
   withdrawn?: boolean;
+  /** Torques that fail the clamp check, so that an editor must override it; see `failingTorques`. */
+  failing: readonly FailingTorque[];
+  overrides: readonly Override[];
   /** People who are editors of this book now. */
   editorIds: readonly string[];
   /** In a shop book: its senior technicians and owners now. Empty in the common book. */
@@ -107,7 +112,11 @@ function missing(facts: ProposalFacts, editors: number, short: number): string {
 export function canPublish(facts: ProposalFacts): { ok: true } | { ok: false; why: string } {
   if (facts.withdrawn) return { ok: false, why: WITHDRAWN_WAITS };
   if (isStale(facts)) return { ok: false, why: staleWords(facts) };
-  const why = [tally(facts).missing, openQuestionWords(facts.openQuestions ?? [])].filter((one) => one !== null);
+  const why = [
+    tally(facts).missing,
+    openQuestionWords(facts.openQuestions ?? []),
+    overrideMissing(openTorques(facts)),
+  ].filter((one) => one !== null);
   return why.length === 0 ? { ok: true } : { ok: false, why: why.join(' ') };
 }
 

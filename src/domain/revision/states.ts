@@ -10,6 +10,7 @@ export const MOVES = {
   return: { proposed: 'returned' },
   decline: { proposed: 'declined' },
   agree: { proposed: 'proposed' },
+  override: { proposed: 'proposed' },
   publish: { proposed: 'published' },
   /** Done by the book itself when the next revision is published. */
   supersede: { published: 'superseded' },
@@ -32,6 +33,7 @@ const WANTS: Record<Move, string> = {
   return: 'Only a proposal that waits for review can be returned.',
   decline: 'Only a proposal that waits for review can be declined.',
   agree: 'Only a proposal that waits for review can be agreed to.',
+  override: 'Only of a proposal that waits for review can the clamp check be overridden.',
   publish: 'Only a proposal that waits for review can be published.',
   supersede: 'Only a published revision can be superseded.',
 };

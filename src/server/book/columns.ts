@@ -1,4 +1,4 @@
-import type { RevisionSummary } from '@/domain/api/schemas/book';
+import type { ClampOverride, RevisionSummary } from '@/domain/api/schemas/book';
 import type { BookRef, PersonRef } from '@/domain/api/schemas/common';
 import type { Book } from '@/domain/people/may';
 import type { RevisionState } from '@/domain/revision/types';
@@ -32,8 +32,16 @@ const REVIEWERS_COLUMN = `(SELECT json_group_array(json(who)) FROM (
     WHERE g.revisionId = r.id AND g.hash = r.hash AND g.base IS (SELECT letter FROM revisions WHERE id = r.parentId)
     ORDER BY g.at)) AS reviewers`;
 
+/** Why torques of the very text of revision `r` stay that fail the clamp check. */
+const OVERRIDES_COLUMN = `(SELECT json_group_array(json(how)) FROM (
+    SELECT json_object('torque', coalesce((SELECT json_extract(f.value, '$.name') FROM json_each(r.failingTorques) f
+        WHERE json_extract(f.value, '$.key') = o.torqueKey), o.torqueKey),
+      'share', o.share, 'person', ${personColumn('a')}, 'reason', o.reason, 'at', o.at) AS how
+    FROM clampOverrides o JOIN people a ON a.id = o.personId
+    WHERE o.revisionId = r.id AND o.hash = r.hash ORDER BY o.at, o.id)) AS overrides`;
+
 /** What a title block or a history says of a published revision `r`. */
-export const REVISION_COLUMNS = `r.letter, r.state, r.hash, r.publishedAt, r.reason, ${AUTHOR_COLUMN}, ${REVIEWERS_COLUMN}`;
+export const REVISION_COLUMNS = `r.letter, r.state, r.hash, r.publishedAt, r.reason, ${AUTHOR_COLUMN}, ${REVIEWERS_COLUMN}, ${OVERRIDES_COLUMN}`;
 export interface RevisionRow {
   letter: string;
   state: RevisionState;
@@ -42,6 +50,7 @@ export interface RevisionRow {
   reason: string;
   author: string;
   reviewers: string;
+  overrides: string;
 }
 
 export const personRef = (json: string) => JSON.parse(json) as PersonRef;
@@ -58,6 +67,7 @@ export const revisionSummary = (row: RevisionRow): RevisionSummary => ({
   reason: row.reason,
   author: personRef(row.author),
   reviewers: JSON.parse(row.reviewers) as PersonRef[],
+  overrides: JSON.parse(row.overrides) as ClampOverride[],
 });
 
 /** Sorts revisions of one procedure by letter: A to Y, then AA. */

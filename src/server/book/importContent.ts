@@ -1,4 +1,5 @@
 import type { RenderedProcedure } from '@/domain/procedure/types';
+import { failingWords } from '@/domain/review/overrides';
 import { releaseStep } from '@/domain/revision/release';
 import { app } from '../context';
 import { settleText, type Weighed } from '../review/draftText';
@@ -77,11 +78,21 @@ async function readShipped(file: ContentFile): Promise<Shipped> {
   return { ...file, standing, text, rendered };
 }
 
-async function take({ number, hash, standing, text, rendered }: Shipped, before: string | null, imported: Imported) {
+async function take(
+  { name, number, hash, standing, text, rendered }: Shipped,
+  before: string | null,
+  imported: Imported,
+) {
   const { db } = await app();
   const current = standing?.current ?? null;
   // On a withdrawn sheet a later text waits for review too.
-  const step = releaseStep({ shipped: text.hash, before, current: current?.hash ?? null });
+  const fails = text.failingTorques.length > 0;
+  const step = releaseStep({ shipped: text.hash, before, current: current?.hash ?? null, fails });
+  if (step === 'refuse') {
+    // Not remembered, so that it is told at each start until the file is mended.
+    imported.problems.push({ file: name, message: refusedWords(text.failingTorques) });
+    return;
+  }
   if (step === 'add') {
     await addFromRelease(number, text, rendered);
     imported.added.push(number);
@@ -95,6 +106,9 @@ async function take({ number, hash, standing, text, rendered }: Shipped, before:
   const value: Remembered = { file: hash, shipped: text.hash };
   await db.models.Setting.upsert({ key: KEY + number, value: JSON.stringify(value) });
 }
+
+const refusedWords = (failing: Weighed['failingTorques']) =>
+  `It would clamp ${failingWords(failing)}. What a release adds nobody reviews, so nobody could override the clamp check.`;
 
 async function remembered(): Promise<Map<string, Remembered>> {
   const { db } = await app();

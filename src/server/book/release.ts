@@ -102,8 +102,9 @@ async function publishFromRelease(
 }
 
 /**
- * Puts the text of a release before the reviewers of a procedure that the book has changed itself. A
- * proposal of an earlier release that still waits takes the new text, so that the desk holds one.
+ * Puts the text of a release before the reviewers: of a procedure that the book has changed itself, or of a torque that
+ * fails the clamp check, which an editor must override. A proposal
+ * of an earlier release that still waits takes the new text, so that the desk holds one.
  */
 export async function proposeFromRelease(
   { procedureId, number, withdrawn, current }: Published,
@@ -124,7 +125,9 @@ export async function proposeFromRelease(
         everProposed: true,
         reason: withdrawn
           ? 'A later release of the common book changed this sheet, which is withdrawn. Judge whether it mends what it was withdrawn for.'
-          : 'A later release of the common book changed this sheet, and so did this book. Judge what of it to take over.',
+          : text.failingTorques.length > 0
+            ? 'A later release of the common book changed this sheet, with a torque that fails the clamp check. Judge whether to take it over.'
+            : 'A later release of the common book changed this sheet, and so did this book. Judge what of it to take over.',
       });
   await keepRendering(text.hash, rendered);
   await appendAudit({

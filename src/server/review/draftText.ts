@@ -1,6 +1,7 @@
 import type { RevisionHead } from '@db/models/book';
 import type { Parsed, RenderedProcedure } from '@/domain/procedure/types';
 import { compareProcedures } from '@/domain/revision/compare';
+import { type FailingTorque, failingTorques } from '@/domain/revision/failingTorques';
 import type { TakenBackFrom } from '@/domain/revision/types';
 import { headOf } from '../book/head';
 import { hashOf, parsedText } from '../book/parsed';
@@ -15,6 +16,7 @@ export interface TextColumns {
   critical: boolean;
   criticalReasons: string[];
   takesBack: TakenBackFrom[];
+  failingTorques: FailingTorque[];
 }
 
 export interface Weighed extends TextColumns {
@@ -28,28 +30,31 @@ export async function weigh(source: string, parentId: string | null): Promise<We
   const parsed = await parsedText(source);
   const plain = { source, hash: hashOf(source), parsed };
   if (!parsed.ok)
-    return { ...plain, head: null, critical: false, criticalReasons: [], takesBack: [], identical: false };
+    return {
+      ...plain,
+      head: null,
+      critical: false,
+      criticalReasons: [],
+      takesBack: [],
+      failingTorques: [],
+      identical: false,
+    };
   const ancestry = await ancestryOf(parentId);
-  const { criticalReasons, identical } = compareProcedures(ancestry[0]?.procedure ?? null, parsed.procedure);
+  const base = ancestry[0]?.procedure ?? null;
+  const { criticalReasons, identical } = compareProcedures(base, parsed.procedure);
   return {
     ...plain,
     head: headOf(parsed.rendered),
     critical: criticalReasons.length > 0,
     criticalReasons,
     takesBack: takenBack(ancestry, parsed.procedure),
+    failingTorques: failingTorques(base?.frontmatter ?? null, parsed.procedure.frontmatter),
     identical: identical && parentId !== null,
   };
 }
 
 /** The columns of a weighed text. */
-export const columnsOf = ({ source, hash, head, critical, criticalReasons, takesBack }: Weighed): TextColumns => ({
-  source,
-  hash,
-  head,
-  critical,
-  criticalReasons,
-  takesBack,
-});
+export const columnsOf = ({ parsed: _, identical: __, ...columns }: Weighed): TextColumns => columns;
 
 /** Refuses 422, with line and column, a text that cannot be read. */
 export function refuseUnreadable(parsed: Parsed): asserts parsed is Extract<Parsed, { ok: true }> {

@@ -28,6 +28,7 @@ const CHANGED: Record<ProposalAct['act'], string> = {
   return: CHANGED_UNDER_REVIEWER,
   decline: CHANGED_UNDER_REVIEWER,
   agree: CHANGED_UNDER_REVIEWER,
+  override: CHANGED_UNDER_REVIEWER,
   publish: CHANGED_UNDER_REVIEWER,
 };
 
@@ -40,6 +41,12 @@ function expectVersion(act: ProposalAct['act'], proposal: Loaded, version: numbe
 /** A published letter that the text does not stand on is a lost race, told with the letter that won it. */
 export const staleBase = (facts: Pick<ProposalFacts, 'base' | 'current'>, extra: Record<string, unknown> = {}) =>
   stale(`${staleWords(facts)} Nothing was lost.`, { base: facts.base, current: facts.current, ...extra });
+
+/** The field of the call that an `invalid` is about. */
+function missingField(what: ProposalAct, { identical, reason, failing }: ProposalFacts): string {
+  if (what.act === 'override') return failing.some(({ key }) => key === what.torque) ? 'reason' : 'torque';
+  return what.act === 'submit' && identical && reason.trim() ? 'source' : 'reason';
+}
 
 /**
  * Asks the rules of review. Refuses 404 and 403 first, then 409 for another version, then what the rules
@@ -58,8 +65,7 @@ export function guard(
   expectVersion(what.act, proposal, version);
   if (decision.ok) return decision;
   if (decision.kind === 'invalid') {
-    const path = facts.identical && facts.reason.trim() ? 'source' : 'reason';
-    throw invalid(decision.why, [{ path, message: decision.why }]);
+    throw invalid(decision.why, [{ path: missingField(what, facts), message: decision.why }]);
   }
   if (isStale(facts) && decision.why === staleWords(facts)) throw staleBase(facts, standing(proposal));
   throw new Refusal(409, 'conflict', 'Not as things stand', decision.why, { extra: standing(proposal) });

@@ -1,6 +1,7 @@
 import type { RevisionHead } from '@db/models/book';
 import type { Book } from '@/domain/people/may';
 import type { ProposalFacts } from '@/domain/review/rules';
+import type { FailingTorque } from '@/domain/revision/failingTorques';
 import type { RevisionState, TakenBackFrom } from '@/domain/revision/types';
 import { AUTHOR_COLUMN, BOOK_COLUMNS, bookOf, type BookRow } from '../book/columns';
 import { app } from '../context';
@@ -27,6 +28,7 @@ interface Row extends BookRow {
   reason: string;
   criticalReasons: string;
   takesBack: string;
+  failingTorques: string | null;
   everProposed: 0 | 1;
   createdAt: string;
   updatedAt: string;
@@ -41,19 +43,33 @@ export interface GivenAgreement {
   at: string;
 }
 
+export interface GivenOverride {
+  revisionId: string;
+  personId: string;
+  hash: string;
+  /** Key of the torque. */
+  torque: string;
+  reason: string;
+  at: string;
+}
+
 /** A revision on its way, with the facts that the rules of review ask for. */
-export interface Loaded extends Omit<Row, 'head' | 'criticalReasons' | 'takesBack' | 'everProposed'> {
+export interface Loaded extends Omit<
+  Row,
+  'head' | 'criticalReasons' | 'takesBack' | 'failingTorques' | 'everProposed'
+> {
   head: RevisionHead | null;
   criticalReasons: string[];
   takesBack: TakenBackFrom[];
   given: GivenAgreement[];
+  overrides: GivenOverride[];
   facts: ProposalFacts;
 }
 
 const SELECT = `SELECT r.id, p.number, p.id AS procedureId, p.currentRevisionId, p.withdrawnAt, ${BOOK_COLUMNS}, r.letter, r.state,
     r.version, r.source, r.hash, r.head, r.parentId, b.hash AS parentHash, b.letter AS base,
     json_extract(b.head, '$.title') AS parentTitle, c.letter AS current, r.authorId, ${AUTHOR_COLUMN}, r.reason,
-    r.criticalReasons, r.takesBack, r.everProposed, r.createdAt, r.updatedAt, r.proposedAt
+    r.criticalReasons, r.takesBack, r.failingTorques, r.everProposed, r.createdAt, r.updatedAt, r.proposedAt
   FROM revisions r JOIN procedures p ON p.id = r.procedureId
   LEFT JOIN revisions b ON b.id = r.parentId
   LEFT JOIN revisions c ON c.id = p.currentRevisionId`;
@@ -70,6 +86,11 @@ export async function loadProposals(where: string, replacements: Record<string, 
     `SELECT revisionId, personId, hash, base, at FROM agreements WHERE revisionId IN (:ids) ORDER BY at`,
     { ids: rows.map((row) => row.id) },
   );
+  const overrides = await db.read<GivenOverride>(
+    `SELECT revisionId, personId, hash, torqueKey AS torque, reason, at FROM clampOverrides
+     WHERE revisionId IN (:ids) ORDER BY at, id`,
+    { ids: rows.map((row) => row.id) },
+  );
   const holders = await db.read<Holder>(
     `SELECT personId, scope, shopId, role FROM memberships WHERE role IN ('editor', 'senior', 'owner')`,
   );
@@ -82,6 +103,7 @@ export async function loadProposals(where: string, replacements: Record<string, 
     loaded(
       row,
       given.filter((g) => g.revisionId === row.id),
+      overrides.filter((o) => o.revisionId === row.id),
       holders,
       questions.filter((q) => q.revisionId === row.id).map(({ place }) => place),
     ),
@@ -111,8 +133,9 @@ function answerable(book: Book, holders: Holder[]) {
 }
 
 function loaded(
-  { head, criticalReasons, takesBack, everProposed, ...row }: Row,
+  { head, criticalReasons, takesBack, failingTorques, everProposed, ...row }: Row,
   given: GivenAgreement[],
+  overrides: GivenOverride[],
   holders: Holder[],
   openQuestions: string[],
 ): Loaded {
@@ -124,6 +147,7 @@ function loaded(
     criticalReasons: reasons,
     takesBack: JSON.parse(takesBack) as TakenBackFrom[],
     given,
+    overrides,
     facts: {
       book,
       authorId: row.authorId,
@@ -138,6 +162,9 @@ function loaded(
       withdrawn: row.withdrawnAt !== null,
       agreements: given,
       openQuestions,
+      // Never judged is only what was published before the check was kept, or a text that `judgeUnjudged` has yet to read.
+      failing: failingTorques === null ? [] : (JSON.parse(failingTorques) as FailingTorque[]),
+      overrides,
       ...answerable(book, holders),
     },
   };

@@ -21,7 +21,8 @@ export async function shopsWithOneEditor(): Promise<string[]> {
 function nextFor(actor: Actor, { facts }: Loaded): DeskItem['next'] {
   const can = offers(actor, facts);
   if (can.publish.ok) return 'publish';
-  return can.agree.ok ? 'agree' : 'wait';
+  if (can.agree.ok) return 'agree';
+  return can.override.ok ? 'override' : 'wait';
 }
 
 /** The proposals that wait for this person's judgement, worst first. Refuses 403 who judges none in any book. */

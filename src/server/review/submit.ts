@@ -16,6 +16,7 @@ const settled = ({ facts }: Loaded, text: Weighed): ProposalFacts => ({
   hash: text.hash,
   identical: text.identical,
   criticalReasons: text.criticalReasons,
+  failing: text.failingTorques,
 });
 
 /**

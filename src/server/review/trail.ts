@@ -7,6 +7,7 @@ const WORDS: Record<string, TrailEntry['what']> = {
   'proposal.returned': 'returned',
   'proposal.declined': 'declined',
   'proposal.agreed': 'agreed',
+  'proposal.overridden': 'overrode',
   'revision.published': 'published',
 };
 

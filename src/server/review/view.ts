@@ -1,6 +1,8 @@
+import type { PersonRef } from '@/domain/api/schemas/common';
 import type { Proposal, ProposalSummary } from '@/domain/api/schemas/proposals';
 import type { Actor } from '@/domain/people/may';
 import { offers, type ProposalAct } from '@/domain/review/decide';
+import { standingOverride } from '@/domain/review/overrides';
 import { agreementsNeeded, isStale, standing, tally } from '@/domain/review/rules';
 import { bookRef, personColumn, personRef } from '../book/columns';
 import { app } from '../context';
@@ -46,6 +48,21 @@ interface RemarkRow {
   anchor: string | null;
 }
 
+/** Torques that fail the clamp check, each with the override that stands or, once it was published, stood. */
+function failingOf({ facts, overrides }: Loaded, personOf: (id: string) => PersonRef): Proposal['failing'] {
+  const isOver = facts.state === 'published' || facts.state === 'superseded';
+  return facts.failing.map((torque) => {
+    const given = overrides.filter((o) => o.hash === facts.hash && o.torque === torque.key);
+    // Who has overridden a published text answers for it still, whatever became of their role.
+    const standing = isOver ? given[0] : standingOverride(facts, torque.key);
+    const stood = given.find((o) => o.personId === standing?.personId);
+    return {
+      ...torque,
+      override: stood ? { person: personOf(stood.personId), reason: stood.reason, at: stood.at } : null,
+    };
+  });
+}
+
 /** A proposal as its author and its reviewers see it, with what this person may do with it and why not. */
 export async function proposalOf(actor: Actor, proposal: Loaded): Promise<Proposal> {
   const { db } = await app();
@@ -56,9 +73,11 @@ export async function proposalOf(actor: Actor, proposal: Loaded): Promise<Propos
   );
   const people = await db.read<{ id: string; person: string }>(
     `SELECT a.id, ${personColumn('a')} AS person FROM people a
-     WHERE a.id IN (SELECT personId FROM agreements WHERE revisionId = :id)`,
+     WHERE a.id IN (SELECT personId FROM agreements WHERE revisionId = :id
+       UNION SELECT personId FROM clampOverrides WHERE revisionId = :id)`,
     { id: proposal.id },
   );
+  const personOf = (id: string) => personRef(people.find((p) => p.id === id)?.person ?? 'null');
   const { facts } = proposal;
   const { editors, standIns } = standing(facts);
   const stands = new Set([...editors, ...standIns]);
@@ -68,10 +87,11 @@ export async function proposalOf(actor: Actor, proposal: Loaded): Promise<Propos
     ...summaryOf(proposal),
     source: proposal.source,
     agreed: proposal.given.map((g) => ({
-      person: personRef(people.find((p) => p.id === g.personId)?.person ?? 'null'),
+      person: personOf(g.personId),
       at: g.at,
       stands: stands.has(g.personId) && g.hash === facts.hash && g.base === facts.base,
     })),
+    failing: failingOf(proposal, personOf),
     remarks: remarks.map(({ person, ...remark }) => ({ ...remark, person: personRef(person) })),
     trail: await trailOf(proposal.id),
     currentLetter: proposal.current,

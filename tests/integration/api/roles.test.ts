@@ -27,6 +27,7 @@ const EXPECTED: Record<'common' | 'shop', Record<string, string>> = {
     decline: '403 403 403 403 403 | 403 403 403 403 403 | 200 403 404',
     agree: '403 403 403 403 403 | 403 403 403 403 403 | 200 403 404',
     'agree to a critical change': '403 403 403 403 403 | 403 403 403 403 403 | 200 403 404',
+    'override a failed clamp check': '403 403 403 403 403 | 403 403 403 403 403 | 200 403 404',
     publish: '403 403 403 403 403 | 403 403 403 403 403 | 200 403 404',
     'publish a critical change alone': '403 403 403 403 403 | 403 403 403 403 403 | 409 403 404',
     'see the review desk': '403 403 200 200 200 | 403 403 200 200 200 | 200 403 403',
@@ -41,6 +42,7 @@ const EXPECTED: Record<'common' | 'shop', Record<string, string>> = {
     decline: '403 403 403 200 403 | 404 404 404 404 404 | 404 404 404',
     agree: '403 403 403 200 403 | 404 404 404 404 404 | 404 404 404',
     'agree to a critical change': '403 403 200 200 200 | 404 404 404 404 404 | 404 404 404',
+    'override a failed clamp check': '403 403 403 200 403 | 404 404 404 404 404 | 404 404 404',
     publish: '403 403 403 200 403 | 404 404 404 404 404 | 404 404 404',
     'publish a critical change alone': '403 403 403 409 403 | 404 404 404 404 404 | 404 404 404',
   },
@@ -73,6 +75,8 @@ async function cell(act: string, person: Member, number: string, book: string): 
     decline: () => post('decline', { reason: 'Not safe' }),
     agree: () => post('agree'),
     'agree to a critical change': () => post('agree', undefined, { nm: 12 }),
+    'override a failed clamp check': () =>
+      post('overrides', { torque: 'cover-bolt', reason: 'Tried on the bench' }, { nm: 20 }),
     publish: async () => {
       // Other cells of the row publish, too; each needs a procedure of its own.
       const own = `P-9${String(published++).padStart(3, '0')}`;

@@ -7,6 +7,7 @@ import { importContent } from '@/server/book/importContent';
 import { hashOf, parsedText } from '@/server/book/parsed';
 import { readSheet } from '@/server/book/sheet';
 import { agree } from '@/server/review/agree';
+import { overrideClamp } from '@/server/review/override';
 import { publish } from '@/server/review/publish';
 import { readDesk } from '@/server/review/readDesk';
 import { startProposal } from '@/server/review/startProposal';
@@ -116,6 +117,34 @@ describe('importContent', () => {
     await publish(await actor('common.editor2'), first!.id);
     expect((await current()).revision.letter).toBe('C');
     expect((await current()).frontmatter.torques[0]?.nm).toBe(13);
+  });
+
+  test('a torque past proof load never comes in unreviewed: a new file is left out and told each time, a changed one waits', async () => {
+    await ship(text({ nm: 20 }));
+    const problems = [
+      {
+        file: FILE,
+        message:
+          'It would clamp Cover bolt to 143 % of proof load. What a release adds nobody reviews, so nobody could override the clamp check.',
+      },
+    ];
+    expect(await importContent()).toEqual({ ...nothing, problems });
+    expect(await importContent()).toEqual({ ...nothing, problems });
+    await ship(text());
+    expect(await importContent()).toEqual({ ...nothing, added: ['P-0007'] });
+
+    await ship(text({ nm: 20 }));
+    expect(await importContent()).toEqual({ ...nothing, proposed: ['P-0007'] });
+    expect((await current()).frontmatter.torques[0]?.nm).toBe(10);
+    const editor = await actor('common.editor');
+    const [waiting] = await readDesk(editor);
+    expect(waiting).toMatchObject({ number: 'P-0007', base: 'A', state: 'proposed' });
+    await agree(await actor('common.editor2'), waiting!.id);
+    await expect(publish(editor, waiting!.id)).rejects.toMatchObject({ status: 409 });
+    await overrideClamp(editor, waiting!.id, { torque: 'cover-bolt', reason: 'Stretch measured.' });
+    await publish(editor, waiting!.id);
+    expect((await current()).revision).toMatchObject({ letter: 'B', overrides: [{ reason: 'Stretch measured.' }] });
+    expect(await importContent()).toEqual(nothing);
   });
 
   test('a file that cannot be read is left out and told, and taken once it is mended', async () => {

@@ -18,8 +18,11 @@ beforeEach(async () => {
   const { Person, Procedure, Revision } = db.models;
   const release = await Person.create({ kind: 'release', email: null, name: 'Release' });
   people['release'] = release.id;
-  for (const name of ['author', 'first', 'second'])
-    people[name] = (await Person.create({ email: `${name}@test.example`, name, passwordHash: 'x' })).id;
+  for (const name of ['author', 'first', 'second']) {
+    const { id } = await Person.create({ email: `${name}@test.example`, name, passwordHash: 'x' });
+    people[name] = id;
+    await db.models.Membership.create({ personId: id, scope: 'common', role: 'editor' });
+  }
   procedure = await Procedure.create({ number: 'P-0001', bookKind: 'common' });
   published = await Revision.create({ ...text('release', HASH), letter: 'A', state: 'published', publishedAt: 'then' });
   await procedure.update({ currentRevisionId: published.id });
@@ -161,7 +164,7 @@ describe('the database itself holds that', () => {
       { scope: 'network', shopId: shop.id, role: 'steward' },
     ] as const;
     for (const membership of wrong) await refused(() => Membership.create({ personId, ...membership }), 'CHECK');
-    await Membership.create({ personId, scope: 'common', role: 'editor' });
+    // Each of the three is an editor of the common book already.
     await refused(() => Membership.create({ personId, scope: 'common', role: 'editor' }), 'Validation error');
   });
 

@@ -96,7 +96,7 @@ const TABLE: Row[] = [
     row(`${act} another's, here`, 'nnnnn...', act, proposal({ book: here })),
     row(`${act} another's draft`, '........', act, proposal({ everProposed: false })),
   ]),
-  ...(['return', 'decline', 'agree', 'publish'] as const).flatMap((act) => [
+  ...(['return', 'decline', 'agree', 'override', 'publish'] as const).flatMap((act) => [
     row(`${act}, common`, 'nnnnnYn.', act, proposal({})),
     row(`${act}, common, critical`, 'nnnnnYn.', act, proposal({ critical: true, editors: 1 })),
     row(`${act}, here`, 'nnnYn...', act, proposal({ book: here })),

@@ -17,6 +17,8 @@ const facts = (change: Partial<ProposalFacts> = {}): ProposalFacts => ({
   reason: 'The covers weep.',
   criticalReasons: [],
   agreements: [],
+  failing: [],
+  overrides: [],
   editorIds: ['ines', 'tomas'],
   standInIds: [],
   ...change,
@@ -102,7 +104,13 @@ describe('decide', () => {
 
   it('records the agreement of the editor who publishes', () => {
     const answer = decide({ act: 'publish' }, editor('ines'), facts());
-    expect(answer).toEqual({ ok: true, state: 'published', agreements: [by('ines')], given: by('ines') });
+    expect(answer).toEqual({
+      ok: true,
+      state: 'published',
+      agreements: [by('ines')],
+      given: by('ines'),
+      overridden: null,
+    });
     const again = decide({ act: 'publish' }, editor('ines'), facts({ agreements: [by('ines')] }));
     expect(again).toMatchObject({ ok: true, given: null, agreements: [by('ines')] });
   });

@@ -64,6 +64,7 @@ function sheetOf(letter: string): Sheet {
       reason: '',
       author,
       reviewers: [],
+      overrides: [],
     },
     current: { letter: 'B', publishedAt: '2026-11-20T08:00:00.000Z' },
     earlier: letter === 'B' ? 1 : 0,

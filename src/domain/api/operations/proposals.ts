@@ -2,7 +2,15 @@ import { z } from 'zod';
 import { operation } from '../operation';
 import { Id, ListQuery, pageOf } from '../schemas/common';
 import { ProposalComparison } from '../schemas/compare';
-import { DeskItem, GiveReason, Proposal, ProposalSummary, SaveProposal, SavedProposal } from '../schemas/proposals';
+import {
+  DeskItem,
+  GiveOverride,
+  GiveReason,
+  Proposal,
+  ProposalSummary,
+  SaveProposal,
+  SavedProposal,
+} from '../schemas/proposals';
 
 const OfProposal = z.object({ id: Id });
 
@@ -91,6 +99,13 @@ export const declineProposal = act(
   GiveReason,
 );
 export const agreeToProposal = act('agreeToProposal', 'agree', 'Review', 'Agree to the text as it stands');
+export const overrideClampCheck = act(
+  'overrideClampCheck',
+  'overrides',
+  'Review',
+  'Override the failed clamp check of one torque, with a reason that stays in the history of the sheet',
+  GiveOverride,
+);
 export const publishProposal = act(
   'publishProposal',
   'publish',

@@ -5,6 +5,15 @@ import { ProcedureNumber, RevisionLetter, BookRef, PersonRef } from './common';
 
 /** Published sheets and their revisions. The OpenAPI document is made from these schemas. */
 
+export const ClampOverride = z.object({
+  torque: z.string().describe('Name of the torque'),
+  share: z.number().describe('Clamp load over proof load: 1.23 is 123 %'),
+  person: PersonRef,
+  reason: z.string(),
+  at: z.string(),
+});
+export type ClampOverride = z.infer<typeof ClampOverride>;
+
 export const RevisionSummary = z.object({
   letter: RevisionLetter,
   state: z.enum(REVISION_STATES),
@@ -14,6 +23,7 @@ export const RevisionSummary = z.object({
   reason: z.string(),
   author: PersonRef,
   reviewers: z.array(PersonRef),
+  overrides: z.array(ClampOverride).describe('Torques past proof load that editors let stand, and why'),
 });
 export type RevisionSummary = z.infer<typeof RevisionSummary>;
 

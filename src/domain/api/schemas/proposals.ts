@@ -32,6 +32,24 @@ export const Agreement = z.object({
   stands: z.boolean().describe('False once the text changed after it'),
 });
 
+const Share = z.number().describe('Clamp load over proof load: 1.23 is 123 %');
+
+export const GiveOverride = z.object({
+  torque: z.string().max(120).describe('Key of a torque that fails the clamp check'),
+  reason: z.string().trim().min(1, 'Write why this torque is right all the same').max(4000),
+});
+
+export const FailingTorque = z.object({
+  key: z.string(),
+  name: z.string(),
+  share: Share,
+  override: z
+    .object({ person: PersonRef, reason: z.string(), at: z.string() })
+    .nullable()
+    .describe('The one that stands: to this text, by an editor of the book; null blocks publishing'),
+});
+export type FailingTorque = z.infer<typeof FailingTorque>;
+
 export const Remark = z.object({
   id: z.string(),
   kind: z.enum(['returned', 'declined']),
@@ -43,7 +61,7 @@ export const Remark = z.object({
 export type Remark = z.infer<typeof Remark>;
 
 export const TrailEntry = z.object({
-  what: z.enum(['proposed', 'returned', 'declined', 'agreed', 'published']),
+  what: z.enum(['proposed', 'returned', 'declined', 'agreed', 'overrode', 'published']),
   person: PersonRef,
   at: z.string(),
 });
@@ -76,6 +94,9 @@ export type ProposalSummary = z.infer<typeof ProposalSummary>;
 export const Proposal = ProposalSummary.extend({
   source: z.string(),
   agreed: z.array(Agreement),
+  failing: z
+    .array(FailingTorque)
+    .describe('Torques past proof load that are new or whose load changes; each needs an override'),
   remarks: z.array(Remark),
   trail: z.array(TrailEntry).describe('What became of it since it was first sent in, oldest first'),
   currentLetter: RevisionLetter.nullable(),
@@ -86,6 +107,7 @@ export const Proposal = ProposalSummary.extend({
     return: z.boolean(),
     decline: z.boolean(),
     agree: z.boolean(),
+    override: z.boolean().describe('Of the clamp check, for the torques that are still open'),
     publish: z.boolean(),
   }),
   whyNot: z.record(z.string()).describe('For an act that is refused: the reason in words'),
@@ -98,6 +120,8 @@ export const SavedProposal = Proposal.extend({
 export type SavedProposal = z.infer<typeof SavedProposal>;
 
 export const DeskItem = ProposalSummary.extend({
-  next: z.enum(['agree', 'publish', 'wait']).describe('What I can do now; `wait` where others must act first'),
+  next: z
+    .enum(['agree', 'override', 'publish', 'wait'])
+    .describe('What I can do now; `wait` where others must act first'),
 });
 export type DeskItem = z.infer<typeof DeskItem>;
