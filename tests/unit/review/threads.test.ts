@@ -34,6 +34,8 @@ const facts = (change: Partial<ProposalFacts> = {}): ProposalFacts => ({
   reason: 'why',
   criticalReasons: [],
   agreements: [{ personId: 'editor', hash: 'h', base: 'A' }],
+  failing: [],
+  overrides: [],
   editorIds: ['editor', 'other'],
   standInIds: [],
   ...change,
