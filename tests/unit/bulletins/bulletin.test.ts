@@ -84,6 +84,8 @@ describe('a withdrawal', () => {
       criticalReasons: [],
       agreements: [{ personId: 'e', hash: 'h', base: 'A' }],
       editorIds: ['e'],
+      failing: [],
+      overrides: [],
       standInIds: [],
     };
     expect(canPublish(proposal)).toEqual({ ok: true });
