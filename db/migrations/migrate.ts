@@ -6,6 +6,7 @@ import { rules } from './0002-rules';
 import { shopRules } from './0003-shop-rules';
 import { takesBack } from './0004-takes-back';
 import { shortcuts } from './0005-shortcuts';
+import { severity } from './0006-severity';
 import { clampOverrides } from './0007-clamp-overrides';
 import { threads } from './0008-threads';
 import { bulletins } from './0009-bulletins';
@@ -18,6 +19,7 @@ const MIGRATIONS: readonly Migration[] = [
   shopRules,
   takesBack,
   shortcuts,
+  severity,
   clampOverrides,
   threads,
   bulletins,

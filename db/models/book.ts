@@ -1,7 +1,7 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import type { SKILLS, System } from '@/domain/procedure/schema';
 import type { FailingTorque } from '@/domain/revision/failingTorques';
-import type { RevisionState, TakenBackFrom } from '@/domain/revision/types';
+import type { RevisionState, Severity, TakenBackFrom } from '@/domain/revision/types';
 
 /** What lists show of a revision, so that they need not read its text. */
 export interface RevisionHead {
@@ -54,6 +54,8 @@ export class Revision extends Model<InferAttributes<Revision>, InferCreationAttr
   declare takesBack: CreationOptional<TakenBackFrom[]>;
   /** Its torques that fail the clamp check, kept right like `critical`; null where that was never judged. */
   declare failingTorques: CreationOptional<FailingTorque[] | null>;
+  /** How grave the change is, and why. Kept right like `critical`; null where it was never weighed so. */
+  declare severity: CreationOptional<Severity | null>;
   /** Rises with every change of text, reason, base or state; a writer names the one it read. */
   declare version: CreationOptional<number>;
   /** True from the first submission on; such a revision is never deleted. */

@@ -92,6 +92,7 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
         criticalReasons: { ...json, defaultValue: [] },
         takesBack: { ...json, defaultValue: [] },
         failingTorques: { type: DataTypes.JSON, allowNull: true, defaultValue: [] },
+        severity: { ...json, allowNull: true, defaultValue: null },
         version: { ...integer, defaultValue: 1 },
         everProposed: flag,
         proposedAt: optionalText,

@@ -19,6 +19,7 @@ export const proposal = (change: Partial<Proposal> = {}): Proposal => ({
   reason: 'It weeps at ten.',
   critical: true,
   criticalReasons: ['a torque changes: Cover bolt'],
+  severity: { level: 'serious', because: ['a torque changes (Cover bolt)'] },
   takesBack: [],
   agreementsNeeded: 2,
   agreements: 0,

@@ -11,6 +11,13 @@ const NEXT_WORDS: Record<DeskItem['next'], string> = {
   wait: 'Waits for another editor',
 };
 
+/** The word says how grave it is; the weight of the letters lets it be found. */
+const SEVERITY_LOOK: Record<ProposalSummary['severity']['level'], string | undefined> = {
+  grave: 'heavy-edge block pl-2.5 font-semibold',
+  serious: 'font-semibold',
+  ordinary: undefined,
+};
+
 /** "today", "1 day", "3 days". */
 const waiting = (since: string, now: string) => {
   const days = daysSince(since, now);
@@ -56,7 +63,7 @@ export function DeskTable({
               )}
             </Cell>
             <Cell label="What it does" className="sm:w-[23%] lg:w-[26%]">
-              <span className={item.critical ? 'font-semibold' : undefined}>{severityWords(item)}</span>
+              <span className={SEVERITY_LOOK[item.severity.level]}>{severityWords(item)}</span>
               {takenBackWords(item.takesBack, 1).map((sentence) => (
                 <span key={sentence} className="taken-back">
                   {sentence}

@@ -20,12 +20,13 @@ const Caution = ({ caution, side }: { caution: CautionLine; side: Side }) => (
 );
 
 /** What is to be said of the step as a whole, in words. */
-function remark({ kind, moved, old, now, critical }: StepPair, side: Side, alone: boolean): string | null {
+function remark({ kind, moved, old, now, effects, critical }: StepPair, side: Side, alone: boolean): string | null {
   const place = side === 'old' ? now?.number : old?.number;
   const said = [
     side === 'old' && kind === 'removed' && 'Removed',
     side === 'new' && kind === 'added' && !alone && 'Added',
     moved && place && (side === 'old' ? `Moves to step ${place}` : `Moved, was step ${place}`),
+    ...(side === 'new' || kind === 'removed' ? effects : []),
     critical && (side === 'new' || kind === 'removed') && `Critical: ${critical}`,
   ].filter(Boolean);
   return said.length > 0 ? `${said.join('. ')}.` : null;

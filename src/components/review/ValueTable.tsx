@@ -95,8 +95,11 @@ const ChangeRows = ({ rows, names, below, loadUnder }: RowsProps) =>
               <Value spans={row.now} side="new" prose={row.prose} />
             </div>
           </td>
-          <td data-label="Change" data-empty={change ? undefined : ''} className="value-number whitespace-nowrap">
-            <div className={row.percent === null ? 'value-none' : undefined}>{change}</div>
+          <td data-label="Change" data-empty={change || row.effect ? undefined : ''} className="value-number">
+            <div>
+              {change && <span className={row.percent === null ? 'value-none' : 'whitespace-nowrap'}>{change}</span>}
+              {row.effect && <span className="value-effect">{row.effect}</span>}
+            </div>
           </td>
           <td data-label="Critical" data-empty={why ? undefined : ''}>
             <div className={why ? undefined : 'value-none'}>{why ?? 'No'}</div>

@@ -58,13 +58,11 @@ export function sideNames({
 
 const NUMBERS = ['No', 'One', 'Two', 'Three'];
 
-/** "Two editors must agree, because a torque changes: Cover bolt, and 1 more." */
-export function needed({ agreementsNeeded, criticalReasons, book }: Proposal): string {
-  const [first, ...others] = criticalReasons;
+/** "Two editors must agree." Why stands beside it, as the severity of the change. */
+export function needed({ agreementsNeeded, book }: Pick<Proposal, 'agreementsNeeded' | 'book'>): string {
   const many = NUMBERS[agreementsNeeded] ?? String(agreementsNeeded);
   const who = agreementsNeeded === 1 ? 'editor' : book.kind === 'common' ? 'editors' : 'people';
-  const why = first ? `, because ${first}${others.length > 0 ? `, and ${others.length} more` : ''}` : '';
-  return `${many} ${who} must agree${why}.`;
+  return `${many} ${who} must agree.`;
 }
 
 /** Why it cannot be published yet, to somebody whose own agreement is already counted on, or still to come. */

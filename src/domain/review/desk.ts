@@ -1,4 +1,4 @@
-import type { TakenBackFrom } from '../revision/types';
+import { SEVERITY_LEVELS, type Severity, type TakenBackFrom } from '../revision/types';
 import { agreementsNeeded } from './rules';
 
 /** What the review desk needs of a proposal to put it in its place. */
@@ -7,34 +7,47 @@ export interface DeskItem {
   /** Letter of the revision it changes; null for a new procedure, which nobody works to yet. */
   base: string | null;
   criticalReasons: readonly string[];
+  severity: Severity;
   /** When it was sent in, ISO 8601 in UTC. */
   proposedAt: string;
   /** How many agreements stand. */
   agreements: number;
 }
 
-/** 3: a critical change to a sheet in use; 2: a critical new sheet; 1: a sheet in use; 0: a new sheet. */
-export function severity(item: Pick<DeskItem, 'base' | 'criticalReasons'>): 0 | 1 | 2 | 3 {
-  const inUse = item.base !== null;
-  if (item.criticalReasons.length > 0) return inUse ? 3 : 2;
-  return inUse ? 1 : 0;
-}
+/** Where it stands: by severity, and within one a sheet in use, which somebody works to, before a new one. */
+const rank = ({ severity, base }: Pick<DeskItem, 'base' | 'severity'>): number =>
+  SEVERITY_LEVELS.indexOf(severity.level) * 2 + (base === null ? 0 : 1);
 
 /** Worst first: by severity, then who has waited longest. A new list; the order is total, so it never flickers. */
 export function deskOrder<T extends DeskItem>(items: readonly T[]): T[] {
   return [...items].sort(
     (a, b) =>
-      severity(b) - severity(a) ||
+      rank(b) - rank(a) ||
       Date.parse(a.proposedAt) - Date.parse(b.proposedAt) ||
       (a.id < b.id ? -1 : a.id > b.id ? 1 : 0),
   );
 }
 
-/** What a proposal would do, in words: "Critical, because a torque changes: Cover bolt, and 1 more." */
-export function severityWords({ base, criticalReasons }: Pick<DeskItem, 'base' | 'criticalReasons'>): string {
-  const [first, ...others] = criticalReasons;
-  if (!first) return base === null ? 'A new sheet.' : 'An ordinary change to a sheet in use.';
-  return `Critical, because ${first}${others.length > 0 ? `, and ${others.length} more` : ''}.`;
+const LEVEL_WORDS = { grave: 'Grave', serious: 'Serious' };
+
+/** The first of a list, and how many more: "a; b; and 2 more". A rest of one is named: counting it would be no shorter. */
+function firstOf(list: readonly string[], most: number): string {
+  const named = list.length === most + 1 && most > 1 ? list : list.slice(0, most);
+  const rest = list.length - named.length;
+  return [...named, ...(rest > 0 ? [`and ${rest} more`] : [])].join(most > 1 ? '; ' : ', ');
+}
+
+/**
+ * What a proposal would do, in words: "Grave: the caution “Hot oil” is weaker, and 1 more."
+ *
+ * @param most how many reasons are named before the rest is counted
+ */
+export function severityWords(
+  { base, severity: { level, because } }: Pick<DeskItem, 'base' | 'severity'>,
+  most = 1,
+): string {
+  if (level === 'ordinary') return base === null ? 'A new sheet.' : 'An ordinary change to a sheet in use.';
+  return `${LEVEL_WORDS[level]}: ${firstOf(because, most)}.`;
 }
 
 /**
@@ -60,7 +73,7 @@ export const daysSince = (then: string, now: string): number =>
   Math.max(0, Math.floor((Date.parse(now) - Date.parse(then)) / DAY));
 
 /**
- * Why a proposal stands where it stands: "Critical: a torque changes: Cover bolt. Waiting 3 days, 1 of 2 agreed."
+ * Why a proposal stands where it stands: "Serious: a torque changes (Cover bolt). Waiting 3 days, 1 of 2 agreed."
  *
  * @param now ISO 8601 in UTC
  */

@@ -3,7 +3,8 @@ import { bodyText } from './bodyText';
 import { clampChanges } from './clampChanges';
 import { compareSteps } from './compareSteps';
 import { compareValues } from './compareValues';
-import { inOrder, sheetReasons } from './critical';
+import { addedTorqueReasons, inOrder, sheetReasons } from './critical';
+import { severityOf } from './severity';
 import type { Comparison } from './types';
 import { compareWords } from './words';
 
@@ -22,17 +23,22 @@ export function compareProcedures(from: Procedure | null, to: Procedure): Compar
     values.length === 0 &&
     from.intro === to.intro &&
     steps.every(({ change }) => change.kind === 'same' && !change.moved);
+  const clamp = clampChanges(from?.frontmatter ?? null, to.frontmatter);
   const reasons = [
     ...values.map(({ reason }) => reason),
     ...steps.flatMap((step) => step.reasons),
     ...sheetReasons(from?.frontmatter ?? null, to.frontmatter),
+    ...addedTorqueReasons(from?.frontmatter ?? null, clamp),
   ];
+  const criticalReasons = identical ? [] : inOrder(reasons);
+  const effects = [...values.flatMap(({ effect }) => effect ?? []), ...steps.flatMap((step) => step.effects)];
   return {
     values: values.map(({ change }) => change),
-    clamp: clampChanges(from?.frontmatter ?? null, to.frontmatter),
+    clamp,
     intro,
     steps: steps.map(({ change }) => change),
-    criticalReasons: identical ? [] : inOrder(reasons),
+    criticalReasons,
+    severity: severityOf(effects, clamp, criticalReasons),
     identical,
   };
 }

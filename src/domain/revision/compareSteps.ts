@@ -1,12 +1,15 @@
 import type { Procedure, Step } from '../procedure/types';
 import { bodyText } from './bodyText';
 import { inOrder, type Reason, stepReasons } from './critical';
+import type { Effect } from './effect';
+import { stepEffects } from './stepEffects';
 import type { StepChange } from './types';
 import { compareWords } from './words';
 
 export interface StepDifference {
   change: StepChange;
   reasons: Reason[];
+  effects: Effect[];
 }
 
 /** Places of a longest rising run in `numbers`; what is not in it has moved. */
@@ -36,6 +39,7 @@ function stepChange(
   from: { procedure: Procedure; step: Step; number: number } | null,
   to: { procedure: Procedure; step: Step; number: number } | null,
   moved: boolean,
+  effects: Effect[],
 ): StepDifference {
   const text = (side: typeof from) => (side ? bodyText(side.step.body, side.procedure.frontmatter) : '');
   const title = compareWords(from?.step.title ?? '', to?.step.title ?? '');
@@ -45,6 +49,7 @@ function stepChange(
   const reasons = from ? stepReasons(from.step, to?.step ?? null, from.procedure.frontmatter) : [];
   return {
     reasons,
+    effects,
     change: {
       id: (to ?? from)?.step.id ?? '',
       kind: same ? 'same' : from && to ? 'edited' : to ? 'added' : 'removed',
@@ -54,6 +59,7 @@ function stepChange(
       title,
       body,
       cautions: { from: from?.step.cautions ?? [], to: to?.step.cautions ?? [] },
+      effects: effects.map(({ words }) => words),
       critical: inOrder(reasons)[0] ?? null,
     },
   };
@@ -69,13 +75,15 @@ export function compareSteps(from: Procedure | null, to: Procedure): StepDiffere
 
   const out = to.steps.map((step, i) => {
     const before = old.get(step.id) ?? null;
-    return stepChange(before, { procedure: to, step, number: i + 1 }, before !== null && !stays.has(step.id));
+    const moved = before !== null && !stays.has(step.id);
+    const effects = from ? stepEffects(before?.step ?? null, step, from, to) : [];
+    return stepChange(before, { procedure: to, step, number: i + 1 }, moved, effects);
   });
   let followed: string | null = null;
   for (const side of old.values()) {
     if (!kept.has(side.step.id)) {
       const after = out.findIndex(({ change }) => change.id === followed);
-      out.splice(after + 1, 0, stepChange(side, null, false));
+      out.splice(after + 1, 0, stepChange(side, null, false, from ? stepEffects(side.step, null, from, to) : []));
     }
     followed = side.step.id;
   }

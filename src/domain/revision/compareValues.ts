@@ -1,11 +1,14 @@
 import { type Frontmatter, KEYED_LISTS } from '../procedure/schema';
 import { entryReason, type Reason } from './critical';
+import type { Effect } from './effect';
+import { fieldEffect, removalEffect } from './effects';
 import { detailOf, type Entry, fieldsOf, type ListName, nameOf, percentChange, wholeOf } from './fields';
 import type { ValueChange } from './types';
 
 export interface ValueDifference {
   change: ValueChange;
   reason: Reason | null;
+  effect: Effect | null;
 }
 
 const detail = <L extends ListName>(list: L, entry: Frontmatter[L][number]) =>
@@ -14,8 +17,10 @@ const detail = <L extends ListName>(list: L, entry: Frontmatter[L][number]) =>
 function wholeEntry(list: ListName, entry: Entry, kind: 'added' | 'removed'): ValueDifference {
   const text = (wholeOf[list] as (entry: Entry) => string)(entry);
   const reason = kind === 'removed' ? entryReason(list, entry, null) : null;
+  const does = kind === 'removed' ? removalEffect(list, entry) : null;
   return {
     reason,
+    effect: does,
     change: {
       path: `${list}.${entry.key}`,
       list,
@@ -26,6 +31,7 @@ function wholeEntry(list: ListName, entry: Entry, kind: 'added' | 'removed'): Va
       from: kind === 'removed' ? text : null,
       to: kind === 'added' ? text : null,
       percent: null,
+      effect: does?.words ?? null,
       critical: reason?.words ?? null,
     },
   };
@@ -38,16 +44,19 @@ interface Owner {
   name: string;
   detail: string | null;
   reason: (field: string) => Reason | null;
+  /** What a changed field does; its path may name a place in a list, `passes.1`. */
+  effect: (path: string) => Effect | null;
 }
 
-const HEAD: Owner = { list: 'head', key: null, name: '', detail: null, reason: () => null };
+const HEAD: Owner = { list: 'head', key: null, name: '', detail: null, reason: () => null, effect: () => null };
 
-const ownerOf = (list: ListName, entry: Entry): Owner => ({
+const ownerOf = (list: ListName, before: Entry, entry: Entry): Owner => ({
   list,
   key: entry.key,
   name: nameOf(list, entry),
   detail: detail(list, entry),
   reason: (field) => entryReason(list, entry, field),
+  effect: (path) => fieldEffect(list, path, before, entry),
 });
 
 function fieldChanges({ list, key, name, ...owner }: Owner, from: object, to: object): ValueDifference[] {
@@ -60,6 +69,7 @@ function fieldChanges({ list, key, name, ...owner }: Owner, from: object, to: ob
     const now = after.get(path);
     if (old?.raw === now?.raw) return [];
     const reason = owner.reason(path.split('.')[0] ?? path);
+    const does = owner.effect(path);
     const change: ValueChange = {
       path: key === null ? path : `${list}.${key}.${path}`,
       list,
@@ -70,9 +80,10 @@ function fieldChanges({ list, key, name, ...owner }: Owner, from: object, to: ob
       from: old?.text ?? null,
       to: now?.text ?? null,
       percent: percentChange(old, now),
+      effect: does?.words ?? null,
       critical: reason?.words ?? null,
     };
-    return [{ change, reason }];
+    return [{ change, reason, effect: does }];
   });
 }
 
@@ -87,6 +98,7 @@ function orderChange(list: ListName, from: readonly Entry[], to: readonly Entry[
   return [
     {
       reason: null,
+      effect: null,
       change: {
         path: list,
         list,
@@ -97,6 +109,7 @@ function orderChange(list: ListName, from: readonly Entry[], to: readonly Entry[
         from: names(before),
         to: names(after),
         percent: null,
+        effect: null,
         critical: null,
       },
     },
@@ -109,7 +122,7 @@ function listChanges(list: ListName, from: readonly Entry[], to: readonly Entry[
   return [
     ...to.flatMap((entry) => {
       const before = old.get(entry.key);
-      return before ? fieldChanges(ownerOf(list, entry), before, entry) : [wholeEntry(list, entry, 'added')];
+      return before ? fieldChanges(ownerOf(list, before, entry), before, entry) : [wholeEntry(list, entry, 'added')];
     }),
     ...from.filter(({ key }) => !now.has(key)).map((entry) => wholeEntry(list, entry, 'removed')),
     ...orderChange(list, from, to),

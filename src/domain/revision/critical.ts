@@ -2,12 +2,14 @@ import type { Frontmatter } from '../procedure/schema';
 import type { Step } from '../procedure/types';
 import { actedOn } from './bodyText';
 import { type ListName, nameOf } from './fields';
+import { clampReasons } from './severity';
+import type { ClampChange } from './types';
 
 /**
  * What makes a change critical, so that two editors must agree: a torque, limit, caution, hold point or what happens to
  * a part is changed or removed, in the lists or in the step that uses it; or the sheet is marked critical, before or
- * after. What is only added to a sheet is an ordinary change. A new sheet is critical where it gives a torque or a
- * limit: nobody has checked those numbers yet.
+ * after. What is only added to a sheet is an ordinary change, unless it is a torque that cannot be right for its fastener.
+ * A new sheet is critical where it gives a torque or a limit: nobody has checked those numbers yet.
  */
 
 /** Most serious first. */
@@ -49,6 +51,17 @@ export function sheetReasons(from: Frontmatter | null, to: Frontmatter): Reason[
   for (const { name } of to.torques) reasons.push({ kind: 'torque', words: `a new sheet gives a torque: ${name}` });
   for (const { name } of to.limits) reasons.push({ kind: 'limit', words: `a new sheet gives a limit: ${name}` });
   return reasons;
+}
+
+/** A torque that comes to a sheet past its proof load, or as a likely mix-up of units, is no ordinary addition. */
+export function addedTorqueReasons(from: Frontmatter | null, clamp: readonly ClampChange[]): Reason[] {
+  const added = clamp.filter(({ key }) => from && !from.torques.some((torque) => torque.key === key));
+  return added.flatMap((one) =>
+    clampReasons(one).map(({ kind }) => ({
+      kind: 'torque',
+      words: `an added torque ${kind === 'past-proof' ? 'is past its proof load' : 'looks like a mix-up of units'}: ${one.name}`,
+    })),
+  );
 }
 
 /** The first of `before` that cannot be found in `after` in the same order; -1 where all are still there. */

@@ -26,6 +26,8 @@ export interface StepPair {
   id: string;
   kind: StepChange['kind'];
   moved: boolean;
+  /** What it does at the bench beyond the words. */
+  effects: string[];
   critical: string | null;
   old: StepSide | null;
   now: StepSide | null;
@@ -83,7 +85,15 @@ export function twoTexts(comparison: Comparison, from: Frontmatter | null, to: F
     const old = sideOf('old', step.fromNumber);
     const now = sideOf('new', step.toNumber);
     const reworded = step.kind === 'same' && (isChanged(old?.cautions ?? []) || isChanged(now?.cautions ?? []));
-    return { id: step.id, kind: reworded ? 'edited' : step.kind, moved: step.moved, critical: step.critical, old, now };
+    return {
+      id: step.id,
+      kind: reworded ? 'edited' : step.kind,
+      moved: step.moved,
+      effects: step.effects,
+      critical: step.critical,
+      old,
+      now,
+    };
   });
   return comparison.intro.some(({ kind }) => kind !== 'same')
     ? [introduction(own(comparison.intro), from === null), ...steps]
@@ -101,7 +111,7 @@ function introduction(runs: readonly WordRun[], alone: boolean): StepPair {
   const old = sideOf('old');
   const now = sideOf('new');
   const kind = old && now ? 'edited' : now ? 'added' : 'removed';
-  return { id: INTRODUCTION, kind, moved: false, critical: null, old, now };
+  return { id: INTRODUCTION, kind, moved: false, effects: [], critical: null, old, now };
 }
 
 /** Whether anything about the step differs, its place included. */

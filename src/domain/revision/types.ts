@@ -27,6 +27,8 @@ export interface ValueChange {
   to: string | null;
   /** Relative change of a single number in per cent, for example 20; null where there is none. */
   percent: number | null;
+  /** What it does at the bench beyond the change itself: "Wider: allows 0.02 mm more"; null where nothing can be said. */
+  effect: string | null;
   /** Why this makes the proposal critical, or null. */
   critical: string | null;
 }
@@ -44,6 +46,8 @@ export interface StepChange {
   body: WordRun[];
   /** Keys of cautions that stand ahead of the step in either text. */
   cautions: { from: string[]; to: string[] };
+  /** What it does at the bench beyond the words: "Nobody needs to check here any longer". */
+  effects: string[];
   critical: string | null;
 }
 
@@ -70,6 +74,15 @@ export interface TakenBackFrom {
   what: string[];
 }
 
+/** Least first. What makes a change grave stands in `severity.ts`. */
+export const SEVERITY_LEVELS = ['ordinary', 'serious', 'grave'] as const;
+
+export interface Severity {
+  level: (typeof SEVERITY_LEVELS)[number];
+  /** What decided it, gravest first: "the limit “Gap” is wider". Empty for an ordinary change. */
+  because: string[];
+}
+
 export interface Comparison {
   values: ValueChange[];
   clamp: ClampChange[];
@@ -78,5 +91,6 @@ export interface Comparison {
   steps: StepChange[];
   /** Why two editors are needed, most serious first; empty for an ordinary change. */
   criticalReasons: string[];
+  severity: Severity;
   identical: boolean;
 }

@@ -2,7 +2,7 @@ import type { RevisionHead } from '@db/models/book';
 import type { Parsed, RenderedProcedure } from '@/domain/procedure/types';
 import { compareProcedures } from '@/domain/revision/compare';
 import { type FailingTorque, failingTorques } from '@/domain/revision/failingTorques';
-import type { TakenBackFrom } from '@/domain/revision/types';
+import type { Severity, TakenBackFrom } from '@/domain/revision/types';
 import { headOf } from '../book/head';
 import { hashOf, parsedText } from '../book/parsed';
 import { invalid } from '../refusal';
@@ -17,6 +17,7 @@ export interface TextColumns {
   criticalReasons: string[];
   takesBack: TakenBackFrom[];
   failingTorques: FailingTorque[];
+  severity: Severity;
 }
 
 export interface Weighed extends TextColumns {
@@ -24,6 +25,8 @@ export interface Weighed extends TextColumns {
   /** Says the same as its base. */
   identical: boolean;
 }
+
+const NOTHING_YET: Severity = { level: 'ordinary', because: [] };
 
 /** Reads a text, as it was typed, and weighs it against its base. A text that cannot be read is weighed as nothing yet. */
 export async function weigh(source: string, parentId: string | null): Promise<Weighed> {
@@ -37,11 +40,12 @@ export async function weigh(source: string, parentId: string | null): Promise<We
       criticalReasons: [],
       takesBack: [],
       failingTorques: [],
+      severity: NOTHING_YET,
       identical: false,
     };
   const ancestry = await ancestryOf(parentId);
   const base = ancestry[0]?.procedure ?? null;
-  const { criticalReasons, identical } = compareProcedures(base, parsed.procedure);
+  const { criticalReasons, severity, identical } = compareProcedures(base, parsed.procedure);
   return {
     ...plain,
     head: headOf(parsed.rendered),
@@ -49,6 +53,7 @@ export async function weigh(source: string, parentId: string | null): Promise<We
     criticalReasons,
     takesBack: takenBack(ancestry, parsed.procedure),
     failingTorques: failingTorques(base?.frontmatter ?? null, parsed.procedure.frontmatter),
+    severity,
     identical: identical && parentId !== null,
   };
 }

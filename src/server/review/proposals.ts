@@ -2,7 +2,8 @@ import type { RevisionHead } from '@db/models/book';
 import type { Book } from '@/domain/people/may';
 import type { ProposalFacts } from '@/domain/review/rules';
 import type { FailingTorque } from '@/domain/revision/failingTorques';
-import type { RevisionState, TakenBackFrom } from '@/domain/revision/types';
+import { severityOf } from '@/domain/revision/severity';
+import type { RevisionState, Severity, TakenBackFrom } from '@/domain/revision/types';
 import { AUTHOR_COLUMN, BOOK_COLUMNS, bookOf, type BookRow } from '../book/columns';
 import { app } from '../context';
 
@@ -29,6 +30,7 @@ interface Row extends BookRow {
   criticalReasons: string;
   takesBack: string;
   failingTorques: string | null;
+  severity: string | null;
   everProposed: 0 | 1;
   createdAt: string;
   updatedAt: string;
@@ -56,11 +58,12 @@ export interface GivenOverride {
 /** A revision on its way, with the facts that the rules of review ask for. */
 export interface Loaded extends Omit<
   Row,
-  'head' | 'criticalReasons' | 'takesBack' | 'failingTorques' | 'everProposed'
+  'head' | 'criticalReasons' | 'takesBack' | 'failingTorques' | 'severity' | 'everProposed'
 > {
   head: RevisionHead | null;
   criticalReasons: string[];
   takesBack: TakenBackFrom[];
+  severity: Severity;
   given: GivenAgreement[];
   overrides: GivenOverride[];
   facts: ProposalFacts;
@@ -69,7 +72,7 @@ export interface Loaded extends Omit<
 const SELECT = `SELECT r.id, p.number, p.id AS procedureId, p.currentRevisionId, p.withdrawnAt, ${BOOK_COLUMNS}, r.letter, r.state,
     r.version, r.source, r.hash, r.head, r.parentId, b.hash AS parentHash, b.letter AS base,
     json_extract(b.head, '$.title') AS parentTitle, c.letter AS current, r.authorId, ${AUTHOR_COLUMN}, r.reason,
-    r.criticalReasons, r.takesBack, r.failingTorques, r.everProposed, r.createdAt, r.updatedAt, r.proposedAt
+    r.criticalReasons, r.takesBack, r.failingTorques, r.severity, r.everProposed, r.createdAt, r.updatedAt, r.proposedAt
   FROM revisions r JOIN procedures p ON p.id = r.procedureId
   LEFT JOIN revisions b ON b.id = r.parentId
   LEFT JOIN revisions c ON c.id = p.currentRevisionId`;
@@ -133,7 +136,7 @@ function answerable(book: Book, holders: Holder[]) {
 }
 
 function loaded(
-  { head, criticalReasons, takesBack, failingTorques, everProposed, ...row }: Row,
+  { head, criticalReasons, takesBack, failingTorques, severity, everProposed, ...row }: Row,
   given: GivenAgreement[],
   overrides: GivenOverride[],
   holders: Holder[],
@@ -146,6 +149,7 @@ function loaded(
     head: head === null ? null : (JSON.parse(head) as RevisionHead),
     criticalReasons: reasons,
     takesBack: JSON.parse(takesBack) as TakenBackFrom[],
+    severity: severity === null ? severityOf([], [], reasons) : (JSON.parse(severity) as Severity),
     given,
     overrides,
     facts: {

@@ -16,7 +16,7 @@ const titleOf = ({ head, parentTitle, source }: Loaded): string =>
 const OPEN = new Set(['draft', 'proposed', 'returned']);
 
 export function summaryOf(proposal: Loaded): ProposalSummary {
-  const { facts, criticalReasons, takesBack } = proposal;
+  const { facts, criticalReasons, takesBack, severity } = proposal;
   return {
     id: proposal.id,
     number: proposal.number,
@@ -31,6 +31,7 @@ export function summaryOf(proposal: Loaded): ProposalSummary {
     critical: criticalReasons.length > 0,
     criticalReasons,
     takesBack,
+    severity,
     agreementsNeeded: agreementsNeeded(criticalReasons),
     agreements: tally(facts).given,
     createdAt: proposal.createdAt,

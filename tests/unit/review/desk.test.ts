@@ -1,16 +1,26 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { deskCount, type DeskItem, deskOrder, deskReason, severity, takenBackWords } from '@/domain/review/desk';
+import { SEVERITY_LEVELS, type Severity } from '@/domain/revision/types';
+import { deskCount, type DeskItem, deskOrder, deskReason, takenBackWords } from '@/domain/review/desk';
 
+const ORDINARY: Severity = { level: 'ordinary', because: [] };
+const SERIOUS: Partial<DeskItem> = {
+  criticalReasons: ['a torque changes: Cover bolt'],
+  severity: { level: 'serious', because: ['a torque changes (Cover bolt)'] },
+};
+const GRAVE: Partial<DeskItem> = {
+  criticalReasons: ['a limit changes: Gap'],
+  severity: { level: 'grave', because: ['the limit “Gap” is wider'] },
+};
 const item = (id: string, change: Partial<DeskItem> = {}): DeskItem => ({
   id,
   base: 'C',
   criticalReasons: [],
+  severity: ORDINARY,
   proposedAt: '2026-11-28T09:00:00Z',
   agreements: 0,
   ...change,
 });
-const TORQUE = ['a torque changes: Cover bolt'];
 
 describe('the order of the review desk', () => {
   it('puts what can hurt somebody now first, then what has waited longest', () => {
@@ -18,17 +28,28 @@ describe('the order of the review desk', () => {
       item('new', { base: null }),
       item('young', { proposedAt: '2026-11-30T09:00:00Z' }),
       item('old'),
-      item('critical new', { base: null, criticalReasons: TORQUE, proposedAt: '2026-01-01T00:00:00Z' }),
-      item('critical', { criticalReasons: TORQUE, proposedAt: '2026-11-30T10:00:00Z' }),
+      item('serious new', { base: null, ...SERIOUS, proposedAt: '2026-01-01T00:00:00Z' }),
+      item('serious', { ...SERIOUS, proposedAt: '2026-11-30T10:00:00Z' }),
+      item('grave, young', { ...GRAVE, proposedAt: '2026-11-30T12:00:00Z' }),
+      item('grave, old', { ...GRAVE, proposedAt: '2026-11-29T12:00:00Z' }),
     ];
-    expect(deskOrder(items).map(({ id }) => id)).toEqual(['critical', 'critical new', 'old', 'young', 'new']);
+    expect(deskOrder(items).map(({ id }) => id)).toEqual([
+      'grave, old',
+      'grave, young',
+      'serious',
+      'serious new',
+      'old',
+      'young',
+      'new',
+    ]);
   });
 
   it('is the same whatever order it was given', () => {
     const any = fc.record({
       id: fc.uuid(),
       base: fc.constantFrom(null, 'A'),
-      criticalReasons: fc.constantFrom([], TORQUE),
+      criticalReasons: fc.constant([]),
+      severity: fc.constantFrom(...SEVERITY_LEVELS).map((level): Severity => ({ level, because: [level] })),
       proposedAt: fc.constantFrom('2026-11-28T09:00:00Z', '2026-11-29T09:00:00Z'),
       agreements: fc.nat(2),
     });
@@ -39,7 +60,8 @@ describe('the order of the review desk', () => {
       fc.property(lists, ([list, shuffled]) => {
         const sorted = deskOrder(list);
         expect(deskOrder(shuffled)).toEqual(sorted);
-        sorted.slice(1).forEach((next, i) => expect(severity(next)).toBeLessThanOrEqual(severity(sorted[i]!)));
+        const levels = sorted.map(({ severity }) => SEVERITY_LEVELS.indexOf(severity.level));
+        expect(levels).toEqual([...levels].sort((a, b) => b - a));
       }),
     );
   });
@@ -48,12 +70,12 @@ describe('the order of the review desk', () => {
     [{}, 'An ordinary change to a sheet in use. Waiting 3 days, 0 of 1 agreed.'],
     [{ base: null, proposedAt: '2026-12-01T08:00:00Z' }, 'A new sheet. Sent in today, 0 of 1 agreed.'],
     [
-      { criticalReasons: TORQUE, agreements: 1, proposedAt: '2026-11-30T08:00:00Z' },
-      'Critical, because a torque changes: Cover bolt. Waiting 1 day, 1 of 2 agreed.',
+      { ...SERIOUS, agreements: 1, proposedAt: '2026-11-30T08:00:00Z' },
+      'Serious: a torque changes (Cover bolt). Waiting 1 day, 1 of 2 agreed.',
     ],
     [
-      { criticalReasons: [...TORQUE, 'a hold point changes: step 4'] },
-      'Critical, because a torque changes: Cover bolt, and 1 more. Waiting 3 days, 0 of 2 agreed.',
+      { ...GRAVE, severity: { level: 'grave', because: ['the limit “Gap” is wider', 'a hold point is dropped'] } },
+      'Grave: the limit “Gap” is wider, and 1 more. Waiting 3 days, 0 of 2 agreed.',
     ],
   ])('says why: %o', (change, words) => {
     expect(deskReason(item('x', change), '2026-12-01T10:00:00Z')).toBe(words);

@@ -18,6 +18,7 @@ const pair = (id: string, old: StepSide | null, now: StepSide | null): StepPair 
   id,
   kind: 'edited',
   moved: false,
+  effects: [],
   critical: null,
   old,
   now,

@@ -15,6 +15,7 @@ const value = (change: Partial<ValueChange>): ValueChange => ({
   from: '10 N·m',
   to: '12 N·m',
   percent: 20,
+  effect: null,
   critical: null,
   ...change,
 });

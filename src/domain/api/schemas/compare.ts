@@ -1,9 +1,16 @@
 import { z } from 'zod';
+import { SEVERITY_LEVELS } from '../../revision/types';
 import { RevisionLetter } from './common';
 import { RevisionSummary } from './book';
 import { ClampVerdict } from './check';
 
 /** What differs between two texts. The OpenAPI document is made from these schemas. */
+
+/** How grave a change is, and what decided it. */
+export const Severity = z.object({
+  level: z.enum(SEVERITY_LEVELS),
+  because: z.array(z.string()).describe('What decided it, gravest first; empty for an ordinary change'),
+});
 
 const WordRun = z.object({ kind: z.enum(['same', 'removed', 'added']), text: z.string() });
 
@@ -19,6 +26,7 @@ export const Comparison = z.object({
       from: z.string().nullable(),
       to: z.string().nullable(),
       percent: z.number().nullable(),
+      effect: z.string().nullable().describe('What it does at the bench, in words'),
       critical: z.string().nullable(),
     }),
   ),
@@ -46,10 +54,12 @@ export const Comparison = z.object({
       title: z.array(WordRun),
       body: z.array(WordRun),
       cautions: z.object({ from: z.array(z.string()), to: z.array(z.string()) }),
+      effects: z.array(z.string()).describe('What it does at the bench beyond the words'),
       critical: z.string().nullable(),
     }),
   ),
   criticalReasons: z.array(z.string()),
+  severity: Severity,
   identical: z.boolean(),
 });
 

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { REVISION_STATES } from '../../revision/types';
 import { Id, ProcedureNumber, RevisionLetter, BookRef, PersonRef } from './common';
 import { CheckResult } from './check';
+import { Severity } from './compare';
 
 /** A text on its way: how it is started, saved and judged. The OpenAPI document is made from these schemas. */
 
@@ -80,6 +81,7 @@ export const ProposalSummary = z.object({
   reason: z.string(),
   critical: z.boolean(),
   criticalReasons: z.array(z.string()),
+  severity: Severity,
   takesBack: z
     .array(z.object({ revision: RevisionLetter, what: z.array(z.string()) }))
     .describe('What earlier revisions changed and this sets back to what it was, latest revision first'),
