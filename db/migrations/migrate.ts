@@ -10,6 +10,7 @@ import { severity } from './0006-severity';
 import { clampOverrides } from './0007-clamp-overrides';
 import { threads } from './0008-threads';
 import { bulletins } from './0009-bulletins';
+import { flags } from './0010-flags';
 import type { Migration } from './migration';
 
 // A list, not a folder read at run time: it is bundled with the server and runs from scripts alike.
@@ -23,6 +24,7 @@ const MIGRATIONS: readonly Migration[] = [
   clampOverrides,
   threads,
   bulletins,
+  flags,
 ];
 
 type Handle = Pick<Database, 'sequelize' | 'write'>;

@@ -4,7 +4,7 @@ import { Bulletin, ReadAndSign } from './bulletins';
 import { flag, id, optionalText, text, times } from './columns';
 import { Membership, Person, Shop, ShopRule } from './people';
 import { AuditEntry, IdempotencyKey, Setting } from './records';
-import { Agreement, ClampOverride, Remark, Thread, ThreadMessage } from './review';
+import { Agreement, ClampOverride, Flag, Remark, Thread, ThreadMessage } from './review';
 
 const key = { ...text, primaryKey: true };
 const integer = { type: DataTypes.INTEGER, allowNull: false };
@@ -168,6 +168,25 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
     ReadAndSign: class extends ReadAndSign {}.init(
       own({ id, personId: text, bulletinId: text, at: text, ...stamps }),
       bind('ReadAndSign', 'readAndSigned'),
+    ),
+    Flag: class extends Flag {}.init(
+      own({
+        id,
+        procedureId: text,
+        revisionId: text,
+        stepId: optionalText,
+        kind: text,
+        text,
+        personId: text,
+        state: text,
+        endedById: optionalText,
+        endedAt: optionalText,
+        answer: { ...text, defaultValue: '' },
+        proposalId: optionalText,
+        seenAt: optionalText,
+        ...stamps,
+      }),
+      bind('Flag', 'flags'),
     ),
     AuditEntry: class extends AuditEntry {}.init(
       own({

@@ -78,3 +78,26 @@ export class ThreadMessage extends Model<InferAttributes<ThreadMessage>, InferCr
   declare createdAt: CreationOptional<string>;
   declare updatedAt: CreationOptional<string>;
 }
+
+/** A doubt about a step, as somebody wrote it. */
+export class Flag extends Model<InferAttributes<Flag>, InferCreationAttributes<Flag>> {
+  declare id: CreationOptional<string>;
+  declare procedureId: string;
+  /** The revision that was on the screen. */
+  declare revisionId: string;
+  /** Null where it is about the whole sheet. */
+  declare stepId: CreationOptional<string | null>;
+  declare kind: 'wrong' | 'unclear' | 'missing';
+  declare text: string;
+  declare personId: string;
+  declare state: 'open' | 'answered' | 'taken up' | 'withdrawn';
+  declare endedById: CreationOptional<string | null>;
+  declare endedAt: CreationOptional<string | null>;
+  declare answer: CreationOptional<string>;
+  /** The draft that was started from it. */
+  declare proposalId: CreationOptional<string | null>;
+  /** When the person who raised it saw how it ended. */
+  declare seenAt: CreationOptional<string | null>;
+  declare createdAt: CreationOptional<string>;
+  declare updatedAt: CreationOptional<string>;
+}

@@ -4,6 +4,7 @@ import { may, type Actor } from '@/domain/people/may';
 const PLACES = [
   { key: 'look-up', name: 'Look up', href: '/' },
   { key: 'proposals', name: 'Proposals', href: '/proposals' },
+  { key: 'flags', name: 'Flags', href: '/flags' },
   { key: 'review-desk', name: 'Review desk', href: '/review-desk' },
   { key: 'handbook', name: 'Handbook', href: '/handbook' },
   { key: 'shop', name: 'Shop', href: '/shop/rules' },
@@ -30,6 +31,7 @@ export const maySetShops = (actor: Actor) =>
 export function placesFor(actor: Actor, shopsWithOneEditor: readonly string[]) {
   const open: Record<Place, boolean> = {
     'look-up': true,
+    flags: true,
     proposals: mayPropose(actor),
     'review-desk': may(actor, 'seeReviewDesk', { shopsWithOneEditor }).ok,
     handbook: true,

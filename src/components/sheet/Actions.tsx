@@ -56,3 +56,14 @@ export const ProposeStep = ({ step, number }: { step: string; number: number }) 
     Change
   </Button>
 );
+
+/** Raises a flag at one step: for everybody who reads the sheet. */
+export const FlagStep = ({ sheet, step, number }: { sheet: string; step: string; number: number }) => (
+  <a
+    href={`/procedures/${sheet}/flag?step=${encodeURIComponent(step)}`}
+    className="propose-step inline-flex min-h-touch items-center text-small font-medium print:hidden"
+    aria-label={`Flag step ${number}`}
+  >
+    Flag
+  </a>
+);

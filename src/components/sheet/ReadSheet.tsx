@@ -1,6 +1,6 @@
 import type { Sheet as SheetData } from '@/domain/api/schemas/book';
 import { dayOf } from '@/components/ui/day';
-import { Actions, ProposeStep } from './Actions';
+import { Actions, FlagStep, ProposeStep } from './Actions';
 import type { EngineName } from './engineNames';
 import { namesOf } from './engineNames';
 import { factsOf } from './facts';
@@ -47,7 +47,16 @@ export function ReadSheet({
       engines={namesOf(sheet.frontmatter.engines, engines)}
       notice={current ? undefined : <Superseded sheet={sheet} />}
       actions={<Actions number={sheet.number} propose={propose} units={units} openProposals={sheet.openProposals} />}
-      stepAct={propose ? (step) => <ProposeStep step={step.id} number={step.number} /> : undefined}
+      stepAct={
+        current
+          ? (step) => (
+              <>
+                {propose && <ProposeStep step={step.id} number={step.number} />}
+                <FlagStep sheet={sheet.number} step={step.id} number={step.number} />
+              </>
+            )
+          : undefined
+      }
     />
   );
 }

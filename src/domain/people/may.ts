@@ -47,6 +47,8 @@ export interface Subjects {
   seeReviewDesk: { shopsWithOneEditor: readonly string[] };
   readAudit: null;
   flag: { book: Book };
+  /** `raiserShops`: shops of the person who raised it; in a shop's own book they do not matter. */
+  answerFlag: { book: Book; raisedBy: string; raiserShops: readonly string[] };
   runJobCard: { shopId: string; book: Book };
   signStep: { shopId: string };
   witness: { shopId: string; signedBy: string };
@@ -150,6 +152,14 @@ const RULES: { [A in Act]: (actor: Actor, subject: Subjects[A]) => Permission } 
       : no('The review desk is for editors, who answer for what is published.'),
   readAudit: (actor) => (isSteward(actor) ? YES : no('The audit trail is for the network steward.')),
   flag: (actor, { book }) => (reads(actor, book) ? YES : HIDDEN),
+  // A flag on a common sheet is seen by the seniors of the shop where it was raised and by the book's editors, not by other shops.
+  answerFlag: (actor, { book, raisedBy, raiserShops }) => {
+    if (!reads(actor, book)) return HIDDEN;
+    const shops = book.kind === 'shop' ? [book.shopId] : raiserShops;
+    if (!edits(actor, book) && !shops.some((shopId) => holds(actor, shopId, SENIORS)))
+      return raisedBy === actor.personId ? no('A senior technician, editor or owner answers a flag.') : HIDDEN;
+    return raisedBy === actor.personId ? no('You raised this flag, so somebody else must answer it.') : YES;
+  },
   runJobCard: (actor, { shopId, book }) => (isMember(actor, shopId) && reads(actor, book) ? YES : HIDDEN),
   signStep: (actor, { shopId }) => (isMember(actor, shopId) ? YES : HIDDEN),
   // 14 CFR 121.371(c): nobody inspects the work that they did themselves.

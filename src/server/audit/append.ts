@@ -7,7 +7,10 @@ export interface Act {
   actorId: string | null;
   /** What was done, in the words of the product: `proposal.submitted`, `revision.published`. */
   act: string;
-  subject: { type: 'procedure' | 'revision' | 'person' | 'shop' | 'membership' | 'book' | 'bulletin'; id: string };
+  subject: {
+    type: 'procedure' | 'revision' | 'person' | 'shop' | 'membership' | 'book' | 'flag' | 'bulletin';
+    id: string;
+  };
   /** The shop it concerns; left out for the common book and the network. */
   shopId?: string | null;
   detail?: Record<string, unknown>;

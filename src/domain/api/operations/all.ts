@@ -1,5 +1,6 @@
 import * as book from './book';
 import * as bulletins from './bulletins';
+import * as flags from './flags';
 import * as me from './me';
 import * as proposals from './proposals';
 import * as search from './search';
@@ -13,6 +14,7 @@ export const OPERATIONS: readonly Operation[] = [
   me,
   book,
   bulletins,
+  flags,
   proposals,
   threads,
   search,

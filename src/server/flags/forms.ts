@@ -1,0 +1,58 @@
+import type { Actor } from '@/domain/people/may';
+import { Refusal } from '../refusal';
+import { answerFlag, takeUpFlag, withdrawFlag } from './act';
+import { raiseFlag, type Doubt } from './raise';
+
+const textOf = (form: FormData, name: string): string => {
+  const value = form.get(name);
+  return typeof value === 'string' ? value : '';
+};
+
+export type Raised =
+  | { done: true }
+  | {
+      done: false;
+      status: number;
+      typed: { step: string; kind: string; text: string };
+      errors: Record<string, string>;
+    };
+
+/** Raises a flag from the page's form; what is refused comes back with what was typed. */
+export async function raiseFromForm(actor: Actor, number: string, form: FormData): Promise<Raised> {
+  const typed = { step: textOf(form, 'step'), kind: textOf(form, 'kind'), text: textOf(form, 'text') };
+  const doubt: Doubt = { ...typed, step: typed.step || null };
+  try {
+    await raiseFlag(actor, number, doubt);
+    return { done: true };
+  } catch (error) {
+    if (!(error instanceof Refusal) || !error.errors) throw error;
+    const errors = Object.fromEntries(error.errors.map(({ path, message }) => [path, message]));
+    return { done: false, status: error.status, typed, errors };
+  }
+}
+
+export type Acted =
+  | { done: 'answered' | 'withdrawn' }
+  | { done: 'taken up'; proposal: string }
+  | { done: null; status: number; id: string; text: string; error: string };
+
+/** Answers, takes up or takes back a flag from the page's forms. */
+export async function actFromForm(actor: Actor, form: FormData): Promise<Acted> {
+  const [id, text, act] = [textOf(form, 'id'), textOf(form, 'text'), textOf(form, 'act')];
+  try {
+    if (act === 'take-up') {
+      const { proposal } = await takeUpFlag(actor, id);
+      return proposal ? { done: 'taken up', proposal: proposal.id } : { done: 'answered' };
+    }
+    if (act === 'withdraw') {
+      await withdrawFlag(actor, id);
+      return { done: 'withdrawn' };
+    }
+    await answerFlag(actor, id, text);
+    return { done: 'answered' };
+  } catch (error) {
+    // What is unseen or not theirs is a page of its own; what they can mend stays on this one.
+    if (!(error instanceof Refusal) || (error.status !== 422 && error.status !== 409)) throw error;
+    return { done: null, status: error.status, id, text, error: error.detail };
+  }
+}
