@@ -52,6 +52,23 @@ const TABLE: Row[] = [
   row('flag a common sheet', 'YYYYYYY.', 'flag', { book: common }),
   row('flag a sheet of the shop', 'YYYYY...', 'flag', { book: here }),
   row("flag another shop's sheet", '........', 'flag', { book: there }),
+  row('answer a flag on a common sheet from here', '..YYYY..', 'answerFlag', {
+    book: common,
+    raisedBy: 'x',
+    raiserShops: [HERE],
+  }),
+  row('answer a flag on a common sheet from another shop', '.....Y..', 'answerFlag', {
+    book: common,
+    raisedBy: 'x',
+    raiserShops: [THERE],
+  }),
+  row('answer a flag on a sheet of the shop', '..YYY...', 'answerFlag', { book: here, raisedBy: 'x', raiserShops: [] }),
+  row("answer a flag on another shop's sheet", '........', 'answerFlag', {
+    book: there,
+    raisedBy: 'x',
+    raiserShops: [HERE],
+  }),
+  row('answer their own flag', 'nnnnnnn.', 'answerFlag', { book: common, raisedBy: 'me', raiserShops: [HERE] }),
   row('run a job card here', 'YYYYY...', 'runJobCard', { shopId: HERE, book: common }),
   row("run a job card here on another shop's sheet", '........', 'runJobCard', { shopId: HERE, book: there }),
   row('run a job card there', '........', 'runJobCard', { shopId: THERE, book: common }),
