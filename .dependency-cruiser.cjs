@@ -34,9 +34,13 @@ module.exports = {
     {
       name: 'areas-keep-apart',
       severity: 'error',
-      comment: 'sheet and worksheets are shown by other areas, api calls the server; all else is private to its area.',
+      comment:
+        'sheet, threads and worksheets are shown by other areas, api calls the server; all else is private to its area.',
       from: { path: '^src/components/([^/]+)/', pathNot: '^src/components/ui/' },
-      to: { path: '^src/components/', pathNot: ['^src/components/$1/', '^src/components/(ui|api|sheet|worksheets)/'] },
+      to: {
+        path: '^src/components/',
+        pathNot: ['^src/components/$1/', '^src/components/(ui|api|sheet|threads|worksheets)/'],
+      },
     },
   ],
   options: {

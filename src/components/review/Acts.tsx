@@ -64,11 +64,11 @@ export function Acts({ proposal, me, version, pending, onAgree, onAsk }: ActsPro
       )}
       {may.publish && asks('publish', 'Publish', 'main')}
       {!may.publish && editor && (
-        <Button disabled aria-describedby="why-not">
+        <Button disabled aria-describedby="why-not open-questions">
           Publish, {agreements} of {agreementsNeeded} agreed
         </Button>
       )}
-      {!may.publish && editor && !stale && (
+      {!may.publish && editor && !stale && whyNotYet(proposal) && (
         <p id="why-not" className="why-not">
           {whyNotYet(proposal)}
         </p>

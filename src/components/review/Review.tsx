@@ -14,6 +14,7 @@ import { RemarkNote } from './Remarks';
 import { ReviewHead } from './ReviewHead';
 import { Trail } from './Trail';
 import { useReviewActs, type Trouble } from './useReviewActs';
+import { useTalk, type TalkProps } from './useTalk';
 import { ValueTable } from './ValueTable';
 import { doneWords, sideNames, type Done, type ReviewAct } from './words';
 
@@ -31,6 +32,7 @@ export interface ReviewProps {
   /** How the act that made this page went, where no script ran. */
   trouble: Trouble | null;
   done: Done | null;
+  talk: TalkProps;
 }
 
 /** A proposal with all that can be done with it. Rendered by the server first; the script adds lines and acts in place. */
@@ -44,7 +46,7 @@ export function Review(props: ReviewProps) {
   );
 }
 
-function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: ReviewProps) {
+function Desk({ proposal: first, me, letter, texts, fault, asked, talk: cameTalk, ...came }: ReviewProps) {
   const { proposal, act, pending, movedOn, ...acts } = useReviewActs(first);
   const done = acts.done ?? came.done;
   const trouble = acts.trouble ?? (acts.done ? null : came.trouble);
@@ -83,11 +85,12 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
   const { pairs = [], values = [], clamp = [] } = texts ?? {};
   const steps = useMemo(() => new Set(pairs.map((pair) => pair.id)), [pairs]);
   const shown = { steps, paths: values.map(({ path }) => path) };
+  const talk = useTalk({ id, version: first.version }, cameTalk, shown, { pairs, values });
   const names = sideNames(proposal);
   const at = panel?.at ?? '';
   // A panel whose place is not on the page stands in the head.
   const placed = at.startsWith('step:') && steps.has(at.slice(5));
-  const heldOpen = [...remarks.map(({ anchor }) => anchor), at].flatMap((a) =>
+  const heldOpen = [...remarks.map(({ anchor }) => anchor), ...talk.anchors, at].flatMap((a) =>
     a?.startsWith('step:') ? a.slice(5) : [],
   );
   const held = heldOpen.join('\n');
@@ -137,10 +140,12 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
       )}
     </ActPanel>
   );
-  const notes = (place: string) =>
-    remarks
+  const notes = (place: string) => [
+    ...remarks
       .filter(({ anchor }) => standsAt(anchor, shown) === place)
-      .map((remark) => <RemarkNote key={remark.id} remark={remark} />);
+      .map((remark) => <RemarkNote key={remark.id} remark={remark} />),
+    ...talk.below(place),
+  ];
 
   return (
     <div className="leaf framed-sections review">
@@ -156,6 +161,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
         movedOn={movedOn}
         onAgree={() => act({ act: 'agree' })}
         onAsk={ask}
+        threads={talk.threads}
         panel={placed ? null : form}
       >
         {panel?.written.text.trim() && !may[panel.written.act] && (
@@ -166,6 +172,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
         {unplaced(remarks, shown).map(({ remark, about }) => (
           <RemarkNote key={remark.id} remark={remark} about={about} />
         ))}
+        {talk.head}
       </ReviewHead>
       <Trail trail={proposal.trail} letter={proposal.publishedLetter} />
       {texts && (
@@ -176,6 +183,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
             fresh={proposal.base === null}
             names={{ old: names.old.column, now: names.now.column }}
             below={notes}
+            acts={talk.atValue}
           />
           <Panes
             pairs={pairs}
@@ -186,6 +194,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, ...came }: Rev
               <>
                 {notes(`step:${pair.id}`)}
                 {placed && at === `step:${pair.id}` && form}
+                {talk.atStep(pair)}
                 {may.return && steps.has(pair.id) && at !== `step:${pair.id}` && (
                   <a
                     id={`ask-step:${pair.id}`}

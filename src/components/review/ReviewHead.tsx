@@ -2,10 +2,12 @@ import type { ReactNode } from 'react';
 import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
 import { dayOf } from '@/components/ui/day';
+import { OpenQuestions } from '@/components/threads/OpenQuestions';
 import { Notice } from '@/components/ui/Notice';
 import { Status } from '@/components/ui/Status';
 import type { Proposal } from '@/domain/api/schemas/proposals';
 import { severityWords, takenBackWords } from '@/domain/review/desk';
+import type { Thread } from '@/domain/api/schemas/threads';
 import { Acts, isReviewer } from './Acts';
 import type { Trouble } from './useReviewActs';
 import { headingOf, needed, standingWords, type ReviewAct } from './words';
@@ -79,6 +81,7 @@ export interface ReviewHeadProps {
   onAgree: () => void;
   onAsk: (act: ReviewAct) => void;
   panel: ReactNode;
+  threads: readonly Thread[];
   /** Remarks on the whole. */
   children: ReactNode;
 }
@@ -93,6 +96,7 @@ export function ReviewHead({
   trouble,
   movedOn,
   panel,
+  threads,
   children,
   ...acts
 }: ReviewHeadProps) {
@@ -126,6 +130,7 @@ export function ReviewHead({
       </div>
       <div className="review-side">
         {reviewer ? <Acts proposal={proposal} me={me} {...acts} /> : <Ways proposal={proposal} me={me} />}
+        {!proposal.publishedLetter && <OpenQuestions threads={threads} />}
         <Status text={said ?? ''} className="font-semibold empty:hidden sm:text-right" />
       </div>
       <div className="review-below">

@@ -36,14 +36,16 @@ interface RowsProps {
   rows: readonly ValueRow[];
   names: { old: string; now: string };
   below: (path: string) => ReactNode;
+  acts: (row: ValueRow) => ReactNode;
   /** Clamp load of the torque whose rows end with this one. */
   loadUnder: (i: number) => ClampChange | undefined;
 }
 
-const RowHead = ({ row, span }: { row: ValueRow; span?: number }) => (
+const RowHead = ({ row, span, acts }: { row: ValueRow; span?: number } & Pick<RowsProps, 'acts'>) => (
   <th scope="row" colSpan={span}>
     <span className="font-semibold">{row.label}</span>
     {row.detail && row.detail !== row.to && <span className="value-detail">{row.detail}</span>}
+    {acts(row)}
   </th>
 );
 
@@ -58,14 +60,14 @@ function Below({ children, span }: { children: ReactNode; span: number }) {
 }
 
 /** Values of a new sheet: what stands there, with nothing to set it against. */
-const FreshRows = ({ rows, below, loadUnder }: Omit<RowsProps, 'names'>) =>
+const FreshRows = ({ rows, below, acts, loadUnder }: Omit<RowsProps, 'names'>) =>
   rows.map((row, i) => {
     const load = loadUnder(i);
     const text = beyondName(row);
     return (
       <Fragment key={row.path}>
         <tr id={`value-${row.path}`} data-goes-on={load ? '' : undefined}>
-          <RowHead row={row} span={text ? 1 : 2} />
+          <RowHead row={row} span={text ? 1 : 2} acts={acts} />
           {text && <td className={row.prose ? 'value-prose' : 'value-number'}>{text}</td>}
         </tr>
         {load && <ClampRow load={load} columns={2} fresh />}
@@ -75,7 +77,7 @@ const FreshRows = ({ rows, below, loadUnder }: Omit<RowsProps, 'names'>) =>
   });
 
 /** Old and new of each value. What a cell holds stands in one block, so that a phone can set its name beside it. */
-const ChangeRows = ({ rows, names, below, loadUnder }: RowsProps) =>
+const ChangeRows = ({ rows, names, below, acts, loadUnder }: RowsProps) =>
   rows.map((row, i) => {
     const load = loadUnder(i);
     const cell = row.prose ? 'value-prose' : 'value-number';
@@ -84,7 +86,7 @@ const ChangeRows = ({ rows, names, below, loadUnder }: RowsProps) =>
     return (
       <Fragment key={row.path}>
         <tr id={`value-${row.path}`} data-goes-on={load ? '' : undefined}>
-          <RowHead row={row} />
+          <RowHead row={row} acts={acts} />
           <td data-label={names.old} className={cell}>
             <div>
               <Value spans={row.old} side="old" prose={row.prose} />
@@ -130,6 +132,7 @@ export function ValueTable({
   fresh,
   names,
   below = () => null,
+  acts = () => null,
 }: {
   rows: readonly ValueRow[];
   /** Clamp load then and now of the torques among them. */
@@ -139,6 +142,8 @@ export function ValueTable({
   /** What the two texts are called. */
   names: { old: string; now: string };
   below?: (path: string) => ReactNode;
+  /** What can be done with a value, under its name. */
+  acts?: (row: ValueRow) => ReactNode;
 }) {
   const groups = [
     { title: fresh ? 'What it tells the bench' : 'What changes at the bench', rows: rows.filter(isAtTheBench) },
@@ -164,9 +169,9 @@ export function ValueTable({
             </thead>
             <tbody>
               {fresh ? (
-                <FreshRows rows={shown} below={below} loadUnder={loadsOf(shown, clamp)} />
+                <FreshRows rows={shown} below={below} acts={acts} loadUnder={loadsOf(shown, clamp)} />
               ) : (
-                <ChangeRows rows={shown} names={names} below={below} loadUnder={loadsOf(shown, clamp)} />
+                <ChangeRows rows={shown} names={names} below={below} acts={acts} loadUnder={loadsOf(shown, clamp)} />
               )}
             </tbody>
           </table>

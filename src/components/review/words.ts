@@ -65,11 +65,17 @@ export function needed({ agreementsNeeded, book }: Pick<Proposal, 'agreementsNee
   return `${many} ${who} must agree.`;
 }
 
-/** Why it cannot be published yet, to somebody whose own agreement is already counted on, or still to come. */
+/** Open questions stand beside the button, each with the way to it, so the sentence on them is not said twice. */
+const OPEN_QUESTIONS = / ?(A question on|\d+ questions are still open:) .* resolved first\.$/s;
+
+/**
+ * Why it cannot be published yet but for open questions, to somebody whose own agreement is already counted on, or still
+ * to come. Empty where questions are all that is in the way.
+ */
 export function whyNotYet({ whyNot, may }: Pick<Proposal, 'whyNot' | 'may'>): string {
-  const why = whyNot['publish'] ?? '';
+  const why = (whyNot['publish'] ?? '').replace(OPEN_QUESTIONS, '');
   // Publishing is an agreement too, so what is missing is missing besides the reader's own.
-  return why && may.agree ? `Besides you, ${why.charAt(0).toLowerCase()}${why.slice(1)}` : why;
+  return /^[^.]*must agree/.test(why) && may.agree ? `Besides you, ${why.charAt(0).toLowerCase()}${why.slice(1)}` : why;
 }
 
 const names = (people: readonly string[]) =>

@@ -6,6 +6,7 @@ import { sourceOf } from '@/domain/writing/readDraft';
 import { Checks } from './Checks';
 import { useDesk } from './desk';
 import { DeskHead } from './DeskHead';
+import { ThreadsAhead } from './DeskThreads';
 import { Elsewhere } from './Elsewhere';
 import type { Keeping } from './keeper';
 import { Middle } from './Middle';
@@ -120,6 +121,7 @@ export function DeskFrame(props: Props) {
           />
         )}
         <Returned />
+        <ThreadsAhead />
       </div>
       {text === null && (
         <div className="writing-choice">

@@ -1,17 +1,23 @@
 import { Notice } from '@/components/ui/Notice';
 import { dayOf } from '@/components/ui/day';
 import { useDesk } from './desk';
+import { ThreadsHere } from './DeskThreads';
 
 /** What reviewers wrote about the very place that is being edited. */
 export function RemarksHere({ anchor }: { anchor: string }) {
   const { remarks } = useDesk();
-  return remarks
-    .filter((remark) => remark.anchor === anchor || remark.anchor?.startsWith(`${anchor}.`))
-    .map((remark) => (
-      <Notice key={remark.id} title={`${remark.person.name}, ${dayOf(remark.at)}`}>
-        <p className="whitespace-pre-line font-serif italic">{remark.text}</p>
-      </Notice>
-    ));
+  return (
+    <>
+      {remarks
+        .filter((remark) => remark.anchor === anchor || remark.anchor?.startsWith(`${anchor}.`))
+        .map((remark) => (
+          <Notice key={remark.id} title={`${remark.person.name}, ${dayOf(remark.at)}`}>
+            <p className="whitespace-pre-line font-serif italic">{remark.text}</p>
+          </Notice>
+        ))}
+      <ThreadsHere anchor={anchor} />
+    </>
+  );
 }
 
 /** The editor's reasons, above everything, each with the way to what it speaks of. */

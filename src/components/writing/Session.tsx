@@ -1,5 +1,7 @@
 import { useDeferredValue, useMemo, useState } from 'react';
 import { FormProvider, useForm, useWatch } from 'react-hook-form';
+import { useThreads } from '@/components/threads/useThreads';
+import type { Thread } from '@/domain/api/schemas/threads';
 import { plainLines } from '@/domain/procedure/source';
 import type { Draft } from '@/domain/writing/draft';
 import { procedureOf } from '@/domain/writing/procedureOf';
@@ -18,7 +20,7 @@ import type { WritingProps } from './writingProps';
 import { REASON_ID } from './ReasonField';
 
 /** One sitting at the desk: the form, what keeps it, what checks it, and what may be done with it. */
-export function Session({ proposal, source, base, current, engines, drawings }: WritingProps) {
+export function Session({ proposal, threads, source, base, current, engines, drawings }: WritingProps) {
   const [first] = useState(() => {
     const draft = readDraft(source, proposal.reason);
     return { draft: draft ?? { ...emptyDraft(), reason: proposal.reason }, text: draft ? null : source };
@@ -58,6 +60,20 @@ export function Session({ proposal, source, base, current, engines, drawings }: 
   const [tried, setTried] = useState(false);
   const { pending, refusal, setRefusal, propose, rebase } = useProposing(proposal.id, keeper);
 
+  const talk = useThreads(proposal.id, threads);
+  const accept = async (thread: Thread) => {
+    keeper.change(latest());
+    if (!(await keeper.flush())) {
+      const detail = 'The draft could not be kept yet, so nothing was taken up. Try again once it is.';
+      talk.setTrouble({ thread: thread.id, field: null, detail });
+      return;
+    }
+    const taken = await talk.accept(thread, keeper.version);
+    if (!taken) return;
+    keeper.moved(taken.version);
+    location.reload();
+  };
+
   const goTo = (path: string) => {
     setTried(true);
     choose(placeOfProblem(path, draft));
@@ -88,6 +104,8 @@ export function Session({ proposal, source, base, current, engines, drawings }: 
     drawings,
     problems: checked.problems,
     remarks: proposal.state === 'returned' ? proposal.remarks.filter((remark) => remark.kind === 'returned') : [],
+    threads: proposal.state === 'returned' ? talk.list.items.filter(({ state: stands }) => stands === 'open') : [],
+    talk: { ...talk, accept: (thread) => void accept(thread) },
     asText: text !== null,
     tried,
     place,

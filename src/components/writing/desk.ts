@@ -1,7 +1,9 @@
 import { createContext, use } from 'react';
 import { useFormContext } from 'react-hook-form';
 import type { z } from 'zod';
+import type { Threads } from '@/components/threads/useThreads';
 import type { Remark } from '@/domain/api/schemas/proposals';
+import type { Thread } from '@/domain/api/schemas/threads';
 import type { SourceProblem } from '@/domain/procedure/types';
 import type { Draft } from '@/domain/writing/draft';
 import type { Place } from './places';
@@ -25,6 +27,10 @@ export interface Desk {
   problems: readonly SourceProblem[];
   /** Why it was returned; empty unless it was. */
   remarks: readonly z.infer<typeof Remark>[];
+  /** What is still open of what reviewers wrote; empty unless it was returned. */
+  threads: readonly Thread[];
+  /** What can be done in them; `accept` changes the draft, and the page loads again. */
+  talk: Omit<Threads, 'accept'> & { accept: (thread: Thread) => void };
   /** The whole sheet is edited as text, so there are no fields to go to. */
   asText: boolean;
   /** The author asked what is wrong, so every field says it, touched or not. */

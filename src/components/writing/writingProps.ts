@@ -1,4 +1,5 @@
 import type { Proposal } from '@/domain/api/schemas/proposals';
+import type { ThreadList } from '@/domain/api/schemas/threads';
 import type { Drawing } from './desk';
 
 /** A published text with its letter. */
@@ -9,6 +10,7 @@ export interface Standing {
 
 export interface WritingProps {
   proposal: Proposal;
+  threads: ThreadList;
   /** The draft's text, in the shape of the form wherever it can be read. */
   source: string;
   base: Standing | null;

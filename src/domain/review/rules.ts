@@ -114,8 +114,9 @@ export function canPublish(facts: ProposalFacts): { ok: true } | { ok: false; wh
   if (isStale(facts)) return { ok: false, why: staleWords(facts) };
   const why = [
     tally(facts).missing,
-    openQuestionWords(facts.openQuestions ?? []),
     overrideMissing(openTorques(facts)),
+    // Last: the page tells the questions apart, each with the way to it.
+    openQuestionWords(facts.openQuestions ?? []),
   ].filter((one) => one !== null);
   return why.length === 0 ? { ok: true } : { ok: false, why: why.join(' ') };
 }

@@ -15,6 +15,8 @@ interface Told {
   sentIn: number;
   reason: string;
   end: End;
+  /** What was asked about it while it waits. */
+  asked?: { by: string; anchor: string; question: string };
 }
 
 /** A change to a sheet of the common book. */
@@ -128,6 +130,12 @@ export const CHAPTERS: readonly Chapter[] = [
       });
     },
     end: { waiting: true, agreed: ['editor2@halden.example'] },
+    asked: {
+      by: 'editor2@halden.example',
+      anchor: 'step:rear-corner',
+      question:
+        'Only the two rear bolts, or once round all ten? If a washer sets at the back, I would expect it at the front too. What did your five show?',
+    },
   },
   {
     number: 'P-0137',

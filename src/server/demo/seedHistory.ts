@@ -15,6 +15,7 @@ import { publish } from '../review/publish';
 import { startProcedure } from '../review/startProcedure';
 import { startProposal } from '../review/startProposal';
 import { submit } from '../review/submit';
+import { startThread } from '../review/threads/start';
 import { CHAPTERS, type Change, type Chapter, type NewSheet } from './chapters';
 
 const DONE = 'demonstration.history';
@@ -72,6 +73,15 @@ async function actOut(chapter: Chapter): Promise<void> {
   const agreed = 'returned' in end ? [] : (end.agreed ?? []);
   const day = 'published' in end ? end.published : 'returned' in end ? end.returned : chapter.sentIn - 1;
   for (const email of agreed) await atTime(daysAgo(day, 2), async () => agree(await person(email), id));
+  const { asked } = chapter;
+  if (asked)
+    await atTime(daysAgo(day, 4), async () =>
+      startThread(await person(asked.by), id, {
+        kind: 'question',
+        anchor: asked.anchor,
+        text: asked.question,
+      }),
+    );
   if ('published' in end) await atTime(daysAgo(day, 3), async () => publish(await person(end.by), id));
   if ('returned' in end)
     await atTime(daysAgo(day, 3), async () =>

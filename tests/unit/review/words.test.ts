@@ -8,6 +8,7 @@ import {
   trailWords,
   whyNotYet,
 } from '@/components/review/words';
+import { openQuestionWords } from '@/domain/review/openQuestions';
 import { AUTHOR, EDITOR, happened, proposal, SECOND } from '../../factories/proposal';
 
 const ME = EDITOR.id;
@@ -81,6 +82,12 @@ describe('who must agree', () => {
     );
     expect(whyNotYet({ may: { ...may, agree: false }, whyNot: { publish: why } })).toBe(why);
     expect(whyNotYet({ may, whyNot: {} })).toBe('');
+    // Questions are told beside the button, each with the way to it.
+    for (const places of [['step 2, Tighten'], ['a', 'b'], ['a', 'b', 'c', 'd']]) {
+      const questions = openQuestionWords(places) ?? '';
+      expect(whyNotYet({ may, whyNot: { publish: questions } })).toBe('');
+      expect(whyNotYet({ may: { ...may, agree: false }, whyNot: { publish: `${why} ${questions}` } })).toBe(why);
+    }
   });
 });
 
