@@ -24,41 +24,43 @@ export function FlagForm({
   errors: Readonly<Record<string, string>>;
 }) {
   return (
-    <form method="post" className="flex max-w-[38rem] flex-col gap-5 px-4 py-6 sm:px-9 sm:py-7">
-      <Select
-        name="step"
-        label="Where"
-        error={errors['step']}
-        defaultValue={typed.step}
-        options={[
-          { value: '', label: 'The whole sheet' },
-          ...steps.map((step) => ({ value: step.id, label: `Step ${step.number}: ${step.title}` })),
-        ]}
-      />
-      <Select
-        name="kind"
-        label="What"
-        error={errors['kind']}
-        defaultValue={typed.kind}
-        options={Object.entries(FLAG_KINDS).map(([value, label]) => ({ value, label }))}
-      />
-      <TextArea
-        name="text"
-        label="In your words"
-        hint="What did you see, and what did you expect? Whoever answers was not standing there."
-        rows={5}
-        required
-        maxLength={2000}
-        error={errors['text']}
-        defaultValue={typed.text}
-      />
-      <div className="flex flex-wrap gap-3">
-        <Button type="submit" kind="main">
-          Raise the flag
-        </Button>
-        <ButtonLink href={`/procedures/${number}${typed.step ? `#step-${typed.step}` : ''}`}>
-          Back to the sheet
-        </ButtonLink>
+    <form method="post" className="px-4 py-6 sm:px-9 sm:py-7">
+      <div className="flex max-w-[38rem] flex-col gap-5">
+        <Select
+          name="step"
+          label="Where"
+          error={errors['step']}
+          defaultValue={typed.step}
+          options={[
+            { value: '', label: 'The whole sheet' },
+            ...steps.map((step) => ({ value: step.id, label: `Step ${step.number}: ${step.title}` })),
+          ]}
+        />
+        <Select
+          name="kind"
+          label="What"
+          error={errors['kind']}
+          defaultValue={typed.kind}
+          options={Object.entries(FLAG_KINDS).map(([value, label]) => ({ value, label }))}
+        />
+        <TextArea
+          name="text"
+          label="In your words"
+          hint="What did you see, and what did you expect? Whoever answers was not standing there."
+          rows={5}
+          required
+          maxLength={2000}
+          error={errors['text']}
+          defaultValue={typed.text}
+        />
+        <div className="flex flex-wrap gap-3">
+          <Button type="submit" kind="main">
+            Raise the flag
+          </Button>
+          <ButtonLink href={`/procedures/${number}${typed.step ? `#step-${typed.step}` : ''}`}>
+            Back to the sheet
+          </ButtonLink>
+        </div>
       </div>
     </form>
   );
