@@ -13,7 +13,7 @@ const NEXT_WORDS: Record<DeskItem['next'], string> = {
 
 /** The word says how grave it is; the weight of the letters lets it be found. */
 const SEVERITY_LOOK: Record<ProposalSummary['severity']['level'], string | undefined> = {
-  grave: 'heavy-edge block pl-2.5 font-semibold',
+  grave: 'block border-l-8 border-ink pl-2.5 font-semibold',
   serious: 'font-semibold',
   ordinary: undefined,
 };

@@ -6,9 +6,10 @@ import { OpenQuestions } from '@/components/threads/OpenQuestions';
 import { Notice } from '@/components/ui/Notice';
 import { Status } from '@/components/ui/Status';
 import type { Proposal } from '@/domain/api/schemas/proposals';
-import { severityWords, takenBackWords } from '@/domain/review/desk';
+import { takenBackWords } from '@/domain/review/desk';
 import type { Thread } from '@/domain/api/schemas/threads';
 import { Acts, isReviewer } from './Acts';
+import { Gravity } from './Gravity';
 import type { Trouble } from './useReviewActs';
 import { headingOf, needed, standingWords, type ReviewAct } from './words';
 
@@ -30,16 +31,6 @@ const ByLine = ({ proposal, me }: { proposal: Proposal; me: string }) => {
     </p>
   );
 };
-
-/** How grave the change is and what decided it; an ordinary one has nothing to be told. */
-const Gravity = ({ proposal }: { proposal: Proposal }) =>
-  proposal.severity.level === 'ordinary' ? null : (
-    <p
-      className={proposal.severity.level === 'grave' ? 'heavy-edge mt-2 py-0.5 pl-3 font-semibold' : 'mt-2 font-medium'}
-    >
-      {severityWords(proposal, 4)}
-    </p>
-  );
 
 /** Where to go from a proposal that is one's own to write on, or that has been published. */
 function Ways({ proposal, me }: { proposal: Proposal; me: string }) {
@@ -112,7 +103,7 @@ export function ReviewHead({
       <div className="review-title">
         <h1 className="text-title tracking-[-0.01em]">{headingOf(proposal, letter)}</h1>
         <ByLine proposal={proposal} me={me} />
-        <Gravity proposal={proposal} />
+        <Gravity severity={proposal.severity} />
         {takesBack.length > 0 && (
           <Notice className="mt-3">
             {takesBack.map((sentence) => (

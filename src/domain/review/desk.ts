@@ -28,26 +28,13 @@ export function deskOrder<T extends DeskItem>(items: readonly T[]): T[] {
   );
 }
 
-const LEVEL_WORDS = { grave: 'Grave', serious: 'Serious' };
+export const LEVEL_WORDS = { grave: 'Grave', serious: 'Serious' };
 
-/** The first of a list, and how many more: "a; b; and 2 more". A rest of one is named: counting it would be no shorter. */
-function firstOf(list: readonly string[], most: number): string {
-  const named = list.length === most + 1 && most > 1 ? list : list.slice(0, most);
-  const rest = list.length - named.length;
-  return [...named, ...(rest > 0 ? [`and ${rest} more`] : [])].join(most > 1 ? '; ' : ', ');
-}
-
-/**
- * What a proposal would do, in words: "Grave: the caution “Hot oil” is weaker, and 1 more."
- *
- * @param most how many reasons are named before the rest is counted
- */
-export function severityWords(
-  { base, severity: { level, because } }: Pick<DeskItem, 'base' | 'severity'>,
-  most = 1,
-): string {
+/** What a proposal would do, in words: "Grave: the caution “Hot oil” is weaker, and 1 more." */
+export function severityWords({ base, severity: { level, because } }: Pick<DeskItem, 'base' | 'severity'>): string {
   if (level === 'ordinary') return base === null ? 'A new sheet.' : 'An ordinary change to a sheet in use.';
-  return `${LEVEL_WORDS[level]}: ${firstOf(because, most)}.`;
+  const [first = '', ...others] = because;
+  return `${LEVEL_WORDS[level]}: ${first}${others.length > 0 ? `, and ${others.length} more` : ''}.`;
 }
 
 /**
