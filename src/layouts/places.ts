@@ -3,6 +3,7 @@ import { may, type Actor } from '@/domain/people/may';
 /** The rooms of the house, in the order the navigation shows them. */
 const PLACES = [
   { key: 'look-up', name: 'Look up', href: '/' },
+  { key: 'bulletins', name: 'Bulletins', href: '/bulletins' },
   { key: 'proposals', name: 'Proposals', href: '/proposals' },
   { key: 'flags', name: 'Flags', href: '/flags' },
   { key: 'review-desk', name: 'Review desk', href: '/review-desk' },
@@ -31,6 +32,7 @@ export const maySetShops = (actor: Actor) =>
 export function placesFor(actor: Actor, shopsWithOneEditor: readonly string[]) {
   const open: Record<Place, boolean> = {
     'look-up': true,
+    bulletins: true,
     flags: true,
     proposals: mayPropose(actor),
     'review-desk': may(actor, 'seeReviewDesk', { shopsWithOneEditor }).ok,

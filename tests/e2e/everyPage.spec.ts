@@ -66,6 +66,20 @@ const SCENES: Scene[] = [
   { name: 'a sheet', who: 'apprentice', open: at('/procedures/P-0142') },
   { name: 'a sheet, for who may propose, in inch units', who: 'pierOwner', open: at('/procedures/P-0124') },
   { name: 'a sheet that was superseded', who: 'apprentice', open: at('/procedures/P-0142/revisions/A') },
+  { name: 'a sheet that is withdrawn', who: 'apprentice', open: at('/procedures/P-0173') },
+  { name: 'a sheet with a bulletin to sign', who: 'sawmillApprentice', open: at('/procedures/P-0137') },
+  { name: 'look up, with a withdrawn sheet', who: 'apprentice', open: at('/?q=injector+return') },
+  { name: 'bulletins', who: 'sawmillApprentice', open: at('/bulletins') },
+  {
+    name: 'withdrawing, on the sheet',
+    who: 'editor',
+    open: at('/procedures/P-0139', async (page) => {
+      await page.getByRole('link', { name: 'Withdraw' }).filter({ visible: true }).click();
+      await expect(page.getByRole('dialog', { name: 'Withdraw this sheet' })).toBeVisible();
+    }),
+  },
+  { name: 'bringing back, on its own page', who: 'editor', open: at('/procedures/P-0173/bring-back') },
+  { name: 'history of a withdrawn sheet', who: 'apprentice', open: at('/procedures/P-0173/revisions') },
   { name: 'history', who: 'apprentice', open: at('/procedures/P-0142/revisions') },
   { name: 'two revisions compared', who: 'apprentice', open: at('/procedures/P-0142/compare?from=A&to=C') },
   {

@@ -7,10 +7,21 @@ const seen = (memberships: Membership[], shops: string[] = []) =>
 
 describe('the navigation', () => {
   it('shows an apprentice only what an apprentice may use', () => {
-    expect(seen([{ in: 'shop', shopId: 's', role: 'apprentice' }])).toEqual(['look-up', 'handbook']);
+    expect(seen([{ in: 'shop', shopId: 's', role: 'apprentice' }])).toEqual([
+      'look-up',
+      'bulletins',
+      'flags',
+      'handbook',
+    ]);
   });
   it('shows a technician their proposals and an editor the review desk', () => {
-    expect(seen([{ in: 'shop', shopId: 's', role: 'technician' }])).toEqual(['look-up', 'proposals', 'handbook']);
+    expect(seen([{ in: 'shop', shopId: 's', role: 'technician' }])).toEqual([
+      'look-up',
+      'bulletins',
+      'proposals',
+      'flags',
+      'handbook',
+    ]);
     expect(seen([{ in: 'common', role: 'editor' }])).toContain('review-desk');
   });
   it('shows a senior technician the review desk only where the shop has one editor', () => {

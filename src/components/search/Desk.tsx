@@ -23,6 +23,8 @@ export interface DeskProps extends Given {
   whole: Facets;
   suggestions: readonly Suggestion[];
   mayWrite: boolean;
+  /** Numbers of sheets that the reader has a bulletin about to sign. */
+  unread: readonly string[];
 }
 
 export function Desk(props: DeskProps) {
@@ -153,6 +155,7 @@ export function Desk(props: DeskProps) {
                   hit={hit}
                   engineName={engineName}
                   current={i === 0 && asked.q.trim() !== ''}
+                  unread={props.unread.includes(hit.number)}
                   onOpen={onOpen}
                 />
               ))}

@@ -32,11 +32,13 @@ interface RowProps {
   engineName: (key: string) => string;
   /** The one that Enter opens. */
   current: boolean;
+  /** The reader has a bulletin about it to sign. */
+  unread: boolean;
   onOpen: (hit: SearchHit) => void;
 }
 
 /** One sheet of the list. A letter typed draws no row again until the answer to it is there. */
-export const Row = memo(function Row({ hit, engineName, current, onOpen }: RowProps) {
+export const Row = memo(function Row({ hit, engineName, current, unread, onOpen }: RowProps) {
   const marksOf = (field: Matched['field']): [number, number][] =>
     hit.matched.find((one) => one.field === field)?.marks ?? [];
   const lines = hit.matched.filter(({ field }) => !OWN_PLACE.includes(field));
@@ -63,6 +65,14 @@ export const Row = memo(function Row({ hit, engineName, current, onOpen }: RowPr
             <Marked text={hit.title} marks={marksOf('title')} />
           </a>
         </h2>
+        {hit.withdrawn && (
+          <p className="mt-1.5 border-l-[8px] border-ink pl-2.5 text-[1.0625rem] font-semibold">
+            Withdrawn. Do not work from this sheet
+          </p>
+        )}
+        {unread && !hit.withdrawn && (
+          <p className="mt-1.5 border-l-[8px] border-ink pl-2.5 font-semibold">Changed: read and sign</p>
+        )}
         <p className="mt-1 max-w-[60ch] font-serif text-[0.96875rem] leading-[1.6]">
           <Marked text={hit.summary} marks={marksOf('summary')} />
         </p>

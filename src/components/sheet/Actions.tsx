@@ -1,5 +1,6 @@
 import { Button } from '@/components/ui/Button';
 import { UnitsSwitch } from './UnitsSwitch';
+import { WithdrawalLink } from './WithdrawalDialog';
 import { counted } from './words';
 
 /** Id of the form that starts a proposal; a step's own button submits it with `step`. */
@@ -9,12 +10,15 @@ export const PROPOSE_FORM = 'propose';
 export function Actions({
   number,
   propose,
+  withdraw = false,
   units,
   openProposals = 0,
 }: {
   number: string;
   /** The person may propose a change. */
   propose: boolean;
+  /** The person may withdraw the sheet. On a phone that stands below the sheet. */
+  withdraw?: boolean;
   units: 'metric' | 'inch';
   openProposals?: number;
 }) {
@@ -32,6 +36,7 @@ export function Actions({
           Print<span className="max-sm:sr-only"> the sheet</span>
         </span>
       </Button>
+      {withdraw && <WithdrawalLink act="withdraw" number={number} className="max-sm:hidden" />}
       {openProposals > 0 && (
         <p className="text-ink-2 max-sm:hidden">{counted(openProposals, 'proposed change')} waiting for review</p>
       )}

@@ -25,7 +25,15 @@ const Choice = ({ name, letter, chosen }: { name: 'from' | 'to'; letter: string;
 /**
  * Every published revision, latest first, with a choice of two to compare. A plain form: the comparison has an address.
  */
-export function History({ number, revisions }: { number: string; revisions: readonly RevisionSummary[] }) {
+export function History({
+  number,
+  revisions,
+  withdrawn,
+}: {
+  number: string;
+  revisions: readonly RevisionSummary[];
+  withdrawn: boolean;
+}) {
   const several = revisions.length > 1;
   return (
     <form action={`/procedures/${number}/compare`} className="px-4 py-3 sm:px-9">
@@ -40,7 +48,9 @@ export function History({ number, revisions }: { number: string; revisions: read
                 <span className="sr-only">Revision </span>
                 {revision.letter}
               </a>
-              <span className="ml-2 text-small text-ink-2">{place === 0 ? 'current' : 'superseded'}</span>
+              <span className="ml-2 text-small text-ink-2">
+                {place > 0 ? 'superseded' : withdrawn ? 'withdrawn' : 'current'}
+              </span>
             </Cell>
             <Cell label="Published" className="whitespace-nowrap">
               {dayOf(revision.publishedAt)}

@@ -9,7 +9,8 @@ import { Step } from './Step';
 import { RunningHead, type TitleBlockFacts } from './TitleBlock';
 
 /**
- * A whole sheet, as read, previewed and printed. `notice` stands above everything, `actions` under the head,
+ * A whole sheet, as read, previewed and printed. `notice` stands above everything, `actions` under the head, `bulletins` ahead of all that is
+ * laid out and done,
  * `stepAct` is each step's own button.
  */
 export function Sheet({
@@ -18,6 +19,7 @@ export function Sheet({
   engines,
   notice,
   actions,
+  bulletins,
   stepAct,
 }: {
   procedure: RenderedProcedure;
@@ -25,6 +27,7 @@ export function Sheet({
   engines: readonly EngineName[];
   notice?: ReactNode;
   actions?: ReactNode;
+  bulletins?: ReactNode;
   stepAct?: (step: RenderedStep) => ReactNode;
 }) {
   const { frontmatter, steps, introHtml } = procedure;
@@ -41,6 +44,7 @@ export function Sheet({
             holds={steps.reduce((sum, step) => sum + step.holds.length, 0)}
           />
           {actions}
+          {bulletins}
           <Prep frontmatter={frontmatter} />
           {steps.length > 0 && <Contents steps={steps} />}
           {introHtml && (

@@ -6,7 +6,7 @@ import { spacedCheck } from './words';
 export interface TitleBlockFacts {
   number: string;
   letter: string | null;
-  /** Beside the letter: "current", "superseded", "proposal". */
+  /** Beside the letter: "current", "superseded", "withdrawn", "proposal". */
   standing: string;
   /** "14 Nov 2026", or "Not published". */
   published: string;
@@ -58,7 +58,9 @@ export const RunningHead = ({ facts, title }: { facts: TitleBlockFacts; title: s
   <div className="running-head" aria-hidden="true">
     <div className="running-strip">
       <p className="running-title">
-        <span>Matchmark</span>
+        <span data-strip-name={facts.standing}>
+          {facts.standing === 'withdrawn' ? 'Withdrawn. Do not work from this sheet.' : 'Matchmark'}
+        </span>
         {title}
       </p>
       {(

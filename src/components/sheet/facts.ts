@@ -4,12 +4,12 @@ import type { TitleBlockFacts } from './TitleBlock';
 import { counted } from './words';
 
 /** What the title block of a published sheet says. */
-export function factsOf({ number, revision, current, earlier }: Sheet): TitleBlockFacts {
+export function factsOf({ number, revision, current, earlier, withdrawn }: Sheet): TitleBlockFacts {
   const isCurrent = revision.letter === current.letter;
   return {
     number,
     letter: revision.letter,
-    standing: isCurrent ? 'current' : 'superseded',
+    standing: withdrawn ? 'withdrawn' : isCurrent ? 'current' : 'superseded',
     published: dayOf(revision.publishedAt),
     writtenBy: revision.author.name,
     reviewedBy: revision.reviewers.map(({ name }) => name).join(', ') || 'Nobody named',

@@ -29,6 +29,18 @@ for (const link of document.querySelectorAll<HTMLAnchorElement>('a[data-copy-lin
       .catch(() => {});
   });
 
+// The question about a withdrawal; without it the link goes to a page with the same form.
+for (const link of document.querySelectorAll<HTMLElement>('[data-opens]'))
+  link.addEventListener('click', (event) => {
+    const dialog = document.getElementById(link.dataset['opens'] ?? '');
+    if (!(dialog instanceof HTMLDialogElement)) return;
+    event.preventDefault();
+    dialog.showModal();
+    dialog.querySelector('textarea')?.focus();
+  });
+for (const button of document.querySelectorAll('[data-closes]'))
+  button.addEventListener('click', () => button.closest('dialog')?.close());
+
 // A drawing in an island is the island's to bring to life.
 for (const figure of document.querySelectorAll<HTMLElement>('figure[data-order]'))
   if (!figure.closest('astro-island')) stepThrough(figure);

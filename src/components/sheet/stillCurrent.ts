@@ -1,5 +1,5 @@
 /**
- * A sheet that stays open may be superseded meanwhile. It asks when somebody comes back to it, when the network
+ * A sheet that stays open may be superseded or withdrawn meanwhile. It asks when somebody comes back to it, when the network
  * returns, and every minute while it is in sight, and says so at once; without network it stays as it is.
  */
 
@@ -8,7 +8,13 @@ const EVERY = 60_000;
 const FRESH = 10_000;
 
 const notice = document.querySelector<HTMLElement>('[data-newer]');
+const since = document.querySelector<HTMLElement>('[data-withdrawn-since]');
 let asked = Date.now();
+
+interface Withdrawal {
+  reason: string;
+  by: { name: string };
+}
 
 /** Says in the notice, in the title block and on every printed page that this revision is no longer the current one. */
 function tell(shown: HTMLElement, number: string, letter: string, now: string): void {
@@ -21,14 +27,31 @@ function tell(shown: HTMLElement, number: string, letter: string, now: string): 
   shown.hidden = false;
 }
 
+/** Says the same of a sheet that was withdrawn. */
+function tellWithdrawn(shown: HTMLElement, letter: string, { reason, by }: Withdrawal): void {
+  for (const place of shown.querySelectorAll('[data-withdrawn-why]')) place.textContent = reason;
+  for (const place of shown.querySelectorAll('[data-withdrawn-by]')) place.textContent = by.name;
+  for (const place of document.querySelectorAll('[data-standing]')) place.textContent = 'withdrawn';
+  for (const place of document.querySelectorAll('[data-strip-revision]')) place.textContent = `${letter}, withdrawn`;
+  for (const place of document.querySelectorAll<HTMLElement>('[data-strip-name]')) {
+    place.textContent = 'Withdrawn. Do not work from this sheet.';
+    place.dataset['stripName'] = 'withdrawn';
+  }
+  shown.hidden = false;
+}
+
 async function ask(): Promise<void> {
-  if (!notice?.hidden) return;
+  if (!notice?.hidden || !since?.hidden) return;
   asked = Date.now();
   const { number = '', letter = '' } = notice.dataset;
   const answer = await fetch(`/api/v1/procedures/${number}`, { cache: 'no-cache' }).catch(() => undefined);
   if (!answer?.ok) return;
-  const { revision } = (await answer.json()) as { revision: { letter: string } };
-  if (revision.letter !== letter) tell(notice, number, letter, revision.letter);
+  const { revision, withdrawn } = (await answer.json()) as {
+    revision: { letter: string };
+    withdrawn: Withdrawal | null;
+  };
+  if (withdrawn) tellWithdrawn(since, letter, withdrawn);
+  else if (revision.letter !== letter) tell(notice, number, letter, revision.letter);
 }
 
 const cameBack = (event: PageTransitionEvent) => {

@@ -117,7 +117,7 @@ function asReviewer(actor: Actor, p: ProposalSubject, doing: string, secondAgree
 function asEditor(actor: Actor, book: Book, doing: string): Permission {
   if (!reads(actor, book)) return HIDDEN;
   const who = book.kind === 'common' ? 'An editor of the common book' : "This shop's editor";
-  return edits(actor, book) ? YES : no(`${who} ${doing}. Tell them what is wrong with it.`);
+  return edits(actor, book) ? YES : no(`${who} ${doing}. Flag what is wrong with it.`);
 }
 
 /** In a shop: hidden from others, refused to members without the role. */

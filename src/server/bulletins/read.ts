@@ -76,6 +76,10 @@ export async function unreadBulletins(actor: Actor): Promise<Bulletin[]> {
   return (await loadBulletins(actor, 's.at IS NULL')).filter(({ unread }) => unread);
 }
 
+/** When a procedure was withdrawn and brought back, latest first. Empty for one that may not be read. */
+export const withdrawalsOf = (actor: Actor, number: string): Promise<Bulletin[]> =>
+  loadBulletins(actor, `p.number = :number AND b.kind <> 'critical change'`, { number });
+
 /**
  * A text that changes whenever other bulletins are unread than before, for the key of a page that shows them: bulletins
  * and signatures are only ever added, and roles stand in the key already. One cheap read.
