@@ -100,22 +100,37 @@ export const procedure: fc.Arbitrary<Procedure> = fc.record({
   steps: fc.uniqueArray(step, { selector: ({ id }) => id, maxLength: 8 }),
 });
 
-/** Two procedures, as often as not close relatives: the second is the first with some of its parts exchanged. */
-export const pair: fc.Arbitrary<[Procedure, Procedure]> = fc
-  .tuple(
-    procedure,
-    procedure,
-    fc.record({ front: fc.boolean(), intro: fc.boolean(), shuffle: fc.boolean(), mix: fc.nat(255) }),
-  )
-  .chain(([one, other, keep]) => {
-    const steps = other.steps.map((s, i) => ((keep.mix >> i) & 1 ? s : (one.steps.find(({ id }) => id === s.id) ?? s)));
-    const order = keep.shuffle ? fc.shuffledSubarray(steps, { minLength: steps.length }) : fc.constant(steps);
-    return order.map((arranged): [Procedure, Procedure] => [
-      one,
-      {
+/** A close relative: a procedure with some of its parts exchanged. */
+const relativeOf = (one: Procedure): fc.Arbitrary<Procedure> =>
+  fc
+    .tuple(procedure, fc.record({ front: fc.boolean(), intro: fc.boolean(), shuffle: fc.boolean(), mix: fc.nat(255) }))
+    .chain(([other, keep]) => {
+      const steps = other.steps.map((s, i) =>
+        (keep.mix >> i) & 1 ? s : (one.steps.find(({ id }) => id === s.id) ?? s),
+      );
+      const order = keep.shuffle ? fc.shuffledSubarray(steps, { minLength: steps.length }) : fc.constant(steps);
+      return order.map((arranged) => ({
         frontmatter: keep.front ? one.frontmatter : other.frontmatter,
         intro: keep.intro ? one.intro : other.intro,
         steps: arranged,
-      },
-    ]);
-  });
+      }));
+    });
+
+/** Two procedures, as often as not close relatives: the second is the first with some of its parts exchanged. */
+export const pair: fc.Arbitrary<[Procedure, Procedure]> = procedure.chain((one) =>
+  fc.tuple(fc.constant(one), relativeOf(one)),
+);
+
+/** A few of the fields of one front matter, the others of another. */
+const mixed = (one: Frontmatter, other: Frontmatter): fc.Arbitrary<Frontmatter> =>
+  fc
+    .subarray(Object.keys(one) as (keyof Frontmatter)[])
+    .map((names) => ({ ...one, ...Object.fromEntries(names.map((name) => [name, other[name]])) }));
+
+/** A base and two texts made from it, each of which changed some of it. */
+export const triple: fc.Arbitrary<[Procedure, Procedure, Procedure]> = procedure.chain((one) => {
+  const child = relativeOf(one).chain((child) =>
+    mixed(one.frontmatter, child.frontmatter).map((head) => ({ ...child, frontmatter: head })),
+  );
+  return fc.tuple(fc.constant(one), child, child);
+});
