@@ -8,6 +8,7 @@ import * as check from './schemas/check';
 import * as common from './schemas/common';
 import * as compare from './schemas/compare';
 import * as me from './schemas/me';
+import * as merge from './schemas/merge';
 import * as proposals from './schemas/proposals';
 import * as search from './schemas/search';
 import * as threads from './schemas/threads';
@@ -33,7 +34,7 @@ const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
 /** Named schemas: those that `schemas/` exports, by name, then what single calls take and answer beyond them. */
 function names(): Map<z.ZodTypeAny, string> {
   const named = new Map<z.ZodTypeAny, string>();
-  const exported = [book, bulletins, check, common, compare, me, proposals, search, threads].flatMap((area) =>
+  const exported = [book, bulletins, check, common, compare, me, merge, proposals, search, threads].flatMap((area) =>
     Object.entries(area),
   );
   // By code unit, so that the document does not depend on which file holds what.

@@ -1,3 +1,4 @@
+import { longestRising } from './compareSteps';
 import { mergedSequence } from './mergeText';
 import type { Side } from './mergeTypes';
 
@@ -82,4 +83,12 @@ export function mergeOrder(
   const fit = theirMoves ? fits(theirs, mine, newMine) : fits(mine, theirs, newTheirs);
   if (bothMoved || (firm && !(alike && fit))) return { sides };
   return { order: theirMoves ? sides.theirs : myMoves ? sides.mine : sides.base };
+}
+
+/** What may be said to stand elsewhere than before; of two neighbours that changed places, that is each of them. */
+export function movedKeys(base: Keys, side: Keys): Set<string> {
+  const shared = side.filter((key) => base.includes(key));
+  const run = (keys: Keys) => longestRising(keys.map((key) => base.indexOf(key))).size;
+  const longest = run(shared);
+  return new Set(shared.filter((key) => run(shared.filter((other) => other !== key)) === longest));
 }

@@ -1,5 +1,5 @@
 import type { Procedure, Step } from '../procedure/types';
-import { mergeOrder } from './mergeOrder';
+import { mergeOrder, movedKeys } from './mergeOrder';
 import { pick } from './mergeSame';
 import { mergedSequence, mergeText } from './mergeText';
 import { type Asking, settle, type Side, type Texts } from './mergeTypes';
@@ -53,10 +53,17 @@ function mergeCautions(asking: Asking, of: Three<Step>, hazard: (key: string) =>
   });
 }
 
-function mergeStep(asking: Asking, of: Three<Step | undefined>, hazard: (key: string) => string): Step | undefined {
+function mergeStep(
+  asking: Asking,
+  of: Three<Step | undefined>,
+  moved: boolean,
+  hazard: (key: string) => string,
+): Step | undefined {
   const { base, mine, theirs } = of;
   const clean = pick(base, mine, theirs);
-  if (clean) return clean.value;
+  // Who moved a step wants it, so that it is not taken away without asking.
+  const unwanted = moved && (mine === undefined) !== (theirs === undefined);
+  if (clean && !unwanted) return clean.value;
   if (base && mine && theirs) {
     const whole = { base, mine, theirs };
     const bodies = three((side) => whole[side].body);
@@ -85,12 +92,15 @@ export function mergeSteps(asking: Asking, texts: Texts): Step[] {
     SIDES.flatMap((side) => texts[side].frontmatter.cautions).find((caution) => caution.key === key)?.hazard ?? key;
   const find = (text: Procedure, id: string) => text.steps.find((step) => step.id === id);
   const ids = three((side) => texts[side].steps.map(({ id }) => id));
+  const [movedByMine, movedByTheirs] = [movedKeys(ids.base, ids.mine), movedKeys(ids.base, ids.theirs)];
   const kept = new Map<string, Step>();
   // In the order of the published text, so that conflicts are asked about as the sheet is read.
   for (const id of new Set([...ids.theirs, ...ids.base, ...ids.mine])) {
+    const moved = movedByMine.has(id) || movedByTheirs.has(id);
     const step = mergeStep(
       asking,
       three((side) => find(texts[side], id)),
+      moved,
       hazard,
     );
     if (step) kept.set(id, step);

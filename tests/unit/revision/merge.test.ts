@@ -196,6 +196,12 @@ describe('steps', () => {
     expect(rawOf(resolve(merged, { 'steps.check': { take: 'mine' } }))).toBe(rawOf(edited));
   });
 
+  it('asks where one took a step away that the other moved', () => {
+    const merged = merge(base, arranged(base, 'check cool draw-down'), without(base, 'check'));
+    expect(merged.conflicts).toMatchObject([{ path: 'steps.check', reason: 'theirsRemoved' }]);
+    expect(merge(base, arranged(base, 'check cool draw-down'), without(base, 'cool')).conflicts).toEqual([]);
+  });
+
   it('keeps clean paragraphs of both where another paragraph of the step conflicts', () => {
     const start = withBody(base, 'check', () => 'One.\n\nTwo.\n\nThree.\n\nFour.\n\nFive.');
     const mine = withBody(start, 'check', (body) => body.replace('One.', 'One, mine.').replace('Three.', 'Mine.'));

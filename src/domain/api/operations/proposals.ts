@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { operation } from '../operation';
 import { Id, ListQuery, pageOf } from '../schemas/common';
 import { ProposalComparison } from '../schemas/compare';
+import { ProposalMerge } from '../schemas/merge';
 import {
   DeskItem,
   GiveOverride,
@@ -122,6 +123,19 @@ export const compareProposal = operation({
   params: OfProposal,
   reply: ProposalComparison,
   refuses: [422],
+});
+
+export const mergeProposal = operation({
+  id: 'mergeProposal',
+  method: 'get',
+  path: '/proposals/{id}/merge',
+  area: 'Proposals',
+  summary: 'My draft brought together with what was published since it was begun',
+  description:
+    'Changes nothing. Save the merged text with `base` set to `to` to bring the draft up to date. 403 for anybody but its author, 422 where the draft cannot be read yet.',
+  params: OfProposal,
+  reply: ProposalMerge,
+  refuses: [409, 422],
 });
 
 export const readDesk = operation({
