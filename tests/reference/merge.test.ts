@@ -67,8 +67,8 @@ const FILES = readdirSync('content/procedures')
   .filter((name) => name.endsWith('.mdx'))
   .sort();
 
-/** Some 25 seconds on a slow machine; 1500 were run when this was written. */
-const COUNT = 240;
+/** Reading so many texts takes a while; 1500 were run when this was written. */
+const COUNT = 140;
 
 function* cases(count: number): Generator<{ base: Procedure; mine: Procedure; theirs: Procedure }> {
   for (let i = 0; i < count; i += 1) {
@@ -114,8 +114,8 @@ describe.skipIf(!git)(git ? 'merge, against git merge-file' : 'merge, against gi
     if (process.env.MERGE_COUNTS) process.stderr.write(`${JSON.stringify({ counts, reasons })}\n`);
     expect(wrong).toEqual([]);
     // Enough of every kind that the comparison says something.
-    expect(counts.same).toBeGreaterThan(100);
-    expect(counts.bothAsk).toBeGreaterThan(20);
-    expect(reasons['pieces a torque, limit or caution together']).toBeGreaterThan(3);
-  }, 90_000);
+    expect(counts.same).toBeGreaterThan(80);
+    expect(counts.bothAsk).toBeGreaterThan(12);
+    expect(reasons['pieces a torque, limit or caution together']).toBeGreaterThan(1);
+  }, 120_000);
 });
