@@ -146,34 +146,3 @@ test('an editor whose return comes too late keeps the reason they wrote', async 
   const { remarks } = await readProposal(author, id);
   expect(remarks.map(({ text }) => text)).toEqual(['Say on which engine.']);
 });
-
-test('a draft whose base is no longer current is put on the new one, with every word', async ({ as }) => {
-  const author = await as('technician');
-  const base = (await readSheet(author, 'P-0124')).revision.letter;
-  const mine = await draft(author, 'P-0124', longer, 'Five minutes more.');
-  const rival = await as('northSenior');
-  const theirs = await propose(
-    rival,
-    'P-0124',
-    (source) => source.replace(/^(title: .*)$/m, '$1, in order'),
-    'The order matters.',
-  );
-  for (const [who, act] of [
-    ['editor', 'agree'],
-    ['editor2', 'publish'],
-  ] as const) {
-    const answer = await call(await as(who), 'POST', `/proposals/${theirs.id}/${act}`);
-    if (act === 'publish') expect(answer.ok(), await answer.text()).toBe(true);
-  }
-  const letter = nextLetter(base);
-  const desk = new WritingDesk(author);
-  await author.goto(`/proposals/${mine.id}/edit`);
-  await desk.ready();
-  const notice = author.getByRole('alert').filter({ hasText: `Revision ${letter} was published since you started` });
-  await expect(notice).toBeVisible();
-  await notice.getByRole('button', { name: `Put my text on top of ${letter}` }).click();
-  await expect(notice).toBeHidden();
-  await expect(desk.reason).toHaveValue('Five minutes more.');
-  const proposal = await readProposal(author, mine.id);
-  expect(proposal).toMatchObject({ base: letter, stale: false, source: mine.source });
-});

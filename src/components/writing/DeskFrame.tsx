@@ -9,6 +9,7 @@ import { DeskHead } from './DeskHead';
 import { ThreadsAhead } from './DeskThreads';
 import { Elsewhere } from './Elsewhere';
 import type { Keeping } from './keeper';
+import { MergeScreen } from './MergeScreen';
 import { Middle } from './Middle';
 import { Rail, RailChoice } from './Rail';
 import { MIDDLE } from './RailLink';
@@ -17,6 +18,7 @@ import { Returned } from './Returned';
 import { StaleBase } from './StaleBase';
 import { TextMode } from './TextMode';
 import type { Checked } from './useCheck';
+import type { Merging } from './useMerging';
 import type { Refusal } from './useProposing';
 import type { Standing } from './writingProps';
 
@@ -31,7 +33,7 @@ interface Props {
   undo: { said: string; act: (() => void) | null } | null;
   onUndone: () => void;
   onPropose: () => void;
-  onRebase: (letter: string) => Promise<string | null>;
+  merging: Merging;
   /** The text on the screen. */
   mine: string;
   /** The text while it is edited as text; null in the form. */
@@ -91,11 +93,12 @@ function Refused({ refusal }: { refusal: Refusal | null }) {
 
 /** Where everything of the desk stands: head, notices, rail, the chosen thing, the margin of checks. */
 export function DeskFrame(props: Props) {
-  const { proposal, current, state, checked, changes, text, mine } = props;
+  const { proposal, current, state, checked, changes, text, mine, merging } = props;
   const { draft, place, choose, tried, baseLetter } = useDesk();
   const lastStep = draft.steps[0];
   const title = text === null ? draft.title.trim() || 'Untitled' : proposal.title;
   const seeing = place === 'changes';
+  const choosing = current !== null && merging.shown && (merging.merged?.conflicts.length ?? 0) > 0;
   return (
     <div className="leaf writing">
       <DeskHead
@@ -103,7 +106,10 @@ export function DeskFrame(props: Props) {
         state={state}
         opened={Date.parse(proposal.updatedAt)}
         changes={seeing}
-        onChanges={() => choose(seeing ? (lastStep ? { step: lastStep.id } : 'sheet') : 'changes')}
+        onChanges={() => {
+          merging.show(false);
+          choose(seeing ? (lastStep ? { step: lastStep.id } : 'sheet') : 'changes');
+        }}
         onPropose={props.onPropose}
         pending={props.pending}
       />
@@ -111,67 +117,72 @@ export function DeskFrame(props: Props) {
         {state.kind === 'stale' && (
           <Elsewhere theirs={state.theirs} mine={mine} onTheirs={props.onTheirs} onMine={props.onMine} />
         )}
-        {current && (
-          <StaleBase
-            number={proposal.number}
-            base={baseLetter}
-            current={current}
-            mine={mine}
-            onRebase={() => props.onRebase(current.letter)}
-          />
+        {current && !choosing && (
+          <StaleBase number={proposal.number} base={baseLetter} current={current} mine={mine} merging={merging} />
         )}
         <Returned />
         <ThreadsAhead />
       </div>
-      {text === null && (
-        <div className="writing-choice">
-          <RailChoice />
+      {choosing && props.refusal && (
+        <div className="px-5 pt-5 sm:px-7">
+          <Refused refusal={props.refusal} />
         </div>
       )}
-      <div className={text === null ? 'writing-columns' : 'writing-columns writing-as-text'}>
+      {choosing && merging.merged && (
+        <MergeScreen merged={merging.merged} merging={merging} base={baseLetter ?? ''} letter={current.letter} />
+      )}
+      {/* Nothing may be typed into a text that is just being replaced by the merged one. */}
+      <div hidden={choosing} inert={merging.pending}>
         {text === null && (
-          <div className="writing-rail">
-            <Rail />
+          <div className="writing-choice">
+            <RailChoice />
           </div>
         )}
-        <section id={MIDDLE} tabIndex={-1} aria-label="What is being written" className="writing-middle">
-          <Refused refusal={props.refusal} />
-          <UndoLine undo={props.undo} onUndone={props.onUndone} />
-          {text === null || seeing ? (
-            <Middle changes={changes} id={proposal.id} />
-          ) : (
-            <TextMode text={text} onText={props.onText} checked={checked} />
+        <div className={text === null ? 'writing-columns' : 'writing-columns writing-as-text'}>
+          {text === null && (
+            <div className="writing-rail">
+              <Rail />
+            </div>
           )}
-          <div className="mt-7 border-t border-rule pt-5">
-            <ReasonField
-              error={tried && !draft.reason.trim() ? 'Write why it is better: the editor decides by it.' : undefined}
-            />
-          </div>
-          <p className="mt-4 text-small text-ink-2">
-            {text === null ? (
-              <button
-                type="button"
-                className="inline-flex min-h-touch items-center underline underline-offset-[3px]"
-                onClick={() => props.onText(sourceOf(draft))}
-              >
-                Edit the whole sheet as text
-              </button>
+          <section id={MIDDLE} tabIndex={-1} aria-label="What is being written" className="writing-middle">
+            <Refused refusal={props.refusal} />
+            <UndoLine undo={props.undo} onUndone={props.onUndone} />
+            {text === null || seeing ? (
+              <Middle changes={changes} id={proposal.id} />
             ) : (
-              <button
-                type="button"
-                disabled={checked.problems.length > 0}
-                className="inline-flex min-h-touch items-center underline underline-offset-[3px] disabled:no-underline"
-                onClick={props.onForm}
-              >
-                {checked.problems.length > 0
-                  ? 'Mend what is listed, and the text can be edited in the form again'
-                  : 'Edit it in the form'}
-              </button>
+              <TextMode text={text} onText={props.onText} checked={checked} />
             )}
-          </p>
-        </section>
-        <div className="writing-checks">
-          <Checks checked={checked} changes={changes} />
+            <div className="mt-7 border-t border-rule pt-5">
+              <ReasonField
+                error={tried && !draft.reason.trim() ? 'Write why it is better: the editor decides by it.' : undefined}
+              />
+            </div>
+            <p className="mt-4 text-small text-ink-2">
+              {text === null ? (
+                <button
+                  type="button"
+                  className="inline-flex min-h-touch items-center underline underline-offset-[3px]"
+                  onClick={() => props.onText(sourceOf(draft))}
+                >
+                  Edit the whole sheet as text
+                </button>
+              ) : (
+                <button
+                  type="button"
+                  disabled={checked.problems.length > 0}
+                  className="inline-flex min-h-touch items-center underline underline-offset-[3px] disabled:no-underline"
+                  onClick={props.onForm}
+                >
+                  {checked.problems.length > 0
+                    ? 'Mend what is listed, and the text can be edited in the form again'
+                    : 'Edit it in the form'}
+                </button>
+              )}
+            </p>
+          </section>
+          <div className="writing-checks">
+            <Checks checked={checked} changes={changes} />
+          </div>
         </div>
       </div>
     </div>

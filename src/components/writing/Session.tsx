@@ -12,6 +12,7 @@ import type { Words } from './heldCopy';
 import { fieldId, placeOfProblem } from './places';
 import { useCheck } from './useCheck';
 import { useKeepUp } from './useKeepUp';
+import { useMerging } from './useMerging';
 import { useKeeping } from './useKeeping';
 import { useChanges } from './useNeeds';
 import { focusSoon, usePlace } from './usePlace';
@@ -73,6 +74,12 @@ export function Session({ proposal, threads, source, base, current, engines, dra
     keeper.moved(taken.version);
     location.reload();
   };
+  const mine = useMemo(() => {
+    if (procedure) return sound ? procedure : null;
+    const read = checked.problems.length === 0 && text !== null ? readDraft(text) : null;
+    return read && procedureOf(read);
+  }, [procedure, sound, checked.problems.length, text]);
+  const merging = useMerging(proposal.id, base, current, mine, rebase);
 
   const goTo = (path: string) => {
     setTried(true);
@@ -128,7 +135,7 @@ export function Session({ proposal, threads, source, base, current, engines, dra
           undo={undo}
           onUndone={() => setUndo(null)}
           onPropose={ask}
-          onRebase={rebase}
+          merging={merging}
           mine={words.source}
           text={text}
           onText={setText}

@@ -1,60 +1,72 @@
-import { useState } from 'react';
 import { Button } from '@/components/ui/Button';
 import { BothTexts } from './BothTexts';
+import { CameIn } from './CameIn';
+import { placesWords } from './mergeWords';
+import type { Merging } from './useMerging';
 
-/** Another revision was published since the draft was begun; the author reads it and then stands the text on it. */
+/** Another revision was published since the draft was begun: both are brought together, or the author is asked where they touch. */
 export function StaleBase({
   number,
   base,
   current,
   mine,
-  onRebase,
+  merging,
 }: {
   number: string;
   base: string | null;
   current: { letter: string; source: string };
   mine: string;
-  /** Returns what went wrong, or null. */
-  onRebase: () => Promise<string | null>;
+  merging: Merging;
 }) {
-  const [pending, setPending] = useState(false);
-  const [failed, setFailed] = useState<string | null>(null);
+  const { merged, pending, failed } = merging;
+  const { letter } = current;
+  const asks = merged?.conflicts.length ?? 0;
+  const seen = base && (
+    <a href={`/procedures/${number}/compare?from=${base}&to=${letter}`}>
+      See what changed from {base} to {letter}
+    </a>
+  );
   return (
     <section role="alert" className="border-l-[14px] border-ink bg-white px-5 py-4 sm:px-7">
-      <h2 className="text-lead">
-        Revision {current.letter} was published since you started{base ? ` from ${base}` : ''}
-      </h2>
-      <p className="mt-1 max-w-prose">
-        {base && (
-          <>
-            <a href={`/procedures/${number}/compare?from=${base}&to=${current.letter}`}>
-              See what changed from {base} to {current.letter}
-            </a>{' '}
-            and bring over what you want to keep.{' '}
-          </>
-        )}
-        Then put your text on top of {current.letter}: from there on the editor sees your text against {current.letter},
-        and anything of it that you leave out is shown as taken away.
-      </p>
-      <div className="mt-3">
-        <Button
-          pending={pending}
-          pendingText="Putting it there"
-          onClick={() => {
-            setPending(true);
-            void onRebase().then((why) => {
-              setFailed(why);
-              if (why) setPending(false);
-            });
-          }}
-        >
-          Put my text on top of {current.letter}
-        </Button>
-        {failed && <p className="mt-2 border-l-[8px] border-ink pl-2.5 font-medium">{failed}</p>}
-      </div>
+      <h2 className="text-lead">Revision {letter} was published meanwhile</h2>
+      {merged && asks === 0 && (
+        <>
+          <p className="mt-1 max-w-prose">
+            Its changes and yours do not touch, so they are brought together. This comes into your text:
+          </p>
+          <CameIn changes={merged.cameIn} />
+        </>
+      )}
+      {merged && asks > 0 && (
+        <p className="mt-1 max-w-prose">
+          It changed {placesWords(asks)} that you changed too. Choose there what goes on; all else is brought together
+          by itself. {seen}
+        </p>
+      )}
+      {merged === null && (
+        <p className="mt-1 max-w-prose">
+          Your text cannot be read yet, so it cannot be brought together with revision {letter}. Mend what the check
+          lists first. {seen}
+        </p>
+      )}
+      {merged && (
+        <div className="mt-3 flex flex-wrap items-center gap-x-5 gap-y-1">
+          {asks === 0 ? (
+            <Button kind="main" pending={pending} pendingText="Putting it there" onClick={merging.take}>
+              Go on from revision {letter}
+            </Button>
+          ) : (
+            <Button kind="main" onClick={() => merging.show(true)}>
+              Choose {asks === 1 ? 'there' : `in ${placesWords(asks)}`}
+            </Button>
+          )}
+          {asks === 0 && seen}
+        </div>
+      )}
+      {failed && <p className="mt-2 border-l-[8px] border-ink pl-2.5 font-medium">{failed}</p>}
       <BothTexts
         texts={[
-          { name: `Revision ${current.letter}, as published`, text: current.source },
+          { name: `Revision ${letter}, as published`, text: current.source },
           { name: 'Your text', text: mine },
         ]}
       />

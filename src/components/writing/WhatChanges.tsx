@@ -1,20 +1,5 @@
-import { Fragment } from 'react';
 import type { Comparison, WordRun } from '@/domain/revision/types';
-
-const Words = ({ runs }: { runs: readonly WordRun[] }) =>
-  runs.map((run, i) =>
-    run.kind === 'added' ? (
-      <ins key={i} className="bg-wash decoration-petrol decoration-2 underline-offset-4">
-        {run.text}
-      </ins>
-    ) : run.kind === 'removed' ? (
-      <del key={i} className="removed">
-        {run.text}
-      </del>
-    ) : (
-      <Fragment key={i}>{run.text}</Fragment>
-    ),
-  );
+import { Words } from './Words';
 
 const isChanged = (runs: readonly WordRun[]) => runs.some((run) => run.kind !== 'same');
 

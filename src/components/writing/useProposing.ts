@@ -49,11 +49,11 @@ export function useProposing(id: string, keeper: Keeper) {
     }
   };
 
-  /** Stands the text on revision `letter`. Returns why not, or null once the page is loading again. */
-  const rebase = async (letter: string): Promise<string | null> => {
+  /** Stands `source` on revision `letter`. Returns why not, or null once the page is loading again. */
+  const rebase = async (letter: string, source: string): Promise<string | null> => {
     try {
       if (!(await keeper.flush())) return 'The draft could not be kept yet. Try again once it is.';
-      keeper.moved((await saveProposal(id, keeper.version, { base: letter })).version);
+      keeper.moved((await saveProposal(id, keeper.version, { base: letter, source })).version);
       location.reload();
       return null;
     } catch (error) {
