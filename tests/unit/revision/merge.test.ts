@@ -41,7 +41,7 @@ describe('the laws of a merge', () => {
           expect(rawOf(merged.procedure)).toBe(rawOf(x));
         }
       }),
-      { numRuns: 400 },
+      { numRuns: 150 },
     );
   });
 
@@ -55,7 +55,7 @@ describe('the laws of a merge', () => {
         const inOrder = (list: unknown[][]) => list.sort((a, b) => (String(a[0]) < String(b[0]) ? -1 : 1));
         expect(inOrder(other.conflicts.map(swapped))).toEqual(inOrder(one.conflicts.map(told)));
       }),
-      { numRuns: 400 },
+      { numRuns: 150 },
     );
   });
 
@@ -71,7 +71,7 @@ describe('the laws of a merge', () => {
           expect(new Set(keys).size).toBe(keys.length);
         for (const { mine, theirs } of conflicts) expect(rawOf(mine)).not.toBe(rawOf(theirs));
       }),
-      { numRuns: 400 },
+      { numRuns: 150 },
     );
   });
 
@@ -101,7 +101,7 @@ describe('the laws of a merge', () => {
         }
         clean('intro', (p) => p.intro);
       }),
-      { numRuns: 400 },
+      { numRuns: 150 },
     );
   });
 });
