@@ -1,7 +1,7 @@
 import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
 import type { Proposal } from '@/domain/api/schemas/proposals';
-import { ACT_WORDS, whyNotYet, type ReviewAct } from './words';
+import { ACT_WORDS, wantsAgreement, whyNotYet, type ReviewAct } from './words';
 
 interface ActsProps {
   proposal: Proposal;
@@ -65,7 +65,7 @@ export function Acts({ proposal, me, version, pending, onAgree, onAsk }: ActsPro
       {may.publish && asks('publish', 'Publish', 'main')}
       {!may.publish && editor && (
         <Button disabled aria-describedby="why-not open-questions">
-          Publish, {agreements} of {agreementsNeeded} agreed
+          {wantsAgreement(proposal) || stale ? `Publish, ${agreements} of ${agreementsNeeded} agreed` : 'Publish'}
         </Button>
       )}
       {!may.publish && editor && !stale && whyNotYet(proposal) && (

@@ -1,10 +1,22 @@
+import type { ReactNode } from 'react';
 import type { ClampChange } from '@/domain/revision/types';
 
 /** The clamp load of a torque then and now, under its row; past proof load or a likely mix-up of units cannot be overlooked. */
-export function ClampRow({ load, columns, fresh }: { load: ClampChange; columns: number; fresh: boolean }) {
+export function ClampRow({
+  load,
+  columns,
+  fresh,
+  children,
+}: {
+  load: ClampChange;
+  columns: number;
+  fresh: boolean;
+  /** What was written about it, and where a reason is written. */
+  children?: ReactNode;
+}) {
   const grave = load.verdict === 'over' || load.mixUps.length > 0;
   return (
-    <tr className="clamp-row">
+    <tr id={`clamp-${load.key}`} className="clamp-row">
       <td colSpan={columns}>
         <div className={grave ? 'heavy-edge px-3 py-2' : undefined}>
           <p>
@@ -23,6 +35,7 @@ export function ClampRow({ load, columns, fresh }: { load: ClampChange; columns:
               {mixUp}
             </p>
           ))}
+          {children}
         </div>
       </td>
     </tr>

@@ -5,8 +5,10 @@ import type { Proposal } from '@/domain/api/schemas/proposals';
 import type { StepPair } from '@/domain/revision/twoTexts';
 import type { ClampChange } from '@/domain/revision/types';
 import type { ValueRow } from '@/domain/revision/valueRows';
+import { Failing, OverrideNote } from './Failing';
 import { ActPanel, ReasonFields } from './ActPanel';
 import { keepReason, keptReason, type Written } from './keptReason';
+import { OverrideForm } from './OverrideForm';
 import { Panes } from './Panes';
 import { placesOf, standsAt, unplaced } from './places';
 import { PublishWords } from './PublishWords';
@@ -31,6 +33,8 @@ export interface ReviewProps {
   asked: Written | null;
   /** How the act that made this page went, where no script ran. */
   trouble: Trouble | null;
+  /** The reason of an override that was refused, where no script ran. */
+  typedOverride: { torque: string; text: string } | null;
   done: Done | null;
   talk: TalkProps;
 }
@@ -46,7 +50,17 @@ export function Review(props: ReviewProps) {
   );
 }
 
-function Desk({ proposal: first, me, letter, texts, fault, asked, talk: cameTalk, ...came }: ReviewProps) {
+function Desk({
+  proposal: first,
+  me,
+  letter,
+  texts,
+  fault,
+  asked,
+  typedOverride,
+  talk: cameTalk,
+  ...came
+}: ReviewProps) {
   const { proposal, act, pending, movedOn, ...acts } = useReviewActs(first);
   const done = acts.done ?? came.done;
   const trouble = acts.trouble ?? (acts.done ? null : came.trouble);
@@ -140,6 +154,23 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, talk: cameTalk
       )}
     </ActPanel>
   );
+  const onLoad = (key: string) => {
+    const torque = proposal.failing.find((one) => one.key === key);
+    if (!torque) return null;
+    if (torque.override) return <OverrideNote override={torque.override} />;
+    if (!may.override) return null;
+    return (
+      <OverrideForm
+        proposalId={id}
+        version={first.version}
+        torque={key}
+        typed={typedOverride?.torque === key ? typedOverride.text : ''}
+        error={trouble?.act === 'override' && trouble.torque === key ? trouble.field : null}
+        pending={pending === 'override'}
+        onSend={(reason, onDone) => act({ act: 'override', torque: key, reason }, onDone)}
+      />
+    );
+  };
   const notes = (place: string) => [
     ...remarks
       .filter(({ anchor }) => standsAt(anchor, shown) === place)
@@ -164,6 +195,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, talk: cameTalk
         threads={talk.threads}
         panel={placed ? null : form}
       >
+        <Failing proposal={proposal} rows={texts !== null} />
         {panel?.written.text.trim() && !may[panel.written.act] && (
           <Notice title="What you wrote, not sent">
             <p className="whitespace-pre-line">{panel.written.text}</p>
@@ -184,6 +216,7 @@ function Desk({ proposal: first, me, letter, texts, fault, asked, talk: cameTalk
             names={{ old: names.old.column, now: names.now.column }}
             below={notes}
             acts={talk.atValue}
+            onLoad={onLoad}
           />
           <Panes
             pairs={pairs}

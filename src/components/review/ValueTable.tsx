@@ -39,6 +39,7 @@ interface RowsProps {
   acts: (row: ValueRow) => ReactNode;
   /** Clamp load of the torque whose rows end with this one. */
   loadUnder: (i: number) => ClampChange | undefined;
+  onLoad: (torque: string) => ReactNode;
 }
 
 const RowHead = ({ row, span, acts }: { row: ValueRow; span?: number } & Pick<RowsProps, 'acts'>) => (
@@ -60,7 +61,7 @@ function Below({ children, span }: { children: ReactNode; span: number }) {
 }
 
 /** Values of a new sheet: what stands there, with nothing to set it against. */
-const FreshRows = ({ rows, below, acts, loadUnder }: Omit<RowsProps, 'names'>) =>
+const FreshRows = ({ rows, below, acts, loadUnder, onLoad }: Omit<RowsProps, 'names'>) =>
   rows.map((row, i) => {
     const load = loadUnder(i);
     const text = beyondName(row);
@@ -70,14 +71,18 @@ const FreshRows = ({ rows, below, acts, loadUnder }: Omit<RowsProps, 'names'>) =
           <RowHead row={row} span={text ? 1 : 2} acts={acts} />
           {text && <td className={row.prose ? 'value-prose' : 'value-number'}>{text}</td>}
         </tr>
-        {load && <ClampRow load={load} columns={2} fresh />}
+        {load && (
+          <ClampRow load={load} columns={2} fresh>
+            {onLoad(load.key)}
+          </ClampRow>
+        )}
         <Below span={2}>{below(row.path)}</Below>
       </Fragment>
     );
   });
 
 /** Old and new of each value. What a cell holds stands in one block, so that a phone can set its name beside it. */
-const ChangeRows = ({ rows, names, below, acts, loadUnder }: RowsProps) =>
+const ChangeRows = ({ rows, names, below, acts, loadUnder, onLoad }: RowsProps) =>
   rows.map((row, i) => {
     const load = loadUnder(i);
     const cell = row.prose ? 'value-prose' : 'value-number';
@@ -107,7 +112,11 @@ const ChangeRows = ({ rows, names, below, acts, loadUnder }: RowsProps) =>
             <div className={why ? undefined : 'value-none'}>{why ?? 'No'}</div>
           </td>
         </tr>
-        {load && <ClampRow load={load} columns={5} fresh={false} />}
+        {load && (
+          <ClampRow load={load} columns={5} fresh={false}>
+            {onLoad(load.key)}
+          </ClampRow>
+        )}
         <Below span={5}>{below(row.path)}</Below>
       </Fragment>
     );
@@ -124,7 +133,7 @@ const loadsOf = (rows: readonly ValueRow[], clamp: readonly ClampChange[]) => (i
 
 /**
  * Values that differ, those that hands act on first and apart from the rest.
- * `below` stands under a value's name: remarks on it.
+ * `below` stands under a value's name: remarks on it. `onLoad` stands with the clamp load of a torque, by its key.
  */
 export function ValueTable({
   rows,
@@ -133,6 +142,7 @@ export function ValueTable({
   names,
   below = () => null,
   acts = () => null,
+  onLoad = () => null,
 }: {
   rows: readonly ValueRow[];
   /** Clamp load then and now of the torques among them. */
@@ -144,6 +154,7 @@ export function ValueTable({
   below?: (path: string) => ReactNode;
   /** What can be done with a value, under its name. */
   acts?: (row: ValueRow) => ReactNode;
+  onLoad?: (torque: string) => ReactNode;
 }) {
   const groups = [
     { title: fresh ? 'What it tells the bench' : 'What changes at the bench', rows: rows.filter(isAtTheBench) },
@@ -169,9 +180,16 @@ export function ValueTable({
             </thead>
             <tbody>
               {fresh ? (
-                <FreshRows rows={shown} below={below} acts={acts} loadUnder={loadsOf(shown, clamp)} />
+                <FreshRows rows={shown} below={below} acts={acts} loadUnder={loadsOf(shown, clamp)} onLoad={onLoad} />
               ) : (
-                <ChangeRows rows={shown} names={names} below={below} acts={acts} loadUnder={loadsOf(shown, clamp)} />
+                <ChangeRows
+                  rows={shown}
+                  names={names}
+                  below={below}
+                  acts={acts}
+                  loadUnder={loadsOf(shown, clamp)}
+                  onLoad={onLoad}
+                />
               )}
             </tbody>
           </table>

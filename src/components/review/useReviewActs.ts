@@ -8,11 +8,14 @@ export interface Wanted {
   act: ReviewAct;
   reason?: string;
   anchor?: string | null;
+  /** Key of the torque whose clamp check is overridden. */
+  torque?: string;
 }
 
 /** Why an act did not go through. */
 export interface Trouble {
   act: ReviewAct;
+  torque?: string | undefined;
   status: number;
   /** What is wrong with the reason, for beside its field. */
   field: string | null;
@@ -63,11 +66,13 @@ export function useReviewActs(first: Proposal) {
   // Pressed twice before the page has drawn its answer to the first press is pressed once.
   const running = useRef(false);
   const { mutate, isPending, variables } = useMutation({
-    mutationFn: ({ act, reason, anchor, key }: Wanted & { key: string }) =>
-      ask<Proposal>('POST', `${path}/${act}`, {
+    mutationFn: ({ act, reason, anchor, torque, key }: Wanted & { key: string }) =>
+      ask<Proposal>('POST', `${path}/${torque === undefined ? act : 'overrides'}`, {
         version: judged,
         key,
-        ...(reason === undefined ? {} : { body: { reason, anchor: anchor ?? null } }),
+        ...(reason === undefined
+          ? {}
+          : { body: torque === undefined ? { reason, anchor: anchor ?? null } : { torque, reason } }),
       }),
     onMutate: () => setTrouble(null),
     onSuccess: (result, { act }) => {
@@ -75,8 +80,8 @@ export function useReviewActs(first: Proposal) {
       setJudged(result.version);
       setDone(act);
     },
-    onError: (error, { act }) => {
-      setTrouble(troubleOf(act, error));
+    onError: (error, { act, torque }) => {
+      setTrouble({ ...troubleOf(act, error), torque });
       void client.invalidateQueries({ queryKey: [path] });
     },
     onSettled: () => {

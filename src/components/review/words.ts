@@ -2,13 +2,14 @@ import type { Proposal, Remark, TrailEntry } from '@/domain/api/schemas/proposal
 import { dayOf } from '@/components/ui/day';
 
 /** What a reviewer does, each with the words of its button and of what was done. */
-export type ReviewAct = 'agree' | 'publish' | 'return' | 'decline';
+export type ReviewAct = 'agree' | 'publish' | 'return' | 'decline' | 'override';
 
 export const ACT_WORDS: Record<ReviewAct, { verb: string; doing: string }> = {
   agree: { verb: 'Agree', doing: 'Agreeing' },
   publish: { verb: 'Publish', doing: 'Publishing' },
   return: { verb: 'Return', doing: 'Returning' },
   decline: { verb: 'Decline', doing: 'Declining' },
+  override: { verb: 'Override', doing: 'Overriding' },
 };
 
 /** What may just have been done when the page is shown: an act of review, or the author's own sending-in. */
@@ -24,6 +25,8 @@ export function doneWords(act: Done, proposal: Proposal, me: string): string | n
       return agreed.some((a) => a.person.id === me && a.stands)
         ? `Agreed, ${agreements} of ${agreementsNeeded}.`
         : null;
+    case 'override':
+      return proposal.failing.some(({ override }) => override?.person.id === me) ? 'Clamp check overridden.' : null;
     case 'publish':
       return publishedLetter ? `Published as ${publishedLetter}.` : null;
     case 'return':
@@ -65,6 +68,10 @@ export function needed({ agreementsNeeded, book }: Pick<Proposal, 'agreementsNee
   return `${many} ${who} must agree.`;
 }
 
+/** Whether agreements are what publishing wants first, the reader's own counted. */
+export const wantsAgreement = ({ whyNot }: Pick<Proposal, 'whyNot'>): boolean =>
+  /^[^.]*\bmust agree\b/.test(whyNot['publish'] ?? '');
+
 /** Open questions stand beside the button, each with the way to it, so the sentence on them is not said twice. */
 const OPEN_QUESTIONS = / ?(A question on|\d+ questions are still open:) .* resolved first\.$/s;
 
@@ -72,10 +79,12 @@ const OPEN_QUESTIONS = / ?(A question on|\d+ questions are still open:) .* resol
  * Why it cannot be published yet but for open questions, to somebody whose own agreement is already counted on, or still
  * to come. Empty where questions are all that is in the way.
  */
-export function whyNotYet({ whyNot, may }: Pick<Proposal, 'whyNot' | 'may'>): string {
-  const why = (whyNot['publish'] ?? '').replace(OPEN_QUESTIONS, '');
-  // Publishing is an agreement too, so what is missing is missing besides the reader's own.
-  return /^[^.]*must agree/.test(why) && may.agree ? `Besides you, ${why.charAt(0).toLowerCase()}${why.slice(1)}` : why;
+export function whyNotYet(proposal: Pick<Proposal, 'whyNot' | 'may'>): string {
+  const why = (proposal.whyNot['publish'] ?? '').replace(OPEN_QUESTIONS, '');
+  // Publishing is an agreement too, so what is missing of agreements is missing besides the reader's own.
+  return wantsAgreement(proposal) && proposal.may.agree
+    ? `Besides you, ${why.charAt(0).toLowerCase()}${why.slice(1)}`
+    : why;
 }
 
 const names = (people: readonly string[]) =>
@@ -115,6 +124,10 @@ export const REMARK_WORDS: Record<Remark['kind'], string> = { returned: 'returne
 export const trailWords = (trail: readonly TrailEntry[], letter: string | null) =>
   trail.map((entry, i) => {
     const again = entry.what === 'proposed' && trail.slice(0, i).some(({ what }) => what === 'proposed');
-    const what = again ? 'improved and proposed again' : entry.what;
+    const what = again
+      ? 'improved and proposed again'
+      : entry.what === 'overrode'
+        ? 'overrode the clamp check'
+        : entry.what;
     return { ...entry, words: what === 'published' && letter ? `published as ${letter}` : what };
   });

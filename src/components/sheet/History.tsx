@@ -1,4 +1,5 @@
 import type { RevisionSummary } from '@/domain/api/schemas/book';
+import { overText } from '@/domain/review/overrides';
 import { Button } from '@/components/ui/Button';
 import { dayOf } from '@/components/ui/day';
 import { Cell, Row, Table } from '@/components/ui/Table';
@@ -59,6 +60,12 @@ export function History({
             <Cell label="Reviewed by">{revision.reviewers.map(({ name }) => name).join(', ') || 'Nobody named'}</Cell>
             <Cell label="Reason" className="max-w-prose">
               <span className="font-serif text-[0.9375rem] italic">{revision.reason || 'None given'}</span>
+              {revision.overrides.map(({ torque, share, person, reason, at }) => (
+                <p key={torque} className="mt-2 border-l-[8px] border-ink pl-2.5 leading-snug">
+                  <b className="font-semibold">{torque}</b>, clamped to {overText(share)} of proof load. {person.name}{' '}
+                  overrode the clamp check on {dayOf(at)}: {reason}
+                </p>
+              ))}
             </Cell>
             {several && (
               <>

@@ -7,6 +7,25 @@ import { needsOf } from './useNeeds';
 
 const Title = ({ children }: { children: string }) => <h2 className="mb-1.5 text-[1rem]">{children}</h2>;
 
+/** Told while it is written, so that the reason, or another figure, is ready before an editor asks for it. */
+function PastProof({ clamp }: Pick<Comparison, 'clamp'>) {
+  const over = clamp.filter(({ verdict }) => verdict === 'over');
+  if (over.length === 0) return null;
+  return (
+    <div className="heavy-edge mb-2.5 px-3.5 py-2.5">
+      <p className="font-semibold">An editor who overrides the clamp check with a written reason</p>
+      <ul className="mt-1 flex flex-col gap-1">
+        {over.map(({ key, name, to }) => (
+          <li key={key}>
+            {name}: {to}
+          </li>
+        ))}
+      </ul>
+      <p className="mt-1">Until then it cannot be published. Say in your reason what the figure goes by.</p>
+    </div>
+  );
+}
+
 function WillNeed({ changes, base }: { changes: Comparison | undefined; base: string | null }) {
   if (!changes) return <p className="text-ink-2">Shown once every value can be read.</p>;
   if (changes.identical) return <p>Nothing differs from revision {base} yet.</p>;
@@ -69,7 +88,7 @@ function Check({ checked }: { checked: Checked }) {
       </p>
       {notices.length > 0 && (
         <div className="mt-2">
-          <p className="mb-1.5 font-semibold">Worth a look, and no obstacle</p>
+          <p className="mb-1.5 font-semibold">Worth a look, and no obstacle to proposing it</p>
           <Problems problems={notices} />
         </div>
       )}
@@ -86,6 +105,7 @@ export function Checks({ checked, changes }: { checked: Checked; changes: Compar
     <div className="flex flex-col gap-6 leading-snug" tabIndex={0} role="region" aria-label="Checks">
       <section>
         <Title>This will need</Title>
+        {changes && <PastProof clamp={changes.clamp} />}
         <WillNeed changes={changes} base={baseLetter} />
       </section>
       <section aria-busy={checked.checking}>

@@ -1,6 +1,7 @@
 import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
 import { TextArea } from '@/components/ui/TextArea';
+import { overrideMissing } from '@/domain/review/overrides';
 import type { Proposal } from '@/domain/api/schemas/proposals';
 
 /** What the last press of a button came to; null on a fresh page. */
@@ -25,6 +26,7 @@ export function PlainWriting({
   outcome: Outcome;
   kept: boolean;
 }) {
+  const past = overrideMissing(proposal.failing.filter(({ override }) => override === null));
   const refused = outcome && 'refusal' in outcome ? outcome : null;
   return (
     <form method="post" className="leaf framed-sections">
@@ -39,6 +41,11 @@ export function PlainWriting({
         </p>
       </div>
       {kept && !refused && <p className="px-5 py-3 font-semibold sm:px-9">Draft kept.</p>}
+      {past && (
+        <Notice title="Past proof load" className="border-b-0 border-r-0 px-5 py-4 sm:px-9">
+          <p>{past}</p>
+        </Notice>
+      )}
       {refused && (
         <Notice title="Not accepted" className="border-b-0 border-r-0 px-5 py-4 sm:px-9">
           <p>{refused.refusal.detail}</p>

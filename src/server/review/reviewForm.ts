@@ -1,11 +1,12 @@
-import { GiveReason } from '@/domain/api/schemas/proposals';
+import { GiveOverride, GiveReason } from '@/domain/api/schemas/proposals';
 import type { Actor } from '@/domain/people/may';
 import { malformed, Refusal } from '../refusal';
 import { agree } from './agree';
 import { decline, returnToAuthor } from './giveBack';
+import { overrideClamp } from './override';
 import { publish } from './publish';
 
-export const REVIEW_ACTS = ['agree', 'publish', 'return', 'decline'] as const;
+export const REVIEW_ACTS = ['agree', 'publish', 'return', 'decline', 'override'] as const;
 export type ReviewAct = (typeof REVIEW_ACTS)[number];
 export const isReviewAct = (name: unknown): name is ReviewAct => REVIEW_ACTS.some((act) => act === name);
 
@@ -20,10 +21,13 @@ export type ReviewOutcome =
       field: string | null;
       typed: string;
       anchor: string | null;
+      /** Key of the torque whose clamp check was to be overridden. */
+      torque: string;
     };
 
 /**
- * Acts on a form of the review page: `act`, `version`, and `reason` and `anchor` where it gives the text back. Refusals
+ * Acts on a form of the review page: `act`, `version`, `reason` and `anchor` where it gives the text back, and `reason` and
+ * `torque` where it overrides a clamp check. Refusals
  * that the reviewer can do something about come back as words; others are thrown.
  */
 export async function actOnReviewForm(actor: Actor, id: string, form: FormData): Promise<ReviewOutcome> {
@@ -43,11 +47,16 @@ export async function actOnReviewForm(actor: Actor, id: string, form: FormData):
     field,
     typed,
     anchor,
+    torque: text('torque'),
   });
   try {
     if (act === 'agree') await agree(actor, id, version);
     else if (act === 'publish') await publish(actor, id, version);
-    else {
+    else if (act === 'override') {
+      const given = GiveOverride.safeParse({ reason: typed, torque: text('torque') });
+      if (!given.success) return refused(422, 'Nothing was sent yet.', given.error.issues[0]?.message ?? null);
+      await overrideClamp(actor, id, given.data, version);
+    } else {
       const given = GiveReason.safeParse({ reason: typed, anchor });
       if (!given.success) return refused(422, 'Nothing was sent yet.', given.error.issues[0]?.message ?? null);
       await (act === 'return' ? returnToAuthor : decline)(actor, id, given.data, version);

@@ -54,3 +54,15 @@ it('agrees to the version that was on the screen, and to no other', async () => 
   expect(await press(version)).toMatchObject({ kind: 'done', act: 'agree' });
   expect((await readProposal(actor, id)).agreed).toHaveLength(1);
 });
+
+it('overrides a clamp check by the form, and gives the typed reason back where it is refused', async () => {
+  const { id, version } = await waiting(who('north.senior'), 'P-0142', { nm: 20 });
+  const { actor } = await signedIn(who('common.editor'));
+  const press = (fields: Record<string, string>) =>
+    actOnReviewForm(actor, id, form({ act: 'override', version: String(version), torque: 'cover-bolt', ...fields }));
+  expect(await press({ reason: ' ' })).toMatchObject({ kind: 'refused', status: 422, torque: 'cover-bolt' });
+  expect(await press({ reason: 'Why', version: String(version - 1) })).toMatchObject({ status: 409, typed: 'Why' });
+  expect((await readProposal(actor, id)).failing).toMatchObject([{ override: null }]);
+  expect(await press({ reason: 'Stretch measured' })).toMatchObject({ kind: 'done', act: 'override' });
+  expect((await readProposal(actor, id)).failing).toMatchObject([{ override: { reason: 'Stretch measured' } }]);
+});

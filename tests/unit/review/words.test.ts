@@ -9,6 +9,7 @@ import {
   whyNotYet,
 } from '@/components/review/words';
 import { openQuestionWords } from '@/domain/review/openQuestions';
+import { overrideMissing } from '@/domain/review/overrides';
 import { AUTHOR, EDITOR, happened, proposal, SECOND } from '../../factories/proposal';
 
 const ME = EDITOR.id;
@@ -20,6 +21,12 @@ describe('what was done', () => {
     expect(doneWords('agree', proposal({ agreements: 1, agreed: [stands(EDITOR)] }), ME)).toBe('Agreed, 1 of 2.');
     expect(doneWords('publish', proposal({ state: 'published', publishedLetter: 'D' }), ME)).toBe('Published as D.');
     expect(doneWords('return', proposal({ state: 'returned' }), ME)).toBe('Returned to Wren Castellan.');
+    const override = { person: EDITOR, reason: 'Stretch measured', at: '2026-11-29T09:00:00.000Z' };
+    const failing = { key: 'head-bolt', name: 'Head bolt', share: 1.2 };
+    expect(doneWords('override', proposal({ failing: [{ ...failing, override }] }), ME)).toBe(
+      'Clamp check overridden.',
+    );
+    expect(doneWords('override', proposal({ failing: [{ ...failing, override: null }] }), ME)).toBeNull();
     expect(doneWords('decline', proposal({ state: 'declined' }), ME)).toBe('Declined.');
   });
 
@@ -88,6 +95,15 @@ describe('who must agree', () => {
       expect(whyNotYet({ may, whyNot: { publish: questions } })).toBe('');
       expect(whyNotYet({ may: { ...may, agree: false }, whyNot: { publish: `${why} ${questions}` } })).toBe(why);
     }
+  });
+
+  it('never says that a failed clamp check is overridden by somebody besides the reader', () => {
+    const { may } = proposal();
+    const fails = overrideMissing([{ name: 'Head bolt', share: 1.2 }]) ?? '';
+    expect(whyNotYet({ may, whyNot: { publish: fails } })).toBe(fails);
+    expect(whyNotYet({ may, whyNot: { publish: `One more editor must agree. ${fails}` } })).toBe(
+      `Besides you, one more editor must agree. ${fails}`,
+    );
   });
 });
 
