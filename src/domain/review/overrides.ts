@@ -1,6 +1,5 @@
 import { shareText } from '../procedure/clamp';
 import type { FailingTorque } from '../revision/failingTorques';
-import type { ProposalFacts } from './rules';
 
 /**
  * An editor's written reason why a torque past proof load may be published all the same. It is to one exact text and one
@@ -15,7 +14,13 @@ export interface Override {
   reason: string;
 }
 
-type Judged = Pick<ProposalFacts, 'authorId' | 'hash' | 'editorIds' | 'overrides'>;
+/** What of the facts of a proposal is asked. */
+interface Judged {
+  authorId: string;
+  hash: string;
+  editorIds: readonly string[];
+  overrides: readonly Override[];
+}
 
 /**
  * The override of a torque that stands: given to this text, with a reason, by somebody other than the author who still
@@ -32,7 +37,7 @@ export const standingOverride = ({ authorId, hash, editorIds, overrides }: Judge
   ) ?? null;
 
 /** The torques whose failed clamp check nobody has overridden yet. */
-export const openTorques = (facts: Judged & Pick<ProposalFacts, 'failing'>): FailingTorque[] =>
+export const openTorques = (facts: Judged & { failing: readonly FailingTorque[] }): FailingTorque[] =>
   facts.failing.filter(({ key }) => standingOverride(facts, key) === null);
 
 /** "123 %"; never "100 %", which would read as if it held. */
