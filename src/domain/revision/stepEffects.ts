@@ -16,12 +16,14 @@ const holdsOf = (step: Step | null) => (step ? actedOn(step.body).holds : []);
 const allHolds = (procedure: Procedure) => procedure.steps.flatMap(holdsOf);
 
 function holdEffects(from: Step | null, to: Step | null, before: Procedure, after: Procedure): Effect[] {
+  if (from?.body === to?.body) return [];
   const [old, now] = [holdsOf(from), holdsOf(to)];
   const [gone, come] = [lost(old, now), lost(now, old)];
   // As many for as many are the same hold points in other words.
   const dropped = gone.slice(come.length);
   const changed = Math.min(gone.length, come.length);
-  const nowhere = lost(allHolds(before), allHolds(after));
+  // Every step of both texts is read for it, so only where it is asked.
+  const nowhere = dropped.length > 0 ? lost(allHolds(before), allHolds(after)) : [];
   const title = (to ?? from)?.title ?? '';
   return [
     ...dropped.map((hold) =>
