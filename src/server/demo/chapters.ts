@@ -134,7 +134,7 @@ export const CHAPTERS: readonly Chapter[] = [
       by: 'editor2@halden.example',
       anchor: 'step:rear-corner',
       question:
-        'Only the two rear bolts, or once round all ten? If a washer sets at the back, I would expect it at the front too. What did your five show?',
+        'Only the two rear bolts, or once round all eleven? If a washer sets at the back, I would expect it at the front too. What did your five show?',
     },
   },
   {
