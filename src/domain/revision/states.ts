@@ -33,7 +33,7 @@ const WANTS: Record<Move, string> = {
   return: 'Only a proposal that waits for review can be returned.',
   decline: 'Only a proposal that waits for review can be declined.',
   agree: 'Only a proposal that waits for review can be agreed to.',
-  override: 'Only of a proposal that waits for review can the clamp check be overridden.',
+  override: 'The clamp check is overridden only while a proposal waits for review.',
   publish: 'Only a proposal that waits for review can be published.',
   supersede: 'Only a published revision can be superseded.',
 };

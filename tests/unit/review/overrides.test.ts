@@ -138,7 +138,7 @@ describe('to override', () => {
       act(),
       editor('ines'),
       { state: 'returned' },
-      'conflict: This proposal has gone back to its author. Only of a proposal that waits for review can the clamp check be overridden.',
+      'conflict: This proposal has gone back to its author. The clamp check is overridden only while a proposal waits for review.',
     ],
     [
       'the current base',

@@ -9,6 +9,7 @@ const WAYS: [RevisionState, Move, RevisionState][] = [
   ['proposed', 'return', 'returned'],
   ['proposed', 'decline', 'declined'],
   ['proposed', 'agree', 'proposed'],
+  ['proposed', 'override', 'proposed'],
   ['proposed', 'publish', 'published'],
   ['returned', 'edit', 'returned'],
   ['returned', 'submit', 'proposed'],
