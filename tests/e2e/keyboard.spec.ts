@@ -118,7 +118,11 @@ test('whoever switches single-key shortcuts off presses keys in peace, on every 
     await alive(page);
     const hints = await hint.count();
     await page.keyboard.press('n');
-    const stepped = await page.locator('h3[data-line]:focus').count();
+    const line = page.locator('h3[data-line]:focus');
+    const stepped = await line.waitFor({ timeout: 2000 }).then(
+      () => 1,
+      () => 0,
+    );
     await page.keyboard.press('/');
     const found = [await find.evaluate((field) => field === document.activeElement)];
     for (const path of ['/procedures/P-0142', '/']) {

@@ -24,7 +24,7 @@ const change = (source: string) => source.replace(/nm: (\d+)/, (_, nm: string) =
 test('a question and a suggested value, from asking to the published sheet', async ({ as }) => {
   test.setTimeout(150_000);
   const author = await as('senior', { allow: [/status of 409/] });
-  const { id } = await propose(author, 'P-0163', change, 'Measured on four engines.');
+  const { id } = await propose(author, 'P-0192', change, 'Measured on four engines.');
   const editor = await as('editor', { allow: [/status of (409|422)/] });
   await editor.goto(`/proposals/${id}`);
   await alive(editor);
@@ -112,7 +112,7 @@ test('a question and a suggested value, from asking to the published sheet', asy
 
 test('without a script a question can be read, asked and answered', async ({ as }) => {
   const author = await as('senior', { javaScriptEnabled: false });
-  const { id } = await propose(author, 'P-0163', change, 'Measured on six engines.');
+  const { id } = await propose(author, 'P-0192', change, 'Measured on six engines.');
   const editor = await as('editor', { javaScriptEnabled: false, allow: [/status of 422/] });
   await editor.goto(`/proposals/${id}?start=question&at=#start`);
   await editor.getByRole('button', { name: 'Ask' }).click();
