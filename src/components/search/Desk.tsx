@@ -69,8 +69,14 @@ export function Desk(props: DeskProps) {
     location.assign(`/procedures/${first.number}`);
   };
 
+  /** Into the list. Where its answer is still on the way, the first of that answer, not of the last one. */
+  const toFirst = (): void => {
+    links()[0]?.focus();
+    if (late) void settle().then(() => requestAnimationFrame(() => links()[0]?.focus()));
+  };
+
   const onFieldKey = (event: KeyboardEvent): void => {
-    if (event.key === 'ArrowDown') links()[0]?.focus();
+    if (event.key === 'ArrowDown') toFirst();
     else if (event.key === 'Escape') put('');
     else if (event.key === 'Enter' && !event.nativeEvent.isComposing) void openFirst();
     else return;
