@@ -1,4 +1,5 @@
 import type { Actor } from '@/domain/people/may';
+import { textOf } from '../http/form';
 import { Refusal } from '../refusal';
 import type { SignedIn } from './checkSignIn';
 import { changePassword, saveProfile, signOutEverywhere } from './profile';
@@ -23,7 +24,7 @@ const REPEAT = 'Write the same new password twice.';
 
 /** Acts on one of the forms of the profile page; its `section` says which. Other refusals than of a field are thrown. */
 export async function actOnProfileForm(actor: Actor, form: FormData): Promise<ProfileOutcome> {
-  const text = (name: string) => String(form.get(name) ?? '');
+  const text = (name: string) => textOf(form, name);
   const section = text('section');
   if (section === 'sessions') {
     await signOutEverywhere(actor);

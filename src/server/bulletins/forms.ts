@@ -2,6 +2,7 @@ import type { Bulletin } from '@/domain/api/schemas/bulletins';
 import type { WithdrawalAct } from '@/domain/bulletins/withdrawal';
 import type { Actor } from '@/domain/people/may';
 import { returnPath } from '../accounts/returnPath';
+import { textOf } from '../http/form';
 import { malformed, Refusal } from '../refusal';
 import { readAndSign } from './sign';
 import { bringBack, withdraw } from './withdraw';
@@ -17,7 +18,7 @@ export async function actOnWithdrawalForm(
   number: string,
   form: FormData,
 ): Promise<WithdrawalOutcome> {
-  const typed = String(form.get('reason') ?? '');
+  const typed = textOf(form, 'reason');
   if (typed.length > 2000)
     return { kind: 'refused', status: 422, typed, error: 'The reason must be 2000 characters or fewer.' };
   try {
@@ -32,8 +33,7 @@ export async function actOnWithdrawalForm(
 
 /** Signs the bulletin that a form names; answers it, and where to go on. Refuses 400 a form without one, 404 an unseen one. */
 export async function actOnReadForm(actor: Actor, form: FormData): Promise<{ signed: Bulletin; back: string }> {
-  const id = form.get('bulletin');
-  const back = form.get('back');
-  if (typeof id !== 'string') throw malformed('The form came without its bulletin. Go back and send it again.');
-  return { signed: await readAndSign(actor, id), back: returnPath(typeof back === 'string' ? back : '/bulletins') };
+  if (!form.has('bulletin')) throw malformed('The form came without its bulletin. Go back and send it again.');
+  const back = form.has('back') ? textOf(form, 'back') : '/bulletins';
+  return { signed: await readAndSign(actor, textOf(form, 'bulletin')), back: returnPath(back) };
 }

@@ -1,12 +1,8 @@
 import type { Actor } from '@/domain/people/may';
+import { textOf } from '../http/form';
 import { Refusal } from '../refusal';
 import { answerFlag, takeUpFlag, withdrawFlag } from './act';
 import { raiseFlag, type Doubt } from './raise';
-
-const textOf = (form: FormData, name: string): string => {
-  const value = form.get(name);
-  return typeof value === 'string' ? value : '';
-};
 
 export type Raised =
   | { done: true }

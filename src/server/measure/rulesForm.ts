@@ -1,6 +1,7 @@
 import type { Actor } from '@/domain/people/may';
 import { ruleText } from '@/domain/worksheets/ruleWords';
 import { rulesOf } from '@/domain/worksheets/shopRules';
+import { textsOf } from '../http/form';
 import { malformed, Refusal } from '../refusal';
 import { setRules, type RuleChange } from './setRules';
 
@@ -15,19 +16,16 @@ export type RulesOutcome =
  * Refusals that can be mended in the form come back as words; others are thrown.
  */
 export async function actOnRulesForm(actor: Actor, shopId: string, form: FormData): Promise<RulesOutcome> {
-  const text = (name: string) => {
-    const value = form.get(name);
-    return typeof value === 'string' ? value : null;
-  };
-  const units = text('units');
+  const texts = textsOf(form);
+  const { units } = texts;
   if (units !== 'metric' && units !== 'inch')
     throw malformed('The form came without some of its fields. Go back and send it again.');
   const typed: Record<string, string> = {};
   const changes = rulesOf().flatMap((rule): RuleChange[] => {
     const { name } = rule;
-    const value = text(`value.${name}`);
-    const was = text(`was.${name}`);
-    if (value === null || was === null) return [];
+    const value = texts[`value.${name}`];
+    const was = texts[`was.${name}`];
+    if (value === undefined || was === undefined) return [];
     typed[name] = value;
     const set = was === '' || !Number.isFinite(Number(was)) ? null : Number(was);
     return value.trim() === ruleText(rule, set, units) ? [] : [{ name, value, was: set, path: name }];

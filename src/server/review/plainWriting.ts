@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { Actor } from '@/domain/people/may';
+import { textsOf } from '../http/form';
 import { asRefusal, malformed, type RefusalError } from '../refusal';
 import { saveProposal } from './saveProposal';
 import { submit } from './submit';
@@ -29,11 +30,9 @@ const THROWN = [401, 403, 404, 500];
  * its fields.
  */
 export async function writePlainly(actor: Actor, id: string, form: FormData): Promise<PlainOutcome> {
-  const read = PlainForm.safeParse(Object.fromEntries(form));
+  const read = PlainForm.safeParse(textsOf(form));
   if (!read.success) throw malformed('The form came without some of its fields. Go back and send it again.');
-  const { reason, version, act } = read.data;
-  // A browser sends every line end of a form as CRLF.
-  const source = read.data.source.replace(/\r\n/g, '\n');
+  const { source, reason, version, act } = read.data;
   try {
     const saved = await saveProposal(actor, id, version, { source, reason });
     if (act === 'keep') return { done: 'kept' };

@@ -1,5 +1,6 @@
 import { GiveOverride, GiveReason } from '@/domain/api/schemas/proposals';
 import type { Actor } from '@/domain/people/may';
+import { textOf } from '../http/form';
 import { malformed, Refusal } from '../refusal';
 import { agree } from './agree';
 import { decline, returnToAuthor } from './giveBack';
@@ -31,7 +32,7 @@ export type ReviewOutcome =
  * that the reviewer can do something about come back as words; others are thrown.
  */
 export async function actOnReviewForm(actor: Actor, id: string, form: FormData): Promise<ReviewOutcome> {
-  const text = (name: string) => String(form.get(name) ?? '');
+  const text = (name: string) => textOf(form, name);
   const act = text('act');
   // Nobody agrees by a form that lost its fields, nor to another text than the one that was on the screen.
   if (!isReviewAct(act) || !/^\d{1,9}$/.test(text('version')))

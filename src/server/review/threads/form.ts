@@ -1,5 +1,6 @@
 import { StartThread, WriteMessage } from '@/domain/api/schemas/threads';
 import type { Actor } from '@/domain/people/may';
+import { textOf } from '../../http/form';
 import { asRefusal, malformed } from '../../refusal';
 import { acceptSuggestion } from './accept';
 import { startThread } from './start';
@@ -18,7 +19,7 @@ export type ThreadOutcome =
       typed: Record<'kind' | 'at' | 'text' | 'quote' | 'replacement' | 'value' | 'field', string>;
     };
 
-export const isThreadForm = (form: FormData) => String(form.get('act') ?? '').startsWith('thread-');
+export const isThreadForm = (form: FormData) => textOf(form, 'act').startsWith('thread-');
 
 async function act(actor: Actor, proposalId: string, of: (name: string) => string): Promise<string> {
   const version = Number(of('version'));
@@ -57,8 +58,7 @@ const issueOf = (error: unknown) =>
 
 /** Does what a form of a thread asks for. Refusals that can be put right come back as words; others are thrown. */
 export async function actOnThreadForm(actor: Actor, proposalId: string, form: FormData): Promise<ThreadOutcome> {
-  // A browser sends every line end of a form as CRLF.
-  const of = (name: string) => String(form.get(name) ?? '').replace(/\r\n/g, '\n');
+  const of = (name: string) => textOf(form, name);
   if (!/^\d{1,9}$/.test(of('version')))
     throw malformed('The form came without some of its fields. Go back and send it again.');
   try {
