@@ -59,10 +59,38 @@ export const notFound = (detail = 'There is nothing here, or you may not see it.
 export const stale = (detail: string, extra?: Record<string, unknown>) =>
   new Refusal(409, 'stale', 'Changed in the meantime', detail, { extra });
 
+/** The rules do not allow it as things stand. `extra` can carry what stands now. */
+export const conflict = (detail: string, extra?: Record<string, unknown>) =>
+  new Refusal(409, 'conflict', 'Not as things stand', detail, { extra });
+
 export const tooLarge = (detail: string) => new Refusal(413, 'too-large', 'Too large', detail);
 
 export const invalid = (detail: string, errors: RefusalError[] = []) =>
   new Refusal(422, 'invalid', 'Not accepted', detail, { errors });
+
+/** How a rule of the domain says no. */
+export interface SaidNo {
+  kind: 'hidden' | 'forbidden' | 'invalid' | 'conflict';
+  why: string;
+}
+
+/**
+ * What a rule refused, as the caller is told it.
+ *
+ * @param field of the call that an `invalid` is about
+ */
+export function refusalOf({ kind, why }: SaidNo, field = ''): Refusal {
+  switch (kind) {
+    case 'hidden':
+      return notFound();
+    case 'forbidden':
+      return forbidden(why);
+    case 'invalid':
+      return invalid(why, [{ path: field, message: why }]);
+    case 'conflict':
+      return conflict(why);
+  }
+}
 
 export const preconditionRequired = (detail: string) =>
   new Refusal(428, 'precondition-required', 'Say which version you read', detail);

@@ -2,7 +2,7 @@ import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
 import { Select } from '@/components/ui/Select';
 import { TextArea } from '@/components/ui/TextArea';
-import { FLAG_KINDS } from '@/domain/flags/flags';
+import { FLAG_KINDS, LONGEST_FLAG } from '@/domain/flags/flags';
 
 export interface FlagTyped {
   step: string;
@@ -49,7 +49,7 @@ export function FlagForm({
           hint="What did you see, and what did you expect? Whoever answers was not standing there."
           rows={5}
           required
-          maxLength={2000}
+          maxLength={LONGEST_FLAG}
           error={errors['text']}
           defaultValue={typed.text}
         />

@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import { Button } from '@/components/ui/Button';
 import { TextArea } from '@/components/ui/TextArea';
 import { dayOf } from '@/components/ui/day';
-import { FLAG_KINDS, type FlagKind, type FlagState } from '@/domain/flags/flags';
+import { FLAG_KINDS, LONGEST_FLAG, type FlagKind, type FlagState } from '@/domain/flags/flags';
 
 /** A flag as the page is given it. */
 export interface ShownFlag {
@@ -93,7 +93,7 @@ export const FlagsToAnswer = ({ flags, refused }: { flags: readonly ShownFlag[];
             label="Answer"
             hint="Where the sheet is right: say how to read it. Where it is not: change it."
             rows={3}
-            maxLength={2000}
+            maxLength={LONGEST_FLAG}
             defaultValue={refused?.id === flag.id ? refused.text : ''}
             error={refused?.id === flag.id ? refused.error : undefined}
           />

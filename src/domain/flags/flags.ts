@@ -10,6 +10,9 @@ export type FlagKind = keyof typeof FLAG_KINDS;
 export const isFlagKind = (text: unknown): text is FlagKind =>
   typeof text === 'string' && Object.hasOwn(FLAG_KINDS, text);
 
+/** Characters of a flag and of its answer, at most. */
+export const LONGEST_FLAG = 2000;
+
 /**
  * open → answered (nothing had to change, or the sheet says it already), or open → taken up (a draft that changes the sheet was
  * started); or withdrawn by whoever raised it. Each end is final: a new doubt is a new flag.

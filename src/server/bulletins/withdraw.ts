@@ -9,7 +9,7 @@ import { readable } from '../book/locate';
 import { readSheet } from '../book/sheet';
 import { now } from '../clock';
 import { app } from '../context';
-import { forbidden, invalid, notFound, Refusal } from '../refusal';
+import { refusalOf } from '../refusal';
 import { writeBulletin } from './write';
 
 interface Standing extends Pick<BookRow, 'bookKind' | 'shopId'> {
@@ -44,13 +44,9 @@ async function act(what: WithdrawalAct, actor: Actor, number: string, given: str
     const { id, revisionId, shopId, withdrawnAt, last, ...row } = await standingOf(actor, number);
     const facts = { number, book: bookOf({ ...row, shopId }), published: revisionId !== null, last };
     const decided = decideWithdrawal(what, actor, { ...facts, withdrawn: withdrawnAt !== null }, given);
-    if (!decided.ok && decided.kind === 'hidden') throw notFound();
-    if (!decided.ok && decided.kind === 'forbidden') throw forbidden(decided.why);
-    if (!decided.ok && decided.kind === 'invalid')
-      throw invalid(decided.why, [{ path: 'reason', message: decided.why }]);
-    if (!decided.ok || revisionId === null)
-      throw new Refusal(409, 'conflict', 'Not as things stand', decided.ok ? '' : decided.why);
-    if (decided.done) return;
+    if (!decided.ok) throw refusalOf(decided, 'reason');
+    // Without a published revision the rules have said no; this is for the compiler.
+    if (decided.done || revisionId === null) return;
     const { reason } = decided;
     const { kind, act: name } = DONE[what];
     const at = now();

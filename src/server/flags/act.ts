@@ -1,12 +1,11 @@
-import { decideFlag, FLAG_KINDS, type FlagAct } from '@/domain/flags/flags';
+import { decideFlag, FLAG_KINDS, LONGEST_FLAG, type FlagAct } from '@/domain/flags/flags';
 import type { Actor } from '@/domain/people/may';
 import { appendAudit } from '../audit/append';
 import { now } from '../clock';
 import { app } from '../context';
-import { forbidden, invalid, notFound, stale } from '../refusal';
+import { invalid, notFound, refusalOf, stale } from '../refusal';
 import { startProposal } from '../review/startProposal';
 import { loadFlag, type FlagView, type LoadedFlag } from './rows';
-import { LONGEST_FLAG } from './raise';
 
 /** Asks the rules; refuses 404, 403, 422 or 409 with their words. */
 async function allowed(
@@ -18,10 +17,8 @@ async function allowed(
   if (!flag) throw notFound();
   const decision = decideFlag(what, actor, flag.facts);
   if (decision.ok) return { flag, state: decision.state };
-  if (decision.kind === 'hidden') throw notFound();
-  if (decision.kind === 'forbidden') throw forbidden(decision.why);
-  if (decision.kind === 'invalid') throw invalid(decision.why, [{ path: 'text', message: decision.why }]);
-  throw stale(decision.why, { state: flag.view.state });
+  if (decision.kind === 'conflict') throw stale(decision.why, { state: flag.view.state });
+  throw refusalOf(decision, 'text');
 }
 
 async function end(

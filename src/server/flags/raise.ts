@@ -1,4 +1,4 @@
-import { FLAG_KINDS, isFlagKind } from '@/domain/flags/flags';
+import { FLAG_KINDS, isFlagKind, LONGEST_FLAG } from '@/domain/flags/flags';
 import { may, type Actor } from '@/domain/people/may';
 import { appendAudit } from '../audit/append';
 import { bookOf, type BookRow } from '../book/columns';
@@ -6,8 +6,6 @@ import { readable } from '../book/locate';
 import { app } from '../context';
 import { forbidden, invalid, type RefusalError } from '../refusal';
 import { loadFlag, type FlagView } from './rows';
-
-export const LONGEST_FLAG = 2000;
 
 export interface Doubt {
   /** Id of the step; null for the whole sheet. */

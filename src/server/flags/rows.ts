@@ -1,6 +1,5 @@
 import type { PersonRef } from '@/domain/api/schemas/common';
 import { isFlagKind, type FlagFacts, type FlagKind, type FlagState } from '@/domain/flags/flags';
-import type { RenderedProcedure } from '@/domain/procedure/types';
 import { BOOK_COLUMNS, bookOf, bookRef, personColumn, personRef, type BookRow } from '../book/columns';
 import { app } from '../context';
 
@@ -45,8 +44,10 @@ interface Row extends BookRow {
   answer: string;
   proposal: string | null;
   seenAt: string | null;
-  flagged: string;
-  present: string;
+  /** Its title when it was flagged, and its place, from 0, and title in the current text. */
+  flaggedTitle: string | null;
+  presentTitle: string | null;
+  presentAt: number | null;
 }
 
 export interface LoadedFlag {
@@ -56,10 +57,11 @@ export interface LoadedFlag {
 
 const person = (column: string) => `(SELECT ${personColumn('q')} FROM people q WHERE q.id = ${column})`;
 
-/** Only the steps of a rendering, as JSON: ids and titles in order. */
-const steps = (hash: string) =>
-  `(SELECT json_group_array(json_object('id', json_extract(value, '$.id'), 'title', json_extract(value, '$.title')))
-     FROM renderings g, json_each(g.json, '$.steps') WHERE g.hash = ${hash})`;
+/** Something of the flagged step in a rendering; null where that text has no such step. */
+const ofStep = (what: string, hash: string) =>
+  `(SELECT ${what} FROM renderings g, json_each(g.json, '$.steps') s
+     WHERE g.hash = ${hash} AND json_extract(s.value, '$.id') = f.stepId)`;
+const TITLE = `json_extract(s.value, '$.title')`;
 
 /**
  * Flags by a condition on `f`, newest first.
@@ -73,7 +75,8 @@ export async function loadFlags(where: string, replacements: Record<string, unkn
        (SELECT json_group_array(m.shopId) FROM memberships m WHERE m.personId = f.personId AND m.shopId IS NOT NULL) AS raiserShops,
        f.createdAt AS raisedAt, f.state, ${person('f.endedById')} AS endedBy, f.endedAt, f.answer,
        (SELECT json_object('id', d.id, 'state', d.state, 'letter', d.letter) FROM revisions d WHERE d.id = f.proposalId) AS proposal,
-       f.seenAt, ${steps('r.hash')} AS flagged, ${steps('c.hash')} AS present
+       f.seenAt, ${ofStep(TITLE, 'r.hash')} AS flaggedTitle, ${ofStep(TITLE, 'c.hash')} AS presentTitle,
+       ${ofStep('s.key', 'c.hash')} AS presentAt
      FROM flags f JOIN procedures p ON p.id = f.procedureId JOIN revisions r ON r.id = f.revisionId
        JOIN revisions c ON c.id = p.currentRevisionId
      WHERE ${where} ORDER BY f.createdAt DESC, f.id DESC LIMIT 200`,
@@ -82,15 +85,14 @@ export async function loadFlags(where: string, replacements: Record<string, unkn
   return rows.map(read);
 }
 
-type StepName = Pick<RenderedProcedure['steps'][number], 'id' | 'title'>;
-
-function stepOf({ stepId, flagged, present }: Row): FlagView['step'] {
-  if (stepId === null) return null;
-  const now = JSON.parse(present) as StepName[];
-  const at = now.findIndex(({ id }) => id === stepId);
-  const then = (JSON.parse(flagged) as StepName[]).find(({ id }) => id === stepId);
-  return { id: stepId, title: then?.title ?? now[at]?.title ?? stepId, number: at < 0 ? null : at + 1 };
-}
+const stepOf = ({ stepId, flaggedTitle, presentTitle, presentAt }: Row): FlagView['step'] =>
+  stepId === null
+    ? null
+    : {
+        id: stepId,
+        title: flaggedTitle ?? presentTitle ?? stepId,
+        number: presentAt === null ? null : presentAt + 1,
+      };
 
 function read(row: Row): LoadedFlag {
   const { title } = JSON.parse(row.head) as { title: string };

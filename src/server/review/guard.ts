@@ -1,7 +1,7 @@
 import { may, type Actor } from '@/domain/people/may';
 import { decide, type Decision, type ProposalAct } from '@/domain/review/decide';
 import { isStale, staleWords, subjectOf, type ProposalFacts } from '@/domain/review/rules';
-import { forbidden, invalid, notFound, Refusal, stale } from '../refusal';
+import { conflict, notFound, refusalOf, stale } from '../refusal';
 import { loadProposal, type Loaded } from './proposals';
 
 type Accepted = Extract<Decision, { ok: true }>;
@@ -60,13 +60,10 @@ export function guard(
   facts: ProposalFacts = proposal.facts,
 ): Accepted {
   const decision = decide(what, actor, facts);
-  if (!decision.ok && decision.kind === 'hidden') throw notFound();
-  if (!decision.ok && decision.kind === 'forbidden') throw forbidden(decision.why);
+  if (!decision.ok && (decision.kind === 'hidden' || decision.kind === 'forbidden')) throw refusalOf(decision);
   expectVersion(what.act, proposal, version);
   if (decision.ok) return decision;
-  if (decision.kind === 'invalid') {
-    throw invalid(decision.why, [{ path: missingField(what, facts), message: decision.why }]);
-  }
+  if (decision.kind === 'invalid') throw refusalOf(decision, missingField(what, facts));
   if (isStale(facts) && decision.why === staleWords(facts)) throw staleBase(facts, standing(proposal));
-  throw new Refusal(409, 'conflict', 'Not as things stand', decision.why, { extra: standing(proposal) });
+  throw conflict(decision.why, standing(proposal));
 }

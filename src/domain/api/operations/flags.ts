@@ -27,7 +27,15 @@ const Flag = z.object({
   seen: z.boolean().describe('Whether the person who raised it has seen how it ended'),
 });
 
-const ById = z.object({ id: Id });
+/** What acting on one flag takes and answers, whichever the act. */
+const onFlag = {
+  method: 'post',
+  area: 'Book',
+  params: z.object({ id: Id }),
+  status: 200,
+  reply: Flag,
+  refuses: [403, 404, 409],
+} as const;
 
 export const raiseFlag = operation({
   id: 'raiseFlag',
@@ -57,38 +65,23 @@ export const listFlags = operation({
 });
 
 export const answerFlag = operation({
+  ...onFlag,
   id: 'answerFlag',
-  method: 'post',
   path: '/flags/{id}/answer',
-  area: 'Book',
   summary: 'Answer a flag; whoever raised it is told',
-  params: ById,
   body: z.object({ text: z.string() }).strict(),
-  status: 200,
-  reply: Flag,
-  refuses: [403, 404, 409],
 });
 
 export const takeUpFlag = operation({
+  ...onFlag,
   id: 'takeUpFlag',
-  method: 'post',
   path: '/flags/{id}/take-up',
-  area: 'Book',
   summary: 'Start a draft of a change from a flag; `proposal` names it',
-  params: ById,
-  status: 200,
-  reply: Flag,
-  refuses: [403, 404, 409],
 });
 
 export const withdrawFlag = operation({
+  ...onFlag,
   id: 'withdrawFlag',
-  method: 'post',
   path: '/flags/{id}/withdraw',
-  area: 'Book',
   summary: 'Take back a flag of my own',
-  params: ById,
-  status: 200,
-  reply: Flag,
-  refuses: [403, 404, 409],
 });

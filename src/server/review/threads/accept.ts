@@ -6,7 +6,7 @@ import { mayAccept } from '@/domain/review/threads';
 import { parsedText } from '../../book/parsed';
 import { now } from '../../clock';
 import { app } from '../../context';
-import { Refusal } from '../../refusal';
+import { conflict } from '../../refusal';
 import { columnsOf, refuseUnreadable, weigh } from '../draftText';
 import { readProposal } from '../readProposal';
 import { record } from '../record';
@@ -26,7 +26,7 @@ export async function acceptSuggestion(actor: Actor, id: string, version: number
   const parsed = await parsedText(before.source);
   refuseUnreadable(parsed);
   const applied = thread.suggestion && applySuggestion(parsed.procedure, thread.anchor, thread.suggestion);
-  if (!applied?.ok) throw new Refusal(409, 'conflict', 'Not as things stand', applied?.why ?? '');
+  if (!applied?.ok) throw conflict(applied?.why ?? '');
   const text = await weigh(toSource(applied.procedure), before.parentId);
   refuseUnreadable(text.parsed);
   const { db } = await app();

@@ -1,12 +1,9 @@
 import type { ThreadVerdict } from '@/domain/review/threads';
-import { forbidden, notFound, Refusal, stale } from '../../refusal';
+import { refusalOf, stale } from '../../refusal';
 
 /** Refuses what the rules of threads refuse: 404, 403 or 409. */
 export function insist(verdict: ThreadVerdict): void {
-  if (verdict.ok) return;
-  if (verdict.kind === 'hidden') throw notFound();
-  if (verdict.kind === 'forbidden') throw forbidden(verdict.why);
-  throw new Refusal(409, 'conflict', 'Not as things stand', verdict.why);
+  if (!verdict.ok) throw refusalOf(verdict);
 }
 
 /** Refuses 409 where the caller stands on another version than is there. null says nothing and passes. */
