@@ -1,10 +1,9 @@
+import { capital } from '@/domain/wording';
 import type { Proposal } from '@/domain/api/schemas/proposals';
 import { LEVEL_WORDS } from '@/domain/review/desk';
 
 /** How many reasons stand in the head; the rest is found in the comparison below it. */
 const MOST = 5;
-const upper = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
-
 /** How grave the change is and what decided it, a line for each; an ordinary one has nothing to be told. */
 export function Gravity({ severity: { level, because } }: Pick<Proposal, 'severity'>) {
   if (level === 'ordinary') return null;
@@ -24,7 +23,7 @@ export function Gravity({ severity: { level, because } }: Pick<Proposal, 'severi
       </p>
       <ul>
         {named.map((reason) => (
-          <li key={reason}>{upper(reason)}</li>
+          <li key={reason}>{capital(reason)}</li>
         ))}
         {rest > 0 && <li>And {rest} more</li>}
       </ul>

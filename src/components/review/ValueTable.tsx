@@ -1,3 +1,4 @@
+import { capital } from '@/domain/wording';
 import { Fragment, type ReactNode } from 'react';
 import { beyondName, isAtTheBench, type ValueRow } from '@/domain/revision/valueRows';
 import type { Side, Span } from '@/domain/revision/sideText';
@@ -28,9 +29,7 @@ const percentText = (percent: number) => {
 
 const CHANGE_WORDS: Record<ValueRow['kind'], string> = { added: 'New', removed: 'Removed', changed: '' };
 
-const upper = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
-
-const reasonOf = ({ critical }: ValueRow) => (critical ? `${upper(critical.replace(/: [^:]*$/, ''))}.` : null);
+const reasonOf = ({ critical }: ValueRow) => (critical ? `${capital(critical.replace(/: [^:]*$/, ''))}.` : null);
 
 interface RowsProps {
   rows: readonly ValueRow[];

@@ -1,3 +1,4 @@
+import { listed, lowered } from '@/domain/wording';
 import type { Proposal, Remark, TrailEntry } from '@/domain/api/schemas/proposals';
 import { dayOf } from '@/components/ui/day';
 
@@ -82,13 +83,8 @@ const OPEN_QUESTIONS = / ?(A question on|\d+ questions are still open:) .* resol
 export function whyNotYet(proposal: Pick<Proposal, 'whyNot' | 'may'>): string {
   const why = (proposal.whyNot['publish'] ?? '').replace(OPEN_QUESTIONS, '');
   // Publishing is an agreement too, so what is missing of agreements is missing besides the reader's own.
-  return wantsAgreement(proposal) && proposal.may.agree
-    ? `Besides you, ${why.charAt(0).toLowerCase()}${why.slice(1)}`
-    : why;
+  return wantsAgreement(proposal) && proposal.may.agree ? `Besides you, ${lowered(why)}` : why;
 }
-
-const names = (people: readonly string[]) =>
-  people.length < 2 ? people.join('') : `${people.slice(0, -1).join(', ')} and ${people.at(-1) ?? ''}`;
 
 /** Where a proposal stands that is not waiting for review, or that is one's own; null where its buttons say all. */
 export function standingWords(proposal: Proposal, me: string): string | null {
@@ -111,7 +107,7 @@ export function standingWords(proposal: Proposal, me: string): string | null {
       return `Declined${by(last('declined'))}. It stays here as a record.`;
     case 'published':
     case 'superseded': {
-      const agreeing = names(agreed.filter((a) => a.stands).map((a) => (a.person.id === me ? 'you' : a.person.name)));
+      const agreeing = listed(agreed.filter((a) => a.stands).map((a) => (a.person.id === me ? 'you' : a.person.name)));
       const published = last('published');
       return `Published as ${publishedLetter ?? ''}${published ? ` on ${dayOf(published.at)}` : ''}${agreeing ? `, agreed by ${agreeing}` : ''}.${state === 'superseded' ? ' A later revision has taken its place.' : ''}`;
     }

@@ -1,3 +1,4 @@
+import { capital } from '@/domain/wording';
 import type { Frontmatter, Part, Supply } from '@/domain/procedure/schema';
 import { durationText } from '@/domain/procedure/values';
 import { Checkbox } from '@/components/ui/Checkbox';
@@ -7,7 +8,7 @@ import { SignalPanel, worstFirst } from './SignalPanel';
 /** Short facts with commas between them, begun like a sentence; a note is a sentence of its own. */
 function detailOf(facts: (string | undefined)[], note: string | undefined): string {
   const told = [facts.filter(Boolean).join(', '), note].filter(Boolean).join('. ');
-  return told.charAt(0).toUpperCase() + told.slice(1);
+  return capital(told);
 }
 
 const partDetail = (part: Part) => detailOf([part.number, part.action], part.note);

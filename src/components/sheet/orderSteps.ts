@@ -1,3 +1,4 @@
+import { lowered } from '@/domain/wording';
 import type { Round } from './orderPasses';
 
 /**
@@ -42,14 +43,12 @@ export function stepThrough(figure: HTMLElement): void {
     next.textContent = at === 0 ? 'Step through' : at === total ? 'Start again' : 'Next bolt';
     const bolt = `Bolt ${turn} of ${bolts.length}`;
     said.replaceChildren(
-      ...(at === 0 ? [] : [round ? `${bolt}, ${lower(round.name)} ` : bolt, ...(round ? values(round) : [])]),
+      ...(at === 0 ? [] : [round ? `${bolt}, ${lowered(round.name)} ` : bolt, ...(round ? values(round) : [])]),
     );
     if (at === total) said.append('. That was the last.');
   }
   show(0);
 }
-
-const lower = (text: string) => text.charAt(0).toLowerCase() + text.slice(1);
 
 /** The round's value in both unit systems; the page shows the reader's. */
 function values({ text }: Round): Node[] {

@@ -1,3 +1,4 @@
+import { keepUnits } from './keepUnits';
 import { stepThrough } from './orderSteps';
 
 /** A sheet's small comforts: units in place, links to steps, print. Each works as a plain link or form without it. */
@@ -8,13 +9,9 @@ for (const form of document.querySelectorAll<HTMLFormElement>('form[data-units-s
     if (!(pressed instanceof HTMLButtonElement)) return;
     event.preventDefault();
     const units = pressed.value;
-    document.documentElement.dataset.units = units;
+    keepUnits(units);
     for (const button of form.querySelectorAll('button'))
       button.setAttribute('aria-pressed', String(button.value === units));
-    // Kept in the profile too. Where that fails the page still shows them, and the next page asks again.
-    // It outlives the page, for whoever switches and goes on at once.
-    const body = new URLSearchParams({ units });
-    void fetch(form.action, { method: 'POST', body, redirect: 'manual', keepalive: true }).catch(() => {});
   });
 
 for (const link of document.querySelectorAll<HTMLAnchorElement>('a[data-copy-link]'))

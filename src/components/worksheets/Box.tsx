@@ -1,7 +1,7 @@
 import { useId, type ReactNode } from 'react';
 import type { BothUnits } from '@/domain/measure/format';
 import { readBare } from '@/domain/measure/read';
-import type { Column } from '@/domain/worksheets/fields';
+import type { ChoiceField, Column } from '@/domain/worksheets/fields';
 import { boxUnit } from '@/domain/worksheets/readInputs';
 import { ruleWords } from '@/domain/worksheets/ruleWords';
 import { classes } from '@/components/ui/classes';
@@ -34,8 +34,22 @@ export function Understood({ both, text }: { both: BothUnits | undefined; text: 
   );
 }
 
+/** What a field asks for, and whether it must be known. */
+export const Asked = ({ label, optional = false }: { label: string; optional?: boolean }) => (
+  <>
+    {label}
+    {optional && <span className="font-normal text-ink-2">, if known</span>}
+  </>
+);
+
 const unitAfter = (column: Column, units: Units) =>
   column.type === 'quantity' ? boxUnit(column.unit, units) : column.type === 'number' ? column.after : undefined;
+
+/** What can be chosen, and what is where nobody has chosen yet. */
+const optionsOf = ({ optional, options }: ChoiceField) =>
+  optional ? [{ value: '', label: 'Not said' }, ...options] : options;
+const chosen = ({ optional, usual, options }: ChoiceField, text: string) =>
+  text || (optional ? '' : (usual ?? options[0]?.value ?? ''));
 
 type Hinted = Pick<BoxProps, 'units' | 'rule' | 'ruleHref'>;
 
@@ -71,7 +85,6 @@ export function Box({
 }: BoxProps & { column: Column }) {
   const id = useId();
   if (column.type === 'choice') {
-    const options = column.optional ? [{ value: '', label: 'Not said' }, ...column.options] : column.options;
     return (
       <Select
         id={id}
@@ -80,8 +93,8 @@ export function Box({
         hint={column.hint}
         hintBelow
         error={problem}
-        options={options}
-        value={text || (column.optional ? '' : (column.usual ?? column.options[0]?.value ?? ''))}
+        options={optionsOf(column)}
+        value={chosen(column, text)}
         onChange={(event) => onType(path, event.target.value)}
       />
     );
@@ -93,12 +106,7 @@ export function Box({
       <Field
         id={id}
         name={path}
-        label={
-          <>
-            {column.label}
-            {column.optional && <span className="font-normal text-ink-2">, if known</span>}
-          </>
-        }
+        label={<Asked {...column} />}
         hint={hintOf(column, { units, rule, ruleHref })}
         hintBelow
         error={problem}
@@ -140,11 +148,10 @@ export function Cell({
       <select
         {...shared}
         className="field-box"
-        value={text || (column.optional ? '' : (column.usual ?? column.options[0]?.value ?? ''))}
+        value={chosen(column, text)}
         onChange={(event) => onType(path, event.target.value)}
       >
-        {column.optional && <option value="">Not said</option>}
-        {column.options.map((option) => (
+        {optionsOf(column).map((option) => (
           <option key={option.value} value={option.value}>
             {option.label}
           </option>

@@ -1,5 +1,6 @@
 import { useEffect, useState } from 'react';
 import { Button } from '@/components/ui/Button';
+import { keepUnits } from '@/components/sheet/keepUnits';
 import { Segmented } from '@/components/ui/Segmented';
 import type { ShopRules } from '@/domain/worksheets/readInputs';
 import { worksheetNamed } from '@/domain/worksheets/registry';
@@ -19,13 +20,6 @@ export interface CalculatorProps {
 }
 
 const NOTHING: TypedIn = {};
-
-/** Keeps the reader's units in the profile, as the switch of a sheet does; a failure only means that the next page asks again. */
-function remember(units: Units): void {
-  // It outlives the page, for whoever switches and goes on at once.
-  const body = new URLSearchParams({ units });
-  void fetch('/profile/units', { method: 'POST', body, redirect: 'manual', keepalive: true }).catch(() => {});
-}
 
 /** A worksheet as a page of the handbook. Without a script it is a form that the server answers with the same page. */
 export function Calculator({ name, ...props }: CalculatorProps) {
@@ -91,7 +85,7 @@ function Named({
             ]}
             onChoose={(units) => {
               now.switchTo(units as Units);
-              remember(units as Units);
+              keepUnits(units);
             }}
           />
         </div>

@@ -1,21 +1,36 @@
+import { lowered } from '@/domain/wording';
 import { Button } from '@/components/ui/Button';
 import type { BandField, Field, RowsField } from '@/domain/worksheets/fields';
 import { boxUnit } from '@/domain/worksheets/readInputs';
-import { Box, Cell, type BoxProps } from './Box';
+import { Asked, Box, Cell, type BoxProps } from './Box';
 
 export type BoxAt = (path: string) => BoxProps;
 
-function Band({ name, field, boxAt }: { name: string; field: BandField; boxAt: BoxAt }) {
+interface InputProps {
+  name: string;
+  /** Rows that are shown, where the field has any. */
+  count: number;
+  boxAt: BoxAt;
+  onCount: (name: string, count: number) => void;
+}
+
+/** The words over boxes that belong together. */
+const Legend = ({ label, optional, hint }: { label: string; optional?: boolean; hint: string | undefined }) => (
+  <>
+    <legend className="font-medium">
+      <Asked label={label} optional={optional} />
+    </legend>
+    {hint && <p className="text-small text-ink-2">{hint}</p>}
+  </>
+);
+
+function Band({ name, field, boxAt }: Pick<InputProps, 'name' | 'boxAt'> & { field: BandField }) {
   const end = (which: 'min' | 'max', label: string) => (
     <Box {...boxAt(`${name}.${which}`)} column={{ type: 'quantity', unit: field.unit, label, optional: false }} />
   );
   return (
     <fieldset className="min-w-0">
-      <legend className="font-medium">
-        {field.label}
-        {field.optional && <span className="font-normal text-ink-2">, if known</span>}
-      </legend>
-      {field.hint && <p className="text-small text-ink-2">{field.hint}</p>}
+      <Legend label={field.label} optional={field.optional} hint={field.hint} />
       <div className="mt-1 grid grid-cols-2 gap-3">
         {end('min', 'Least')}
         {end('max', 'Most')}
@@ -25,27 +40,14 @@ function Band({ name, field, boxAt }: { name: string; field: BandField; boxAt: B
 }
 
 /** A table of readings. On a phone each row stands by itself, its boxes one under another. */
-function Rows({
-  name,
-  field,
-  count,
-  boxAt,
-  onCount,
-}: {
-  name: string;
-  field: RowsField;
-  count: number;
-  boxAt: BoxAt;
-  onCount: (name: string, count: number) => void;
-}) {
+function Rows({ name, field, count, boxAt, onCount }: InputProps & { field: RowsField }) {
   const columns = Object.entries(field.columns);
   const { units } = boxAt(name);
   const heading = ([, column]: (typeof columns)[number]) =>
     column.type === 'quantity' ? `${column.label}, ${boxUnit(column.unit, units)}` : column.label;
   return (
     <fieldset className="min-w-0 sm:col-span-2">
-      <legend className="font-medium">{field.label}</legend>
-      {field.hint && <p className="text-small text-ink-2">{field.hint}</p>}
+      <Legend label={field.label} hint={field.hint} />
       <table className="mt-1 w-full border-collapse text-left max-sm:block">
         <thead className="max-sm:sr-only">
           <tr>
@@ -92,7 +94,7 @@ function Rows({
         </tbody>
       </table>
       <div className="mt-2 flex flex-wrap gap-2 print:hidden" data-needs-script="">
-        {count < field.most && <Button onClick={() => onCount(name, count + 1)}>Add {lower(field.item)}</Button>}
+        {count < field.most && <Button onClick={() => onCount(name, count + 1)}>Add {lowered(field.item)}</Button>}
         {count > Math.max(1, field.least) && (
           <Button kind="quiet" onClick={() => onCount(name, count - 1)}>
             Take the last away
@@ -103,23 +105,9 @@ function Rows({
   );
 }
 
-const lower = (item: string) => item.charAt(0).toLowerCase() + item.slice(1);
-
 /** A field of any type, by its description. */
-export function Input({
-  name,
-  field,
-  count,
-  boxAt,
-  onCount,
-}: {
-  name: string;
-  field: Field;
-  count: number;
-  boxAt: BoxAt;
-  onCount: (name: string, count: number) => void;
-}) {
-  if (field.type === 'band') return <Band name={name} field={field} boxAt={boxAt} />;
-  if (field.type === 'rows') return <Rows name={name} field={field} count={count} boxAt={boxAt} onCount={onCount} />;
-  return <Box {...boxAt(name)} column={field} />;
+export function Input({ field, ...given }: InputProps & { field: Field }) {
+  if (field.type === 'band') return <Band {...given} field={field} />;
+  if (field.type === 'rows') return <Rows {...given} field={field} />;
+  return <Box {...given.boxAt(given.name)} column={field} />;
 }

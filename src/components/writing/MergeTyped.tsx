@@ -1,3 +1,4 @@
+import { capital } from '@/domain/wording';
 import { Field } from '@/components/ui/Field';
 import { Select } from '@/components/ui/Select';
 import { TextArea } from '@/components/ui/TextArea';
@@ -101,7 +102,7 @@ export function MergeTyped({
         <Box
           key={name}
           name={`typed.${path}.${name}`}
-          label={words.charAt(0).toUpperCase() + words.slice(1)}
+          label={capital(words)}
           values={sides.map((side) => side[name])}
           value={(value as Fields)[name]}
           onChange={(next) => {

@@ -1,5 +1,6 @@
+import { listed } from '@/domain/wording';
 import { boxesOf, type Entry } from '@/domain/writing/draft';
-import { keysIn, listed, stepsUsing } from '@/domain/writing/uses';
+import { keysIn, stepsUsing } from '@/domain/writing/uses';
 import { BoxCell, Cell } from './Cell';
 import { COLUMNS } from './columns';
 import { useDesk } from './desk';

@@ -1,3 +1,4 @@
+import { capital } from '@/domain/wording';
 import { ENTRY_FIELDS } from '@/domain/procedure/fields';
 import type { Entry, ListName } from '@/domain/writing/draft';
 import { entryName } from '@/domain/writing/draft';
@@ -33,7 +34,7 @@ export function useEntries(list: ListName) {
     if (!entry) return;
     change(entries.toSpliced(at, 1));
     const one = ONE_OF[list];
-    offerUndo(`${one.charAt(0).toUpperCase()}${one.slice(1)} deleted: ${entryName(list, entry)}.`, () =>
+    offerUndo(`${capital(one)} deleted: ${entryName(list, entry)}.`, () =>
       change(getValues(list).toSpliced(at, 0, entry)),
     );
   };

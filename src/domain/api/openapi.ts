@@ -1,3 +1,4 @@
+import { capital } from '../wording';
 import { z } from 'zod';
 import { zodToJsonSchema } from 'zod-to-json-schema';
 import type { Operation } from './operation';
@@ -28,7 +29,6 @@ const REFUSALS: Record<number, string> = {
   503: 'The storage is busy or full; nothing was half-written',
 };
 
-const capital = (word: string) => word.charAt(0).toUpperCase() + word.slice(1);
 const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
 
 /** Named schemas: those that `schemas/` exports, by name, then what single calls take and answer beyond them. */

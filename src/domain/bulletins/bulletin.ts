@@ -1,3 +1,5 @@
+import { capital } from '../wording';
+
 /** A notice that reaches every reader of a book and stays on the sheet until each has read and signed it. */
 
 export const BULLETIN_KINDS = ['withdrawn', 'brought back', 'critical change'] as const;
@@ -5,7 +7,7 @@ export type BulletinKind = (typeof BULLETIN_KINDS)[number];
 
 const sentence = (words: string): string => {
   const text = words.trim();
-  return `${text.charAt(0).toUpperCase()}${text.slice(1)}${/[.!?…]$/.test(text) ? '' : '.'}`;
+  return `${capital(text)}${/[.!?…]$/.test(text) ? '' : '.'}`;
 };
 
 /**

@@ -1,3 +1,4 @@
+import { lowered } from '../wording';
 import { numberProblem, work, type Bounds, type FieldProblem, type Worked } from './worked';
 
 /** A limit in the base unit of what it limits (m, Pa, m³/s, per cent). One side may be open, never both. */
@@ -27,11 +28,11 @@ export function bandProblems(field: string, called: string, band: Band, bounds: 
   if (min === undefined && max === undefined)
     return [{ field, message: `${called} must have a least or a greatest value.` }];
   const problems = [
-    ...(min === undefined ? [] : numberProblem(`${field}.min`, `The least of ${lower(called)}`, min, bounds)),
-    ...(max === undefined ? [] : numberProblem(`${field}.max`, `The greatest of ${lower(called)}`, max, bounds)),
+    ...(min === undefined ? [] : numberProblem(`${field}.min`, `The least of ${lowered(called)}`, min, bounds)),
+    ...(max === undefined ? [] : numberProblem(`${field}.max`, `The greatest of ${lowered(called)}`, max, bounds)),
   ];
   if (problems.length === 0 && min !== undefined && max !== undefined && min > max)
-    return [{ field: `${field}.max`, message: `The greatest of ${lower(called)} cannot be less than its least.` }];
+    return [{ field: `${field}.max`, message: `The greatest of ${lowered(called)} cannot be less than its least.` }];
   return problems;
 }
 
@@ -42,8 +43,6 @@ export const optionalBandProblems = (
   band: Band | undefined,
   bounds: Bounds,
 ): FieldProblem[] => (band === undefined ? [] : bandProblems(field, called, band, bounds));
-
-const lower = (called: string) => called.charAt(0).toLowerCase() + called.slice(1);
 
 /**
  * Where a value that was already checked lies; for use inside a computation that checks its input. A value that is

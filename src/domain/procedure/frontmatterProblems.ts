@@ -1,3 +1,4 @@
+import { capital } from '../wording';
 import type { ZodErrorMap, ZodIssue } from 'zod';
 import { ENTRY_FIELDS, ENTRY_WORDS, HEAD_FIELDS, isListName } from './fields';
 import { nearest } from './nearest';
@@ -73,8 +74,6 @@ function fieldWords(path: readonly (string | number)[]): string {
   const words = (HEAD_FIELDS as Record<string, string>)[String(list)] ?? String(list ?? '');
   return typeof index === 'number' ? `${words}, number ${index + 1},` : words;
 }
-
-const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
 function sentence(path: readonly (string | number)[], message: string, value: unknown): string {
   const field = fieldWords(path);

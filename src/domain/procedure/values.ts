@@ -1,3 +1,4 @@
+import { listed, nameInside } from '../wording';
 import { inBothUnits, withUnit, type BothUnits } from '../measure/format';
 import { isUnit } from '../measure/convert';
 import { STAGES, type Stage } from './components';
@@ -31,10 +32,6 @@ export function torqueText(torque: Torque, { pass }: { pass?: number | undefined
     const [nm = '', tolerance] = numbers;
     return `${withUnit(tolerance === undefined ? nm : `${nm} ±${tolerance}`, unit)}${turns}`;
   });
-}
-
-function listed(items: string[]): string {
-  return items.length < 2 ? items.join('') : `${items.slice(0, -1).join(', ')} and ${items.at(-1) ?? ''}`;
 }
 
 /** "0.02 to 0.06 mm", "0.05 mm or less", "2.5 (2.4 to 2.6) mm"; the finding for a limit without numbers. */
@@ -121,5 +118,5 @@ export function partText(part: Part, parts: readonly Part[], startsSentence: boo
   const noun = headNoun(part.name);
   const isPlain = parts.filter((p) => headNoun(p.name).toLowerCase() === noun.toLowerCase()).length === 1;
   const name = isPlain ? noun : part.name;
-  return startsSentence || !/^\p{Lu}\p{Ll}/u.test(name) ? name : name.charAt(0).toLowerCase() + name.slice(1);
+  return startsSentence ? name : nameInside(name);
 }

@@ -1,3 +1,4 @@
+import { listed } from '../wording';
 import { shareText } from '../procedure/clamp';
 import type { FailingTorque } from '../revision/failingTorques';
 
@@ -43,12 +44,9 @@ export const openTorques = (facts: Judged & { failing: readonly FailingTorque[] 
 /** "123 %"; never "100 %", which would read as if it held. */
 export const overText = (share: number): string => (share < 1.005 ? 'just over 100 %' : shareText(share));
 
-const list = (items: readonly string[]) =>
-  items.length < 2 ? items.join('') : `${items.slice(0, -1).join(', ')} and ${items.at(-1) ?? ''}`;
-
 /** "Cover bolt to 123 % of proof load" for each, as one list. */
 export const failingWords = (failing: readonly Pick<FailingTorque, 'name' | 'share'>[]): string =>
-  `${list(failing.map(({ name, share }) => `${name} to ${overText(share)}`))} of proof load`;
+  `${listed(failing.map(({ name, share }) => `${name} to ${overText(share)}`))} of proof load`;
 
 /** What must still be overridden before it can be published, in words; null where nothing must. */
 export function overrideMissing(open: readonly Pick<FailingTorque, 'name' | 'share'>[]): string | null {

@@ -1,3 +1,4 @@
+import { capital } from '../wording';
 import { ENTRY_FIELDS, HEAD_FIELDS } from '../procedure/fields';
 import type { Step } from '../procedure/types';
 import { type Entry, fieldsOf, type ListName, nameOf } from './fields';
@@ -19,9 +20,7 @@ export function fieldText(list: ListName | 'head', name: string, owner: object |
 export function fieldLabel(list: ListName | 'head', name: string, owner: object): string {
   const words = list === 'head' ? (HEAD_FIELDS as Record<string, string>)[name] : FIELDS[list][name];
   const plain = words ?? name;
-  return list === 'head'
-    ? plain.charAt(0).toUpperCase() + plain.slice(1)
-    : `${entryLabel(list, owner as Entry)}: ${plain}`;
+  return list === 'head' ? capital(plain) : `${entryLabel(list, owner as Entry)}: ${plain}`;
 }
 
 export const entryLabel = (list: ListName, entry: Entry): string => nameOf(list, entry as never);

@@ -1,3 +1,4 @@
+import { LONGEST_VALUE } from './valueRows';
 import type { ListName } from './fields';
 import type { Procedure, Step } from '../procedure/types';
 import { compareValues } from './compareValues';
@@ -22,9 +23,6 @@ const ENTRIES: Record<ListName, string> = {
   figures: 'drawing',
   sources: 'source',
 };
-
-/** Longer texts are sentences, which are named and not told. */
-const LONGEST_VALUE = 30;
 
 /** "10 to 12 N·m": a unit that two single numbers share is said once. */
 function span(from: string, to: string): string {

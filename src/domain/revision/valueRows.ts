@@ -11,7 +11,7 @@ export interface ValueRow extends ValueChange {
 }
 
 /** Longer texts are sentences: their words are compared. */
-const LONGEST_VALUE = 30;
+export const LONGEST_VALUE = 30;
 
 /**
  * @param engines names of the engines by their keys; one that is not known keeps its key

@@ -1,3 +1,4 @@
+import { nameInside } from '../wording';
 import { convert, quantityOf, type Unit, type UnitQuantity } from '../measure/convert';
 import { formatMeasure, inBothUnits, withUnit } from '../measure/format';
 import type { SearchDocument, SearchLimit, SearchTorque } from './documents';
@@ -181,16 +182,13 @@ export function nameOf(document: SearchDocument, match: ValueMatch): string {
 }
 
 const atStep = (step: number | null): string => (step === null ? '' : `, step ${step}`);
-const lower = (name: string): string =>
-  /^\p{Lu}\p{Ll}/u.test(name) ? name.charAt(0).toLowerCase() + name.slice(1) : name;
-
 function sayTorque(torque: SearchTorque, match: ValueMatch, units: UnitSystem): { value: string; rest: string } {
   const shown = match.value ?? torque.nm;
   const value = match.unit === '°' ? `${shown}°` : formatMeasure(shown, 'N·m')[units];
   const pass = torque.passes.indexOf(shown);
   const way = match.unit === '°' ? 'turn of ' : pass >= 0 && shown !== torque.nm ? `pass ${pass + 1} of ` : '';
   const places = torque.count === 1 ? '1 place' : `${torque.count} places`;
-  return { value, rest: `${way}${lower(torque.name)}, ${torque.thread}, ${places}${atStep(torque.step)}` };
+  return { value, rest: `${way}${nameInside(torque.name)}, ${torque.thread}, ${places}${atStep(torque.step)}` };
 }
 
 function sayLimit(limit: SearchLimit, value: number | null, units: UnitSystem): { value: string; rest: string } {
@@ -201,7 +199,7 @@ function sayLimit(limit: SearchLimit, value: number | null, units: UnitSystem): 
     return withUnit(texts.numbers.join(' to '), texts.unit);
   };
   const span = min !== null && max !== null ? say(min, max) : '';
-  const rest = lower(limit.name);
+  const rest = nameInside(limit.name);
   if (nominal !== null && (value === nominal || !span))
     return { value: say(nominal), rest: span ? `${rest}, ${span}` : rest };
   if (span) return { value: span, rest };
@@ -228,5 +226,5 @@ export function sayValue(
   const timer = document.timers[match.at];
   const minutes = timer?.minutes ?? 0;
   const value = minutes >= 60 && minutes % 60 === 0 ? `${minutes / 60} h` : `${minutes} min`;
-  return { value, rest: lower(timer?.name ?? '') + atStep(timer?.step ?? null), step: timer?.step ?? null };
+  return { value, rest: nameInside(timer?.name ?? '') + atStep(timer?.step ?? null), step: timer?.step ?? null };
 }

@@ -1,3 +1,4 @@
+import { nameInside } from '../wording';
 import { convert, fromBase, sameKind, toBase, type Unit } from '../measure/convert';
 import { formatMeasure, formatNumber, inchUnit, withUnit, type BothUnits } from '../measure/format';
 import { sameWithin } from '../measure/band';
@@ -98,13 +99,10 @@ const baseOf = (value: number, unit: Unit): number | undefined => {
   return base.ok ? base.value : undefined;
 };
 
-function readQuantity(
-  field: QuantityField | (BandField & { density?: string }),
-  path: string,
-  called: string,
-  raw: unknown,
-  desk: Desk,
-) {
+/** What of a field decides how a measure in it is read; the end of a band has neither bounds nor a density. */
+type Measured = Pick<QuantityField, 'unit' | 'above' | 'least' | 'most' | 'density'>;
+
+function readQuantity(field: Measured, path: string, called: string, raw: unknown, desk: Desk): number | undefined {
   const say = (message: string) => void desk.problems.push({ field: path, message });
   const typed =
     typeof raw === 'number'
@@ -120,13 +118,9 @@ function readQuantity(
   }
   if (!Number.isFinite(fromBase(base, field.unit))) return say(`${called} is too large.`);
   desk.understood[path] = understood(amount, unit, base, field.unit);
-  if ('above' in field || 'least' in field || 'most' in field) {
-    const { above, least, most } = field as QuantityField;
-    const value = Number(fromBase(base, field.unit).toPrecision(12));
-    const wrong = outside(value, { above, least, most }, (bound) => withUnit(formatNumber(bound), field.unit));
-    if (wrong) return say(`${called} ${wrong}.`);
-  }
-  return base;
+  const value = Number(fromBase(base, field.unit).toPrecision(12));
+  const wrong = outside(value, field, (bound) => withUnit(formatNumber(bound), field.unit));
+  return wrong ? say(`${called} ${wrong}.`) : base;
 }
 
 /** "0.014 in" and "0.356 mm" for what was typed as `.014"`: as it was typed in the one system, converted in the other. */
@@ -148,7 +142,7 @@ const withoutTail = ({ metric, inch }: BothUnits): BothUnits => {
 
 function outside(
   value: number,
-  { above, least, most }: { above?: number | undefined; least?: number | undefined; most?: number | undefined },
+  { above, least, most }: Pick<QuantityField, 'above' | 'least' | 'most'>,
   write: (bound: number) => string,
 ): string | null {
   if (above !== undefined && value <= above)
@@ -202,7 +196,13 @@ function readBand(field: BandField, path: string, called: string, raw: unknown, 
   const end = (value: unknown, which: 'min' | 'max') =>
     isBlank(value)
       ? undefined
-      : readQuantity(field, `${path}.${which}`, `${called}, ${which === 'min' ? 'least' : 'most'}`, value, desk);
+      : readQuantity(
+          { unit: field.unit },
+          `${path}.${which}`,
+          `${called}, ${which === 'min' ? 'least' : 'most'}`,
+          value,
+          desk,
+        );
   const low = end(min, 'min');
   let high = end(max, 'max');
   if (low !== undefined && high !== undefined && low > high) {
@@ -235,12 +235,14 @@ function readRows(field: RowsField, path: string, raw: unknown, desk: Desk): unk
     return Object.fromEntries(
       Object.entries(field.columns).map(([name, column]) => [
         name,
-        readColumn(column, `${path}.${i}.${name}`, `${field.item} ${i + 1}, ${lower(column.label)}`, cells[name], desk),
+        readColumn(
+          column,
+          `${path}.${i}.${name}`,
+          `${field.item} ${i + 1}, ${nameInside(column.label)}`,
+          cells[name],
+          desk,
+        ),
       ]),
     );
   });
 }
-
-/** "Before cleaning" inside a sentence; "VIN" and "K" stay as they are. */
-const lower = (label: string): string =>
-  /^\p{Lu}\p{Ll}/u.test(label) ? label.charAt(0).toLowerCase() + label.slice(1) : label;

@@ -1,3 +1,4 @@
+import { capital } from '../wording';
 import { fieldProblems, sentenceErrors } from '../procedure/frontmatterProblems';
 import { Frontmatter } from '../procedure/schema';
 import { START } from '../procedure/problems';
@@ -12,7 +13,7 @@ export function headProblems(procedure: Procedure): SourceProblem[] {
 /** The sentence without the entry that it stands beside anyway: "Tolerance must be smaller than the torque itself." */
 export function besideField(message: string): string {
   const own = message.replace(/^[A-Z][a-z]+ \d+( \(.*?\))?: /, '');
-  return own.charAt(0).toUpperCase() + own.slice(1);
+  return capital(own);
 }
 
 /** Problems that stand at a field or inside it (`passes.1` in `passes`), as one text; undefined where there are none. */

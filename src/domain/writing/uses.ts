@@ -1,3 +1,4 @@
+import { listed } from '../wording';
 import { limitKeysIn } from '../procedure/bindings';
 import { isListName } from '../procedure/fields';
 import type { Draft, ListName } from './draft';
@@ -25,10 +26,6 @@ export const stepsUsing = (draft: Pick<Draft, 'steps'>, list: ListName, key: str
   draft.steps.flatMap((step, i) =>
     keysIn(step.body, list).includes(key) || (list === 'cautions' && step.cautions.includes(key)) ? [i + 1] : [],
   );
-
-/** "4", "4 and 5", "4, 5 and 9". */
-export const listed = (items: readonly (string | number)[]): string =>
-  items.length < 2 ? items.join('') : `${items.slice(0, -1).join(', ')} and ${items.at(-1) ?? ''}`;
 
 /** Where an entry is used, in words: "step 4", "steps 4 and 5", "the introduction", "2 torques"; empty where nowhere. */
 export function usesInWords(draft: Draft, list: ListName, key: string): string {

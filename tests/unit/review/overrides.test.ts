@@ -3,6 +3,7 @@ import type { Actor } from '@/domain/people/may';
 import { decide, offers, type ProposalAct } from '@/domain/review/decide';
 import { openTorques, overrideMissing, overText } from '@/domain/review/overrides';
 import { canPublish, type ProposalFacts } from '@/domain/review/rules';
+import { factsOf } from '../../factories/facts';
 
 const HEAD = { key: 'head-bolt', name: 'Head bolt', share: 1.234 };
 const ROD = { key: 'rod-bolt', name: 'Rod bolt', share: 1.0004 };
@@ -13,24 +14,8 @@ const by = (personId: string, torque: string, hash = 'text-1', reason = 'Tried o
   reason,
 });
 const agreed = (personId: string) => ({ personId, hash: 'text-1', base: 'C' });
-const facts = (change: Partial<ProposalFacts> = {}): ProposalFacts => ({
-  book: { kind: 'common' },
-  authorId: 'rowan',
-  state: 'proposed',
-  everProposed: true,
-  hash: 'text-1',
-  base: 'C',
-  current: 'C',
-  identical: false,
-  reason: 'They come loose.',
-  criticalReasons: [],
-  agreements: [agreed('ines')],
-  failing: [HEAD],
-  overrides: [],
-  editorIds: ['ines', 'tomas'],
-  standInIds: [],
-  ...change,
-});
+const facts = (change: Partial<ProposalFacts> = {}) =>
+  factsOf({ reason: 'They come loose.', agreements: [agreed('ines')], failing: [HEAD], ...change });
 const editor = (personId: string): Actor => ({ personId, memberships: [{ in: 'common', role: 'editor' }] });
 const act = (torque = 'head-bolt', reason = ' Stretch measured '): ProposalAct => ({ act: 'override', torque, reason });
 

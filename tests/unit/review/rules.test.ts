@@ -2,27 +2,10 @@ import { describe, expect, it } from 'vitest';
 import type { Actor, Membership } from '@/domain/people/may';
 import { decide, offers, type ProposalAct } from '@/domain/review/decide';
 import { canPublish, type ProposalFacts, standing, tally } from '@/domain/review/rules';
+import { factsOf } from '../../factories/facts';
 
 const TORQUE = 'a torque changes: Cover bolt';
 const SHOP = { kind: 'shop', shopId: 'pier' } as const;
-const facts = (change: Partial<ProposalFacts> = {}): ProposalFacts => ({
-  book: { kind: 'common' },
-  authorId: 'rowan',
-  state: 'proposed',
-  everProposed: true,
-  hash: 'text-1',
-  base: 'C',
-  current: 'C',
-  identical: false,
-  reason: 'The covers weep.',
-  criticalReasons: [],
-  agreements: [],
-  failing: [],
-  overrides: [],
-  editorIds: ['ines', 'tomas'],
-  standInIds: [],
-  ...change,
-});
 const by = (personId: string, hash = 'text-1', base: string | null = 'C') => ({ personId, hash, base });
 const editor = (personId: string): Actor => ({ personId, memberships: [{ in: 'common', role: 'editor' }] });
 const pier = (personId: string, ...roles: Extract<Membership, { in: 'shop' }>['role'][]): Actor => ({
@@ -40,7 +23,7 @@ describe('which agreements stand', () => {
       by('rowan'),
       by('formerly an editor'),
     ];
-    expect(standing(facts({ agreements, editorIds: ['ines', 'tomas', 'rowan'] }))).toEqual({
+    expect(standing(factsOf({ agreements, editorIds: ['ines', 'tomas', 'rowan'] }))).toEqual({
       editors: ['ines'],
       standIns: [],
     });
@@ -53,10 +36,12 @@ describe('which agreements stand', () => {
       standInIds: ['sol', 'per'],
       agreements: [by('sol'), by('per'), by('ines')],
     };
-    expect(standing(facts({ ...shop, criticalReasons: [TORQUE] })).standIns).toEqual(['sol', 'per']);
-    expect(standing(facts({ ...shop })).standIns).toEqual([]);
-    expect(standing(facts({ ...shop, criticalReasons: [TORQUE], editorIds: ['ines', 'tomas'] })).standIns).toEqual([]);
-    expect(standing(facts({ ...shop, criticalReasons: [TORQUE], book: { kind: 'common' } })).standIns).toEqual([]);
+    expect(standing(factsOf({ ...shop, criticalReasons: [TORQUE] })).standIns).toEqual(['sol', 'per']);
+    expect(standing(factsOf({ ...shop })).standIns).toEqual([]);
+    expect(standing(factsOf({ ...shop, criticalReasons: [TORQUE], editorIds: ['ines', 'tomas'] })).standIns).toEqual(
+      [],
+    );
+    expect(standing(factsOf({ ...shop, criticalReasons: [TORQUE], book: { kind: 'common' } })).standIns).toEqual([]);
   });
 });
 
@@ -89,21 +74,21 @@ describe('what is missing, in words', () => {
     ],
     ['editor and stand-in', { ...small, agreements: [by('sol'), by('ines')] }, null, '2 of 2'],
   ])('%s', (_name, change, missing, count) => {
-    const got = tally(facts(change));
+    const got = tally(factsOf(change));
     expect(got.missing).toBe(missing);
     expect(`${got.given} of ${got.needed}`).toBe(count);
-    expect(canPublish(facts(change))).toEqual(missing === null ? { ok: true } : { ok: false, why: missing });
+    expect(canPublish(factsOf(change))).toEqual(missing === null ? { ok: true } : { ok: false, why: missing });
   });
 });
 
 describe('decide', () => {
   const refusal = (what: ProposalAct, actor: Actor, change: Partial<ProposalFacts>) => {
-    const answer = decide(what, actor, facts(change));
+    const answer = decide(what, actor, factsOf(change));
     return answer.ok ? 'done' : `${answer.kind}: ${answer.why}`;
   };
 
   it('records the agreement of the editor who publishes', () => {
-    const answer = decide({ act: 'publish' }, editor('ines'), facts());
+    const answer = decide({ act: 'publish' }, editor('ines'), factsOf());
     expect(answer).toEqual({
       ok: true,
       state: 'published',
@@ -111,7 +96,7 @@ describe('decide', () => {
       given: by('ines'),
       overridden: null,
     });
-    const again = decide({ act: 'publish' }, editor('ines'), facts({ agreements: [by('ines')] }));
+    const again = decide({ act: 'publish' }, editor('ines'), factsOf({ agreements: [by('ines')] }));
     expect(again).toMatchObject({ ok: true, given: null, agreements: [by('ines')] });
   });
 
@@ -196,7 +181,7 @@ describe('decide', () => {
 
   it('offers what can be done now', () => {
     const open = (actor: Actor, change: Partial<ProposalFacts>) =>
-      Object.entries(offers(actor, facts(change))).flatMap(([act, answer]) => (answer.ok ? [act] : []));
+      Object.entries(offers(actor, factsOf(change))).flatMap(([act, answer]) => (answer.ok ? [act] : []));
     expect(open(editor('ines'), {})).toEqual(['return', 'decline', 'agree', 'publish']);
     expect(open(editor('ines'), { criticalReasons: [TORQUE] })).toEqual(['return', 'decline', 'agree']);
     expect(open(pier('rowan', 'senior'), {})).toEqual([]);

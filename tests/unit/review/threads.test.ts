@@ -12,6 +12,7 @@ import {
   mayStart,
   type ThreadFacts,
 } from '@/domain/review/threads';
+import { factsOf } from '../../factories/facts';
 
 const inShop = (shopId: string, role: Exclude<Role, 'steward'>): Membership => ({ in: 'shop', shopId, role });
 const who = (personId: string, ...memberships: Membership[]): Actor => ({ personId, memberships });
@@ -22,24 +23,17 @@ const steward = who('steward', { in: 'network', role: 'steward' });
 const editor = who('editor', { in: 'common', role: 'editor' });
 const other = who('other', { in: 'common', role: 'editor' });
 
-const facts = (change: Partial<ProposalFacts> = {}): ProposalFacts => ({
-  book: { kind: 'common' },
-  authorId: 'author',
-  state: 'proposed',
-  everProposed: true,
-  hash: 'h',
-  base: 'A',
-  current: 'A',
-  identical: false,
-  reason: 'why',
-  criticalReasons: [],
-  agreements: [{ personId: 'editor', hash: 'h', base: 'A' }],
-  failing: [],
-  overrides: [],
-  editorIds: ['editor', 'other'],
-  standInIds: [],
-  ...change,
-});
+const facts = (change: Partial<ProposalFacts> = {}) =>
+  factsOf({
+    authorId: 'author',
+    hash: 'h',
+    base: 'A',
+    current: 'A',
+    reason: 'why',
+    agreements: [{ personId: 'editor', hash: 'h', base: 'A' }],
+    editorIds: ['editor', 'other'],
+    ...change,
+  });
 const thread = (change: Partial<ThreadFacts> = {}): ThreadFacts => ({
   kind: 'question',
   personId: 'editor',

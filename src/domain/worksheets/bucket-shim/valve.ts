@@ -1,3 +1,4 @@
+import { lowered } from '../../wording';
 import { judge } from '../../measure/band';
 import type { BothUnits } from '../../measure/format';
 import { said, show } from '../../measure/said';
@@ -33,7 +34,7 @@ export function oneValve(inputs: Inputs, place: number): Worked<{ findings: Find
   const judged = band ? judge(valve.lash, band) : null;
   if (judged && !judged.ok) return inBoxes(judged, { value: `valves.${place}.lash`, band: valve.side });
   const found = judged?.value ?? null;
-  const lash = measured(`lash-${place + 1}`, `Lash, ${lower(who)}`, valve.lash, 'mm', LASH, {
+  const lash = measured(`lash-${place + 1}`, `Lash, ${lowered(who)}`, valve.lash, 'mm', LASH, {
     verdict: verdictOf(found),
   });
   if (found?.at === 'in')
@@ -55,12 +56,10 @@ export function oneValve(inputs: Inputs, place: number): Worked<{ findings: Find
     findings,
     results: [
       lash,
-      ...(chosen.value ? shimResults(place, lower(who), chosen.value, valve, wantedOf(inputs, valve.side)) : []),
+      ...(chosen.value ? shimResults(place, lowered(who), chosen.value, valve, wantedOf(inputs, valve.side)) : []),
     ],
   });
 }
-
-const lower = (who: string) => who.charAt(0).toLowerCase() + who.slice(1);
 
 /** Null where something that the choice needs is not known. */
 function shimFor(inputs: Inputs, place: number, target: number | null): Worked<ShimChosen | null> {

@@ -1,3 +1,4 @@
+import { lowered } from '../../wording';
 import type { Judged } from '../../measure/band';
 import { depthOverBar } from '../../measure/depthOverBar';
 import { said, show } from '../../measure/said';
@@ -49,7 +50,7 @@ export function oneDepth(
     judged,
     findings: [
       ...judgedFinding({ subject: `${called} is`, value: distance, judged, band, unit: 'mm', fineness: FINE }),
-      ...mistakeFinding(inputs, lower(called), { onlyMistakePasses, distance: mistaken.distance }),
+      ...mistakeFinding(inputs, lowered(called), { onlyMistakePasses, distance: mistaken.distance }),
     ],
     results: [
       measured(key, `${called}, ${side} its face`, distance, 'mm', FINE, {
@@ -68,8 +69,6 @@ export function oneDepth(
     ],
   });
 }
-
-const lower = (called: string) => called.charAt(0).toLowerCase() + called.slice(1);
 
 function formulaOf({ bar, from, direction, zero }: Inputs, read: number, distance: number) {
   const off = zero === undefined ? said`` : said` − (${mm(zero)})`;
