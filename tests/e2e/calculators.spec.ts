@@ -101,8 +101,12 @@ test('a box says how it was read, keeps what was typed when it cannot, and stays
   await expect(length).toHaveAttribute('aria-invalid', 'true');
   await expect(length).toHaveValue('ten');
   await length.fill('254');
+  const saved = page.waitForResponse(
+    (answer) => answer.url().endsWith('/profile/units') && answer.request().postData() === 'units=inch',
+  );
   await page.getByRole('button', { name: 'Inch units' }).click();
   await expect(length).toHaveValue('254 mm');
+  await saved;
   await page.goto('/handbook/calculators');
   await expect(page.locator('html')).toHaveAttribute('data-units', 'inch');
   await page.goto('/handbook/calculators/wrench-adapter');
