@@ -1,5 +1,5 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
-import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import { Notice } from '@/components/ui/Notice';
 import type { Proposal } from '@/domain/api/schemas/proposals';
 import type { StepPair } from '@/domain/revision/twoTexts';
@@ -7,18 +7,20 @@ import type { ClampChange } from '@/domain/revision/types';
 import type { ValueRow } from '@/domain/revision/valueRows';
 import { Failing, OverrideNote } from './Failing';
 import { ActPanel, ReasonFields } from './ActPanel';
-import { keepReason, keptReason, type Written } from './keptReason';
+import type { Written } from './keptReason';
 import { OverrideForm } from './OverrideForm';
 import { Panes } from './Panes';
 import { placesOf, standsAt, unplaced } from './places';
 import { PublishWords } from './PublishWords';
 import { RemarkNote } from './Remarks';
+import { ReturnHere } from './ReturnHere';
 import { ReviewHead } from './ReviewHead';
 import { Trail } from './Trail';
+import { useReasonPanel } from './useReasonPanel';
 import { useReviewActs, type Trouble } from './useReviewActs';
 import { useTalk, type TalkProps } from './useTalk';
 import { ValueTable } from './ValueTable';
-import { doneWords, sideNames, type Done, type ReviewAct } from './words';
+import { doneWords, panelWords, sideNames, type Done } from './words';
 
 export interface ReviewProps {
   proposal: Proposal;
@@ -64,37 +66,8 @@ function Desk({
   const { proposal, act, pending, movedOn, ...acts } = useReviewActs(first);
   const done = acts.done ?? came.done;
   const trouble = acts.trouble ?? (acts.done ? null : came.trouble);
-  const [panel, setPanel] = useState<{ written: Written; at: string } | null>(
-    asked && { written: asked, at: asked.anchor },
-  );
-  /** What was typed into a panel that was closed; it stands there again when one is opened. */
-  const laidAside = useRef('');
   const { id, may, remarks } = proposal;
-
-  useEffect(() => {
-    const kept = keptReason(id);
-    if (!kept || asked?.text) return undefined;
-    laidAside.current = kept.text;
-    if (!kept.open) return undefined;
-    const frame = requestAnimationFrame(() => setPanel({ written: kept, at: '' }));
-    return () => cancelAnimationFrame(frame);
-  }, [id, asked]);
-
-  const write = (written: Written, at: string) => {
-    setPanel({ written, at });
-    keepReason(id, written);
-  };
-  const ask = (wanted: ReviewAct, anchor = '') =>
-    setPanel({
-      written: { act: wanted, anchor, text: panel?.written.text ?? laidAside.current },
-      at: wanted === 'publish' ? '' : anchor,
-    });
-  const close = () => {
-    laidAside.current = panel?.written.text ?? '';
-    keepReason(id, panel?.written ?? null, false);
-    setPanel(null);
-    document.getElementById(`ask-${panel?.at ? panel.at : (panel?.written.act ?? '')}`)?.focus();
-  };
+  const { panel, ...reason } = useReasonPanel(id, asked);
 
   const { pairs = [], values = [], clamp = [] } = texts ?? {};
   const steps = useMemo(() => new Set(pairs.map((pair) => pair.id)), [pairs]);
@@ -113,32 +86,18 @@ function Desk({
   const form = panel && may[panel.written.act] && (
     <ActPanel
       key={panel.written.act + at}
-      title={
-        panel.written.act === 'publish'
-          ? `Publish as ${letter ?? ''}`
-          : panel.written.act === 'return'
-            ? 'Return with reasons'
-            : 'Decline'
-      }
-      button={
-        panel.written.act === 'publish'
-          ? `Publish as ${letter ?? ''}`
-          : panel.written.act === 'return'
-            ? 'Return'
-            : 'Decline'
-      }
+      {...panelWords(panel.written.act, letter)}
       act={panel.written.act}
       version={first.version}
       href={`/proposals/${id}`}
       pending={pending === panel.written.act}
-      onCancel={close}
+      onCancel={reason.close}
       onSend={() => {
         const { act: wanted, text, anchor } = panel.written;
-        act(wanted === 'publish' ? { act: wanted } : { act: wanted, reason: text, anchor: anchor || null }, () => {
-          setPanel(null);
-          laidAside.current = '';
-          keepReason(id, null);
-        });
+        act(
+          wanted === 'publish' ? { act: wanted } : { act: wanted, reason: text, anchor: anchor || null },
+          reason.finish,
+        );
       }}
     >
       {panel.written.act === 'publish' ? (
@@ -149,7 +108,7 @@ function Desk({
           author={proposal.author.name}
           places={placesOf(pairs, values)}
           error={trouble?.act === panel.written.act ? trouble.field : null}
-          onWrite={(written) => write(written, panel.at)}
+          onWrite={reason.write}
         />
       )}
     </ActPanel>
@@ -191,7 +150,7 @@ function Desk({
         trouble={trouble}
         movedOn={movedOn}
         onAgree={() => act({ act: 'agree' })}
-        onAsk={ask}
+        onAsk={reason.open}
         threads={talk.threads}
         panel={placed ? null : form}
       >
@@ -229,17 +188,7 @@ function Desk({
                 {placed && at === `step:${pair.id}` && form}
                 {talk.atStep(pair)}
                 {may.return && steps.has(pair.id) && at !== `step:${pair.id}` && (
-                  <a
-                    id={`ask-step:${pair.id}`}
-                    href={`?give=return&at=${encodeURIComponent(`step:${pair.id}`)}#give`}
-                    className="return-here"
-                    onClick={(event) => {
-                      event.preventDefault();
-                      ask('return', `step:${pair.id}`);
-                    }}
-                  >
-                    Return here
-                  </a>
+                  <ReturnHere step={pair.id} onAsk={(anchor) => reason.open('return', anchor)} />
                 )}
               </>
             )}

@@ -13,6 +13,13 @@ export const ACT_WORDS: Record<ReviewAct, { verb: string; doing: string }> = {
   override: { verb: 'Override', doing: 'Overriding' },
 };
 
+/** What stands above the panel of an act and on its button. */
+export function panelWords(act: ReviewAct, letter: string | null): { title: string; button: string } {
+  const { verb } = ACT_WORDS[act];
+  const button = act === 'publish' ? `${verb} as ${letter ?? ''}` : verb;
+  return { title: act === 'return' ? 'Return with reasons' : button, button };
+}
+
 /** What may just have been done when the page is shown: an act of review, or the author's own sending-in. */
 export type Done = ReviewAct | 'proposed';
 
