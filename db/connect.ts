@@ -90,6 +90,12 @@ export async function openDatabase(file: string, { now = isoNow }: OpenOptions =
         throw storageFault(error);
       }
     },
+    async state() {
+      if (currentTransaction(sequelize)) return null;
+      // It tells of commits on other connections than the one that asks; every commit is on one of its own.
+      const [row] = await db.read<{ data_version: number }>('PRAGMA data_version');
+      return row?.data_version ?? null;
+    },
     close: async () => {
       // Sequelize fails when it is closed twice, and a caller that cleans up need not know who came first.
       if (!closed) await sequelize.close();

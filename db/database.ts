@@ -11,5 +11,10 @@ export interface Database {
   write<T>(fn: (transaction: Transaction) => Promise<T>): Promise<T>;
   /** One SELECT with `:named` replacements; rows as SQLite gives them (booleans 0 or 1, JSON as text). */
   read<Row extends object>(sql: string, replacements?: Record<string, unknown>): Promise<Row[]>;
+  /**
+   * A number that is another one after each commit, also of another process, so that what was read can be kept until it
+   * changes. null inside a `write`, where what is read may not be committed.
+   */
+  state(): Promise<number | null>;
   close(): Promise<void>;
 }

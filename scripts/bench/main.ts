@@ -1,15 +1,14 @@
-import { mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { mkdtempSync, rmSync } from 'node:fs';
 import { request } from 'node:http';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { compareProcedures } from '@/domain/revision/compare';
-import { parseProcedure } from '@/domain/procedure/parse';
-import type { Procedure } from '@/domain/procedure/types';
 import { build, install, root } from '../steps.mjs';
 import { keystrokes, scores, scriptWeight } from './browser';
 import { writeBook } from './book';
+import { deskGrowth } from './desk';
 import { load, references } from './load';
 import { signIn, start } from './product';
+import { compareAndMerge } from './revision';
 import { calculatorTyping, slowestWorksheet } from './worksheets';
 
 /**
@@ -138,35 +137,25 @@ async function largeBook(): Promise<void> {
   await product.stop();
 }
 
-/** Two texts of about 300 lines: a real sheet repeated under new ids, and the same with every third step reworded. */
-function comparison(): void {
-  const parsed = parseProcedure(readFileSync(join(root, 'content/procedures/p-0142-valve-cover-reseal.mdx'), 'utf8'));
-  if (!parsed.ok) throw new Error('The valve-cover sheet does not parse.');
-  const { frontmatter, intro, steps } = parsed.procedure;
-  const long: Procedure = {
-    frontmatter,
-    intro,
-    steps: [0, 1, 2, 3].flatMap((n) => steps.map((step) => ({ ...step, id: `${step.id}-${n}` }))),
-  };
-  const changed: Procedure = {
-    ...long,
-    frontmatter: { ...frontmatter, torques: frontmatter.torques.map((torque) => ({ ...torque, nm: torque.nm * 1.2 })) },
-    steps: long.steps.map((step, i) =>
-      i % 3 ? step : { ...step, body: step.body.replace(/\bthe\b/g, 'each').replace(/\.$/m, ', then look again.') },
-    ),
-  };
-  const times: number[] = [];
-  for (let i = 0; i < 60; i++) {
-    const from = performance.now();
-    compareProcedures(long, changed);
-    times.push(performance.now() - from);
-  }
-  atMost('compare two texts of 300 lines, p95', times.slice(10).sort((a, b) => a - b)[47] ?? NaN, 10, 'ms');
+function texts(): void {
+  const { lines, compare, merge } = compareAndMerge();
+  atMost(`compare two texts of ${lines[0]} lines, p95`, compare.p95, 10, 'ms');
+  atMost(`merge three texts of ${lines[0]} lines, p95`, merge.p95, 10, 'ms');
+  // Linear growth, with room for what a larger heap costs.
+  for (const [what, { growth }] of Object.entries({ compare, merge }))
+    atMost(`${what}: a line of ${lines[1]} against one of ${lines[0]}`, growth, 1.5, 'times', 2);
+}
+
+async function desk(): Promise<void> {
+  const { few, many, ratio } = await deskGrowth(work);
+  const times = `${many.toFixed(1)} against ${few.toFixed(1)} ms`;
+  atMost(`review desk: 500 waiting proposals against 5 (${times})`, ratio, 2, 'times', 2);
 }
 
 await install();
 if ((await build()) !== 0) process.exit(1);
-comparison();
+texts();
+await desk();
 await demonstrationBook();
 if (large) await largeBook();
 rmSync(work, { recursive: true, force: true });

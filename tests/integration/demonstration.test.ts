@@ -66,9 +66,9 @@ test('the valve cover reseal has its history, each revision with an author and a
 
 test('the review desk of the common book has work, worst first', async () => {
   const desk = await inBook(async () => readDesk(await actor('editor@halden.example')));
-  expect(desk.map((item) => [item.number, item.critical, item.agreements])).toEqual([
-    ['P-0142', true, 1],
-    ['P-0137', false, 0],
+  expect(desk.map((item) => [item.number, item.agreementsNeeded, item.agreements])).toEqual([
+    ['P-0142', 2, 1],
+    ['P-0137', 1, 0],
   ]);
 });
 

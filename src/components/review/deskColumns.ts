@@ -21,7 +21,7 @@ export const deskColumns = (view: DeskView): Column[] =>
     return {
       key,
       label,
-      href: deskAddress({ ...view, sort, descending }),
+      href: deskAddress({ ...view, sort, descending, page: 1 }),
       sorted: here ? (sort === 'worst' || view.descending ? 'descending' : 'ascending') : undefined,
     };
   });

@@ -100,18 +100,24 @@ export function decide(what: ProposalAct, actor: Actor, facts: ProposalFacts): D
   }
 }
 
-/** For each act, whether this person could do it now, and if not, why not; a page shows its buttons by it. */
-export function offers(actor: Actor, facts: ProposalFacts): Record<ProposalAct['act'], Decision> {
+/** Whether this person could do an act now, and if not, why not. */
+export function offer(act: ProposalAct['act'], actor: Actor, facts: ProposalFacts): Decision {
   // A reason is asked for when the button is pressed, so its want does not hide the button.
   const reason = 'asked for later';
-  const ask = (what: ProposalAct) => decide(what, actor, { ...facts, reason });
+  const torque = (openTorques(facts)[0] ?? facts.failing[0])?.key ?? '';
+  return decide({ act, reason, torque }, actor, { ...facts, reason });
+}
+
+/** For each act, whether this person could do it now, and if not, why not; a page shows its buttons by it. */
+export function offers(actor: Actor, facts: ProposalFacts): Record<ProposalAct['act'], Decision> {
+  const ask = (act: ProposalAct['act']) => offer(act, actor, facts);
   return {
-    edit: ask({ act: 'edit' }),
-    submit: ask({ act: 'submit' }),
-    return: ask({ act: 'return', reason }),
-    decline: ask({ act: 'decline', reason }),
-    agree: ask({ act: 'agree' }),
-    override: ask({ act: 'override', torque: (openTorques(facts)[0] ?? facts.failing[0])?.key ?? '', reason }),
-    publish: ask({ act: 'publish' }),
+    edit: ask('edit'),
+    submit: ask('submit'),
+    return: ask('return'),
+    decline: ask('decline'),
+    agree: ask('agree'),
+    override: ask('override'),
+    publish: ask('publish'),
   };
 }

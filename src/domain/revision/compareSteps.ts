@@ -2,6 +2,7 @@ import type { Procedure, Step } from '../procedure/types';
 import { bodyText } from './bodyText';
 import { inOrder, type Reason, stepReasons } from './critical';
 import type { Effect } from './effect';
+import { longestRising } from './rising';
 import { stepEffects } from './stepEffects';
 import type { StepChange } from './types';
 import { compareWords } from './words';
@@ -10,26 +11,6 @@ export interface StepDifference {
   change: StepChange;
   reasons: Reason[];
   effects: Effect[];
-}
-
-/** Places of a longest rising run in `numbers`; what is not in it has moved. */
-export function longestRising(numbers: readonly number[]): Set<number> {
-  const ends: number[] = [];
-  const before: number[] = [];
-  numbers.forEach((number, i) => {
-    let low = 0;
-    let high = ends.length;
-    while (low < high) {
-      const middle = (low + high) >> 1;
-      if ((numbers[ends[middle] ?? 0] ?? 0) < number) low = middle + 1;
-      else high = middle;
-    }
-    before[i] = low > 0 ? (ends[low - 1] ?? -1) : -1;
-    ends[low] = i;
-  });
-  const kept = new Set<number>();
-  for (let i = ends.at(-1) ?? -1; i >= 0; i = before[i] ?? -1) kept.add(i);
-  return kept;
 }
 
 const sameStep = (a: Step, b: Step) =>

@@ -1,6 +1,6 @@
-import { longestRising } from './compareSteps';
 import { mergedSequence } from './mergeText';
 import type { Side } from './mergeTypes';
+import { inEveryLongestRising } from './rising';
 
 type Keys = readonly string[];
 
@@ -87,8 +87,8 @@ export function mergeOrder(
 
 /** What may be said to stand elsewhere than before; of two neighbours that changed places, that is each of them. */
 export function movedKeys(base: Keys, side: Keys): Set<string> {
-  const shared = side.filter((key) => base.includes(key));
-  const run = (keys: Keys) => longestRising(keys.map((key) => base.indexOf(key))).size;
-  const longest = run(shared);
-  return new Set(shared.filter((key) => run(shared.filter((other) => other !== key)) === longest));
+  const places = new Map(base.map((key, i) => [key, i]));
+  const shared = side.filter((key) => places.has(key));
+  const stay = inEveryLongestRising(shared.map((key) => places.get(key) ?? 0));
+  return new Set(shared.filter((_, i) => !stay.has(i)));
 }

@@ -1,4 +1,4 @@
-import type { Procedure, Step } from '../procedure/types';
+import type { Step } from '../procedure/types';
 import { mergeOrder, movedKeys } from './mergeOrder';
 import { pick } from './mergeSame';
 import { mergedSequence, mergeText } from './mergeText';
@@ -90,7 +90,7 @@ function mergeStep(
 export function mergeSteps(asking: Asking, texts: Texts): Step[] {
   const hazard = (key: string) =>
     SIDES.flatMap((side) => texts[side].frontmatter.cautions).find((caution) => caution.key === key)?.hazard ?? key;
-  const find = (text: Procedure, id: string) => text.steps.find((step) => step.id === id);
+  const byId = three((side) => new Map(texts[side].steps.map((step) => [step.id, step])));
   const ids = three((side) => texts[side].steps.map(({ id }) => id));
   const [movedByMine, movedByTheirs] = [movedKeys(ids.base, ids.mine), movedKeys(ids.base, ids.theirs)];
   const kept = new Map<string, Step>();
@@ -99,7 +99,7 @@ export function mergeSteps(asking: Asking, texts: Texts): Step[] {
     const moved = movedByMine.has(id) || movedByTheirs.has(id);
     const step = mergeStep(
       asking,
-      three((side) => find(texts[side], id)),
+      three((side) => byId[side].get(id)),
       moved,
       hazard,
     );

@@ -6,16 +6,16 @@ import { standingOverride } from '@/domain/review/overrides';
 import { agreementsNeeded, isStale, standing, tally } from '@/domain/review/rules';
 import { bookRef, personColumn, personRef } from '../book/columns';
 import { app } from '../context';
-import type { Loaded } from './proposals';
+import type { Listed, Loaded } from './proposals';
 import { trailOf } from './trail';
 
 /** The title as far as the text can be read; a draft may be broken anywhere. */
-const titleOf = ({ head, parentTitle, source }: Loaded): string =>
-  head?.title ?? parentTitle ?? (/^title:[ \t]*(\S.{0,89})/m.exec(source)?.[1]?.trim() || 'Untitled');
+const titleOf = ({ head, parentTitle, source }: Listed): string =>
+  head?.title ?? parentTitle ?? (/^title:[ \t]*(\S.{0,89})/m.exec(source ?? '')?.[1]?.trim() || 'Untitled');
 
 const OPEN = new Set(['draft', 'proposed', 'returned']);
 
-export function summaryOf(proposal: Loaded): ProposalSummary {
+export function summaryOf(proposal: Listed): ProposalSummary {
   const { facts, criticalReasons, takesBack, severity } = proposal;
   return {
     id: proposal.id,
@@ -29,7 +29,7 @@ export function summaryOf(proposal: Loaded): ProposalSummary {
     author: personRef(proposal.author),
     reason: proposal.reason,
     critical: criticalReasons.length > 0,
-    criticalReasons,
+    criticalReasons: [...criticalReasons],
     takesBack,
     severity,
     agreementsNeeded: agreementsNeeded(criticalReasons),

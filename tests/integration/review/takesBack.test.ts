@@ -1,6 +1,6 @@
 import { expect, it } from 'vitest';
 import { publish } from '@/server/review/publish';
-import { readDesk } from '@/server/review/readDesk';
+import { onDesk, readDesk } from '@/server/review/readDesk';
 import { readProposal } from '@/server/review/readProposal';
 import { saveProposal } from '@/server/review/saveProposal';
 import { startProposal } from '@/server/review/startProposal';
@@ -34,7 +34,9 @@ it('says on the desk and on the proposal that a text brought up to a newer revis
   const undone = [{ revision: 'B', what: ['Cover bolt torque, 10 to 12 N·m'] }];
   const editor = await actor('common.editor');
   expect((await readProposal(editor, id)).takesBack).toEqual(undone);
-  expect((await readDesk(editor)).map((item) => [item.id, item.takesBack])).toEqual([[id, undone]]);
+  expect((await onDesk(editor, await readDesk(editor))).map((item) => [item.id, item.takesBack])).toEqual([
+    [id, undone],
+  ]);
 });
 
 it('says nothing of a text that took over what the newer revision changed', async () => {

@@ -2,23 +2,41 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { deskColumns, OWN_COLUMNS } from '@/components/review/deskColumns';
 import type { ProposalSummary } from '@/domain/api/schemas/proposals';
-import { booksOf, DESK_SORTS, deskAddress, deskItems, readDeskView, type DeskView } from '@/domain/review/deskView';
+import {
+  booksOf,
+  DESK_PAGE,
+  DESK_SORTS,
+  deskAddress,
+  deskItems,
+  deskPage,
+  readDeskView,
+  type DeskView,
+} from '@/domain/review/deskView';
 import { AUTHOR, EDITOR, proposal, SECOND } from '../../factories/proposal';
 
 const read = (query: string) => readDeskView(new URLSearchParams(query));
-const WORST: DeskView = { book: '', sort: 'worst', descending: false };
+const WORST: DeskView = { book: '', sort: 'worst', descending: false, page: 1 };
 
 describe('the view that an address asks for', () => {
   it('reads the plain desk, a book, a column, and a column the other way round', () => {
     expect(read('')).toEqual(WORST);
-    expect(read('book=common&sort=title')).toEqual({ book: 'common', sort: 'title', descending: false });
-    expect(read('sort=-waiting')).toEqual({ book: '', sort: 'waiting', descending: true });
+    expect(read('book=common&sort=title')).toEqual({ book: 'common', sort: 'title', descending: false, page: 1 });
+    expect(read('sort=-waiting&page=3')).toEqual({ book: '', sort: 'waiting', descending: true, page: 3 });
   });
 
-  it.each(['sort=', 'sort=-', 'sort=colour', 'sort=--title', 'sort=-worst', 'sort=title,author', 'sort=__proto__'])(
-    'reads what it does not know as the plain desk: %s',
-    (query) => expect(read(query)).toEqual(WORST),
-  );
+  it.each([
+    'sort=',
+    'sort=-',
+    'sort=colour',
+    'sort=--title',
+    'sort=-worst',
+    'sort=title,author',
+    'sort=__proto__',
+    'page=0',
+    'page=-1',
+    'page=1e9',
+    'page=two',
+  ])('reads what it does not know as the plain desk: %s', (query) => expect(read(query)).toEqual(WORST));
 
   it('is found again at its own address', () => {
     const view = fc
@@ -26,8 +44,9 @@ describe('the view that an address asks for', () => {
         book: fc.oneof(fc.constant(''), fc.string()),
         sort: fc.constantFrom(...DESK_SORTS),
         turned: fc.boolean(),
+        page: fc.integer({ min: 1, max: 999_999 }),
       })
-      .map(({ book, sort, turned }): DeskView => ({ book, sort, descending: sort !== 'worst' && turned }));
+      .map(({ turned, ...asked }): DeskView => ({ ...asked, descending: asked.sort !== 'worst' && turned }));
     fc.assert(
       fc.property(view, (asked) => {
         const { pathname, searchParams } = new URL(deskAddress(asked), 'http://x.example');
@@ -39,17 +58,24 @@ describe('the view that an address asks for', () => {
 });
 
 const shop = (shopId: string, name: string): ProposalSummary['book'] => ({ kind: 'shop', shopId, name });
-const ITEMS: ProposalSummary[] = [
-  proposal({ number: 'P-0142', title: 'Valve cover', author: AUTHOR, agreements: 1 }),
-  proposal({ number: 'P-0101', title: 'Breather', author: SECOND, proposedAt: '2026-11-20T09:00:00.000Z' }),
-  proposal({
+const waits = ({
+  proposedAt = '2026-11-28T09:00:00.000Z',
+  ...change
+}: Partial<ProposalSummary> & { proposedAt?: string }) => ({
+  ...proposal(change),
+  proposedAt,
+});
+const ITEMS = [
+  waits({ number: 'P-0142', title: 'Valve cover', author: AUTHOR, agreements: 1 }),
+  waits({ number: 'P-0101', title: 'Breather', author: SECOND, proposedAt: '2026-11-20T09:00:00.000Z' }),
+  waits({
     number: 'P-1001',
     title: 'Valve cover',
     author: EDITOR,
     book: shop('b', 'Bay Motors'),
     agreementsNeeded: 1,
   }),
-  proposal({ number: 'P-1002', title: 'Anchor', author: AUTHOR, book: shop('a', 'Anvil Street'), proposedAt: null }),
+  waits({ number: 'P-1002', title: 'Anchor', author: AUTHOR, book: shop('a', 'Anvil Street') }),
 ];
 const shown = (view: Partial<DeskView>) => deskItems(ITEMS, { ...WORST, ...view }).map(({ number }) => number);
 
@@ -67,7 +93,7 @@ describe('the items of a view', () => {
     expect(shown({ sort: 'agreed', book: 'common' })).toEqual(['P-0142', 'P-0101']);
   });
 
-  it('takes the longest wait for the largest, and a draft sent in by nobody by its last change', () => {
+  it('takes the longest wait for the largest', () => {
     expect(shown({ sort: 'waiting' }).at(-1)).toBe('P-0101');
     expect(shown({ sort: 'waiting', descending: true })[0]).toBe('P-0101');
   });
@@ -91,6 +117,28 @@ describe('the items of a view', () => {
   });
 });
 
+describe('the pages of a desk', () => {
+  const many = fc.integer({ min: 0, max: 400 }).map((n) => Array.from({ length: n }, (_, i) => i));
+
+  it('together hold every proposal once, in order, none longer than a page', () => {
+    fc.assert(
+      fc.property(many, (items) => {
+        const { last } = deskPage(items, { page: 1 });
+        const pages = Array.from({ length: last }, (_, i) => deskPage(items, { page: i + 1 }));
+        expect(pages.flatMap((page) => page.items)).toEqual(items);
+        expect(pages.every((page) => page.items.length <= DESK_PAGE)).toBe(true);
+        expect(pages.map(({ from }) => from)).toEqual(pages.map((_, i) => i * DESK_PAGE));
+      }),
+    );
+  });
+
+  it('end with the last: an address that asks for more, as after an afternoon of reviewing, gets that one', () => {
+    const items = Array.from({ length: DESK_PAGE + 1 }, (_, i) => i);
+    expect(deskPage(items, { page: 7 })).toEqual({ items: [DESK_PAGE], page: 2, from: DESK_PAGE, last: 2 });
+    expect(deskPage([], { page: 7 })).toEqual({ items: [], page: 1, from: 0, last: 1 });
+  });
+});
+
 it('lists each book once, the common one first, then by name', () => {
   expect(booksOf([...ITEMS].reverse())).toEqual([
     { value: 'common', label: 'Common book' },
@@ -101,6 +149,10 @@ it('lists each book once, the common one first, then by name', () => {
 });
 
 describe('the columns of the desk', () => {
+  it('lead to the first page of their order', () => {
+    expect(column({ page: 4 }, 'what')?.href).toBe('/review-desk?sort=title');
+  });
+
   const column = (view: Partial<DeskView>, key: string) =>
     deskColumns({ ...WORST, ...view }).find((found) => found.key === key);
 

@@ -6,7 +6,6 @@ import { ENTRY_FIELDS, HEAD_FIELDS, isListName } from '@/domain/procedure/fields
 import type { Procedure } from '@/domain/procedure/types';
 import { compareProcedures } from '@/domain/revision/compare';
 import { bodyText } from '@/domain/revision/bodyText';
-import { longestRising } from '@/domain/revision/compareSteps';
 import type { Comparison, WordRun } from '@/domain/revision/types';
 import { pair, procedure } from './arbitraries';
 
@@ -158,24 +157,6 @@ function sorted(value: unknown): unknown {
       .map(([k, v]) => [k, sorted(v)]),
   );
 }
-
-describe('longestRising', () => {
-  it('is as long as the longest found by trying them all', () => {
-    fc.assert(
-      fc.property(fc.uniqueArray(fc.nat(50), { maxLength: 10 }), (numbers) => {
-        const kept = [...longestRising(numbers)].sort((a, b) => a - b).map((i) => numbers[i]!);
-        expect(kept).toEqual([...kept].sort((a, b) => a - b));
-        let longest = 0;
-        for (let set = 0; set < 1 << numbers.length; set += 1) {
-          const chosen = numbers.filter((_, i) => (set >> i) & 1);
-          if (chosen.every((n, i) => i === 0 || n > chosen[i - 1]!)) longest = Math.max(longest, chosen.length);
-        }
-        expect(kept.length).toBe(longest);
-      }),
-      { numRuns: 200 },
-    );
-  });
-});
 
 describe('every field of a front matter', () => {
   // A field that the comparison forgets is a change that nobody reviews; the list of fields is the schema's own.
