@@ -10,7 +10,7 @@ export const BulletinList = ({ label, bulletins }: { label: string; bulletins: r
     {bulletins.map((bulletin) => (
       <li
         key={bulletin.id}
-        className="grid gap-x-8 gap-y-3 border-t border-hair py-5 first:border-t-0 md:grid-cols-[15rem_1fr_auto]"
+        className="grid gap-x-8 gap-y-3 border-t border-hair py-5 first:border-t-0 md:grid-cols-[14rem_1fr] lg:grid-cols-[15rem_1fr_auto]"
       >
         <p className="leading-snug">
           <a href={`/procedures/${bulletin.number}`} className="font-serif text-[1.0625rem] font-bold">
@@ -24,7 +24,7 @@ export const BulletinList = ({ label, bulletins }: { label: string; bulletins: r
           <h3 className="mb-1 font-sans text-[1.0625rem] font-semibold">{bulletinTitle(bulletin)}</h3>
           <BulletinText bulletin={bulletin} />
         </div>
-        <div className="self-end md:text-right">
+        <div className="self-end md:col-start-2 lg:col-start-auto lg:text-right">
           {bulletin.unread && (
             <ReadThis
               bulletin={bulletin.id}

@@ -26,7 +26,7 @@ export function Paging({
       <p className="flex gap-x-6">
         {before && (
           <a href={before} rel="prev" className="inline-flex min-h-touch items-center">
-            Before
+            Previous
           </a>
         )}
         {after && (

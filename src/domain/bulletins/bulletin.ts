@@ -14,11 +14,11 @@ const sentence = (words: string): string => {
  * What a publication tells everybody, as whole sentences; null where nobody need be told. A first revision changes
  * nothing that somebody has worked from, however many agreements it needed, so it makes no bulletin.
  *
- * @param criticalReasons from the comparison with the revision before, in words
+ * @param told what a critical change did to the revision before, by `toldChanges`; empty for an ordinary one
  * @param supersedes letter of the revision before; null for the first one
  */
-export function changeWords(criticalReasons: readonly string[], supersedes: string | null): string[] | null {
-  return supersedes === null || criticalReasons.length === 0 ? null : criticalReasons.map(sentence);
+export function changeWords(told: readonly string[], supersedes: string | null): string[] | null {
+  return supersedes === null || told.length === 0 ? null : told.map(sentence);
 }
 
 /** What of a bulletin and its reader decides whether the reader is asked to sign it. */

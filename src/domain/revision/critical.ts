@@ -44,9 +44,11 @@ export function entryReason(list: ListName, entry: Frontmatter[ListName][number]
   return field === 'action' ? { kind: 'part', words: `what happens to a part changes: ${name}` } : null;
 }
 
+export const SHEET_IS_CRITICAL = 'the sheet is marked critical';
+
 export function sheetReasons(from: Frontmatter | null, to: Frontmatter): Reason[] {
   const reasons: Reason[] = [];
-  if (from?.critical || to.critical) reasons.push({ kind: 'sheet', words: 'the sheet is marked critical' });
+  if (from?.critical || to.critical) reasons.push({ kind: 'sheet', words: SHEET_IS_CRITICAL });
   if (from) return reasons;
   for (const { name } of to.torques) reasons.push({ kind: 'torque', words: `a new sheet gives a torque: ${name}` });
   for (const { name } of to.limits) reasons.push({ kind: 'limit', words: `a new sheet gives a limit: ${name}` });

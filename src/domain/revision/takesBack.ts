@@ -1,6 +1,5 @@
-import { LONGEST_VALUE } from './valueRows';
-import type { ListName } from './fields';
 import type { Procedure, Step } from '../procedure/types';
+import { stepWords, valueWords } from './changeWords';
 import { compareValues } from './compareValues';
 import type { ValueChange } from './types';
 
@@ -10,35 +9,6 @@ export interface TakenBack {
   place: string;
   /** What the revision did: "Cover bolt torque, 10 to 12 N·m". */
   words: string;
-}
-
-const ENTRIES: Record<ListName, string> = {
-  parts: 'part',
-  tools: 'tool',
-  supplies: 'supply',
-  torques: 'torque',
-  limits: 'limit',
-  cautions: 'caution',
-  timers: 'time',
-  figures: 'drawing',
-  sources: 'source',
-};
-
-/** "10 to 12 N·m": a unit that two single numbers share is said once. */
-function span(from: string, to: string): string {
-  const unitOf = (text: string) => /^[±−-]?\d[\d.]*(\D+)$/.exec(text)?.[1];
-  const unit = unitOf(to);
-  return `${unit !== undefined && unit === unitOf(from) ? from.slice(0, -unit.length) : from} to ${to}`;
-}
-
-function valueWords({ list, key, path, kind, label, from, to }: ValueChange): string {
-  const whole = list !== 'head' && path === `${list}.${key ?? ''}`;
-  if (whole) return `${label} (${ENTRIES[list]}), ${kind}`;
-  const name = list === 'torques' && path.endsWith('.nm') ? `${label} torque` : label;
-  if (from === null || to === null) return `${name}, ${kind}`;
-  // Engines stand in a text by their keys, which nobody reads.
-  const told = path !== 'engines' && Math.max(from.length, to.length) <= LONGEST_VALUE;
-  return !told ? name : `${name}, ${span(from, to)}`;
 }
 
 const changes = (from: Procedure, to: Procedure) =>
@@ -52,11 +22,6 @@ const touched = (differing: readonly ValueChange[], { path, list, key }: ValueCh
 
 /** A step as it is stored: values that it only points at are told by themselves. */
 const rawStep = (step: Step | undefined) => step && JSON.stringify([step.title, step.cautions, step.body]);
-
-function stepWords(before: Step | undefined, revised: Step | undefined): string {
-  const step = `step “${(revised ?? before)?.title ?? ''}”`;
-  return before && revised ? `the words of ${step}` : `${step}, ${revised ? 'added' : 'removed'}`;
-}
 
 /**
  * What one earlier revision changed, the base still has, and a proposal sets back to what it was before that revision:

@@ -87,7 +87,7 @@ async function publishFromRelease(
     procedureId,
     shopId: null,
     revisionId: revision.id,
-    criticalReasons: text.criticalReasons,
+    told: text.told,
     supersedes: current?.letter ?? null,
     byId: authorId,
   });

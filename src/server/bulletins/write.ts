@@ -18,10 +18,10 @@ export async function writeBulletin(kind: BulletinKind, words: string[], cause: 
 
 /** Tells every reader of the book of a critical change. Call it inside the `write` that publishes, once it is current. */
 export async function tellOfChange({
-  criticalReasons,
+  told,
   supersedes,
   ...cause
-}: Cause & { criticalReasons: readonly string[]; supersedes: string | null }): Promise<void> {
-  const words = changeWords(criticalReasons, supersedes);
+}: Cause & { told: readonly string[]; supersedes: string | null }): Promise<void> {
+  const words = changeWords(told, supersedes);
   if (words) await writeBulletin('critical change', words, cause);
 }

@@ -2,6 +2,7 @@ import type { RevisionHead } from '@db/models/book';
 import type { Parsed, RenderedProcedure } from '@/domain/procedure/types';
 import { compareProcedures } from '@/domain/revision/compare';
 import { type FailingTorque, failingTorques } from '@/domain/revision/failingTorques';
+import { toldChanges } from '@/domain/revision/toldChanges';
 import type { Severity, TakenBackFrom } from '@/domain/revision/types';
 import { headOf } from '../book/head';
 import { hashOf, parsedText } from '../book/parsed';
@@ -24,6 +25,8 @@ export interface Weighed extends TextColumns {
   parsed: Parsed;
   /** Says the same as its base. */
   identical: boolean;
+  /** What of it those must be told who have worked from its base. */
+  told: string[];
 }
 
 const NOTHING_YET: Severity = { level: 'ordinary', because: [] };
@@ -42,6 +45,7 @@ export async function weigh(source: string, parentId: string | null): Promise<We
       failingTorques: [],
       severity: NOTHING_YET,
       identical: false,
+      told: [],
     };
   const ancestry = await ancestryOf(parentId);
   const base = ancestry[0]?.procedure ?? null;
@@ -55,11 +59,12 @@ export async function weigh(source: string, parentId: string | null): Promise<We
     failingTorques: failingTorques(base?.frontmatter ?? null, parsed.procedure.frontmatter),
     severity,
     identical: identical && parentId !== null,
+    told: base && criticalReasons.length > 0 ? toldChanges(base, parsed.procedure) : [],
   };
 }
 
 /** The columns of a weighed text. */
-export const columnsOf = ({ parsed: _, identical: __, ...columns }: Weighed): TextColumns => columns;
+export const columnsOf = ({ parsed: _, identical: __, told: ___, ...columns }: Weighed): TextColumns => columns;
 
 /** Refuses 422, with line and column, a text that cannot be read. */
 export function refuseUnreadable(parsed: Parsed): asserts parsed is Extract<Parsed, { ok: true }> {

@@ -7,6 +7,7 @@ import { tellOfChange } from '../bulletins/write';
 import { now } from '../clock';
 import { app } from '../context';
 import { recordAgreement } from './agree';
+import { weigh } from './draftText';
 import { guard, readableProposal } from './guard';
 import { readProposal } from './readProposal';
 import { record } from './record';
@@ -22,6 +23,7 @@ export async function publish(actor: Actor, id: string, version: number | null =
   // Asked before the text is: a draft that nobody may publish yet need not be readable.
   guard({ act: 'publish' }, actor, before, version);
   const rendered = await readRendering(before);
+  const { told } = await weigh(before.source, before.parentId);
   const { db } = await app();
   await db.write(async () => {
     const proposal = await readableProposal(actor, id);
@@ -33,7 +35,7 @@ export async function publish(actor: Actor, id: string, version: number | null =
       await Revision.update({ state: 'superseded' }, { where: { id: proposal.currentRevisionId } });
     await Revision.update({ state, letter, publishedAt: now(), version: proposal.version + 1 }, { where: { id } });
     await Procedure.update({ currentRevisionId: id }, { where: { id: proposal.procedureId } });
-    await tellOfChange({ ...proposal, revisionId: id, supersedes: proposal.current, byId: actor.personId });
+    await tellOfChange({ ...proposal, told, revisionId: id, supersedes: proposal.current, byId: actor.personId });
     await indexRevision(proposal.procedureId, rendered);
     await record(actor, 'revision.published', proposal, { letter, hash: proposal.hash, supersedes: proposal.current });
   });

@@ -141,7 +141,7 @@ describe('bulletins', () => {
         number: 'P-0142',
         revision: { id: revision, letter: 'B' },
         supersedes: 'A',
-        words: ['A torque changes: Cover bolt.'],
+        words: ['A torque changes: Cover bolt torque, 10 to 12 N·m.'],
         unread: true,
         signedAt: null,
       },
