@@ -1,3 +1,5 @@
+import { circleThrough } from '@/domain/measure/order/pattern';
+
 /** Where each bolt stands in the drawing, in the drawing's own units. */
 export interface Placement {
   width: number;
@@ -18,17 +20,8 @@ type Point = readonly [number, number];
 
 const gap = ([ax, ay]: Point, [bx, by]: Point) => Math.hypot(ax - bx, ay - by);
 
-/** Bolts on one circle: five or more, none of them further off the mean radius than 3 %. */
-function onCircle(points: readonly Point[]): boolean {
-  if (points.length < 5) return false;
-  const centre: Point = [
-    points.reduce((sum, [x]) => sum + x, 0) / points.length,
-    points.reduce((sum, [, y]) => sum + y, 0) / points.length,
-  ];
-  const radii = points.map((point) => gap(point, centre));
-  const mean = radii.reduce((sum, r) => sum + r, 0) / radii.length;
-  return mean > 0 && radii.every((r) => Math.abs(r - mean) < mean * 0.03);
-}
+/** Fewer than five stand on a circle too where they hold down something square. */
+const onCircle = (points: readonly Point[]) => points.length >= 5 && circleThrough(points) !== null;
 
 /**
  * Fits positions in mm into a drawing `WIDTH` wide. The scale is the same both ways, so that the drawing keeps the

@@ -12,16 +12,21 @@ const NOTHING = {};
 
 /** Which limits the readings are judged by; a choice where the sheet serves several engines. */
 function Judged({
+  worksheet,
   fields,
   chosen,
   units,
   onChoose,
 }: {
+  worksheet: Described;
   fields: Map<string, BoundLimit[]>;
   chosen: Record<string, number>;
   units: Units;
   onChoose: (field: string, index: number) => void;
 }) {
+  const choices = [...fields.values()].filter((limits) => limits.length > 1).length;
+  const judges = (field: string) =>
+    choices > 1 ? `${worksheet.fields[field]?.label ?? 'Readings'}, judged by` : 'Judged by';
   return (
     <div className="flex flex-col gap-3">
       {[...fields].map(([field, limits]) => {
@@ -30,7 +35,7 @@ function Judged({
           <Select
             key={field}
             name={`limit-${field}`}
-            label="Judged by"
+            label={judges(field)}
             value={String(chosen[field] ?? 0)}
             options={limits.map(({ name, text }, i) => ({ value: String(i), label: `${name}, ${text[units]}` }))}
             onChange={(event) => onChoose(field, Number(event.target.value))}
@@ -93,6 +98,7 @@ export function OnSheet({
       {fields.size > 0 && (
         <div className="border-b border-hair px-4 py-3">
           <Judged
+            worksheet={worksheet}
             fields={fields}
             chosen={chosen}
             units={now.units}

@@ -3,6 +3,7 @@ import { ENTRY_FIELDS, type ListName } from '../procedure/fields';
 import { Frontmatter } from '../procedure/schema';
 import type { Procedure } from '../procedure/types';
 import { fieldsOf } from '../revision/fields';
+import { readNumber } from '../writing/numbers';
 import { entryAt, readAnchor } from './anchors';
 
 /** What a reviewer would write instead. Where it belongs is said by the anchor of its thread: a step, or one field. */
@@ -137,12 +138,9 @@ export function valueSuggestion(
   if (!entry) return refuse('The text that was proposed has no such value.');
   const text = typed.trim();
   if (!text) return refuse('Write the value that you suggest.');
-  const to = isNumberField(list, field)
-    ? /^[-−]?\d+([.,]\d+)?$/.test(text)
-      ? Number(text.replace('−', '-').replace(',', '.'))
-      : NaN
-    : text;
-  if (Number.isNaN(to)) return refuse('The suggested value must be a number, without its unit.');
+  const to = isNumberField(list, field) ? readNumber(text) : text;
+  if (isNumberField(list, field) && typeof to === 'string')
+    return refuse('The suggested value must be a number, without its unit.');
   const suggestion: Suggestion = {
     kind: 'value',
     from: valueAt(entry, field),

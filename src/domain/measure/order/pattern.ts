@@ -58,13 +58,20 @@ function placesOf(angles: readonly number[]): number[] | null {
   return off.some((miss) => Math.abs(miss - mean) > STEP_TOLERANCE * step) ? null : places;
 }
 
-/** The circle that the bolts stand round evenly, or null. */
-function circleOf(positions: readonly Position[]): Pattern | null {
+/** The circle that the bolts stand on, evenly or not; null where they stand on none. Any three that make no row do. */
+export function circleThrough(positions: readonly Position[]): { centre: Position; radius: number } | null {
   const centre = positions.length < 3 ? null : centreOf(positions);
   if (!centre) return null;
   const radii = positions.map((position) => distance(position, centre));
   const radius = radii.reduce((sum, r) => sum + r, 0) / radii.length;
-  if (radii.some((r) => Math.abs(r - radius) > SHAPE_TOLERANCE * radius)) return null;
+  return radii.some((r) => Math.abs(r - radius) > SHAPE_TOLERANCE * radius) ? null : { centre, radius };
+}
+
+/** The circle that the bolts stand round evenly, or null. */
+function circleOf(positions: readonly Position[]): Pattern | null {
+  const circle = circleThrough(positions);
+  if (!circle) return null;
+  const { centre, radius } = circle;
   const places = placesOf(positions.map(([x, y]) => (Math.atan2(y - centre[1], x - centre[0]) * 180) / Math.PI));
   return places && { kind: 'circle', centre, radius, places };
 }
