@@ -11,6 +11,7 @@ import { clampOverrides } from './0007-clamp-overrides';
 import { threads } from './0008-threads';
 import { bulletins } from './0009-bulletins';
 import { flags } from './0010-flags';
+import { feedKeys } from './0015-feed-keys';
 import type { Migration } from './migration';
 
 // A list, not a folder read at run time: it is bundled with the server and runs from scripts alike.
@@ -25,6 +26,7 @@ const MIGRATIONS: readonly Migration[] = [
   threads,
   bulletins,
   flags,
+  feedKeys,
 ];
 
 type Handle = Pick<Database, 'sequelize' | 'write'>;

@@ -2,6 +2,7 @@ import { DataTypes, type Sequelize } from 'sequelize';
 import { Procedure, Rendering, Revision, SearchDocument } from './book';
 import { Bulletin, ReadAndSign } from './bulletins';
 import { flag, id, optionalText, text, times } from './columns';
+import { FeedKey } from './feeds';
 import { Membership, Person, Shop, ShopRule } from './people';
 import { AuditEntry, IdempotencyKey, Setting } from './records';
 import { Agreement, ClampOverride, Flag, Remark, Thread, ThreadMessage } from './review';
@@ -187,6 +188,10 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
         ...stamps,
       }),
       bind('Flag', 'flags'),
+    ),
+    FeedKey: class extends FeedKey {}.init(
+      own({ id, personId: text, shopId: optionalText, keyHash: optionalText, madeAt: text, ...stamps }),
+      bind('FeedKey', 'feedKeys'),
     ),
     AuditEntry: class extends AuditEntry {}.init(
       own({

@@ -27,7 +27,7 @@ export const bookRef = ({ bookKind, shopId, shopName }: BookRow): BookRef => ({
 /** The author of revision `r` as JSON. */
 export const AUTHOR_COLUMN = `(SELECT ${personColumn('a')} FROM people a WHERE a.id = r.authorId) AS author`;
 /** Whoever agreed to the very text of revision `r` on its very base. */
-const REVIEWERS_COLUMN = `(SELECT json_group_array(json(who)) FROM (
+export const REVIEWERS_COLUMN = `(SELECT json_group_array(json(who)) FROM (
     SELECT ${personColumn('a')} AS who FROM agreements g JOIN people a ON a.id = g.personId
     WHERE g.revisionId = r.id AND g.hash = r.hash AND g.base IS (SELECT letter FROM revisions WHERE id = r.parentId)
     ORDER BY g.at)) AS reviewers`;

@@ -34,7 +34,8 @@ export const FORGET_PAGES = { 'Clear-Site-Data': '"cache"' };
  */
 export function withHeaders(response: Response, development: boolean): Response {
   const set = (headers: Headers) => {
-    for (const [name, value] of Object.entries(HEADERS)) headers.set(name, value);
+    for (const [name, value] of Object.entries(HEADERS))
+      if (name !== 'Referrer-Policy' || headers.get(name) !== 'no-referrer') headers.set(name, value);
     if (!headers.has('Content-Security-Policy'))
       headers.set('Content-Security-Policy', policy(development ? "'self' ws:" : "'self'"));
     if (!headers.has('Cache-Control')) headers.set('Cache-Control', 'private, no-cache');

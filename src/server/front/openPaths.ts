@@ -10,7 +10,8 @@ const OPEN_PATHS = new Set([
   '/site.webmanifest',
   '/api/openapi.json',
 ]);
-const OPEN_FOLDERS = ['/_astro/', '/fonts/', '/figures/'];
+// A feed is opened by the key in its address.
+const OPEN_FOLDERS = ['/_astro/', '/fonts/', '/figures/', '/feed/'];
 
 /** What of Auth.js we use; it has pages of its own too, which are none of ours. */
 const SIGN_IN_PATHS = new Set(
