@@ -33,7 +33,7 @@ export const REVIEWERS_COLUMN = `(SELECT json_group_array(json(who)) FROM (
     ORDER BY g.at)) AS reviewers`;
 
 /** Why torques of the very text of revision `r` stay that fail the clamp check. */
-const OVERRIDES_COLUMN = `(SELECT json_group_array(json(how)) FROM (
+export const OVERRIDES_COLUMN = `(SELECT json_group_array(json(how)) FROM (
     SELECT json_object('torque', coalesce((SELECT json_extract(f.value, '$.name') FROM json_each(r.failingTorques) f
         WHERE json_extract(f.value, '$.key') = o.torqueKey), o.torqueKey),
       'share', o.share, 'person', ${personColumn('a')}, 'reason', o.reason, 'at', o.at) AS how

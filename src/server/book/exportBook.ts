@@ -1,6 +1,7 @@
 import { mkdir, readFile, rename, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { app } from '../context';
+import { fileName } from '@/domain/export/slug';
 import { procedureFiles, proceduresDir } from './contentFiles';
 
 export interface Exported {
@@ -37,17 +38,4 @@ export async function exportBook(contentDir: string): Promise<Exported> {
     exported.written.push(name);
   }
   return exported;
-}
-
-/** `P-0200`, "Valve cover: reseal" → `p-0200-valve-cover-reseal.mdx` */
-export function fileName(number: string, title: string): string {
-  const words = title
-    .normalize('NFKD')
-    .toLowerCase()
-    .replace(/\p{M}/gu, '')
-    .replaceAll('ß', 'ss')
-    .split(/[^a-z0-9]+/)
-    .filter(Boolean);
-  const slug = words.join('-').slice(0, 60).replace(/-$/, '');
-  return `${number.toLowerCase()}-${slug || 'procedure'}.mdx`;
 }
