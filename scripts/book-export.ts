@@ -4,7 +4,7 @@
  *   npm run book:export                            the common book, back to content/procedures
  *   npm run book:export -- ./elsewhere             the same, into another folder
  *   npm run book:export -- --git ./book            with its history, as a git repository (bare where the name ends in .git)
-
+ *   npm run book:export -- --dita ./dita           each sheet in use as a DITA 1.2 task, its drawings beside it
  *
  * --shop <slug> takes one shop's own book instead of the common one (with --git and --dita).
  * --emails puts real e-mail addresses into the history; without it they lead nowhere.
@@ -17,6 +17,7 @@ import { useApp } from '@/server/context';
 import { CannotExport } from '@/server/export/git';
 import { writeHistory } from '@/server/export/gitRepository';
 import { shopBySlug } from '@/server/export/shops';
+import { writeTasks } from '@/server/export/tasks';
 import { openBook } from '@/server/start';
 
 function given() {
@@ -50,6 +51,7 @@ async function main(): Promise<void> {
       const { commits, tip } = await writeHistory(resolve(git), { shopId, realAddresses: emails });
       console.log(`${commits} commits, the last ${tip}`);
     }
+    if (dita !== undefined) console.log(`${(await writeTasks(resolve(dita), shopId)).length} tasks`);
     if (git === undefined && dita === undefined) {
       const { written, unchanged } = await exportBook(positionals[0] ? resolve(positionals[0]) : config.contentDir);
       for (const name of written) console.log(`wrote ${name}`);

@@ -102,6 +102,14 @@ export function ReadSheet({
           <WithdrawalLink act="withdraw" number={number} />
         </p>
       )}
+      {current && (
+        <p className="mt-4 text-small text-ink-2 print:hidden">
+          For a documentation system elsewhere:{' '}
+          <a href={`${here}/task.dita`} download>
+            this sheet as a DITA 1.2 task
+          </a>
+        </p>
+      )}
       {mayWithdraw && <WithdrawalDialog act={act} number={number} />}
     </>
   );

@@ -1,7 +1,8 @@
-import { mkdir, readFile, rename, writeFile } from 'node:fs/promises';
+import { mkdir, readFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { app } from '../context';
 import { fileName } from '@/domain/export/slug';
+import { writeWhole } from '../export/wholeFile';
 import { procedureFiles, proceduresDir } from './contentFiles';
 
 export interface Exported {
@@ -32,9 +33,7 @@ export async function exportBook(contentDir: string): Promise<Exported> {
       exported.unchanged.push(name);
       continue;
     }
-    // Renamed into place, so that a file is never left half written.
-    await writeFile(join(folder, `.${name}.part`), bytes);
-    await rename(join(folder, `.${name}.part`), join(folder, name));
+    await writeWhole(folder, name, bytes);
     exported.written.push(name);
   }
   return exported;
