@@ -27,7 +27,7 @@ function MadeOnce({ address }: { address: string }) {
       <div className="mt-3 flex flex-col gap-3">
         <Field label="Feed address" name="address" readOnly value={address} data-copied-from="" className="bg-white" />
         <div className="flex flex-wrap items-center gap-4">
-          <Button data-copy="" data-needs-script="">
+          <Button kind="main" data-copy="" data-needs-script="">
             Copy the address
           </Button>
           <p role="status" data-copy-said="" className="font-medium" />
@@ -39,6 +39,7 @@ function MadeOnce({ address }: { address: string }) {
 
 function Feed({ feed, answer }: { feed: FeedRow; answer?: FeedAnswer | undefined }) {
   const { name, madeAt, shopId } = feed;
+  const make = madeAt === null ? 'Make an address' : 'Replace the address';
   const revoked = answer && !answer.address && !answer.conflict;
   return (
     <form method="post" action="/profile#feed" className="flex flex-col gap-3">
@@ -52,16 +53,11 @@ function Feed({ feed, answer }: { feed: FeedRow; answer?: FeedAnswer | undefined
       {answer?.conflict && <Notice live="alert">{answer.conflict}</Notice>}
       {answer?.address && <MadeOnce address={answer.address} />}
       <div className="flex flex-wrap items-center gap-4">
-        <Button
-          type="submit"
-          name="act"
-          value="make"
-          aria-label={`${madeAt === null ? 'Make' : 'Replace'} the feed address: ${name}`}
-        >
-          {madeAt === null ? 'Make an address' : 'Replace the address'}
+        <Button type="submit" name="act" value="make" aria-label={`${make}: ${name}`}>
+          {make}
         </Button>
         {madeAt !== null && (
-          <Button type="submit" name="act" value="revoke" kind="quiet" aria-label={`Revoke the feed address: ${name}`}>
+          <Button type="submit" name="act" value="revoke" kind="quiet" aria-label={`Revoke: ${name}`}>
             Revoke
           </Button>
         )}
@@ -87,8 +83,8 @@ export function Feeds({ feeds, answer }: { feeds: readonly FeedRow[]; answer?: F
             the address there as a new feed (Atom).
           </p>
           <p>
-            The address works without a sign-in, so it gives no sheet’s text: for that the reader’s link leads here.
-            Signing out everywhere does not end it; revoke it when a device is lost.
+            The address works without a sign-in, so it tells titles and reasons and none of a sheet’s text; the link of
+            each entry opens the sheet here. Signing out everywhere does not end it; revoke it when a device is lost.
           </p>
         </div>
       </div>

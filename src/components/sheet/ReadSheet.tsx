@@ -103,7 +103,7 @@ export function ReadSheet({
         </p>
       )}
       {current && (
-        <p className="mt-4 text-small text-ink-2 print:hidden">
+        <p className="mt-4 text-small text-ink-2 max-sm:px-1 print:hidden">
           For a documentation system elsewhere:{' '}
           <a href={`${here}/task.dita`} download>
             this sheet as a DITA 1.2 task

@@ -41,7 +41,7 @@ export async function listFeeds(actor: Actor): Promise<FeedStanding[]> {
 }
 
 const MEANWHILE =
-  'The address was changed since this page was opened, perhaps by the same button. Nothing was done. Make it anew if you do not have it.';
+  'The address was changed since this page was opened, perhaps by the same button. Nothing was done. If you do not have the present one, make a new one.';
 
 /**
  * Makes the key of a feed, in place of one there may be, and answers it; it is never told again.
