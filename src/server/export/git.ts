@@ -14,10 +14,14 @@ interface Ran {
   err: string;
 }
 
+// Run from a hook of another repository, git would be told by GIT_DIR to write into that one.
+const ownEnvironment = () =>
+  Object.fromEntries(Object.entries(process.env).filter(([name]) => !name.startsWith('GIT_')));
+
 /** Runs git and gives back what it said. Throws `CannotExport` where there is none. */
 export function git(args: readonly string[], { input = '', cwd }: { input?: string; cwd?: string } = {}): Promise<Ran> {
   return new Promise((resolve, reject) => {
-    const child = spawn('git', args, { cwd, stdio: ['pipe', 'pipe', 'pipe'] });
+    const child = spawn('git', args, { cwd, env: ownEnvironment(), stdio: ['pipe', 'pipe', 'pipe'] });
     let out = '';
     let err = '';
     child.stdout.setEncoding('utf8').on('data', (part: string) => (out += part));

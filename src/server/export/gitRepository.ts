@@ -31,6 +31,10 @@ async function refuseChanged(folder: string): Promise<void> {
     throw new CannotExport(`${folder} holds changes that are not committed. Commit or remove them, then export again.`);
 }
 
+/** Somebody who has another branch before them keeps it as it is. */
+const isOnMain = async (folder: string): Promise<boolean> =>
+  (await git(['symbolic-ref', '--quiet', 'HEAD'], { cwd: folder })).out.trim() === 'refs/heads/main';
+
 /**
  * Writes a book with its history into a git repository, or goes on with one that was written before: the same history
  * makes the same commit ids, so what is new is added on top. A branch that went its own way is left as it is.
@@ -55,6 +59,7 @@ export async function writeHistory(
       `${folder} has commits that the book does not know, so its branch was left as it is. Export into a new folder and merge there.`,
     );
   if (code !== 0) throw new CannotExport(`git fast-import failed: ${err.trim()}`);
-  if (!isBare(folder)) await mustGit(['reset', '--quiet', '--hard', 'refs/heads/main'], { cwd: folder });
+  if (!isBare(folder) && (await isOnMain(folder)))
+    await mustGit(['reset', '--quiet', '--hard', 'refs/heads/main'], { cwd: folder });
   return { commits: commits.length, tip: (await mustGit(['rev-parse', 'refs/heads/main'], { cwd: folder })).trim() };
 }

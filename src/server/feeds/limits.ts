@@ -23,15 +23,8 @@ async function count(limiter: RateLimiterMemory, whose: string): Promise<void> {
 /** Counts one fetch of a feed; refuses 429 above the limit. */
 export const countFetch = (feedId: string): Promise<void> => count(fetches, feedId);
 
-/** Counts one miss of a network address; refuses 429 above the limit. */
+/**
+ * Counts one miss of a network address; refuses 429 above the limit. A key that opens a feed is not held up by it: a shop's
+ * readers share an address, and one of them may go on asking with a key that was revoked.
+ */
 export const countMiss = (address: string): Promise<void> => count(misses, address);
-
-/** Whether a network address has missed too often to be looked up again. */
-export async function refuseMisser(address: string): Promise<void> {
-  const state = await misses.get(address);
-  if (state && state.consumedPoints >= MISSES)
-    throw tooManyTries(
-      'The feed was asked for too often. Try again later.',
-      Math.max(1, Math.ceil(state.msBeforeNext / 1000)),
-    );
-}

@@ -179,6 +179,29 @@ describe('the common book as a repository', () => {
     expect(readFileSync(join(folder, SEAL), 'utf8')).toBe('mine');
   });
 
+  test('a branch of somebody else stays as it is, while the book goes on beside it', async () => {
+    await writeHistory(folder);
+    git('checkout', '-q', '-b', 'mine', 'main~2');
+    const mine = git('rev-parse', 'mine');
+    await publishChange('P-0142', '03-01', { base: 'C', source: text({ word: 'new' }), reason: 'More' });
+    const { tip } = await writeHistory(folder);
+    expect(git('rev-parse', 'mine')).toBe(mine);
+    expect(git('symbolic-ref', 'HEAD').trim()).toBe('refs/heads/mine');
+    expect(git('rev-parse', 'main').trim()).toBe(tip);
+    expect(git('status', '--porcelain')).toBe('');
+  });
+
+  test('another repository that the environment names is not written into', async () => {
+    const other = mkdtempSync(join(tmpdir(), 'matchmark-other-'));
+    execFileSync('git', ['-C', other, 'init', '-q']);
+    vi.stubEnv('GIT_DIR', join(other, '.git'));
+    await writeHistory(folder);
+    vi.unstubAllEnvs();
+    expect(execFileSync('git', ['-C', other, 'for-each-ref'], { encoding: 'utf8' })).toBe('');
+    expect(git('for-each-ref', 'refs/heads')).toContain('refs/heads/main');
+    rmSync(other, { recursive: true });
+  });
+
   test('without git it says so', async () => {
     vi.stubEnv('PATH', folder);
     await expect(writeHistory(folder)).rejects.toThrow('git was not found');

@@ -243,5 +243,8 @@ describe('the key is kept from others', () => {
     for (let n = 0; n < MISSES; n += 1) expect((await fetchFeed('x', { address: '203.0.113.2' })).status).toBe(404);
     expect((await fetchFeed('x', { address: '203.0.113.2' })).status).toBe(429);
     expect((await fetchFeed('x', { address: '203.0.113.3' })).status).toBe(404);
+    // A good key works from there all the same.
+    const good = await keyOf(who('pier.editor'), shop('pier'));
+    expect((await fetchFeed(good, { address: '203.0.113.2' })).status).toBe(200);
   });
 });
