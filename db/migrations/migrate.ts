@@ -11,6 +11,7 @@ import { clampOverrides } from './0007-clamp-overrides';
 import { threads } from './0008-threads';
 import { bulletins } from './0009-bulletins';
 import { flags } from './0010-flags';
+import { draftVersions } from './0011-draft-versions';
 import { feedKeys } from './0015-feed-keys';
 import type { Migration } from './migration';
 
@@ -26,6 +27,7 @@ const MIGRATIONS: readonly Migration[] = [
   threads,
   bulletins,
   flags,
+  draftVersions,
   feedKeys,
 ];
 

@@ -5,7 +5,7 @@ import { flag, id, optionalText, text, times } from './columns';
 import { FeedKey } from './feeds';
 import { Membership, Person, Shop, ShopRule } from './people';
 import { AuditEntry, IdempotencyKey, Setting } from './records';
-import { Agreement, ClampOverride, Flag, Remark, Thread, ThreadMessage } from './review';
+import { Agreement, ClampOverride, DraftVersion, Flag, Remark, Thread, ThreadMessage } from './review';
 
 const key = { ...text, primaryKey: true };
 const integer = { type: DataTypes.INTEGER, allowNull: false };
@@ -151,6 +151,26 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
     ThreadMessage: class extends ThreadMessage {}.init(
       own({ id, threadId: text, personId: text, text, mentions: { ...json, defaultValue: [] }, at: text, ...stamps }),
       bind('ThreadMessage', 'threadMessages'),
+    ),
+    DraftVersion: class extends DraftVersion {}.init(
+      own({
+        id,
+        revisionId: text,
+        n: integer,
+        kind: text,
+        ofN: { type: DataTypes.INTEGER, allowNull: true },
+        personId: text,
+        at: text,
+        sittingAt: text,
+        page: optionalText,
+        parentId: optionalText,
+        reason: text,
+        hash: text,
+        packed: { type: DataTypes.BLOB, allowNull: false },
+        what: { ...json, defaultValue: [] },
+        ...stamps,
+      }),
+      bind('DraftVersion', 'draftVersions'),
     ),
     Bulletin: class extends Bulletin {}.init(
       own({

@@ -1,6 +1,7 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import type { Suggestion } from '@/domain/review/suggestions';
 import type { ThreadKind } from '@/domain/review/threads';
+import type { VersionKind } from '@/domain/writing/versions';
 
 /** A reviewer's yes to one exact text on one base. It counts while both are still those of the revision. */
 export class Agreement extends Model<InferAttributes<Agreement>, InferCreationAttributes<Agreement>> {
@@ -98,6 +99,31 @@ export class Flag extends Model<InferAttributes<Flag>, InferCreationAttributes<F
   declare proposalId: CreationOptional<string | null>;
   /** When the person who raised it saw how it ended. */
   declare seenAt: CreationOptional<string | null>;
+  declare createdAt: CreationOptional<string>;
+  declare updatedAt: CreationOptional<string>;
+}
+
+/** A draft as it stood once. Its text is packed against that of the first version. */
+export class DraftVersion extends Model<InferAttributes<DraftVersion>, InferCreationAttributes<DraftVersion>> {
+  declare id: CreationOptional<string>;
+  declare revisionId: string;
+  /** Rises by one from version to version, from 1. */
+  declare n: number;
+  declare kind: VersionKind;
+  /** Of a `restore`, the number of the version that was gone back to. */
+  declare ofN: CreationOptional<number | null>;
+  declare personId: string;
+  declare at: string;
+  declare sittingAt: string;
+  declare page: CreationOptional<string | null>;
+  /** The revision that it stood on; null for a new procedure. */
+  declare parentId: string | null;
+  declare reason: string;
+  /** SHA-256 of the text, hex. */
+  declare hash: string;
+  declare packed: Buffer;
+  /** What differs from the version before it that is still kept, in words. */
+  declare what: CreationOptional<string[]>;
   declare createdAt: CreationOptional<string>;
   declare updatedAt: CreationOptional<string>;
 }

@@ -13,6 +13,7 @@ import * as merge from './schemas/merge';
 import * as proposals from './schemas/proposals';
 import * as search from './schemas/search';
 import * as threads from './schemas/threads';
+import * as versions from './schemas/versions';
 
 /** What each refusal means; the key is the status. */
 const REFUSALS: Record<number, string> = {
@@ -34,8 +35,8 @@ const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
 /** Named schemas: those that `schemas/` exports, by name, then what single calls take and answer beyond them. */
 function names(): Map<z.ZodTypeAny, string> {
   const named = new Map<z.ZodTypeAny, string>();
-  const exported = [book, bulletins, check, common, compare, me, merge, proposals, search, threads].flatMap((area) =>
-    Object.entries(area),
+  const exported = [book, bulletins, check, common, compare, me, merge, proposals, search, threads, versions].flatMap(
+    (area) => Object.entries(area),
   );
   // By code unit, so that the document does not depend on which file holds what.
   exported.sort(([a], [b]) => (a < b ? -1 : 1));

@@ -26,12 +26,15 @@ export function freeSlug(words: string, taken: readonly string[], otherwise: str
 
 const PROVISIONAL = /^new-step(-\d+)?$/;
 
+/** Whether a step has had no title yet, so that its id is still to come. */
+export const isProvisional = (id: string): boolean => PROVISIONAL.test(id);
+
 /** Id of a step that has no title yet. */
 export const provisionalId = (taken: readonly string[]) => freeSlug('new step', taken, 'new-step');
 
 /** The id that a step keeps from its first title on; any other id stays as it is. */
 export function settledId(id: string, title: string, taken: readonly string[]): string {
-  if (!PROVISIONAL.test(id) || !title.trim()) return id;
+  if (!isProvisional(id) || !title.trim()) return id;
   return freeSlug(
     title,
     taken.filter((other) => other !== id),

@@ -5,6 +5,7 @@ import { app } from '../context';
 import { guard, readableProposal } from './guard';
 import { readProposal } from './readProposal';
 import { record } from './record';
+import { keepVersion } from './versions/keep';
 
 /** Why, and where: `step:<id>`, the path of a value, or null for the whole. */
 export interface GivenReason {
@@ -36,6 +37,11 @@ async function giveBack(
       at: now(),
     });
     await db.models.Revision.update({ state, version: proposal.version + 1 }, { where: { id } });
+    if (act === 'return') {
+      const { source, reason: why, parentId } = proposal;
+      const { personId } = actor;
+      await keepVersion(proposal, { revisionId: id, kind: 'return', personId, source, reason: why, parentId });
+    }
     await record(actor, `proposal.${kind}`, proposal, { hash: proposal.hash, reason: reason.trim(), anchor });
   });
   return readProposal(actor, id);

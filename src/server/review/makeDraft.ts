@@ -2,6 +2,7 @@ import type { Actor } from '@/domain/people/may';
 import { app } from '../context';
 import { columnsOf, type Weighed } from './draftText';
 import { record } from './record';
+import { keepVersion } from './versions/keep';
 
 export interface Draft {
   procedureId: string;
@@ -27,6 +28,9 @@ export async function makeDraft(
     reason,
     ...columnsOf(text),
   });
+  const { personId } = actor;
+  const parentId = on?.id ?? null;
+  await keepVersion(null, { revisionId: id, kind: 'start', personId, source: text.source, reason, parentId });
   await record(actor, 'proposal.started', { id, number, shopId }, { base: on?.letter ?? null });
   return id;
 }

@@ -8,6 +8,7 @@ import { guard, readableProposal, staleBase } from './guard';
 import type { Loaded } from './proposals';
 import { readProposal } from './readProposal';
 import { record } from './record';
+import { keepVersion } from './versions/keep';
 
 /** What is left out stays as it is. */
 export interface Saved {
@@ -15,6 +16,8 @@ export interface Saved {
   reason?: string | undefined;
   /** The letter that the text now stands on; it must be the current one. */
   base?: string | undefined;
+  /** Which page writes. */
+  page?: string | undefined;
 }
 
 async function baseIdOf(proposal: Loaded, base: string | undefined): Promise<string | null> {
@@ -59,6 +62,10 @@ export async function saveProposal(
       { ...columnsOf(text), parentId, reason, version: proposal.version + 1 },
       { where: { id } },
     );
+    const kind = parentId === proposal.parentId ? 'write' : 'merge';
+    const { source } = text;
+    const { personId } = actor;
+    await keepVersion(proposal, { revisionId: id, kind, personId, source, reason, parentId, page: change.page });
     await record(actor, 'proposal.saved', proposal, { version: proposal.version + 1, hash: text.hash });
   });
   return { ...(await readProposal(actor, id)), check: checkResult(text.parsed) };

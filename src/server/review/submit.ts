@@ -9,6 +9,7 @@ import { guard, readableProposal } from './guard';
 import type { Loaded } from './proposals';
 import { readProposal } from './readProposal';
 import { record } from './record';
+import { keepVersion } from './versions/keep';
 
 /** The facts as they will be once the text is settled. */
 const settled = ({ facts }: Loaded, text: Weighed): ProposalFacts => ({
@@ -36,6 +37,9 @@ export async function submit(actor: Actor, id: string, version: number | null = 
       { ...columnsOf(text), state, everProposed: true, proposedAt: now(), version: proposal.version + 1 },
       { where: { id } },
     );
+    const { reason, parentId } = proposal;
+    const { personId } = actor;
+    await keepVersion(proposal, { revisionId: id, kind: 'submit', personId, source: text.source, reason, parentId });
     await keepRendering(text.hash, rendered);
     await record(actor, 'proposal.submitted', proposal, {
       base: proposal.base,

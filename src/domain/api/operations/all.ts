@@ -6,6 +6,7 @@ import * as proposals from './proposals';
 import * as search from './search';
 import * as shop from './shop';
 import * as threads from './threads';
+import * as versions from './versions';
 import * as worksheets from './worksheets';
 import type { Operation } from '../operation';
 
@@ -17,6 +18,7 @@ export const OPERATIONS: readonly Operation[] = [
   flags,
   proposals,
   threads,
+  versions,
   search,
   worksheets,
   shop,

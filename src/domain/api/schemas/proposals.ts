@@ -20,6 +20,11 @@ export const SaveProposal = z.object({
   source: z.string().optional(),
   reason: Reason.optional(),
   base: RevisionLetter.optional().describe('Say that the text now stands on this revision'),
+  page: z
+    .string()
+    .max(40)
+    .optional()
+    .describe('Names the page that writes: saves of one page are thinned together as they grow old'),
 });
 
 export const GiveReason = z.object({

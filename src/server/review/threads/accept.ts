@@ -10,6 +10,7 @@ import { conflict } from '../../refusal';
 import { columnsOf, refuseUnreadable, weigh } from '../draftText';
 import { readProposal } from '../readProposal';
 import { record } from '../record';
+import { keepVersion } from '../versions/keep';
 import { insist, insistOnVersion } from './guard';
 import { readableThread } from './read';
 
@@ -39,6 +40,10 @@ export async function acceptSuggestion(actor: Actor, id: string, version: number
       { ...columnsOf(text), version: proposal.version + 1 },
       { where: { id: proposal.id } },
     );
+    const { reason, parentId } = proposal;
+    const { personId } = actor;
+    const { source } = text;
+    await keepVersion(proposal, { revisionId: proposal.id, kind: 'suggestion', personId, source, reason, parentId });
     await db.models.Thread.update(
       { state: 'resolved', resolvedById: actor.personId, resolvedAt: at, acceptedAt: at, version: current.version + 1 },
       { where: { id } },
