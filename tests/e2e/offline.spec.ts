@@ -39,7 +39,7 @@ test('what is typed into a draft without the network is held, and sent once it i
   await desk.ready();
   await page.context().setOffline(true);
   await desk.reason.fill('Typed beside a car park with no signal.');
-  await expect(desk.keeping).toHaveText('Not kept: no network. Your words are held on this device.');
+  await expect(desk.keeping).toHaveText('Kept on this device. Sent when the network is back.');
   await page.getByRole('button', { name: 'Propose', exact: true }).click();
   await expect(page.getByText(/There is no network\. Nothing was sent; your words are held/)).toBeVisible();
   await page.context().setOffline(false);

@@ -26,7 +26,7 @@ test('two tabs on one draft: neither writes over the other, and no word is lost'
 
   await clash.getByRole('button', { name: 'Take what was saved there' }).click();
   await expect(two.reason).toHaveValue('Written in the first tab.');
-  await two.page.getByRole('button', { name: 'Undo' }).click();
+  await two.middle.getByRole('button', { name: 'Undo', exact: true }).click();
   await expect(two.reason).toHaveValue('Written in the second tab.');
   await two.kept();
   await expect.poll(async () => (await readProposal(one.page, id)).reason).toBe('Written in the second tab.');

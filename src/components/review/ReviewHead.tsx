@@ -14,7 +14,7 @@ import type { Trouble } from './useReviewActs';
 import { headingOf, needed, standingWords, type ReviewAct } from './words';
 
 const ByLine = ({ proposal, me }: { proposal: Proposal; me: string }) => {
-  const { author, proposedAt, createdAt, state, number, base, book } = proposal;
+  const { id, author, proposedAt, createdAt, state, number, base, book } = proposal;
   const own = author.id === me;
   return (
     <p className="mt-1.5 text-ink-2">
@@ -27,6 +27,14 @@ const ByLine = ({ proposal, me }: { proposal: Proposal; me: string }) => {
         <a href={`/procedures/${number}`} className="whitespace-nowrap">
           {number}, the sheet
         </a>
+      )}
+      {own && (
+        <>
+          {base !== null && ', '}
+          <a href={`/proposals/${id}/versions`} className="whitespace-nowrap">
+            earlier versions
+          </a>
+        </>
       )}
     </p>
   );

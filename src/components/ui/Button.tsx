@@ -26,7 +26,7 @@ export function Button({
       {...rest}
       type={type}
       className={buttonLook(kind, className)}
-      aria-disabled={pending || undefined}
+      aria-disabled={pending || rest['aria-disabled'] || undefined}
       aria-busy={pending || undefined}
       data-pending={pending ? '' : undefined}
       onClick={(event) => {

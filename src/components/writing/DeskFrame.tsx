@@ -19,6 +19,7 @@ import { StaleBase } from './StaleBase';
 import { TextMode } from './TextMode';
 import type { Checked } from './useCheck';
 import type { Merging } from './useMerging';
+import type { DeskUndo } from './useUndoing';
 import type { Refusal } from './useProposing';
 import type { Standing } from './writingProps';
 
@@ -32,6 +33,9 @@ interface Props {
   pending: boolean;
   undo: { said: string; act: (() => void) | null } | null;
   onUndone: () => void;
+  undoing: DeskUndo;
+  /** Saves what is not saved yet, then goes to the earlier versions. */
+  onVersions: () => void;
   onPropose: () => void;
   merging: Merging;
   /** The text on the screen. */
@@ -112,6 +116,20 @@ export function DeskFrame(props: Props) {
         }}
         onPropose={props.onPropose}
         pending={props.pending}
+        undoing={props.undoing}
+        versions={
+          <a
+            href={`/proposals/${proposal.id}/versions`}
+            className="inline-flex min-h-touch items-center text-small"
+            onClick={(event) => {
+              if (event.metaKey || event.ctrlKey || event.shiftKey) return;
+              event.preventDefault();
+              props.onVersions();
+            }}
+          >
+            Earlier versions
+          </a>
+        }
       />
       <div className="framed-sections writing-notices">
         {state.kind === 'stale' && (

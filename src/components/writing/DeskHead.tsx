@@ -2,6 +2,8 @@ import { useEffect, useState, type ReactNode } from 'react';
 import { Button } from '@/components/ui/Button';
 import type { Keeping } from './keeper';
 import { keepingWords } from './keepingWords';
+import { UndoButtons } from './UndoButtons';
+import type { DeskUndo } from './useUndoing';
 
 /** The time, every ten seconds; null until the page runs in a browser. */
 function useNow(): number | null {
@@ -27,6 +29,11 @@ function Kept({ state, opened }: { state: Keeping; opened: number }) {
       <p className="text-ink-2" aria-hidden="true" data-keeping={state.kind}>
         {keepingWords(state, opened, now === null ? null : Math.max(now, at))}
       </p>
+      {state.kind === 'unreachable' && state.why === 'signed out' && (
+        <a href="/sign-in" target="_blank" className="inline-flex items-center">
+          Sign in in another tab
+        </a>
+      )}
       <p className="sr-only" role="status">
         {state.kind === 'waiting' || state.kind === 'keeping' ? '' : keepingWords(state, opened, null)}
       </p>
@@ -43,6 +50,8 @@ export function DeskHead({
   onChanges,
   onPropose,
   pending,
+  undoing,
+  versions,
   children,
 }: {
   title: string;
@@ -53,14 +62,21 @@ export function DeskHead({
   onChanges: () => void;
   onPropose: () => void;
   pending: boolean;
+  undoing: DeskUndo;
+  /** The way to the earlier versions. */
+  versions: ReactNode;
   children?: ReactNode;
 }) {
   return (
     <header className="writing-head">
-      <div className="flex min-w-0 flex-wrap items-baseline gap-x-5 gap-y-0.5">
+      <div className="min-w-0 flex-1">
         <h1 className="text-[1.25rem] leading-tight lg:text-[1.5rem]">{title}</h1>
-        <Kept state={state} opened={opened} />
-        {children}
+        <div className="flex min-w-0 flex-wrap items-center gap-x-5">
+          <Kept state={state} opened={opened} />
+          {versions}
+          <UndoButtons undoing={undoing} />
+          {children}
+        </div>
       </div>
       <div className="writing-acts">
         <Button aria-pressed={changes} onClick={onChanges}>

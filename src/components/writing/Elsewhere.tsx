@@ -2,7 +2,7 @@ import { Button } from '@/components/ui/Button';
 import type { Proposal } from '@/domain/api/schemas/proposals';
 import { BothTexts } from './BothTexts';
 
-/** The draft was saved in another tab meanwhile: the author says which text goes on, and loses neither. */
+/** The draft was saved in another tab or on another device meanwhile: the author says which text goes on, and loses neither. */
 export function Elsewhere({
   theirs,
   mine,
@@ -16,7 +16,7 @@ export function Elsewhere({
 }) {
   return (
     <section role="alert" className="border-l-[14px] border-ink bg-white px-5 py-4 sm:px-7">
-      <h2 className="text-lead">This draft was changed in another tab</h2>
+      <h2 className="text-lead">This draft was changed in another tab or on another device</h2>
       <p className="mt-1 max-w-prose">
         It was saved there after you opened it here. Nothing was written over: your words are held on this device until
         you say which text goes on.
@@ -27,7 +27,7 @@ export function Elsewhere({
       </div>
       <BothTexts
         texts={[
-          { name: 'Saved in the other tab', text: theirs.source },
+          { name: 'Saved there', text: theirs.source },
           { name: 'On this screen', text: mine },
         ]}
       />

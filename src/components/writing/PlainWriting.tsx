@@ -20,11 +20,14 @@ export function PlainWriting({
   source,
   outcome,
   kept,
+  said,
 }: {
   proposal: Proposal;
   source: string;
   outcome: Outcome;
   kept: boolean;
+  /** What was just done that brought the author here. */
+  said?: string | undefined;
 }) {
   const past = overrideMissing(proposal.failing.filter(({ override }) => override === null));
   const refused = outcome && 'refusal' in outcome ? outcome : null;
@@ -39,8 +42,12 @@ export function PlainWriting({
           Without scripts in the browser the sheet is written as text. Front matter stands between lines of three
           hyphens, then the steps. Keep the draft to have it checked.
         </p>
+        <p className="mt-2">
+          <a href={`/proposals/${proposal.id}/versions`}>Earlier versions</a>
+        </p>
       </div>
       {kept && !refused && <p className="px-5 py-3 font-semibold sm:px-9">Draft kept.</p>}
+      {said && !kept && !refused && <p className="px-5 py-3 font-semibold sm:px-9">{said}</p>}
       {past && (
         <Notice title="Past proof load" className="border-b-0 border-r-0 px-5 py-4 sm:px-9">
           <p>{past}</p>

@@ -8,20 +8,22 @@ import { procedureOf } from '@/domain/writing/procedureOf';
 import { emptyDraft, readDraft, sourceOf } from '@/domain/writing/readDraft';
 import { DeskContext, type Desk } from './desk';
 import { DeskFrame } from './DeskFrame';
-import type { Words } from './heldCopy';
-import { fieldId, placeOfProblem } from './places';
+import type { Words } from '@/domain/writing/textChanges';
+import { fieldId, placeOfChange, placeOfProblem } from './places';
 import { useCheck } from './useCheck';
 import { useKeepUp } from './useKeepUp';
 import { useMerging } from './useMerging';
 import { useKeeping } from './useKeeping';
 import { useChanges } from './useNeeds';
 import { focusSoon, usePlace } from './usePlace';
+import { setAside } from './api';
 import { useProposing } from './useProposing';
+import { useUndoing } from './useUndoing';
 import type { WritingProps } from './writingProps';
 import { REASON_ID } from './ReasonField';
 
 /** One sitting at the desk: the form, what keeps it, what checks it, and what may be done with it. */
-export function Session({ proposal, threads, source, base, current, engines, drawings }: WritingProps) {
+export function Session({ proposal, threads, source, base, current, engines, drawings, said }: WritingProps) {
   const [first] = useState(() => {
     const draft = readDraft(source, proposal.reason);
     return { draft: draft ?? { ...emptyDraft(), reason: proposal.reason }, text: draft ? null : source };
@@ -35,7 +37,9 @@ export function Session({ proposal, threads, source, base, current, engines, dra
   const baseDraft = useMemo(() => (base ? readDraft(base.source) : null), [base]);
   const baseProcedure = useMemo(() => baseDraft && procedureOf(baseDraft), [baseDraft]);
 
-  const [undo, setUndo] = useState<{ said: string; act: (() => void) | null } | null>(null);
+  const [undo, setUndo] = useState<{ said: string; act: (() => void) | null } | null>(
+    said ? { said, act: null } : null,
+  );
   const load = (next: Words) => {
     const read = readDraft(next.source, next.reason);
     if (read) form.reset(read);
@@ -58,6 +62,13 @@ export function Session({ proposal, threads, source, base, current, engines, dra
   const sound = procedure !== null && !checked.problems.some((p) => !/^(steps|intro)/.test(p.path ?? ''));
   const changes = useChanges(words.source, baseProcedure, sound ? procedure : null);
   const { place, choose } = usePlace(draft);
+  const undoing = useUndoing(draft, form.getValues, text === null, (shown, path) => {
+    form.reset(shown, { keepTouched: true });
+    // What was offered to be brought back may stand there again by now.
+    setUndo(null);
+    const there = placeOfChange(path, shown);
+    if (there) choose(there);
+  });
   const [tried, setTried] = useState(false);
   const { pending, refusal, setRefusal, propose, rebase } = useProposing(proposal.id, keeper);
 
@@ -134,6 +145,11 @@ export function Session({ proposal, threads, source, base, current, engines, dra
           pending={pending}
           undo={undo}
           onUndone={() => setUndo(null)}
+          undoing={undoing}
+          onVersions={() => {
+            keeper.change(latest());
+            void keeper.flush().finally(() => location.assign(`/proposals/${proposal.id}/versions`));
+          }}
           onPropose={ask}
           merging={merging}
           mine={words.source}
@@ -141,15 +157,20 @@ export function Session({ proposal, threads, source, base, current, engines, dra
           onText={setText}
           onForm={() => {
             const read = readDraft(text ?? '', draft.reason);
-            if (read) load({ source: text ?? '', reason: draft.reason });
-            else void keeper.flush().then((kept) => kept && location.reload());
+            if (read) {
+              load({ source: text ?? '', reason: draft.reason });
+              // Before, there was nothing in the form that could be shown again.
+              if (first.text !== null) undoing.restart(read);
+            } else void keeper.flush().then((kept) => kept && location.reload());
           }}
           onTheirs={() => {
             const taken = keeper.takeTheirs();
             if (!taken) return;
             load(taken.set);
+            // Where that fails it can still be put back from the line that says so.
+            if (taken.unsaved) void setAside(proposal.id, taken.aside).catch(() => {});
             setUndo({
-              said: 'The text of the other tab is on the screen. Yours is set aside.',
+              said: 'What was saved elsewhere is on the screen. Yours is kept among the earlier versions.',
               act: () => load(taken.aside),
             });
           }}

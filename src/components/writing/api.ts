@@ -4,6 +4,7 @@ import type { CheckResult } from '@/domain/api/schemas/check';
 import type { Proposal, SavedProposal } from '@/domain/api/schemas/proposals';
 import type { CheckRequest } from '@/domain/api/schemas/check';
 import type { SaveProposal } from '@/domain/api/schemas/proposals';
+import type { Words } from '@/domain/writing/textChanges';
 
 export { Refused } from '@/components/api/ask';
 
@@ -18,6 +19,10 @@ export const saveProposal = (
   body: z.input<typeof SaveProposal>,
   keepalive = false,
 ): Promise<SavedProposal> => ask('PUT', `/proposals/${id}`, { body, version, keepalive });
+
+/** Keeps words as a version of the draft without making them the draft's. */
+export const setAside = (id: string, words: Words) =>
+  ask<undefined>('POST', `/proposals/${id}/versions`, { body: words });
 
 export const submitProposal = (id: string, version: number, key: string) =>
   ask<Proposal>('POST', `/proposals/${id}/submit`, { version, key });

@@ -1,8 +1,4 @@
-/** What somebody typed, as it goes to the server. */
-export interface Words {
-  source: string;
-  reason: string;
-}
+import type { Words } from '@/domain/writing/textChanges';
 
 /** Words kept on this device until the server has them. */
 export interface Held extends Words {

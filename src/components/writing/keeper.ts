@@ -1,7 +1,8 @@
 import type { Proposal } from '@/domain/api/schemas/proposals';
 import { sizeProblem } from '@/domain/procedure/bounds';
 import { Refused } from './api';
-import type { Held, Words } from './heldCopy';
+import type { Words } from '@/domain/writing/textChanges';
+import type { Held } from './heldCopy';
 
 /** How it stands with the words on the screen. */
 export type Keeping =
@@ -9,7 +10,7 @@ export type Keeping =
   | { kind: 'waiting' }
   | { kind: 'keeping' }
   /** Tried again by itself; `why` says what stands in the way. */
-  | { kind: 'unreachable'; why: string; onDevice: boolean }
+  | { kind: 'unreachable'; why: 'network' | 'signed out' | 'busy'; onDevice: boolean }
   /** Not tried again before something changes. */
   | { kind: 'refused'; why: string; onDevice: boolean }
   /** Saved elsewhere meanwhile; the author chooses. */
@@ -19,6 +20,8 @@ export interface Surroundings {
   save: (words: Words, version: number, keepalive: boolean) => Promise<{ version: number }>;
   readTheirs: () => Promise<Proposal>;
   held: { write: (held: Held) => boolean; clear: () => void };
+  /** Told of each version that the server has from here, so that other pages of the draft can look. */
+  saved?: (version: number) => void;
   now: () => number;
   /** Calls back after so many milliseconds; returns how to call it off. */
   later: (act: () => void, ms: number) => () => void;
@@ -28,7 +31,7 @@ const PAUSE = 1000;
 const FIRST_RETRY = 3000;
 const LAST_RETRY = 60_000;
 
-const same = (a: Words, b: Words) => a.source === b.source && a.reason === b.reason;
+const same = (a: Readonly<Words>, b: Readonly<Words>) => a.source === b.source && a.reason === b.reason;
 
 /**
  * Keeps a draft: on this device at once, on the server after a pause in typing. One save is under way at a time, each
@@ -134,6 +137,7 @@ export class Keeper {
   private take(sent: Words, version: number) {
     this.version = version;
     this.kept = sent;
+    this.around.saved?.(version);
     if (this.pending()) {
       this.hold();
       this.become({ kind: 'waiting' });
@@ -142,9 +146,9 @@ export class Keeper {
 
   private async failed(error: unknown, sent: Words): Promise<void> {
     const { onDevice } = this;
-    if (!(error instanceof Refused)) return this.tryLater('no network');
-    if (error.status === 401) return this.tryLater('you are signed out. Sign in again in another tab');
-    if (error.status === 429 || error.status >= 500) return this.tryLater('the book is busy');
+    if (!(error instanceof Refused)) return this.tryLater('network');
+    if (error.status === 401) return this.tryLater('signed out');
+    if (error.status === 429 || error.status >= 500) return this.tryLater('busy');
     if (error.status !== 409 || typeof error.problem['version'] !== 'number') {
       this.become({ kind: 'refused', why: error.message, onDevice });
       return;
@@ -152,16 +156,37 @@ export class Keeper {
     try {
       const theirs = await this.around.readTheirs();
       // Our own save arrived, only its answer did not.
-      if (theirs.source === sent.source && theirs.reason === sent.reason) this.take(sent, theirs.version);
-      else if (!theirs.may.edit)
-        this.become({ kind: 'refused', why: theirs.whyNot['edit'] ?? error.message, onDevice });
-      else this.become({ kind: 'stale', theirs });
+      if (same(theirs, sent)) this.take(sent, theirs.version);
+      else this.movedOn(theirs);
     } catch {
-      this.tryLater('no network');
+      this.tryLater('network');
     }
   }
 
-  private tryLater(why: string) {
+  /** The draft is another one on the server than here. */
+  private movedOn(theirs: Proposal) {
+    const { onDevice } = this;
+    this.stopWaiting?.();
+    if (theirs.may.edit) this.become({ kind: 'stale', theirs });
+    else this.become({ kind: 'refused', why: theirs.whyNot['edit'] ?? 'It can no longer be written on', onDevice });
+  }
+
+  /** Looks whether the draft was saved elsewhere, before anything is typed over it. Changes nothing on the server. */
+  async look(): Promise<void> {
+    const { kind } = this.state;
+    if (this.running || (kind !== 'kept' && kind !== 'stale')) return;
+    const { version } = this;
+    const theirs = await this.around.readTheirs().catch(() => null);
+    // What was typed meanwhile is saved anyway, and then told the same.
+    if (!theirs || this.running || this.version !== version || this.state.kind !== kind) return;
+    if (theirs.version <= (this.state.kind === 'stale' ? this.state.theirs.version : version)) return;
+    if (!same(theirs, this.wanted)) return this.movedOn(theirs);
+    this.version = theirs.version;
+    this.kept = this.wanted;
+    this.settle();
+  }
+
+  private tryLater(why: Extract<Keeping, { kind: 'unreachable' }>['why']) {
     this.become({ kind: 'unreachable', why, onDevice: this.onDevice });
     this.schedule(this.retry);
     this.retry = Math.min(this.retry * 2, LAST_RETRY);
@@ -174,15 +199,19 @@ export class Keeper {
     this.become({ kind: 'stale', theirs });
   }
 
-  /** Goes on from what was saved elsewhere; returns the words that are set aside, so that they can be put back. */
-  takeTheirs(): { set: Words; aside: Words } | null {
+  /**
+   * Goes on from what was saved elsewhere; returns the words that are set aside, so that they can be put back, and whether
+   * the server never had them.
+   */
+  takeTheirs(): { set: Words; aside: Words; unsaved: boolean } | null {
     if (this.state.kind !== 'stale') return null;
     const { source, reason, version } = this.state.theirs;
     const aside = this.wanted;
+    const unsaved = this.pending();
     this.version = version;
     this.kept = this.wanted = { source, reason };
     this.settle();
-    return { set: this.kept, aside };
+    return { set: this.kept, aside, unsaved };
   }
 
   /** Saves the words on the screen over what was saved elsewhere. */

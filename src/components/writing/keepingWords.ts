@@ -15,6 +15,20 @@ export function ago(at: number, now: number): string {
 const held = (onDevice: boolean) =>
   onDevice ? 'Your words are held on this device.' : 'This device cannot hold them: keep this page open.';
 
+type Unreachable = Extract<Keeping, { kind: 'unreachable' }>['why'];
+
+/** When words that this device holds go to the server. */
+const SENT: Record<Unreachable, string> = {
+  network: 'Sent when the network is back.',
+  'signed out': 'You are signed out: sent when you sign in again.',
+  busy: 'The book is busy: sent in a moment.',
+};
+const IN_THE_WAY: Record<Unreachable, string> = {
+  network: 'no network',
+  'signed out': 'you are signed out',
+  busy: 'the book is busy',
+};
+
 /**
  * How it stands with the draft, in a sentence.
  *
@@ -29,10 +43,12 @@ export function keepingWords(state: Keeping, opened: number, now: number | null)
     case 'keeping':
       return 'Keeping the draft';
     case 'unreachable':
-      return `Not kept: ${state.why}. ${held(state.onDevice)}`;
+      return state.onDevice
+        ? `Kept on this device. ${SENT[state.why]}`
+        : `Not kept: ${IN_THE_WAY[state.why]}. ${held(false)}`;
     case 'refused':
       return `Not kept: ${state.why.replace(/\.$/, '')}. ${held(state.onDevice)}`;
     case 'stale':
-      return 'Not kept: it was changed in another tab.';
+      return 'Changed elsewhere: say which text goes on.';
   }
 }

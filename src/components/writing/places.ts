@@ -59,5 +59,13 @@ export function placeOfProblem(path: string, draft: Draft): Place {
   return step ? { step: step.id } : 'sheet';
 }
 
+/** The place that shows what a change of the history names by key and id; null where it is nowhere, or everywhere. */
+export function placeOfChange(path: string, draft: Draft): Place | null {
+  const [list = '', key] = path.split('.');
+  if (isList(list)) return { list };
+  if (list === 'steps') return key !== undefined && draft.steps.some(({ id }) => id === key) ? { step: key } : null;
+  return list === 'reason' ? null : 'sheet';
+}
+
 /** Id of the control of a field, so that a problem can lead to it. */
 export const fieldId = (path: string) => `f-${path.replace(/\./g, '-')}`;

@@ -1,5 +1,5 @@
 import { useEffect } from 'react';
-import type { Words } from './heldCopy';
+import type { Words } from '@/domain/writing/textChanges';
 import type { Keeper } from './keeper';
 
 /** Tells the keeper of every change on the screen. */

@@ -1,8 +1,11 @@
 import { useEffect, useRef, useState, useSyncExternalStore } from 'react';
 import type { Proposal } from '@/domain/api/schemas/proposals';
+import type { Words } from '@/domain/writing/textChanges';
 import { readProposal, saveProposal } from './api';
-import { HeldCopy, type Words } from './heldCopy';
+import { HeldCopy } from './heldCopy';
 import { Keeper } from './keeper';
+import { Others } from './others';
+import { useOthers } from './useOthers';
 
 /** As much as a request may carry that outlives its page; browsers refuse more than 64 KB. */
 const KEEPALIVE_LIMIT = 60_000;
@@ -23,22 +26,32 @@ const deviceStore = () => {
  */
 export function useKeeping(proposal: Proposal, first: Words, latest: () => Words, onFound: (words: Words) => void) {
   const { id } = proposal;
-  const [{ keeper, held }] = useState(() => {
-    const held = new HeldCopy(deviceStore(), id, crypto.randomUUID());
+  const [{ keeper, held, others }] = useState(() => {
+    const page = crypto.randomUUID();
+    const held = new HeldCopy(deviceStore(), id, page);
+    const others = new Others(id);
     const keeper = new Keeper(first, proposal.version, {
       save: (words, version, leaving) =>
-        saveProposal(id, version, words, leaving && words.source.length + words.reason.length < KEEPALIVE_LIMIT),
+        saveProposal(
+          id,
+          version,
+          { ...words, page },
+          leaving && words.source.length + words.reason.length < KEEPALIVE_LIMIT,
+        ),
       readTheirs: () => readProposal(id),
       held,
+      saved: others.tell,
       now: () => Date.now(),
       later: (act, ms) => {
         const timer = setTimeout(act, ms);
         return () => clearTimeout(timer);
       },
     });
-    return { keeper, held };
+    return { keeper, held, others };
   });
   const state = useSyncExternalStore(keeper.subscribe, keeper.snapshot, keeper.snapshot);
+
+  useOthers(keeper, others);
 
   const now = useRef({ latest, onFound });
   useEffect(() => {

@@ -41,7 +41,10 @@ export function useProposing(id: string, keeper: Keeper) {
         state.kind === 'refused'
           ? { detail: state.why, errors: [] }
           : state.kind === 'stale'
-            ? { detail: 'First say which text goes on: the draft was changed in another tab.', errors: [] }
+            ? {
+                detail: 'First say which text goes on: the draft was changed in another tab or on another device.',
+                errors: [],
+              }
             : refusalOf(error),
       );
       busy.current = false;

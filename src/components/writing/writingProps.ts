@@ -18,4 +18,6 @@ export interface WritingProps {
   current: Standing | null;
   engines: readonly { key: string; name: string }[];
   drawings: readonly Drawing[];
+  /** What was just done that brought the author here. */
+  said?: string | undefined;
 }

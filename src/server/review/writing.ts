@@ -3,9 +3,9 @@ import type { Proposal } from '@/domain/api/schemas/proposals';
 import { may, type Actor, type Book } from '@/domain/people/may';
 import { BLANK_PROCEDURE } from '@/domain/procedure/blank';
 import { readDraft, sourceOf } from '@/domain/writing/readDraft';
-import { parsedText } from '../book/parsed';
 import { readSheet } from '../book/sheet';
 import { app } from '../context';
+import { formable } from './formable';
 import { readProposal } from './readProposal';
 import { startProcedure } from './startProcedure';
 import { startProposal } from './startProposal';
@@ -24,12 +24,6 @@ export interface Writing {
   base: Standing | null;
   /** What is published now, where that is no longer the base. */
   current: Standing | null;
-}
-
-async function formable(source: string): Promise<string> {
-  if (readDraft(source)) return source;
-  const parsed = await parsedText(source);
-  return parsed.ok ? parsed.canonical : source;
 }
 
 /** All that the author needs to go on writing. Refuses 404 like `readProposal`; whether they may edit stands in `proposal.may`. */

@@ -27,7 +27,7 @@ export class WritingDesk {
   async ready(): Promise<void> {
     await expect(this.page).toHaveURL(/\/proposals\/[0-9a-f-]{36}\/edit/);
     // The time since the draft was kept is told by the script alone.
-    await expect(this.keeping).toHaveText(/^(Draft kept .|Not kept|Keeping)/);
+    await expect(this.keeping).toHaveText(/^(Draft kept .|Not kept|Kept on this device|Keeping|Changed elsewhere)/);
   }
 
   async choose(step: string): Promise<void> {

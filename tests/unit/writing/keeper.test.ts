@@ -65,7 +65,7 @@ describe('keeping a draft', () => {
     const { keeper, held, timers } = bench({ save });
     keeper.change(words('second'));
     expect(await keeper.flush()).toBe(false);
-    expect(keeper.state).toEqual({ kind: 'unreachable', why: 'no network', onDevice: true });
+    expect(keeper.state).toEqual({ kind: 'unreachable', why: 'network', onDevice: true });
     expect([held.clear.mock.calls.length, timers.length, keeper.atRisk]).toEqual([0, 1, true]);
     timers[0]?.();
     await vi.waitFor(() => expect(keeper.state.kind).toBe('kept'));
@@ -86,7 +86,7 @@ describe('keeping a draft', () => {
     const other = bench({ save: vi.fn().mockRejectedValue(refused(409, { version: 9 })) });
     other.keeper.change(words('mine'));
     await other.keeper.flush();
-    expect(other.keeper.takeTheirs()).toEqual({ set: words('theirs'), aside: words('mine') });
+    expect(other.keeper.takeTheirs()).toEqual({ set: words('theirs'), aside: words('mine'), unsaved: true });
     expect([other.keeper.version, other.keeper.state.kind]).toEqual([9, 'kept']);
   });
 
@@ -116,6 +116,54 @@ describe('keeping a draft', () => {
     sentIn.keeper.change(words('mine'));
     await sentIn.keeper.flush();
     expect(sentIn.keeper.state).toMatchObject({ kind: 'refused', why: 'Sent in already.' });
+  });
+
+  it('finds out before anything is typed that the draft was saved elsewhere', async () => {
+    const saved = vi.fn();
+    const { keeper, save } = bench({ saved });
+    await keeper.look();
+    expect(keeper.state).toMatchObject({ kind: 'stale', theirs: { source: 'theirs', version: 9 } });
+    expect(keeper.takeTheirs()).toEqual({ set: words('theirs'), aside: words('first'), unsaved: false });
+    expect([save.mock.calls.length, saved.mock.calls.length]).toEqual([0, 0]);
+    // Its own version is nothing new.
+    await keeper.look();
+    expect(keeper.state.kind).toBe('kept');
+  });
+
+  it('looks again while it waits for an answer, and shows the newest', async () => {
+    let version = 9;
+    const { keeper } = bench({ readTheirs: async () => theirs(`theirs ${version}`, version) });
+    await keeper.look();
+    version = 10;
+    await keeper.look();
+    expect(keeper.state).toMatchObject({ kind: 'stale', theirs: { source: 'theirs 10' } });
+  });
+
+  it('goes on in silence where the same was saved elsewhere, and says what was sent in', async () => {
+    const same = bench({ readTheirs: async () => theirs('first', 7) });
+    await same.keeper.look();
+    expect([same.keeper.state.kind, same.keeper.version]).toEqual(['kept', 7]);
+    const sentIn = bench({ readTheirs: async () => theirs('first, canonical', 4, false) });
+    await sentIn.keeper.look();
+    expect(sentIn.keeper.state).toMatchObject({ kind: 'refused', why: 'Sent in already.' });
+  });
+
+  it('does not look while words wait, nor without a network', async () => {
+    const readTheirs = vi.fn().mockRejectedValue(new TypeError('Failed to fetch'));
+    const { keeper } = bench({ readTheirs });
+    await keeper.look();
+    expect(keeper.state.kind).toBe('kept');
+    keeper.change(words('second'));
+    await keeper.look();
+    expect([readTheirs.mock.calls.length, keeper.state.kind]).toEqual([1, 'waiting']);
+  });
+
+  it('tells other pages of each version that it saved', async () => {
+    const saved = vi.fn();
+    const { keeper } = bench({ saved });
+    keeper.change(words('second'));
+    await keeper.flush();
+    expect(saved).toHaveBeenCalledExactlyOnceWith(4);
   });
 
   it('has nothing to save once everything is typed back', () => {

@@ -3,6 +3,7 @@ import { sittingOf, thinnedOut, type Version, type VersionKind } from '@/domain/
 import { hashOf } from '../../book/parsed';
 import { now } from '../../clock';
 import { app } from '../../context';
+import { formable } from '../formable';
 import type { Loaded } from '../proposals';
 import { pack } from './packed';
 import { versionTexts } from './rows';
@@ -55,11 +56,11 @@ async function tell(id: string, before: readonly Kept[], after: readonly Kept[])
     id,
     changed.flatMap(({ from, to }) => [from.n, to.n]),
   );
-  const words = ({ n, reason }: Kept): Words => ({ source: texts.get(n) ?? '', reason });
+  const words = async ({ n, reason }: Kept): Promise<Words> => ({ source: await formable(texts.get(n) ?? ''), reason });
   const { db } = await app();
   for (const { from, to } of changed)
     await db.models.DraftVersion.update(
-      { what: textChanges(words(from), words(to)) },
+      { what: textChanges(await words(from), await words(to)) },
       { where: { revisionId: id, n: to.n } },
     );
 }
