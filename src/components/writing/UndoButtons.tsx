@@ -5,7 +5,7 @@ const WORDS = { undo: 'Undo', redo: 'Redo' } as const;
 
 /** One step back and one forward, each saying what it would change. They keep the focus when there is nothing left. */
 export const UndoButtons = ({ undoing }: { undoing: DeskUndo }) => (
-  <div className="writing-undo">
+  <div className="writing-undo" hidden={!undoing.active}>
     {(['undo', 'redo'] as const).map((way) => {
       const said = undoing[way];
       const words = said === null ? WORDS[way] : `${WORDS[way]}: ${said}`;

@@ -17,6 +17,8 @@ export function wayOfKey(
 }
 
 export interface DeskUndo extends Undoable {
+  /** False while the sheet is edited as text, which has an undo of its own. */
+  active: boolean;
   step: (way: keyof Undoable) => void;
   /** Said once it was done: "Undone: step 3 deleted". */
   said: string;
@@ -64,7 +66,8 @@ export function useUndoing(
     return () => document.removeEventListener('keydown', press);
   }, []);
   return {
-    ...(active ? offered : { undo: null, redo: null }),
+    ...offered,
+    active,
     step,
     said,
     restart: (next) => undoing.restart(next),

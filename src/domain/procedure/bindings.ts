@@ -22,11 +22,15 @@ export const bindingsIn = (of: string | undefined): Binding[] =>
 /** Keys of the limits without their fields, each once, in the order first named. */
 export const limitKeysIn = (of: string | undefined): string[] => [...new Set(bindingsIn(of).map(({ key }) => key))];
 
+/** Fields of a worksheet that a limit of the sheet can stand for. */
+export const bandsOf = (kind: string): string[] =>
+  Object.entries(worksheetNamed(kind)?.fields ?? {}).flatMap(([name, one]) => (one.type === 'band' ? [name] : []));
+
 /** Why a limit cannot stand for a field of a worksheet, in a sentence; null where it can. */
 export function bindingFault(kind: string, { field, key }: Binding, limit: Limit | undefined): string | null {
   if (field === null) return null;
   const fields = worksheetNamed(kind)?.fields ?? {};
-  const bands = Object.entries(fields).flatMap(([name, one]) => (one.type === 'band' ? [name] : []));
+  const bands = bandsOf(kind);
   const asked = Object.hasOwn(fields, field) ? fields[field] : undefined;
   if (asked?.type !== 'band')
     return `"${field}" is no limit of this worksheet. ${bands.length > 0 ? `It judges ${bands.join(', ')}.` : 'It judges nothing by limits.'}`;

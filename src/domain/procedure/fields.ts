@@ -120,4 +120,5 @@ export const ENTRY_WORDS: Record<ListName, string> = {
   sources: 'Source',
 };
 
-export const isListName = (name: unknown): name is ListName => typeof name === 'string' && name in ENTRY_FIELDS;
+export const isListName = (name: unknown): name is ListName =>
+  typeof name === 'string' && Object.hasOwn(ENTRY_FIELDS, name);
