@@ -3,6 +3,7 @@ import { openDatabase } from '@db/connect';
 import { DEMONSTRATION_PASSWORD } from '@db/seeders/demonstration';
 import { seedNetwork } from '@db/seeders/seedNetwork';
 import { hashPassword } from './accounts/passwords';
+import { checkAtStart } from './audit/atStart';
 import { importContent, type Imported } from './book/importContent';
 import { startParsing } from './book/parsing';
 import { atTime, now } from './clock';
@@ -45,5 +46,13 @@ async function importing({ config, db }: App): Promise<Imported> {
   return config.demo && isNew ? atTime(daysAgo(FIRST_ISSUE), importContent) : importContent();
 }
 
-/** The running application, started by the first caller with the settings of the environment. */
-export const startOnce = (): Promise<App> => openOnce(() => start(readConfig()));
+/**
+ * The running application, started by the first caller with the settings of the environment. The audit trail is checked
+ * from its first entry meanwhile; a trail that does not hold is told, and stops nobody.
+ */
+export const startOnce = (): Promise<App> =>
+  openOnce(async () => {
+    const running = await start(readConfig());
+    void within(running, checkAtStart);
+    return running;
+  });

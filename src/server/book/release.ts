@@ -82,6 +82,7 @@ async function publishFromRelease(
     reason: current ? 'Changed in a later release of the common book.' : 'First issue of the common book.',
     publishedAt: now(),
   });
+  const { hash, reason, publishedAt } = revision;
   await db.models.Procedure.update({ currentRevisionId: revision.id }, { where: { id: procedureId } });
   await tellOfChange({
     procedureId,
@@ -97,7 +98,7 @@ async function publishFromRelease(
     actorId: authorId,
     act: 'revision.published',
     subject: { type: 'revision', id: revision.id },
-    detail: { number, letter, hash: text.hash, supersedes: current?.letter ?? null },
+    detail: { number, letter, hash, supersedes: current?.letter ?? null, author: authorId, reason, publishedAt },
   });
 }
 

@@ -33,11 +33,20 @@ export async function publish(actor: Actor, id: string, version: number | null =
     const letter = nextLetter(proposal.current);
     if (proposal.currentRevisionId)
       await Revision.update({ state: 'superseded' }, { where: { id: proposal.currentRevisionId } });
-    await Revision.update({ state, letter, publishedAt: now(), version: proposal.version + 1 }, { where: { id } });
+    const publishedAt = now();
+    await Revision.update({ state, letter, publishedAt, version: proposal.version + 1 }, { where: { id } });
     await Procedure.update({ currentRevisionId: id }, { where: { id: proposal.procedureId } });
     await tellOfChange({ ...proposal, told, revisionId: id, supersedes: proposal.current, byId: actor.personId });
     await indexRevision(proposal.procedureId, rendered);
-    await record(actor, 'revision.published', proposal, { letter, hash: proposal.hash, supersedes: proposal.current });
+    const { hash, current, authorId: author, reason } = proposal;
+    await record(actor, 'revision.published', proposal, {
+      letter,
+      hash,
+      supersedes: current,
+      author,
+      reason,
+      publishedAt,
+    });
   });
   return readProposal(actor, id);
 }

@@ -1,4 +1,5 @@
 import type { Role } from '@/domain/people/may';
+import { appendAudit } from '@/server/audit/append';
 import { app } from '@/server/context';
 import { headOf } from '@/server/book/head';
 import { hashOf, parsedText } from '@/server/book/parsed';
@@ -90,6 +91,12 @@ export async function publishFirst(number: string, { shopId = null as string | n
     await procedure.update({ currentRevisionId: revision.id });
     await keepRendering(hashOf(canonical), rendered);
     await indexRevision(procedure.id, rendered);
+    await appendAudit({
+      actorId: release.id,
+      act: 'revision.published',
+      subject: { type: 'revision', id: revision.id },
+      detail: { number, letter: 'A', hash: hashOf(canonical), supersedes: null },
+    });
   });
 }
 

@@ -2,7 +2,7 @@ import { beforeEach, describe, expect, test } from 'vitest';
 import type { App } from '@/server/context';
 import { appendAudit } from '@/server/audit/append';
 import { verifyAudit } from '@/server/audit/verify';
-import { openTestBook } from '../setup/database';
+import { openTestBook } from '../../setup/database';
 
 let running: App;
 const add = (act: string) =>
@@ -43,11 +43,32 @@ describe('the audit trail', () => {
     );
   });
 
+  test('is not written over, nor given a number out of turn', async () => {
+    const { db } = running;
+    const [last] = await db.read<{ hash: string }>('SELECT hash FROM auditEntries WHERE seq = 3');
+    const put = (seq: number) =>
+      db.write(() =>
+        db.sequelize.query(
+          `INSERT OR REPLACE INTO auditEntries (seq, at, act, subjectType, subjectId, detail, previousHash, hash)
+           VALUES (${seq}, 'now', 'x', 'book', 'common', '{}', '${last!.hash}', '${'a'.repeat(64)}')`,
+        ),
+      );
+    await expect(put(2)).rejects.toThrow('never written over');
+    await expect(put(9)).rejects.toThrow('takes the number after the last');
+    await put(4);
+  });
+
   test.each([
     ['a changed word', `UPDATE auditEntries SET detail = '{"act":"else"}' WHERE seq = 2`, 2, 'changed after'],
     ['another actor', `UPDATE auditEntries SET actorId = NULL, act = 'six' WHERE seq = 3`, 3, 'changed after'],
     ['an entry taken out', 'DELETE FROM auditEntries WHERE seq = 2', 2, 'missing'],
-    ['a link bent', `UPDATE auditEntries SET previousHash = '${'e'.repeat(64)}' WHERE seq = 2`, 2, 'does not follow'],
+    ['a link bent', `UPDATE auditEntries SET previousHash = '${'e'.repeat(64)}' WHERE seq = 2`, 2, 'changed after'],
+    [
+      'an entry and its hash made anew',
+      `UPDATE auditEntries SET hash = '${'e'.repeat(64)}', detail = '{}' WHERE seq = 1`,
+      1,
+      'changed after',
+    ],
   ])('shows %s', async (_, sql, seq, why) => {
     await tamper(sql);
     expect(await verifyAudit()).toEqual({ ok: false, seq, why: expect.stringContaining(why) });
