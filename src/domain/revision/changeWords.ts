@@ -1,40 +1,57 @@
-import type { Step } from '../procedure/types';
-import type { ListName } from './fields';
-import type { ValueChange } from './types';
-import { LONGEST_VALUE } from './valueRows';
+import type { Procedure, Step } from '../procedure/types';
+import { compareProcedures } from './compare';
+import type { StepChange } from './types';
+import { valueWords } from './valueWords';
 
-const ENTRIES: Record<ListName, string> = {
-  parts: 'part',
-  tools: 'tool',
-  supplies: 'supply',
-  torques: 'torque',
-  limits: 'limit',
-  cautions: 'caution',
-  timers: 'time',
-  figures: 'drawing',
-  sources: 'source',
-};
-
-/** "10 to 12 N·m": a unit that two single numbers share is said once. */
-function span(from: string, to: string): string {
-  const unitOf = (text: string) => /^[±−-]?\d[\d.]*(\D+)$/.exec(text)?.[1];
-  const unit = unitOf(to);
-  return `${unit !== undefined && unit === unitOf(from) ? from.slice(0, -unit.length) : from} to ${to}`;
+/** What a revision changed, a line each: values first, then steps, then the words around them. */
+export interface ChangeWords {
+  lines: ChangeLine[];
+  /** Its gravest effect in words, as the desk told it; null for an ordinary change. */
+  grave: string | null;
 }
 
-/** What became of a value: "Cover bolt torque, 10 to 12 N·m"; of words that are long, only whose they are. */
-export function valueWords({ list, key, path, kind, label, from, to }: ValueChange): string {
-  const whole = list !== 'head' && path === `${list}.${key ?? ''}`;
-  if (whole) return `${label} (${ENTRIES[list]}), ${kind}`;
-  const name = list === 'torques' && path.endsWith('.nm') ? `${label} torque` : label;
-  if (from === null || to === null) return `${name}, ${kind}`;
-  // Engines stand in a text by their keys, which nobody reads.
-  const told = path !== 'engines' && Math.max(from.length, to.length) <= LONGEST_VALUE;
-  return !told ? name : `${name}, ${span(from, to)}`;
+export interface ChangeLine {
+  /** "Cover bolt torque, 10 to 12 N·m" */
+  what: string;
+  /** What it does at the bench: "Clamps 20 % harder"; null where nothing can be said. */
+  effect: string | null;
 }
 
-/** What became of a step; undefined where it was not there before, or is no longer. */
-export function stepWords(before: Step | undefined, revised: Step | undefined): string {
-  const step = `step “${(revised ?? before)?.title ?? ''}”`;
-  return before && revised ? `the words of ${step}` : `${step}, ${revised ? 'added' : 'removed'}`;
+const same = (runs: StepChange['title']) => runs.every(({ kind }) => kind === 'same');
+const titleOf = ({ title, kind }: StepChange) =>
+  title
+    .filter((run) => run.kind !== (kind === 'removed' ? 'added' : 'removed'))
+    .map(({ text }) => text)
+    .join('');
+
+/** How the step itself differs; where only a value that it points at does, the value has been told. */
+function editOf(before: Step | undefined, after: Step | undefined): string[] {
+  if (!before || !after) return [];
+  if (before.title !== after.title || before.body !== after.body) return ['reworded'];
+  return before.cautions.join(' ') === after.cautions.join(' ') ? [] : ['other cautions'];
+}
+
+function stepLine(step: StepChange, before: Step | undefined, after: Step | undefined): ChangeLine[] {
+  const name = `Step “${titleOf(step)}”`;
+  const effect = step.effects.join('. ') || null;
+  if (step.kind === 'added' || step.kind === 'removed') return [{ what: `${name}, ${step.kind}`, effect }];
+  const how = [
+    ...editOf(before, after),
+    ...(step.moved ? [`moved from place ${step.fromNumber ?? '?'} to ${step.toNumber ?? '?'}`] : []),
+  ];
+  return how.length > 0 ? [{ what: `${name}, ${how.join(' and ')}`, effect }] : [];
+}
+
+/** What one text changed of another, as a history tells it. */
+export function changeWords(from: Procedure, to: Procedure): ChangeWords {
+  const { values, steps, intro, severity } = compareProcedures(from, to);
+  const stepOf = (procedure: Procedure, id: string) => procedure.steps.find((step) => step.id === id);
+  return {
+    lines: [
+      ...values.map((change) => ({ what: valueWords(change), effect: change.effect })),
+      ...steps.flatMap((step) => stepLine(step, stepOf(from, step.id), stepOf(to, step.id))),
+      ...(same(intro) ? [] : [{ what: 'The introduction, reworded', effect: null }]),
+    ],
+    grave: severity.level === 'grave' ? (severity.because[0] ?? null) : null,
+  };
 }

@@ -1,7 +1,8 @@
 import type { Procedure, Step } from '../procedure/types';
-import { stepWords, valueWords } from './changeWords';
+import { stepWords } from './stepWords';
 import { compareValues } from './compareValues';
 import type { ValueChange } from './types';
+import { valueWords } from './valueWords';
 
 /** Something that an earlier revision changed and a proposal sets back to what it was before. */
 export interface TakenBack {

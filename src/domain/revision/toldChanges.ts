@@ -1,5 +1,6 @@
 import type { Procedure } from '../procedure/types';
-import { stepWords, valueWords } from './changeWords';
+import { stepWords } from './stepWords';
+import { valueWords } from './valueWords';
 import { differences } from './compare';
 import type { StepDifference } from './compareSteps';
 import { inOrder, SHEET_IS_CRITICAL } from './critical';
