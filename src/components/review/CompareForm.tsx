@@ -11,7 +11,7 @@ export function CompareForm({
   to,
 }: {
   number: string;
-  revisions: readonly RevisionSummary[];
+  revisions: readonly Pick<RevisionSummary, 'letter' | 'publishedAt'>[];
   from: string;
   to: string;
 }) {

@@ -15,8 +15,8 @@ export interface TitleBlockFacts {
   sheetCheck: string;
   /** "23 jobs, 3 shops"; left out until a job card was closed on this revision. */
   proven?: string;
-  /** "Two earlier revisions" and where they are listed. */
-  history?: { href: string; text: string };
+  /** "Two earlier revisions" and where they are listed; and where it stands what each part of the sheet comes from. */
+  history?: { href: string; text: string; origins?: string };
 }
 
 const Fact = ({ name, className, children }: { name: string; className?: string; children: ReactNode }) => (
@@ -48,6 +48,14 @@ export function TitleBlock({ facts }: { facts: TitleBlockFacts }) {
       </Fact>
       <Fact name="History" className="col-span-2 border-r-0">
         {facts.history ? <a href={facts.history.href}>{facts.history.text}</a> : 'None yet'}
+        {facts.history?.origins && (
+          <>
+            ,{' '}
+            <a href={facts.history.origins} className="whitespace-nowrap">
+              where it comes from
+            </a>
+          </>
+        )}
       </Fact>
     </dl>
   );

@@ -16,6 +16,7 @@ export function factsOf({ number, revision, current, earlier, withdrawn }: Sheet
     sheetCheck: revision.sheetCheck,
     history: {
       href: `/procedures/${number}/revisions`,
+      ...(isCurrent && { origins: `/procedures/${number}/origins` }),
       text: earlier > 0 ? counted(earlier, 'earlier revision') : isCurrent ? 'First revision' : 'Every revision',
     },
   };

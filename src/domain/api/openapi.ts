@@ -8,6 +8,7 @@ import * as bulletins from './schemas/bulletins';
 import * as check from './schemas/check';
 import * as common from './schemas/common';
 import * as compare from './schemas/compare';
+import * as history from './schemas/history';
 import * as me from './schemas/me';
 import * as merge from './schemas/merge';
 import * as proposals from './schemas/proposals';
@@ -35,9 +36,8 @@ const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
 /** Named schemas: those that `schemas/` exports, by name, then what single calls take and answer beyond them. */
 function names(): Map<z.ZodTypeAny, string> {
   const named = new Map<z.ZodTypeAny, string>();
-  const exported = [book, bulletins, check, common, compare, me, merge, proposals, search, threads, versions].flatMap(
-    (area) => Object.entries(area),
-  );
+  const areas = [book, bulletins, check, common, compare, history, me, merge, proposals, search, threads, versions];
+  const exported = areas.flatMap((area) => Object.entries(area));
   // By code unit, so that the document does not depend on which file holds what.
   exported.sort(([a], [b]) => (a < b ? -1 : 1));
   for (const [name, schema] of exported) if (schema instanceof z.ZodType) named.set(schema, name);

@@ -46,6 +46,8 @@ export interface Subjects {
   /** Shops with exactly one editor, where a senior technician or the owner gives the second agreement. */
   seeReviewDesk: { shopsWithOneEditor: readonly string[] };
   readAudit: null;
+  /** The entries of one shop. */
+  readShopAudit: { shopId: string };
   flag: { book: Book };
   /** `raiserShops`: shops of the person who raised it; in a shop's own book they do not matter. */
   answerFlag: { book: Book; raisedBy: string; raiserShops: readonly string[] };
@@ -151,6 +153,10 @@ const RULES: { [A in Act]: (actor: Actor, subject: Subjects[A]) => Permission } 
       ? YES
       : no('The review desk is for editors, who answer for what is published.'),
   readAudit: (actor) => (isSteward(actor) ? YES : no('The audit trail is for the network steward.')),
+  readShopAudit: (actor, { shopId }) =>
+    isSteward(actor)
+      ? YES
+      : inShop(actor, shopId, ['owner'], 'The audit trail of a shop is for its owner and the network steward.'),
   flag: (actor, { book }) => (reads(actor, book) ? YES : HIDDEN),
   // A flag on a common sheet is seen by the seniors of the shop where it was raised and by the book's editors, not by other shops.
   answerFlag: (actor, { book, raisedBy, raiserShops }) => {

@@ -2,6 +2,7 @@ import { may, type Actor } from '../people/may';
 import { move } from '../revision/states';
 import type { RevisionState } from '../revision/types';
 import { openTorques, type Override } from './overrides';
+import { unfinishedReason } from './restore';
 import { type Agreement, canPublish, isStale, type ProposalFacts, staleWords, subjectOf } from './rules';
 
 /** What somebody does to a proposal, with what it takes. */
@@ -70,11 +71,14 @@ export function decide(what: ProposalAct, actor: Actor, facts: ProposalFacts): D
   switch (what.act) {
     case 'edit':
       return done();
-    case 'submit':
+    case 'submit': {
       if (!facts.reason.trim()) return refuse('invalid', 'Write the reason for the change before you send it in.');
+      const unfinished = unfinishedReason(facts.reason);
+      if (unfinished) return refuse('invalid', unfinished);
       if (facts.identical)
         return refuse('invalid', 'Nothing differs from the published text yet. Change it, then send it in.');
       return isStale(facts) ? refuse('conflict', staleWords(facts)) : done();
+    }
     case 'return':
     case 'decline':
       return what.reason.trim() ? done() : refuse('invalid', 'Write why, so that the author can act on it.');

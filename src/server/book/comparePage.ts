@@ -1,11 +1,11 @@
 import type { RevisionSummary } from '@/domain/api/schemas/book';
 import type { Actor } from '@/domain/people/may';
 import { compareRevisions, type ComparedRevisions } from './compare';
-import { readHistory } from './history';
+import { readLetters } from './history';
 
 export interface ComparePage {
   /** Every published revision, latest first. */
-  revisions: RevisionSummary[];
+  revisions: Pick<RevisionSummary, 'letter' | 'publishedAt'>[];
   /** The letters that are compared or were asked for. */
   from: string;
   to: string;
@@ -23,7 +23,7 @@ export async function readComparePage(
   number: string,
   asked: { from: string | null; to: string | null },
 ): Promise<ComparePage> {
-  const revisions = await readHistory(actor, number);
+  const revisions = await readLetters(actor, number);
   const letters = revisions.map(({ letter }) => letter);
   const to = (asked.to ?? letters[0] ?? '').trim().toUpperCase();
   const from = (asked.from ?? letters[letters.indexOf(to) + 1] ?? letters.at(-1) ?? '').trim().toUpperCase();

@@ -1,5 +1,6 @@
 import { may, type Actor } from '@/domain/people/may';
 import { decide, type Decision, type ProposalAct } from '@/domain/review/decide';
+import { unfinishedReason } from '@/domain/review/restore';
 import { isStale, staleWords, subjectOf, type ProposalFacts } from '@/domain/review/rules';
 import { conflict, notFound, refusalOf, stale } from '../refusal';
 import { loadProposal, type Loaded } from './proposals';
@@ -45,7 +46,7 @@ export const staleBase = (facts: Pick<ProposalFacts, 'base' | 'current'>, extra:
 /** The field of the call that an `invalid` is about. */
 function missingField(what: ProposalAct, { identical, reason, failing }: ProposalFacts): string {
   if (what.act === 'override') return failing.some(({ key }) => key === what.torque) ? 'reason' : 'torque';
-  return what.act === 'submit' && identical && reason.trim() ? 'source' : 'reason';
+  return what.act === 'submit' && identical && reason.trim() && !unfinishedReason(reason) ? 'source' : 'reason';
 }
 
 /**

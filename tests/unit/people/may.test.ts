@@ -90,6 +90,8 @@ const TABLE: Row[] = [
   row('change the settings of another shop', '......Y.', 'changeShopSettings', { shopId: THERE }),
   row('look after shops and common editors', 'nnnnnnYn', 'manageShops', null),
   row('read the audit trail', 'nnnnnnYn', 'readAudit', null),
+  row('read the audit trail of the shop', 'nnnnY.Y.', 'readShopAudit', { shopId: HERE }),
+  row('read the audit trail of another shop', '......Y.', 'readShopAudit', { shopId: THERE }),
   ...(['withdraw', 'bringBack'] as const).flatMap((act) => [
     row(`${act} a common sheet`, 'nnnnnYn.', act, { book: common }),
     row(`${act} a sheet of the shop`, 'nnnYn...', act, { book: here }),

@@ -1,6 +1,7 @@
 import * as book from './book';
 import * as bulletins from './bulletins';
 import * as flags from './flags';
+import * as history from './history';
 import * as me from './me';
 import * as proposals from './proposals';
 import * as search from './search';
@@ -16,6 +17,7 @@ export const OPERATIONS: readonly Operation[] = [
   book,
   bulletins,
   flags,
+  history,
   proposals,
   threads,
   versions,

@@ -1,0 +1,52 @@
+import { dayOf } from '@/components/ui/day';
+import { Notice } from '@/components/ui/Notice';
+import { faultSentence, TELL_THE_STEWARD, type Fault } from '@/domain/audit/fault';
+import { counted } from './words';
+
+/** How a history stands in the audit trail, as it was looked at while the page was made. */
+export interface TrailWords {
+  /** Entries of the whole trail. */
+  entries: number;
+  /** When it was last followed from its first entry. */
+  wholeAt: string;
+  /** Entries about what is shown. */
+  own: number;
+  /** Texts on the page. */
+  texts: number;
+  faults: readonly Fault[];
+  /** Something else in the trail is wrong. */
+  elsewhere: boolean;
+}
+
+const timeOf = (iso: string) => `${iso.slice(11, 16)} UTC`;
+
+/** Says that a history is whole, or plainly what is wrong with it and what to do. */
+export function Whole({ trail }: { trail: TrailWords }) {
+  const { entries, wholeAt, own, texts, faults, elsewhere } = trail;
+  if (faults.length > 0)
+    return (
+      <div className="border-l-[14px] border-ink bg-white px-5 py-4 sm:px-8" role="alert">
+        <p className="font-serif text-lead font-bold">This history does not hold</p>
+        <ul className="mt-1 flex flex-col gap-1">
+          {faults.map((fault) => (
+            <li key={`${fault.table} ${fault.id} ${fault.differs.join()}`}>{faultSentence(fault, dayOf)}</li>
+          ))}
+        </ul>
+        <p className="mt-1 font-semibold">{TELL_THE_STEWARD}</p>
+      </div>
+    );
+  return (
+    <div className="px-4 py-4 sm:px-9">
+      <p className="max-w-[72ch]">
+        <b className="font-semibold">This history is whole:</b> {counted(entries, 'entry', 'entries')} in the audit
+        trail, each follows from the one before it. {own} of them and {counted(texts, 'text')} on this page were checked
+        just now; the trail from its first entry on {dayOf(wholeAt)}, {timeOf(wholeAt)}.
+      </p>
+      {elsewhere && (
+        <Notice className="mt-3">
+          The trail does not hold in another place, which is not about this sheet. The network’s steward sees it.
+        </Notice>
+      )}
+    </div>
+  );
+}

@@ -1,0 +1,32 @@
+import { capital } from '../wording';
+
+/** What was done, as the trail is read. An act that is not named here is told by its own name. */
+const ACTS: Record<string, string> = {
+  'proposal.started': 'Started a draft',
+  'proposal.saved': 'Saved a draft',
+  'proposal.discarded': 'Threw a draft away',
+  'proposal.submitted': 'Proposed a text',
+  'proposal.returned': 'Returned a proposal',
+  'proposal.declined': 'Declined a proposal',
+  'proposal.agreed': 'Agreed to a proposal',
+  'proposal.overridden': 'Overrode the clamp check',
+  'revision.published': 'Published a revision',
+  'procedure.withdrawn': 'Withdrew a sheet',
+  'procedure.brought-back': 'Brought a sheet back',
+  'bulletin.signed': 'Read and signed a bulletin',
+  'flag.raised': 'Raised a flag',
+  'flag.answered': 'Answered a flag',
+  'flag.taken-up': 'Took a flag up',
+  'flag.withdrawn': 'Took a flag back',
+  'shop.rule-set': 'Set a rule of thumb',
+  'shop.rule-cleared': 'Cleared a rule of thumb',
+  'person.added': 'Added a person',
+  'person.renamed': 'Changed their name',
+};
+
+/** "procedure.put-away" is "Procedure, put away". */
+export const actWords = (act: string): string => ACTS[act] ?? capital(act.replace('.', ', ').replaceAll('-', ' '));
+
+/** The part of an entry's detail that a reader wants: the reason that was given. */
+export const reasonIn = (detail: Record<string, unknown>): string | null =>
+  typeof detail['reason'] === 'string' && detail['reason'].trim() ? detail['reason'].trim() : null;
