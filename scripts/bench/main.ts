@@ -6,6 +6,7 @@ import { build, install, root } from '../steps.mjs';
 import { keystrokes, scores, scriptWeight } from './browser';
 import { writeBook } from './book';
 import { deskGrowth } from './desk';
+import { historyTimes } from './history';
 import { load, references } from './load';
 import { signIn, start } from './product';
 import { compareAndMerge } from './revision';
@@ -152,11 +153,24 @@ async function desk(): Promise<void> {
   atMost(`review desk: 500 waiting proposals against 5 (${times})`, ratio, 2, 'times', 2);
 }
 
+/** A sheet of 200 revisions against one of three: its history is paged, its origins are kept for each revision. */
+async function histories(): Promise<void> {
+  const { history, origins } = await historyTimes(join(work, 'histories'), 4398, READER);
+  atMost('history of 200 revisions against one of 3', history.long.usual / history.short.usual, 3, 'times');
+  atMost('history of 200 revisions, opened', history.long.usual, 100, 'ms');
+  atMost('origins of 200 revisions against those of 3', origins.long.usual / origins.short.usual, 2, 'times');
+  console.error(
+    `The first time ever, in ms: history ${history.short.first.toFixed(0)} and ${history.long.first.toFixed(0)}, ` +
+      `origins ${origins.short.first.toFixed(0)} and ${origins.long.first.toFixed(0)}.`,
+  );
+}
+
 await install();
 if ((await build()) !== 0) process.exit(1);
 texts();
 await desk();
 await demonstrationBook();
+await histories();
 if (large) await largeBook();
 rmSync(work, { recursive: true, force: true });
 

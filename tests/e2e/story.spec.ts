@@ -143,9 +143,9 @@ test('a better way gets from one bench to every bench', async ({ as }) => {
   await test.step('history keeps every text, and two of them are compared', async () => {
     await apprentice.goto('/procedures/P-0142');
     await apprentice.getByRole('link', { name: /earlier revisions/ }).click();
-    const rows = apprentice.getByRole('table', { name: 'Revisions of P-0142' }).locator('tbody tr');
-    await expect(rows).toHaveCount(4);
-    await expect(rows.first()).toContainText(REASON);
+    const events = apprentice.getByRole('list', { name: /^What happened to P-0142/ }).locator('> li');
+    await expect(events).toHaveCount(4);
+    await expect(events.first()).toContainText(REASON);
     await apprentice.getByRole('button', { name: 'Compare these two' }).click();
     await expect(apprentice).toHaveURL(/compare\?(?=.*from=C)(?=.*to=D)/);
     await expect(apprentice.locator('.pane-new')).toContainText(NEW_WORD);

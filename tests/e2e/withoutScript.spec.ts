@@ -48,7 +48,7 @@ test.describe('without JavaScript', () => {
     const page = await as('technician', { javaScriptEnabled: false });
     await page.goto('/procedures/P-0137');
     await page.getByRole('link', { name: /earlier revision/ }).click();
-    await expect(page.getByRole('table', { name: 'Revisions of P-0137' }).locator('tbody tr')).toHaveCount(2);
+    await expect(page.getByRole('list', { name: /^What happened to P-0137/ }).locator('> li')).toHaveCount(2);
     await page.getByRole('button', { name: 'Compare these two' }).click();
     await expect(page).toHaveURL(/\/procedures\/P-0137\/compare\?(?=.*from=A)(?=.*to=B)/);
     await expect(page.locator('ins').first()).toContainText('a thread');

@@ -15,6 +15,9 @@ const ACTS: Record<Event['acts'][number]['what'], string> = {
   published: 'Published',
 };
 
+/** Beside links, so that all that can be done with a revision reads alike. */
+const LIKE_A_LINK = '!border-0 !px-0 !text-base !font-normal !underline';
+
 /** Whoever publishes agrees by that, so an agreement of the same day and person is not told twice. */
 const told = (acts: Event['acts']) =>
   acts.filter(
@@ -103,13 +106,13 @@ export function RevisionEvent({
               Grew from {parent}: see both texts
             </a>
           )}
-          <Button kind="quiet" data-copy={here} data-needs-script="" className="!px-0 font-medium text-base">
+          <Button kind="quiet" data-copy={here} data-needs-script="" className={LIKE_A_LINK}>
             Copy the permanent link
             <span className="sr-only"> of revision {letter}</span>
           </Button>
           {restorable && (
             <form method="post" action={`${here}/restore`}>
-              <Button type="submit" kind="quiet" className="!px-0 font-medium text-base">
+              <Button type="submit" kind="quiet" className={LIKE_A_LINK}>
                 Propose this text again
                 <span className="sr-only">, revision {letter}</span>
               </Button>

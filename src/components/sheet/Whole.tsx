@@ -37,7 +37,7 @@ export function Whole({ trail }: { trail: TrailWords }) {
     );
   return (
     <div className="px-4 py-4 sm:px-9">
-      <p className="max-w-[72ch]">
+      <p className="max-w-[110ch]">
         <b className="font-semibold">This history is whole:</b> {counted(entries, 'entry', 'entries')} in the audit
         trail, each follows from the one before it. {own} of them and {counted(texts, 'text')} on this page were checked
         just now; the trail from its first entry on {dayOf(wholeAt)}, {timeOf(wholeAt)}.

@@ -1,16 +1,21 @@
 /** Buttons that copy an address of this site; without a script they are not offered, and the link beside them is the address. */
 const BACK_AFTER = 2500;
 
+/** Where nothing may be copied, the address itself is shown. */
+const copied = async (address: string): Promise<string> => {
+  try {
+    await navigator.clipboard.writeText(address);
+    return 'Link copied';
+  } catch {
+    return address;
+  }
+};
+
 for (const button of document.querySelectorAll<HTMLButtonElement>('button[data-copy]'))
-  button.addEventListener('click', () => {
+  button.addEventListener('click', async () => {
     const said = document.querySelector('[data-said]');
-    const address = new URL(button.dataset['copy'] ?? '', location.origin).href;
-    const say = (words: string) => {
-      if (said) said.textContent = words;
-      setTimeout(() => said && (said.textContent = ''), BACK_AFTER);
-    };
-    navigator.clipboard?.writeText(address).then(
-      () => say('Link copied'),
-      () => say(address),
-    ) ?? say(address);
+    const words = await copied(new URL(button.dataset['copy'] ?? '', location.origin).href);
+    if (!said) return;
+    said.textContent = words;
+    setTimeout(() => (said.textContent = ''), BACK_AFTER);
   });

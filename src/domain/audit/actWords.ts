@@ -10,6 +10,11 @@ const ACTS: Record<string, string> = {
   'proposal.declined': 'Declined a proposal',
   'proposal.agreed': 'Agreed to a proposal',
   'proposal.overridden': 'Overrode the clamp check',
+  'thread.started': 'Wrote about a proposal',
+  'thread.answered': 'Answered about a proposal',
+  'thread.accepted': 'Took a suggestion up',
+  'thread.resolved': 'Closed a question or remark',
+  'thread.reopened': 'Opened a question or remark again',
   'revision.published': 'Published a revision',
   'procedure.withdrawn': 'Withdrew a sheet',
   'procedure.brought-back': 'Brought a sheet back',
@@ -21,6 +26,8 @@ const ACTS: Record<string, string> = {
   'shop.rule-set': 'Set a rule of thumb',
   'shop.rule-cleared': 'Cleared a rule of thumb',
   'person.added': 'Added a person',
+  'person.password-changed': 'Changed their password',
+  'person.signed-out-everywhere': 'Signed out everywhere',
   'person.renamed': 'Changed their name',
 };
 

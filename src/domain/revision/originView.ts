@@ -47,6 +47,7 @@ const USES: Record<string, readonly (typeof TOLD)[number][]> = {
 
 /** A longer text is a sentence: its field is named and its words are left to the sheet. */
 const LONGEST = 48;
+const SENTENCES = new Set(['harm', 'avoid', 'note', 'summary', 'engines']);
 
 /** Which entries a step puts before somebody: `torques.cover-bolt`. */
 function usedBy(step: Step): Set<string> {
@@ -80,7 +81,15 @@ function originsOf(
     const place = `${prefix}${path}`;
     const letter = origins[place];
     if (letter === undefined) return [];
-    return [{ place, subject, words, text: text.length > LONGEST || text === subject ? null : text, letter }];
+    return [
+      {
+        place,
+        subject,
+        words,
+        text: SENTENCES.has(path) || text.length > LONGEST || text === subject ? null : text,
+        letter,
+      },
+    ];
   });
 }
 
@@ -137,15 +146,40 @@ export interface SinceRevision {
   subjects: { subject: string; origins: Origin[] }[];
 }
 
+/** Fields that say how an entry is kept rather than what hands do; told where they changed after the entry came. */
+const KEPT = new Set(['name', 'unit', 'kind', 'resolution', 'source', 'positions']);
+const fieldOf = ({ place }: Origin) => place.slice(place.lastIndexOf('.') + 1);
+/** What a limit measures is told by its unit. */
+const isKept = (origin: Origin) => KEPT.has(fieldOf(origin)) || /^limits\..*\.quantity$/.test(origin.place);
+
+/** What is worth telling: the value that an entry is about first, and of the rest what somebody works by or what changed later. */
+function worthTelling(origins: readonly Origin[]): Origin[] {
+  const first = new Map<string, string>();
+  for (const { subject, letter } of origins) {
+    const known = first.get(subject);
+    if (known === undefined || compareLetters(letter, known) < 0) first.set(subject, letter);
+  }
+  const told = origins.filter(
+    (origin) => origin.subject === '' || !isKept(origin) || origin.letter !== first.get(origin.subject),
+  );
+  // A tool of which only the name is known is told by its name.
+  const silent = origins.filter(
+    (origin) => fieldOf(origin) === 'name' && !told.some(({ subject }) => subject === origin.subject),
+  );
+  return [...told, ...silent.map((origin) => ({ ...origin, words: '', text: null }))];
+}
+
 export function byRevision(origins: readonly Origin[]): SinceRevision[] {
   const since: SinceRevision[] = [];
-  for (const origin of origins) {
+  for (const origin of worthTelling(origins)) {
     const at = since.find(({ letter }) => letter === origin.letter);
     const revision = at ?? { letter: origin.letter, subjects: [] };
     if (!at) since.push(revision);
     const subject = revision.subjects.find((one) => one.subject === origin.subject);
-    if (subject) subject.origins.push(origin);
-    else revision.subjects.push({ subject: origin.subject, origins: [origin] });
+    if (!subject) revision.subjects.push({ subject: origin.subject, origins: [origin] });
+    // The value that it is about stands ahead of its conditions.
+    else if (origin.words === '') subject.origins.unshift(origin);
+    else subject.origins.push(origin);
   }
-  return since;
+  return since.sort((a, b) => compareLetters(b.letter, a.letter));
 }
