@@ -35,11 +35,11 @@ module.exports = {
       name: 'areas-keep-apart',
       severity: 'error',
       comment:
-        'sheet, threads and worksheets are shown by other areas, api calls the server; all else is private to its area.',
+        'sheet, threads, photos and worksheets are shown by other areas, api calls the server; all else is private to its area.',
       from: { path: '^src/components/([^/]+)/', pathNot: '^src/components/ui/' },
       to: {
         path: '^src/components/',
-        pathNot: ['^src/components/$1/', '^src/components/(ui|api|sheet|threads|worksheets)/'],
+        pathNot: ['^src/components/$1/', '^src/components/(ui|api|sheet|threads|photos|worksheets)/'],
       },
     },
   ],

@@ -29,6 +29,8 @@ export default defineConfig({
       },
     },
     plugins: [parseWorker()],
-    ssr: { external: ['sqlite3', 'sequelize', 'umzug', '@node-rs/argon2'] },
+    ssr: {
+      external: ['sqlite3', 'sequelize', 'umzug', '@node-rs/argon2', 'sharp', 'busboy', 'file-type', 'flydrive'],
+    },
   },
 });

@@ -22,6 +22,24 @@ const origin = new URL(
 const trustedHops = Number(process.env.TRUST_PROXY_HOPS ?? 0);
 /** Largest request body, in bytes. The API refuses earlier, with a problem document of its own. */
 const BODY_LIMIT = 1024 * 1024;
+/** How long a request may take to come in, in milliseconds. */
+const BODY_TIME = 30_000;
+/**
+ * The two addresses that take photos. They read no further than their own limits, which are the same or smaller; a photo that is
+ * sent from a bench with a poor network takes minutes. A length need not be given.
+ */
+const UPLOADS = [
+  { path: /^\/api\/v1\/photos\/?$/, limit: 15 * BODY_LIMIT + 64 * 1024, time: 300_000 },
+  { path: /^\/procedures\/[^/]+\/flag\/?$/, limit: 64 * BODY_LIMIT, time: 600_000 },
+];
+/** What a request may carry, and for how long. */
+const boundsOf = ({ method, url = '', headers }) => {
+  const upload =
+    method === 'POST' &&
+    /^multipart\/form-data/i.test(headers['content-type'] ?? '') &&
+    UPLOADS.find(({ path }) => path.test(url.split('?')[0]));
+  return upload ? { ...upload, upload: true } : { limit: BODY_LIMIT, time: BODY_TIME, upload: false };
+};
 
 const { handler } = await import('./dist/server/entry.mjs');
 
@@ -67,15 +85,27 @@ function settleForwarding(req) {
 const server = createServer((req, res) => {
   if (!knownHosts.has(req.headers.host ?? ''))
     return refuse(res, 421, 'Misdirected request', 'This server does not answer for that host.');
-  if (req.headers['transfer-encoding'])
+  const { limit, time, upload } = boundsOf(req);
+  if (req.headers['transfer-encoding'] && !upload)
     return refuse(res, 411, 'Length required', 'Send the body with a Content-Length.');
-  if (Number(req.headers['content-length'] ?? 0) > BODY_LIMIT)
-    return refuse(res, 413, 'Too large', 'A request may carry 1 MB at most.');
+  if (Number(req.headers['content-length'] ?? 0) > limit)
+    return refuse(
+      res,
+      413,
+      'Too large',
+      upload
+        ? `Photos may have 15 MB each; this form carries more than ${Math.floor(limit / BODY_LIMIT)} MB.`
+        : 'A request may carry 1 MB at most.',
+    );
+  // Whoever sends slower than that holds a place that somebody else could use.
+  const late = setTimeout(() => req.complete || req.destroy(), time);
+  res.once('close', () => clearTimeout(late));
   settleForwarding(req);
   assets(req, res, () => compress(req, res, () => void handler(req, res)));
 });
 
-server.requestTimeout = 30_000;
+server.headersTimeout = BODY_TIME;
+server.requestTimeout = Math.max(...UPLOADS.map(({ time }) => time));
 server.on('error', (error) => {
   console.error(
     error.code === 'EADDRINUSE'

@@ -12,6 +12,7 @@ import { threads } from './0008-threads';
 import { bulletins } from './0009-bulletins';
 import { flags } from './0010-flags';
 import { draftVersions } from './0011-draft-versions';
+import { photos } from './0012-photos';
 import { history } from './0014-history';
 import { feedKeys } from './0015-feed-keys';
 import type { Migration } from './migration';
@@ -29,6 +30,7 @@ const MIGRATIONS: readonly Migration[] = [
   bulletins,
   flags,
   draftVersions,
+  photos,
   history,
   feedKeys,
 ];

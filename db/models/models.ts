@@ -1,4 +1,5 @@
 import { DataTypes, type Sequelize } from 'sequelize';
+import { Attachment } from './attachments';
 import { Procedure, Rendering, Revision, SearchDocument } from './book';
 import { Bulletin, ReadAndSign } from './bulletins';
 import { flag, id, optionalText, text, times } from './columns';
@@ -212,6 +213,27 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
     FeedKey: class extends FeedKey {}.init(
       own({ id, personId: text, shopId: optionalText, keyHash: optionalText, madeAt: text, ...stamps }),
       bind('FeedKey', 'feedKeys'),
+    ),
+    Attachment: class extends Attachment {}.init(
+      own({
+        id,
+        uploaderId: text,
+        subjectType: optionalText,
+        subjectId: optionalText,
+        place: { ...integer, defaultValue: 0 },
+        alt: { ...text, defaultValue: '' },
+        width: integer,
+        height: integer,
+        bytes: integer,
+        hash: text,
+        at: text,
+        attachedAt: optionalText,
+        removedById: optionalText,
+        removedAt: optionalText,
+        removedWhy: optionalText,
+        ...stamps,
+      }),
+      bind('Attachment', 'attachments'),
     ),
     AuditEntry: class extends AuditEntry {}.init(
       own({

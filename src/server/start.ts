@@ -10,6 +10,7 @@ import { atTime, now } from './clock';
 import { readConfig, type Config } from './config';
 import { openOnce, within, type App } from './context';
 import { daysAgo, FIRST_ISSUE, seedHistory } from './demo/seedHistory';
+import { emptyUploads, sweepPhotos } from './photos/sweep';
 import { judgeUnjudged } from './review/judgeUnjudged';
 import { readSecret } from './secret';
 
@@ -26,6 +27,8 @@ export async function start(config: Config): Promise<App> {
   try {
     await within(running, async () => {
       await judgeUnjudged();
+      await emptyUploads();
+      await sweepPhotos();
       const { problems } = await importing(running);
       for (const { file, message } of problems) console.warn(`${file} was left out of the book. ${message}`);
       if (!config.demo) return;

@@ -30,6 +30,7 @@ export const proposal = (change: Partial<Proposal> = {}): Proposal => ({
   agreed: [],
   failing: [],
   remarks: [],
+  photos: [],
   trail: [],
   currentLetter: 'C',
   publishedLetter: null,

@@ -21,6 +21,7 @@ const config: App['config'] = {
   contentDir: resolve('content'),
   origin: null,
   demo: true,
+  bucket: null,
 };
 let running: App;
 const inBook = <T>(fn: () => Promise<T>) => within(running, fn);

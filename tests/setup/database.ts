@@ -50,6 +50,7 @@ export async function openTestBook(config: Partial<App['config']> = {}): Promise
       contentDir: join(dataDir, 'content'),
       origin: null,
       demo: false,
+      bucket: null,
       ...config,
     },
   };

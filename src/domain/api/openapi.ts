@@ -11,6 +11,7 @@ import * as compare from './schemas/compare';
 import * as history from './schemas/history';
 import * as me from './schemas/me';
 import * as merge from './schemas/merge';
+import * as photos from './schemas/photos';
 import * as proposals from './schemas/proposals';
 import * as search from './schemas/search';
 import * as threads from './schemas/threads';
@@ -23,12 +24,12 @@ const REFUSALS: Record<number, string> = {
   403: 'Visible, but not yours to do; or asked for by another site',
   404: 'Unknown, or not yours to see; the two are not told apart',
   409: 'It has changed meanwhile, or its state does not allow this; nothing was lost',
-  413: 'The body is larger than 100 KB',
-  415: 'The body is not declared as JSON',
+  413: 'The body is larger than 100 KB, or a photo than 15 MB',
+  415: 'The body is not of the declared kind, or a file of no kind that is taken',
   422: 'The values are not usable; `errors` says which and why',
   428: 'If-Match is missing',
   429: 'Too many calls; wait as long as Retry-After says',
-  503: 'The storage is busy or full; nothing was half-written',
+  503: 'The storage is busy, full or out of reach; nothing was half-written',
 };
 
 const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
@@ -36,7 +37,21 @@ const isEmpty = (schema: z.ZodTypeAny) => schema instanceof z.ZodUndefined;
 /** Named schemas: those that `schemas/` exports, by name, then what single calls take and answer beyond them. */
 function names(): Map<z.ZodTypeAny, string> {
   const named = new Map<z.ZodTypeAny, string>();
-  const areas = [book, bulletins, check, common, compare, history, me, merge, proposals, search, threads, versions];
+  const areas = [
+    book,
+    bulletins,
+    check,
+    common,
+    compare,
+    history,
+    me,
+    merge,
+    photos,
+    proposals,
+    search,
+    threads,
+    versions,
+  ];
   const exported = areas.flatMap((area) => Object.entries(area));
   // By code unit, so that the document does not depend on which file holds what.
   exported.sort(([a], [b]) => (a < b ? -1 : 1));
@@ -121,6 +136,14 @@ function refusals(op: Operation): number[] {
   ].sort();
 }
 
+/** A file beside its fields. OpenAPI 3.1 describes it by the media types that it may have. */
+const withFile = (file: string, fields: object) => ({
+  'multipart/form-data': {
+    schema: { allOf: [fields, { type: 'object', required: [file], properties: { [file]: {} } }] },
+    encoding: { [file]: { contentType: 'image/jpeg, image/png, image/webp, image/avif' } },
+  },
+});
+
 function describe(op: Operation, refOf: (schema: z.ZodTypeAny) => object) {
   const json = (schema: z.ZodTypeAny) => ({ 'application/json': { schema: refOf(schema) } });
   const success = {
@@ -141,7 +164,14 @@ function describe(op: Operation, refOf: (schema: z.ZodTypeAny) => object) {
     summary: op.summary,
     ...(op.description ? { description: op.description } : {}),
     parameters: parameters(op),
-    ...(isEmpty(op.body) ? {} : { requestBody: { required: true, content: json(op.body) } }),
+    ...(isEmpty(op.body)
+      ? {}
+      : {
+          requestBody: {
+            required: true,
+            content: op.file === null ? json(op.body) : withFile(op.file, refOf(op.body)),
+          },
+        }),
     responses: {
       [op.status]: success,
       ...(op.tag === 'content' ? { 304: { description: 'Nothing changed' } } : {}),

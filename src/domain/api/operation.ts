@@ -25,6 +25,8 @@ export interface Operation<
   query: Query;
   /** `z.undefined()` where the call takes no body. */
   body: Body;
+  /** Name of the field that holds a file, for a call that takes `multipart/form-data`; null for JSON. */
+  file: string | null;
   /** Status of success; 204 answers nothing. */
   status: 200 | 201 | 204;
   reply: Reply;
@@ -43,6 +45,7 @@ interface Given<P, Q, B, R> extends Pick<Operation, 'id' | 'method' | 'path' | '
   params?: P;
   query?: Q;
   body?: B;
+  file?: string;
   status?: Operation['status'];
   reply?: R;
   tag?: Operation['tag'];
@@ -62,6 +65,7 @@ export function operation<
     tag: 'none',
     ifMatch: 'ignored',
     refuses: [],
+    file: null,
     ...given,
     params: given.params ?? (Nothing as unknown as P),
     query: given.query ?? (Nothing as unknown as Q),

@@ -51,6 +51,9 @@ export interface Subjects {
   flag: { book: Book };
   /** `raiserShops`: shops of the person who raised it; in a shop's own book they do not matter. */
   answerFlag: { book: Book; raisedBy: string; raiserShops: readonly string[] };
+  addPhoto: null;
+  /** One that was sent with something in that book. */
+  removePhoto: { book: Book };
   runJobCard: { shopId: string; book: Book };
   signStep: { shopId: string };
   witness: { shopId: string; signedBy: string };
@@ -165,6 +168,13 @@ const RULES: { [A in Act]: (actor: Actor, subject: Subjects[A]) => Permission } 
     if (!edits(actor, book) && !shops.some((shopId) => holds(actor, shopId, SENIORS)))
       return raisedBy === actor.personId ? no('A senior technician, editor or owner answers a flag.') : HIDDEN;
     return raisedBy === actor.personId ? no('You raised this flag, so somebody else must answer it.') : YES;
+  },
+  addPhoto: (actor) =>
+    actor.memberships.length > 0 ? YES : no('Photos are for people who work in a shop of the network.'),
+  removePhoto: (actor, { book }) => {
+    if (!reads(actor, book)) return HIDDEN;
+    const who = book.kind === 'common' ? 'an editor of the common book' : "this shop's editor";
+    return edits(actor, book) ? YES : no(`Only ${who} removes a photo of somebody else.`);
   },
   runJobCard: (actor, { shopId, book }) => (isMember(actor, shopId) && reads(actor, book) ? YES : HIDDEN),
   signStep: (actor, { shopId }) => (isMember(actor, shopId) ? YES : HIDDEN),

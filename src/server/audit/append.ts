@@ -8,7 +8,7 @@ export interface Act {
   /** What was done, in the words of the product: `proposal.submitted`, `revision.published`. */
   act: string;
   subject: {
-    type: 'procedure' | 'revision' | 'person' | 'shop' | 'membership' | 'book' | 'flag' | 'bulletin' | 'feed';
+    type: 'procedure' | 'revision' | 'person' | 'shop' | 'membership' | 'book' | 'flag' | 'bulletin' | 'feed' | 'photo';
     id: string;
   };
   /** The shop it concerns; left out for the common book and the network. */

@@ -6,6 +6,7 @@ import { app } from '../context';
 import { invalid, notFound, refusalOf, stale } from '../refusal';
 import { startProposal } from '../review/startProposal';
 import { loadFlag, type FlagView, type LoadedFlag } from './rows';
+import { shownFlag, type ShownFlag } from './shown';
 
 /** Asks the rules; refuses 404, 403, 422 or 409 with their words. */
 async function allowed(
@@ -41,14 +42,14 @@ async function end(
   });
 }
 
-async function fresh(id: string): Promise<FlagView> {
+async function fresh(actor: Actor, id: string): Promise<ShownFlag> {
   const flag = await loadFlag(id);
   if (!flag) throw notFound();
-  return flag.view;
+  return shownFlag(actor, flag);
 }
 
 /** Answers a flag; whoever raised it is told on their next page. */
-export async function answerFlag(actor: Actor, id: string, text: string): Promise<FlagView> {
+export async function answerFlag(actor: Actor, id: string, text: string): Promise<ShownFlag> {
   if (text.length > LONGEST_FLAG)
     throw invalid('The answer is too long.', [
       { path: 'text', message: `must be ${LONGEST_FLAG} characters or fewer` },
@@ -58,21 +59,21 @@ export async function answerFlag(actor: Actor, id: string, text: string): Promis
     const { flag, state } = await allowed(actor, id, { act: 'answer', text });
     await end(actor, flag, state, { answer: text.trim() });
   });
-  return fresh(id);
+  return fresh(actor, id);
 }
 
 /** Takes back one's own flag. */
-export async function withdrawFlag(actor: Actor, id: string): Promise<FlagView> {
+export async function withdrawFlag(actor: Actor, id: string): Promise<ShownFlag> {
   const { db } = await app();
   await db.write(async () => {
     const { flag, state } = await allowed(actor, id, { act: 'withdraw' });
     await end(actor, flag, state);
   });
-  return fresh(id);
+  return fresh(actor, id);
 }
 
 /** Starts a draft of a change from a flag, with the flag as its reason. */
-export async function takeUpFlag(actor: Actor, id: string): Promise<FlagView> {
+export async function takeUpFlag(actor: Actor, id: string): Promise<ShownFlag> {
   const { flag } = await allowed(actor, id, { act: 'take up' });
   const { db } = await app();
   const [current] = await db.read<{ letter: string; source: string }>(
@@ -89,7 +90,7 @@ export async function takeUpFlag(actor: Actor, id: string): Promise<FlagView> {
     });
     await end(actor, flag, state, { proposalId: draft.id });
   });
-  return fresh(id);
+  return fresh(actor, id);
 }
 
 /** "Lotte Vance at step 8, Pull the cover down. Something is unclear: …" */

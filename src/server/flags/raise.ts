@@ -1,17 +1,21 @@
+import type { PhotoChoice } from '@/domain/api/schemas/photos';
 import { FLAG_KINDS, isFlagKind, LONGEST_FLAG } from '@/domain/flags/flags';
 import { may, type Actor } from '@/domain/people/may';
 import { appendAudit } from '../audit/append';
 import { bookOf, type BookRow } from '../book/columns';
 import { readable } from '../book/locate';
 import { app } from '../context';
+import { attachPhotos } from '../photos/attach';
 import { forbidden, invalid, type RefusalError } from '../refusal';
-import { loadFlag, type FlagView } from './rows';
+import { loadFlag } from './rows';
+import { shownFlag, type ShownFlag } from './shown';
 
 export interface Doubt {
   /** Id of the step; null for the whole sheet. */
   step: string | null;
   kind: string;
   text: string;
+  photos?: readonly PhotoChoice[];
 }
 
 interface Standing extends Pick<BookRow, 'bookKind' | 'shopId'> {
@@ -34,7 +38,7 @@ function problemsOf({ step, kind, text }: Doubt, known: boolean): RefusalError[]
  * Raises a flag on the current sheet. The same words by the same person on the same step while they are open are one flag: a
  * double press is no second doubt. Refuses 404 an unseen sheet, 422 what cannot be.
  */
-export async function raiseFlag(actor: Actor, number: string, doubt: Doubt): Promise<FlagView> {
+export async function raiseFlag(actor: Actor, number: string, doubt: Doubt): Promise<ShownFlag> {
   const { db } = await app();
   const id = await db.write(async () => {
     const [found] = await db.read<Standing>(
@@ -60,16 +64,17 @@ export async function raiseFlag(actor: Actor, number: string, doubt: Doubt): Pro
     const twin = await db.models.Flag.findOne({ where: same });
     if (twin) return twin.id;
     const flag = await db.models.Flag.create({ ...same, revisionId, kind: doubt.kind as keyof typeof FLAG_KINDS });
+    const sent = await attachPhotos(actor, { type: 'flag', id: flag.id }, doubt.photos ?? []);
     await appendAudit({
       actorId: actor.personId,
       act: 'flag.raised',
       subject: { type: 'flag', id: flag.id },
       shopId,
-      detail: { number, step: doubt.step, kind: doubt.kind },
+      detail: { number, step: doubt.step, kind: doubt.kind, ...sent },
     });
     return flag.id;
   });
   const raised = await loadFlag(id);
   if (!raised) throw new Error('The flag that was just raised is not there.');
-  return raised.view;
+  return shownFlag(actor, raised);
 }

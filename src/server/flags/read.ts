@@ -4,12 +4,13 @@ import { inReadableBooks, readableBooks } from '../book/readable';
 import { app } from '../context';
 import { now } from '../clock';
 import { loadFlags, type FlagView } from './rows';
+import { shownFlags, type ShownFlag } from './shown';
 
 export interface FlagLists {
   /** Open ones that I may answer, the oldest first: who asked first waits longest. */
-  toAnswer: FlagView[];
+  toAnswer: ShownFlag[];
   /** All that I raised, newest first. */
-  mine: FlagView[];
+  mine: ShownFlag[];
 }
 
 /** The flags that concern a person. */
@@ -23,11 +24,11 @@ export async function readFlags(actor: Actor): Promise<FlagLists> {
     loadFlags('f.personId = :me', { me: actor.personId }),
   ]);
   return {
-    toAnswer: open
-      .filter(({ facts }) => may(actor, 'answerFlag', facts).ok)
-      .map(({ view }) => view)
-      .reverse(),
-    mine: mine.filter(({ facts }) => readsFlag(actor, facts)).map(({ view }) => view),
+    toAnswer: await shownFlags(actor, open.filter(({ facts }) => may(actor, 'answerFlag', facts).ok).reverse()),
+    mine: await shownFlags(
+      actor,
+      mine.filter(({ facts }) => readsFlag(actor, facts)),
+    ),
   };
 }
 

@@ -5,12 +5,12 @@ import type { Operation } from '@/domain/api/operation';
 import type { Actor } from '@/domain/people/may';
 import { app } from '../context';
 import { asRefusal, forbidden, invalid, notFound, preconditionRequired, signedOut } from '../refusal';
-import { readJson } from './body';
 import { idempotencyKey, once, requestPrint, type Answer } from './idempotency';
 import { comesFromUs } from './origin';
 import { alreadyHeld, expectedVersion } from './preconditions';
 import { problemResponse } from './problem';
 import { countCall } from './rateLimit';
+import { readBody, type SentBody } from './sentBody';
 import { fieldErrors } from './fieldErrors';
 
 /** What a route is given: everything checked against its operation. */
@@ -19,6 +19,8 @@ export interface Call<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
   params: z.output<P>;
   query: z.output<Q>;
   body: z.output<B>;
+  /** Path of the temporary file of a call that takes one, else empty. It is gone once the call is answered. */
+  file: string;
   /** From `If-Match`; null where the caller did not say. */
   version: number | null;
   context: APIContext;
@@ -45,20 +47,36 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
 ): Promise<Outgoing> {
   const { request, url, locals } = context;
   const changing = operation.method !== 'get';
-  const { config, secret } = await app();
+  const { config } = await app();
   if (changing && !comesFromUs(request, [url.origin, ...(config.origin ? [config.origin] : [])]))
     throw forbidden('This call came from a page of another site.');
   const { actor } = locals as { actor?: Actor };
   if (!actor?.personId) throw signedOut();
   await countCall(actor.personId, changing ? 'changing' : 'reading');
+  if (operation.file !== null) await countCall(actor.personId, 'photos');
 
   const params = operation.params.safeParse(context.params);
   if (!params.success) throw notFound();
   const query = operation.query.safeParse(Object.fromEntries(url.searchParams));
   if (!query.success) throw invalid('The address asks for something that cannot be.', fieldErrors(query.error));
-  const takesBody = operation.body._def.typeName !== 'ZodUndefined';
-  const json = takesBody ? await readJson(request) : { text: '', value: undefined };
-  const body = operation.body.safeParse(json.value);
+  const sent = await readBody(operation, request);
+  try {
+    return await settled(operation, act, context, { actor, params: params.data, query: query.data, sent });
+  } finally {
+    await sent.dispose();
+  }
+}
+
+/** The rest, once the body is there. */
+async function settled<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends z.ZodTypeAny, R extends z.ZodTypeAny>(
+  operation: Operation<P, Q, B, R>,
+  act: (call: Call<P, Q, B>) => Promise<Reply<R>>,
+  context: APIContext,
+  { actor, sent, ...given }: { actor: Actor; params: unknown; query: unknown; sent: SentBody },
+): Promise<Outgoing> {
+  const { request, url } = context;
+  const { secret } = await app();
+  const body = operation.body.safeParse(sent.value);
   if (!body.success) throw invalid('Some fields cannot be accepted.', fieldErrors(body.error));
   const version = expectedVersion(request.headers);
   if (operation.ifMatch === 'required' && !request.headers.has('if-match'))
@@ -69,20 +87,21 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
       operation,
       await act({
         actor,
-        params: params.data as z.output<P>,
-        query: query.data as z.output<Q>,
+        params: given.params as z.output<P>,
+        query: given.query as z.output<Q>,
         body: body.data as z.output<B>,
+        file: sent.file,
         version,
         context,
         holds: (tag) => alreadyHeld(request.headers, tag),
       }),
     );
-  const key = changing ? idempotencyKey(request.headers) : null;
+  const key = operation.method === 'get' ? null : idempotencyKey(request.headers);
   if (key === null) return answer();
   const { replayed, ...kept } = await once(
     actor.personId,
     key,
-    requestPrint(secret, request.method, url.pathname, json.text),
+    requestPrint(secret, request.method, url.pathname, sent.print),
     async () => {
       const given = await answer();
       return { ...given, body: String(given.body) };

@@ -1,5 +1,6 @@
 import type { Actor } from '@/domain/people/may';
 import { app } from '../context';
+import { dropEvidence } from '../photos/evidence';
 import { Refusal } from '../refusal';
 import { guard, readableProposal } from './guard';
 import { record } from './record';
@@ -18,6 +19,7 @@ export async function discardDraft(actor: Actor, id: string, version: number | n
         'This proposal was sent in once, so it stays in the record. Leave it, or send it in again.',
       );
     const { Procedure, Revision } = db.models;
+    await dropEvidence(id);
     await Revision.destroy({ where: { id } });
     const { procedureId } = proposal;
     if ((await Revision.count({ where: { procedureId } })) === 0)

@@ -6,6 +6,7 @@ import { standingOverride } from '@/domain/review/overrides';
 import { agreementsNeeded, isStale, standing, tally } from '@/domain/review/rules';
 import { bookRef, personColumn, personRef } from '../book/columns';
 import { app } from '../context';
+import { evidenceOf } from '../photos/evidence';
 import type { Listed, Loaded } from './proposals';
 import { trailOf } from './trail';
 
@@ -87,6 +88,7 @@ export async function proposalOf(actor: Actor, proposal: Loaded): Promise<Propos
   return {
     ...summaryOf(proposal),
     source: proposal.source,
+    photos: await evidenceOf(actor, proposal),
     agreed: proposal.given.map((g) => ({
       person: personOf(g.personId),
       at: g.at,

@@ -3,6 +3,7 @@ import * as bulletins from './bulletins';
 import * as flags from './flags';
 import * as history from './history';
 import * as me from './me';
+import * as photos from './photos';
 import * as proposals from './proposals';
 import * as search from './search';
 import * as shop from './shop';
@@ -21,6 +22,7 @@ export const OPERATIONS: readonly Operation[] = [
   proposals,
   threads,
   versions,
+  photos,
   search,
   worksheets,
   shop,

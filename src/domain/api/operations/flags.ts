@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { FLAG_KINDS, FLAG_STATES, type FlagKind } from '@/domain/flags/flags';
 import { operation } from '../operation';
+import { Photo, PhotoChoices } from '../schemas/photos';
 import { BookRef, Id, PersonRef, ProcedureNumber, RevisionLetter } from '../schemas/common';
 
 const KINDS = Object.keys(FLAG_KINDS) as [FlagKind, ...FlagKind[]];
@@ -17,6 +18,7 @@ const Flag = z.object({
     .describe('null: about the whole sheet; `number` is null where the step is no longer in the current text'),
   kind: z.enum(KINDS),
   text: z.string(),
+  photos: z.array(Photo),
   raisedBy: PersonRef,
   raisedAt: z.string(),
   state: z.enum(FLAG_STATES),
@@ -49,6 +51,7 @@ export const raiseFlag = operation({
       step: z.string().max(80).nullish().describe('Id of the step; left out for the whole sheet'),
       kind: z.enum(KINDS),
       text: z.string(),
+      photos: PhotoChoices,
     })
     .strict(),
   status: 201,

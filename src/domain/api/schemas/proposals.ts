@@ -3,6 +3,7 @@ import { REVISION_STATES } from '../../revision/types';
 import { Id, ProcedureNumber, RevisionLetter, BookRef, PersonRef } from './common';
 import { CheckResult } from './check';
 import { Severity } from './compare';
+import { Photo } from './photos';
 
 /** A text on its way: how it is started, saved and judged. The OpenAPI document is made from these schemas. */
 
@@ -100,6 +101,7 @@ export type ProposalSummary = z.infer<typeof ProposalSummary>;
 
 export const Proposal = ProposalSummary.extend({
   source: z.string(),
+  photos: z.array(Photo).describe('Evidence that belongs to the reason'),
   agreed: z.array(Agreement),
   failing: z
     .array(FailingTorque)

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { Suggestion as ThreadSuggestion } from '../../review/suggestions';
 import { THREAD_KINDS } from '../../review/threads';
 import { Id, PersonRef } from './common';
+import { Photo, PhotoChoices } from './photos';
 
 /** Remarks, questions and suggestions on a proposed text. The OpenAPI document is made from these schemas. */
 
@@ -14,6 +15,7 @@ export const ThreadMessage = z.object({
   at: z.string(),
   text: z.string(),
   mentions: z.array(z.object({ id: z.string(), name: z.string() })).describe('Who is named in it as `@Name`'),
+  photos: z.array(Photo),
 });
 export type ThreadMessage = z.infer<typeof ThreadMessage>;
 
@@ -50,7 +52,8 @@ export const StartThread = z.object({
   quote: z.string().max(2000).optional().describe('For words: those of the step that would be replaced, as they stand'),
   replacement: z.string().trim().max(2000).optional(),
   value: z.string().max(300).optional().describe('For a value: what would be written, a number without its unit'),
+  photos: PhotoChoices,
 });
 export type StartThread = z.infer<typeof StartThread>;
 
-export const WriteMessage = z.object({ text: Written });
+export const WriteMessage = z.object({ text: Written, photos: PhotoChoices });

@@ -34,7 +34,7 @@ interface MessageRow {
 export interface LoadedThread extends Omit<Row, 'suggestion' | 'resolvedBy'> {
   suggestion: Suggestion | null;
   resolvedBy: PersonRef | null;
-  messages: ThreadMessage[];
+  messages: Omit<ThreadMessage, 'photos'>[];
   facts: ThreadFacts;
 }
 

@@ -7,6 +7,7 @@ import { applySuggestion, valueSuggestion, type Suggestion } from '@/domain/revi
 import { mayStart } from '@/domain/review/threads';
 import { now } from '../../clock';
 import { app } from '../../context';
+import { attachPhotos } from '../../photos/attach';
 import { invalid } from '../../refusal';
 import { readableProposal } from '../guard';
 import { record } from '../record';
@@ -15,7 +16,8 @@ import { nameable } from './people';
 import { readThread } from './read';
 import { placeIn, textsOf, type Texts } from './texts';
 
-type Wanted = z.output<typeof StartThread>;
+type Given = z.output<typeof StartThread>;
+type Wanted = Omit<Given, 'photos'> & Partial<Pick<Given, 'photos'>>;
 
 const refuse = (path: string, message: string) => invalid(message, [{ path, message }]);
 
@@ -81,8 +83,10 @@ export async function startThread(
       at,
     });
     const mentions = mentionsIn(text, await nameable(actor, proposal));
-    await db.models.ThreadMessage.create({ threadId: thread.id, personId: actor.personId, text, mentions, at });
-    await record(actor, 'thread.started', proposal, { thread: thread.id, kind, anchor, text, suggestion });
+    const message = { threadId: thread.id, personId: actor.personId, text, mentions, at };
+    const { id: messageId } = await db.models.ThreadMessage.create(message);
+    const sent = await attachPhotos(actor, { type: 'message', id: messageId }, wanted.photos ?? []);
+    await record(actor, 'thread.started', proposal, { thread: thread.id, kind, anchor, text, suggestion, ...sent });
     return thread.id;
   });
   return readThread(actor, threadId);

@@ -6,7 +6,7 @@ import { writeMessage as act } from '@/server/review/threads/turn';
 
 export const { POST, ALL } = route({
   POST: endpoint(writeMessage, async ({ actor, params, body }) => {
-    const thread = await act(actor, params.id, body.text);
+    const thread = await act(actor, params.id, body.text, body.photos);
     return { body: thread, tag: versionTag(thread.version) };
   }),
 });
