@@ -1,8 +1,11 @@
+import type { ReactNode } from 'react';
 import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
 import { Select } from '@/components/ui/Select';
 import { TextArea } from '@/components/ui/TextArea';
+import type { UploadedPhoto } from '@/domain/api/schemas/photos';
 import { FLAG_KINDS, LONGEST_FLAG } from '@/domain/flags/flags';
+import { PlainPhotos } from './PlainPhotos';
 
 export interface FlagTyped {
   step: string;
@@ -16,15 +19,21 @@ export function FlagForm({
   steps,
   typed,
   errors,
+  kept,
+  children,
 }: {
   number: string;
   steps: readonly { id: string; number: number; title: string }[];
   typed: FlagTyped;
   /** What was refused, by field. */
   errors: Readonly<Record<string, string>>;
+  /** Photos that came with a form that was refused. */
+  kept: readonly UploadedPhoto[];
+  /** Chooses photos, where a script runs. */
+  children?: ReactNode;
 }) {
   return (
-    <form method="post" className="px-4 py-6 sm:px-9 sm:py-7">
+    <form method="post" encType="multipart/form-data" className="px-4 py-6 sm:px-9 sm:py-7">
       <div className="flex max-w-[38rem] flex-col gap-5">
         <Select
           name="step"
@@ -53,6 +62,10 @@ export function FlagForm({
           error={errors['text']}
           defaultValue={typed.text}
         />
+        {children}
+        <noscript>
+          <PlainPhotos kept={kept} errors={errors} />
+        </noscript>
         <div className="flex flex-wrap gap-3">
           <Button type="submit" kind="main">
             Raise the flag

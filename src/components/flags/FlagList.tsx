@@ -1,7 +1,9 @@
 import type { ReactNode } from 'react';
+import { PhotoStrip } from '@/components/photos/PhotoStrip';
 import { Button } from '@/components/ui/Button';
 import { TextArea } from '@/components/ui/TextArea';
 import { dayOf } from '@/components/ui/day';
+import type { Photo } from '@/domain/api/schemas/photos';
 import { FLAG_KINDS, LONGEST_FLAG, type FlagKind, type FlagState } from '@/domain/flags/flags';
 
 /** A flag as the page is given it. */
@@ -13,6 +15,7 @@ export interface ShownFlag {
   step: { id: string; title: string; number: number | null } | null;
   kind: FlagKind;
   text: string;
+  photos: Photo[];
   raisedBy: { name: string; shop: string | null };
   raisedAt: string;
   state: FlagState;
@@ -64,6 +67,7 @@ function Flag({ flag, children }: { flag: ShownFlag; children: ReactNode }) {
         , revision {flag.letter}
       </h3>
       <p className="mt-2 max-w-prose whitespace-pre-line font-serif text-prose">{flag.text}</p>
+      <PhotoStrip photos={flag.photos} plain />
       <p className="mt-1 text-ink-2">
         {flag.raisedBy.name}
         {flag.raisedBy.shop && `, ${flag.raisedBy.shop}`}, {dayOf(flag.raisedAt)}

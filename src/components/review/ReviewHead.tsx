@@ -2,6 +2,7 @@ import type { ReactNode } from 'react';
 import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
 import { dayOf } from '@/components/ui/day';
+import { PhotoStrip } from '@/components/photos/PhotoStrip';
 import { OpenQuestions } from '@/components/threads/OpenQuestions';
 import { Notice } from '@/components/ui/Notice';
 import { Status } from '@/components/ui/Status';
@@ -124,6 +125,7 @@ export function ReviewHead({
       </div>
       <div className="min-w-0">
         <p className="review-why">{proposal.reason || 'No reason given yet.'}</p>
+        <PhotoStrip photos={proposal.photos} />
         {standing && <p className="mt-3 max-w-prose font-medium">{standing}</p>}
         {refused && <p className="mt-3 font-medium">{proposal.whyNot['agree']}</p>}
       </div>

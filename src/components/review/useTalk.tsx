@@ -1,4 +1,5 @@
 import { useState, type ReactNode } from 'react';
+import { usePhotoPicks } from '@/components/photos/usePhotoPicks';
 import { StartLinks } from '@/components/threads/StartLinks';
 import { StartPanel } from '@/components/threads/StartPanel';
 import { blankStart, type StartWritten } from '@/components/threads/startWritten';
@@ -42,6 +43,7 @@ export function useTalk(
   const [written, setWritten] = useState<StartWritten | null>(came.start);
   const [firstTrouble, setFirstTrouble] = useState(came.trouble);
   const trouble = talk.trouble ?? firstTrouble;
+  const picks = usePhotoPicks();
   const { list } = talk;
   const names = new Map(placesOf(pairs, values).map(({ value, label }) => [value, label]));
   const placeName = (at: string) =>
@@ -65,6 +67,7 @@ export function useTalk(
   const close = () => {
     const link = written && `start-${written.kind}-${written.at}`;
     setWritten(null);
+    picks.drop();
     requestAnimationFrame(() => link && document.getElementById(link)?.focus());
   };
   const after = (thread: Thread | null, done?: () => void) => {
@@ -72,6 +75,17 @@ export function useTalk(
     done?.();
     requestAnimationFrame(() => document.getElementById(`thread-${thread.id}`)?.focus());
     return thread;
+  };
+
+  const send = (wanted: StartWritten) => {
+    const photos = picks.ready();
+    if (!photos) return;
+    void talk.start(wanted, proposal.version, photos).then((thread) =>
+      after(thread, () => {
+        setWritten(null);
+        picks.clear();
+      }),
+    );
   };
 
   const row = written && values.find(({ path }) => path === written.at);
@@ -83,13 +97,14 @@ export function useTalk(
       now={row?.to ?? null}
       fields={(row && fieldsAt(row)) ?? []}
       people={list.people}
+      picks={picks}
       trouble={trouble?.thread === null ? trouble : null}
       pending={talk.pending === 'new'}
       version={proposal.version}
       href={`/proposals/${proposal.id}`}
       onWrite={setWritten}
       onCancel={close}
-      onSend={() => void talk.start(written, proposal.version).then((thread) => after(thread, () => setWritten(null)))}
+      onSend={() => send(written)}
     />
   );
   const panelAt = written && (written.at === '' || standsAt(written.at, shown) === null ? '' : written.at);
@@ -103,7 +118,7 @@ export function useTalk(
       version={proposal.version}
       pending={talk.pending === thread.id}
       trouble={trouble?.thread === thread.id ? trouble : null}
-      onReply={async (text) => after(await talk.reply(thread.id, text))}
+      onReply={async (text, photos) => after(await talk.reply(thread.id, text, photos))}
       onTurn={(act) => {
         if (act !== 'accept') void talk.turn(thread, act).then((done) => after(done));
         // The text that is compared below changes with it.

@@ -1,8 +1,9 @@
+import { PhotoStrip } from '@/components/photos/PhotoStrip';
 import { dayOf } from '@/components/ui/day';
 import type { ThreadMessage } from '@/domain/api/schemas/threads';
 import { runsOf } from '@/domain/review/mentions';
 
-/** One message: who, when, and the words with the people that it names marked. */
+/** One message: who, when, the words with the people that it names marked, and its photos. */
 export const MessageText = ({ message }: { message: ThreadMessage }) => (
   <>
     <p className="thread-by">
@@ -19,5 +20,6 @@ export const MessageText = ({ message }: { message: ThreadMessage }) => (
         ),
       )}
     </p>
+    <PhotoStrip photos={message.photos} />
   </>
 );

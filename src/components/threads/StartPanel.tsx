@@ -1,4 +1,6 @@
 import { useEffect, useRef } from 'react';
+import { PhotoPicker } from '@/components/photos/PhotoPicker';
+import type { PhotoPicks } from '@/components/photos/usePhotoPicks';
 import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
 import { Field } from '@/components/ui/Field';
@@ -20,6 +22,7 @@ interface Props {
   /** Fields to choose from, where the place is an entry as a whole. */
   fields: readonly { value: string; label: string }[];
   people: readonly PersonRef[];
+  picks: PhotoPicks;
   trouble: ThreadTrouble | null;
   pending: boolean;
   version: number;
@@ -37,7 +40,19 @@ const TEXTS = {
 } as const;
 
 /** Asks for what a thread begins with, in place, so that the text stays in sight. */
-export function StartPanel({ written, place, now, fields, people, trouble, pending, version, href, ...on }: Props) {
+export function StartPanel({
+  written,
+  place,
+  now,
+  fields,
+  people,
+  picks,
+  trouble,
+  pending,
+  version,
+  href,
+  ...on
+}: Props) {
   const form = useRef<HTMLFormElement>(null);
   const { kind, at } = written;
   const words = kind === 'suggestion' && at.startsWith('step:');
@@ -67,6 +82,7 @@ export function StartPanel({ written, place, now, fields, people, trouble, pendi
       noValidate
       aria-labelledby="start-title"
       className="heavy-edge act-panel"
+      {...picks.catching}
       onSubmit={(event) => {
         event.preventDefault();
         on.onSend();
@@ -143,6 +159,9 @@ export function StartPanel({ written, place, now, fields, people, trouble, pendi
           error={trouble?.field === 'text' ? trouble.detail : undefined}
           onChange={(text) => on.onWrite({ ...written, text })}
         />
+      </div>
+      <div className="max-w-[46rem]">
+        <PhotoPicker picks={picks} />
       </div>
       <div className="flex flex-wrap gap-2.5">
         <Button type="submit" kind="main" pending={pending} pendingText={START_WORDS[kind].doing}>

@@ -1,4 +1,6 @@
 import { useState, type FormEvent } from 'react';
+import { PhotoPicker } from '@/components/photos/PhotoPicker';
+import { usePhotoPicks } from '@/components/photos/usePhotoPicks';
 import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
 import type { PersonRef } from '@/domain/api/schemas/common';
@@ -6,7 +8,7 @@ import type { Thread } from '@/domain/api/schemas/threads';
 import { MessageBox } from './MessageBox';
 import { MessageText } from './MessageText';
 import { Suggested } from './Suggested';
-import type { ThreadTrouble } from './useThreads';
+import type { SentPhoto, ThreadTrouble } from './useThreads';
 import { aboutOf, standingOf } from './words';
 
 export interface NoteProps {
@@ -18,7 +20,7 @@ export interface NoteProps {
   trouble: ThreadTrouble | null;
   /** Version of the proposal, for a form without a script. */
   version: number;
-  onReply: (text: string) => Promise<unknown>;
+  onReply: (text: string, photos: SentPhoto[]) => Promise<unknown>;
   onTurn: (act: 'resolve' | 'reopen' | 'accept') => void;
 }
 
@@ -35,20 +37,24 @@ function Reply({ thread, people, pending, trouble, version, onReply }: NoteProps
   const typed = trouble?.typed?.text ?? '';
   const [open, setOpen] = useState(typed !== '' || trouble?.field === 'text');
   const [text, setText] = useState(typed);
+  const picks = usePhotoPicks();
   const asked = thread.kind === 'question' && thread.state === 'open';
   const word = asked ? 'Answer' : 'Reply';
   const send = (event: FormEvent) => {
     event.preventDefault();
-    void onReply(text).then((done) => {
+    const photos = picks.ready();
+    if (!photos) return;
+    void onReply(text, photos).then((done) => {
       if (!done) return;
       setText('');
+      picks.clear();
       setOpen(false);
     });
   };
   return (
     <details className="thread-reply" open={open} onToggle={(event) => setOpen(event.currentTarget.open)}>
       <summary>{word}</summary>
-      <form method="post" onSubmit={send} className="flex flex-col gap-2.5">
+      <form method="post" onSubmit={send} className="flex flex-col gap-2.5" {...picks.catching}>
         <Hidden act="reply" thread={thread} version={version} />
         <MessageBox
           label={`Your ${word.toLowerCase()}`}
@@ -57,6 +63,7 @@ function Reply({ thread, people, pending, trouble, version, onReply }: NoteProps
           error={trouble?.field === 'text' ? trouble.detail : undefined}
           onChange={setText}
         />
+        <PhotoPicker picks={picks} />
         <div>
           <Button type="submit" kind="main" pending={pending} pendingText="Sending">
             {word}

@@ -27,6 +27,9 @@ export function threadTrouble(thread: string | null, error: unknown): ThreadTrou
   return { thread, field: first?.path ?? null, detail: first?.message ?? error.problem.detail };
 }
 
+/** An uploaded photo that goes along, with what it shows. */
+export type SentPhoto = { id: string; alt: string };
+
 interface Wanted {
   thread: string | null;
   path: string;
@@ -78,7 +81,7 @@ export function useThreads(proposalId: string, first: ThreadList) {
     setTrouble,
     /** The thread that is being worked on; "new" for one that is being started. */
     pending: isPending ? (variables.thread ?? 'new') : null,
-    start: ({ kind, at, text, quote, replacement, value, field }: StartWritten, version: number) =>
+    start: ({ kind, at, text, quote, replacement, value, field }: StartWritten, version: number, photos: SentPhoto[]) =>
       run({
         thread: null,
         path: `${path}/threads`,
@@ -87,10 +90,12 @@ export function useThreads(proposalId: string, first: ThreadList) {
           kind,
           anchor: (field ? `${at}.${field}` : at) || null,
           text,
+          photos,
           ...(kind === 'suggestion' ? (at.startsWith('step:') ? { quote, replacement } : { value }) : {}),
         },
       }),
-    reply: (thread: string, text: string) => run({ thread, path: `/threads/${thread}/messages`, body: { text } }),
+    reply: (thread: string, text: string, photos: SentPhoto[]) =>
+      run({ thread, path: `/threads/${thread}/messages`, body: { text, photos } }),
     turn: ({ id, version }: Pick<Thread, 'id' | 'version'>, act: 'resolve' | 'reopen') =>
       run({ thread: id, path: `/threads/${id}/${act}`, version }),
     /** `version` is that of the proposal, whose text changes. */

@@ -1,4 +1,5 @@
 import { useEffect, useId, useRef, type ReactNode } from 'react';
+import { classes } from './classes';
 
 /**
  * A question that must be answered before going on, in the browser's own dialog: focus stays inside, Escape
@@ -9,6 +10,7 @@ export function Dialog({
   title,
   onClose,
   actions,
+  wide = false,
   children,
 }: {
   open: boolean;
@@ -16,6 +18,8 @@ export function Dialog({
   onClose: () => void;
   /** Buttons, the main one first. */
   actions: ReactNode;
+  /** For a picture: as wide as the window allows. */
+  wide?: boolean;
   children: ReactNode;
 }) {
   const dialog = useRef<HTMLDialogElement>(null);
@@ -30,7 +34,10 @@ export function Dialog({
       ref={dialog}
       aria-labelledby={titleId}
       onClose={onClose}
-      className="frame m-auto max-h-[90vh] w-[min(36rem,calc(100vw-2rem))] overflow-auto p-0 text-ink backdrop:bg-pit/60"
+      className={classes(
+        'frame m-auto overflow-auto p-0 text-ink backdrop:bg-pit/60',
+        wide ? 'max-h-[96vh] w-fit max-w-[calc(100vw-1rem)]' : 'max-h-[90vh] w-[min(36rem,calc(100vw-2rem))]',
+      )}
     >
       <div className="framed-sections">
         <h2 id={titleId} className="px-6 py-4 text-lead">

@@ -13,6 +13,7 @@ import { MergeScreen } from './MergeScreen';
 import { Middle } from './Middle';
 import { Rail, RailChoice } from './Rail';
 import { MIDDLE } from './RailLink';
+import { Evidence } from './Evidence';
 import { ReasonField } from './ReasonField';
 import { Returned } from './Returned';
 import { StaleBase } from './StaleBase';
@@ -174,6 +175,7 @@ export function DeskFrame(props: Props) {
               <ReasonField
                 error={tried && !draft.reason.trim() ? 'Write why it is better: the editor decides by it.' : undefined}
               />
+              <Evidence proposalId={proposal.id} photos={proposal.photos} />
             </div>
             <p className="mt-4 text-small text-ink-2">
               {text === null ? (

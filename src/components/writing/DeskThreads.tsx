@@ -13,7 +13,7 @@ function Note({ thread, apart = false }: { thread: Thread; apart?: boolean }) {
       version={0}
       pending={talk.pending === thread.id}
       trouble={talk.trouble?.thread === thread.id ? talk.trouble : null}
-      onReply={(text) => talk.reply(thread.id, text)}
+      onReply={(text, photos) => talk.reply(thread.id, text, photos)}
       onTurn={(act) => (act === 'accept' ? talk.accept(thread) : void talk.turn(thread, act))}
     />
   );

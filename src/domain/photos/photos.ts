@@ -15,6 +15,8 @@ export const MOST_PHOTOS = 6;
 export const FORM_PHOTOS = 3;
 /** Characters of the words that say what a photo shows. */
 export const LONGEST_ALT = 200;
+/** Characters of the reason why one was removed. */
+export const LONGEST_REASON = 500;
 /** Photos that one person may have uploaded and not yet sent with anything. */
 export const MOST_WAITING = 40;
 /** One that was never sent is thrown away after a day. */

@@ -1,4 +1,5 @@
 import type { Procedure } from '@/domain/procedure/types';
+import type { Drawing } from './drawings';
 import { entry, stepIndex } from './editing';
 
 /** How a chapter ends; days are counted back from the day the demonstration is made. */
@@ -15,8 +16,10 @@ interface Told {
   sentIn: number;
   reason: string;
   end: End;
+  /** What stands at the reason in place of a photo. */
+  shows?: Drawing;
   /** What was asked about it while it waits. */
-  asked?: { by: string; anchor: string; question: string };
+  asked?: { by: string; anchor: string; question: string; shows?: Drawing };
 }
 
 /** A change to a sheet of the common book. */
@@ -130,11 +133,13 @@ export const CHAPTERS: readonly Chapter[] = [
       });
     },
     end: { waiting: true, agreed: ['editor2@halden.example'] },
+    shows: 'washers',
     asked: {
       by: 'editor2@halden.example',
       anchor: 'step:rear-corner',
       question:
         'Only the two rear bolts, or once round all eleven? If a washer sets at the back, I would expect it at the front too. What did your five show?',
+      shows: 'corner',
     },
   },
   {

@@ -16,6 +16,8 @@ import { startProcedure } from '../review/startProcedure';
 import { startProposal } from '../review/startProposal';
 import { submit } from '../review/submit';
 import { startThread } from '../review/threads/start';
+import { addEvidence } from '../photos/evidence';
+import { uploadDrawing } from './drawings';
 import { CHAPTERS, type Change, type Chapter, type NewSheet } from './chapters';
 
 const DONE = 'demonstration.history';
@@ -68,6 +70,11 @@ async function actOut(chapter: Chapter): Promise<void> {
   }
   const author = await person(chapter.author);
   const draft = await atTime(daysAgo(chapter.sentIn), () => start(chapter, author));
+  const { shows } = chapter;
+  if (shows)
+    await atTime(daysAgo(chapter.sentIn), async () =>
+      addEvidence(author, draft.id, [(await uploadDrawing(author, shows)).id]),
+    );
   const { id } = await atTime(daysAgo(chapter.sentIn, 1), () => submit(author, draft.id));
   const { end } = chapter;
   const agreed = 'returned' in end ? [] : (end.agreed ?? []);
@@ -75,13 +82,15 @@ async function actOut(chapter: Chapter): Promise<void> {
   for (const email of agreed) await atTime(daysAgo(day, 2), async () => agree(await person(email), id));
   const { asked } = chapter;
   if (asked)
-    await atTime(daysAgo(day, 4), async () =>
-      startThread(await person(asked.by), id, {
+    await atTime(daysAgo(day, 4), async () => {
+      const asker = await person(asked.by);
+      await startThread(asker, id, {
         kind: 'question',
         anchor: asked.anchor,
         text: asked.question,
-      }),
-    );
+        photos: asked.shows ? [(await uploadDrawing(asker, asked.shows)).id] : [],
+      });
+    });
   if ('published' in end) await atTime(daysAgo(day, 3), async () => publish(await person(end.by), id));
   if ('returned' in end)
     await atTime(daysAgo(day, 3), async () =>

@@ -1,5 +1,7 @@
+import type { UploadedPhoto } from '@/domain/api/schemas/photos';
 import type { Actor } from '@/domain/people/may';
 import { textOf } from '../http/form';
+import { readPhotoForm } from '../photos/form';
 import { Refusal } from '../refusal';
 import { answerFlag, takeUpFlag, withdrawFlag } from './act';
 import { raiseFlag, type Doubt } from './raise';
@@ -10,20 +12,32 @@ export type Raised =
       done: false;
       status: number;
       typed: { step: string; kind: string; text: string };
+      /** Kept, so that they need not be chosen again. */
+      photos: UploadedPhoto[];
       errors: Record<string, string>;
     };
 
-/** Raises a flag from the page's form; what is refused comes back with what was typed. */
-export async function raiseFromForm(actor: Actor, number: string, form: FormData): Promise<Raised> {
+/** Raises a flag from the page's form; what is refused comes back with what was typed and the photos that were taken. */
+export async function raiseFromForm(actor: Actor, number: string, request: Request): Promise<Raised> {
+  const { form, photos, errors: untaken } = await readPhotoForm(actor, request);
   const typed = { step: textOf(form, 'step'), kind: textOf(form, 'kind'), text: textOf(form, 'text') };
-  const doubt: Doubt = { ...typed, step: typed.step || null };
+  const refused = (status: number, errors: Record<string, string>): Raised => ({
+    done: false,
+    status,
+    typed,
+    photos,
+    errors,
+  });
+  if (Object.keys(untaken).length > 0) return refused(422, untaken);
+  const doubt: Doubt = { ...typed, step: typed.step || null, photos: photos.map(({ id, alt }) => ({ id, alt })) };
   try {
     await raiseFlag(actor, number, doubt);
     return { done: true };
   } catch (error) {
     if (!(error instanceof Refusal) || !error.errors) throw error;
-    const errors = Object.fromEntries(error.errors.map(({ path, message }) => [path, message]));
-    return { done: false, status: error.status, typed, errors };
+    const named = (path: string) =>
+      path.replace(/^photos\.(\d+)$/, (_, i: string) => `alt-${photos[Number(i)]?.id ?? ''}`);
+    return refused(error.status, Object.fromEntries(error.errors.map(({ path, message }) => [named(path), message])));
   }
 }
 

@@ -1,11 +1,12 @@
 import type { Photo } from '@/domain/api/schemas/photos';
 import type { Actor } from '@/domain/people/may';
-import { mayRemove } from '@/domain/photos/photos';
+import { LONGEST_REASON, mayRemove } from '@/domain/photos/photos';
 import { appendAudit } from '../audit/append';
 import { now } from '../clock';
 import { app } from '../context';
 import { deleteFiles } from '../files/store';
-import { conflict, invalid, notFound, refusalOf } from '../refusal';
+import { textOf } from '../http/form';
+import { conflict, invalid, notFound, Refusal, refusalOf } from '../refusal';
 import { photosOf } from './load';
 import { fullKey, smallKey } from './row';
 import { readPhoto, seenPhoto } from './seen';
@@ -60,4 +61,18 @@ export async function removePhoto(actor: Actor, id: string, reason: string): Pro
     await deleteFiles([fullKey(id), smallKey(id)]);
   });
   return (await readPhoto(actor, id)).photo;
+}
+
+export type Removal = { done: true } | { done: false; status: number; reason: string; error: string };
+
+/** Removes a photo from the page's form. What can be put right comes back with what was typed; other refusals are thrown. */
+export async function removeFromForm(actor: Actor, id: string, form: FormData): Promise<Removal> {
+  const reason = textOf(form, 'reason').slice(0, LONGEST_REASON);
+  try {
+    await removePhoto(actor, id, reason);
+    return { done: true };
+  } catch (error) {
+    if (!(error instanceof Refusal) || ![409, 422, 503].includes(error.status)) throw error;
+    return { done: false, status: error.status, reason, error: error.detail };
+  }
 }

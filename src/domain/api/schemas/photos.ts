@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { LONGEST_ALT, MOST_PHOTOS } from '../../photos/photos';
+import { LONGEST_ALT, LONGEST_REASON, MOST_PHOTOS } from '../../photos/photos';
 import { Id, PersonRef } from './common';
 
 /** Photos as evidence. The OpenAPI document is made from these schemas. */
@@ -55,5 +55,9 @@ export const PhotoList = z.object({ items: z.array(Photo) });
 export type PhotoList = z.infer<typeof PhotoList>;
 
 export const RemovePhoto = z.object({
-  reason: z.string().trim().min(1, 'Write why, for whoever saw it').max(500, 'must be 500 characters or fewer'),
+  reason: z
+    .string()
+    .trim()
+    .min(1, 'Write why, for whoever saw it')
+    .max(LONGEST_REASON, `must be ${LONGEST_REASON} characters or fewer`),
 });
