@@ -5,7 +5,7 @@ import { Select } from '@/components/ui/Select';
 import { TextArea } from '@/components/ui/TextArea';
 import type { UploadedPhoto } from '@/domain/api/schemas/photos';
 import { FLAG_KINDS, LONGEST_FLAG } from '@/domain/flags/flags';
-import { PlainPhotos } from './PlainPhotos';
+import { PlainPhotos, type OpenField } from './PlainPhotos';
 
 export interface FlagTyped {
   step: string;
@@ -20,6 +20,7 @@ export function FlagForm({
   typed,
   errors,
   kept,
+  open,
   children,
 }: {
   number: string;
@@ -29,6 +30,8 @@ export function FlagForm({
   errors: Readonly<Record<string, string>>;
   /** Photos that came with a form that was refused. */
   kept: readonly UploadedPhoto[];
+  /** Words that came without their photo, and why it was not taken. */
+  open: readonly OpenField[];
   /** Chooses photos, where a script runs. */
   children?: ReactNode;
 }) {
@@ -64,7 +67,7 @@ export function FlagForm({
         />
         {children}
         <noscript>
-          <PlainPhotos kept={kept} errors={errors} />
+          <PlainPhotos kept={kept} open={open} errors={errors} />
         </noscript>
         <div className="flex flex-wrap gap-3">
           <Button type="submit" kind="main">

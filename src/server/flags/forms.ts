@@ -1,7 +1,7 @@
 import type { UploadedPhoto } from '@/domain/api/schemas/photos';
 import type { Actor } from '@/domain/people/may';
 import { textOf } from '../http/form';
-import { readPhotoForm } from '../photos/form';
+import { readPhotoForm, type PhotoForm } from '../photos/form';
 import { Refusal } from '../refusal';
 import { answerFlag, takeUpFlag, withdrawFlag } from './act';
 import { raiseFlag, type Doubt } from './raise';
@@ -14,21 +14,23 @@ export type Raised =
       typed: { step: string; kind: string; text: string };
       /** Kept, so that they need not be chosen again. */
       photos: UploadedPhoto[];
+      open: PhotoForm['open'];
       errors: Record<string, string>;
     };
 
 /** Raises a flag from the page's form; what is refused comes back with what was typed and the photos that were taken. */
 export async function raiseFromForm(actor: Actor, number: string, request: Request): Promise<Raised> {
-  const { form, photos, errors: untaken } = await readPhotoForm(actor, request);
+  const { form, photos, open } = await readPhotoForm(actor, request);
   const typed = { step: textOf(form, 'step'), kind: textOf(form, 'kind'), text: textOf(form, 'text') };
   const refused = (status: number, errors: Record<string, string>): Raised => ({
     done: false,
     status,
     typed,
     photos,
+    open,
     errors,
   });
-  if (Object.keys(untaken).length > 0) return refused(422, untaken);
+  if (open.some(({ error }) => error !== null)) return refused(422, {});
   const doubt: Doubt = { ...typed, step: typed.step || null, photos: photos.map(({ id, alt }) => ({ id, alt })) };
   try {
     await raiseFlag(actor, number, doubt);

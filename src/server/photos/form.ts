@@ -3,7 +3,7 @@ import type { Actor } from '@/domain/people/may';
 import { FORM_PHOTOS, LARGEST_FILE, LONGEST_ALT } from '@/domain/photos/photos';
 import { app } from '../context';
 import { readForm, textOf } from '../http/form';
-import { isMultipart, receive, type Sent } from '../http/multipart';
+import { isMultipart, receive, type Sent, type SentFile } from '../http/multipart';
 import { countCall } from '../http/rateLimit';
 import { Refusal } from '../refusal';
 import { photoOf } from './row';
@@ -17,11 +17,9 @@ export interface PhotoForm {
   form: FormData;
   /** Those that came with it and those that it brought back from an earlier try, with the words of the form. */
   photos: UploadedPhoto[];
-  /** Why a file was not taken, by the name of its field. */
-  errors: Record<string, string>;
+  /** Fields for a file that hold something still: words without their file, and what became of a file that was not taken. */
+  open: { words: string; error: string | null }[];
 }
-
-const fileField = (i: number) => `file-${i}`;
 
 /** Photos that the form names, because they were uploaded before: mine, and not sent yet. */
 async function broughtBack(actor: Actor, form: FormData): Promise<UploadedPhoto[]> {
@@ -39,33 +37,37 @@ async function broughtBack(actor: Actor, form: FormData): Promise<UploadedPhoto[
   });
 }
 
+/** Why a file was not taken; null where it was, and is now among `photos`. */
+async function take(actor: Actor, file: SentFile, words: string, photos: UploadedPhoto[]): Promise<string | null> {
+  if (file.overlong) return 'This photo has more than 15 MB. Choose a smaller one.';
+  try {
+    await countCall(actor.personId, 'photos');
+    photos.push(await uploadPhoto(actor, file.path, words));
+    return null;
+  } catch (error) {
+    if (!(error instanceof Refusal) || error.status === 403) throw error;
+    if (error.status >= 500) console.error('A photo of a form was not kept.', error.cause ?? error);
+    return error.detail;
+  }
+}
+
 async function taken(actor: Actor, { fields, files }: Sent): Promise<Omit<PhotoForm, 'form'>> {
   const photos = await broughtBack(actor, fields);
-  const errors: Record<string, string> = {};
+  const open: PhotoForm['open'] = [];
   for (let i = 0; i < FORM_PHOTOS; i++) {
-    const file = files.find(({ field }) => field === fileField(i));
-    if (!file) continue;
-    if (file.overlong) {
-      errors[fileField(i)] = 'This photo has more than 15 MB. Choose a smaller one.';
-      continue;
-    }
-    try {
-      await countCall(actor.personId, 'photos');
-      photos.push(await uploadPhoto(actor, file.path, textOf(fields, `file-alt-${i}`).trim().slice(0, LONGEST_ALT)));
-    } catch (error) {
-      if (!(error instanceof Refusal) || error.status === 403) throw error;
-      if (error.status >= 500) console.error('A photo of a form was not kept.', error.cause ?? error);
-      errors[fileField(i)] = error.detail;
-    }
+    const words = textOf(fields, `file-alt-${i}`).trim().slice(0, LONGEST_ALT);
+    const file = files.find(({ field, bytes }) => field === `file-${i}` && bytes > 0);
+    const error = file ? await take(actor, file, words, photos) : null;
+    if (error !== null || (!file && words)) open.push({ words, error });
   }
-  return { photos, errors };
+  return { photos, open };
 }
 
 /** Reads a form that may carry photos; one without files is read as any other. Refuses 400 and 413 like `receive`. */
 export async function readPhotoForm(actor: Actor, request: Request): Promise<PhotoForm> {
   if (!isMultipart(request)) {
     const form = await readForm(request);
-    return { form, photos: await broughtBack(actor, form), errors: {} };
+    return { form, photos: await broughtBack(actor, form), open: [] };
   }
   const sent = await receive(request, {
     files: FORM_PHOTOS,
