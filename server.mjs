@@ -98,8 +98,10 @@ const server = createServer((req, res) => {
         : 'A request may carry 1 MB at most.',
     );
   // Whoever sends slower than that holds a place that somebody else could use.
-  const late = setTimeout(() => req.complete || req.destroy(), time);
-  res.once('close', () => clearTimeout(late));
+  if (req.headers['content-length'] || upload) {
+    const late = setTimeout(() => req.complete || req.destroy(), time);
+    res.once('close', () => clearTimeout(late));
+  }
   settleForwarding(req);
   assets(req, res, () => compress(req, res, () => void handler(req, res)));
 });

@@ -8,7 +8,7 @@ test('an apprentice flags a step; a senior technician answers; the apprentice is
   await apprentice.goto('/procedures/P-0181');
   await apprentice.getByRole('link', { name: 'Flag step 2' }).click();
   await expect(apprentice.getByLabel('Where')).toHaveValue(/.+/);
-  await apprentice.getByLabel('What').selectOption('Something is unclear');
+  await apprentice.getByLabel('What', { exact: true }).selectOption('Something is unclear');
   await apprentice.getByLabel('In your words').fill('Which way round does the key go?');
   await apprentice.getByRole('button', { name: 'Raise the flag' }).click();
   await expect(apprentice.getByText('Flag raised. You are told when it is answered.')).toBeVisible();

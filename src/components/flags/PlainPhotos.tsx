@@ -52,7 +52,7 @@ export function PlainPhotos({
           />
           <Field
             name={`file-alt-${i}`}
-            label="What it shows"
+            label={`What photo ${kept.length + i + 1} shows`}
             maxLength={LONGEST_ALT}
             defaultValue={open[i]?.words ?? ''}
           />

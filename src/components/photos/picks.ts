@@ -30,7 +30,10 @@ export const uploadedPick = (photo: UploadedPhoto): Pick => ({
   alt: photo.alt,
 });
 
-const megabytes = (bytes: number) => (bytes / (1024 * 1024)).toFixed(bytes < 10 * 1024 * 1024 ? 1 : 0);
+const MEGABYTE = 1024 * 1024;
+/** "18 MB"; rounded down, what is just over the limit would read as if it were allowed. */
+const sizeOf = (bytes: number) =>
+  bytes < LARGEST_FILE + MEGABYTE ? 'more than 15 MB' : `${Math.floor(bytes / MEGABYTE)} MB`;
 
 /** A file as it was chosen. One that is too large is not sent at all: it would only be refused at the end. */
 export function chosenPick(file: File, key: string): Pick {
@@ -40,7 +43,7 @@ export function chosenPick(file: File, key: string): Pick {
     name: file.name,
     state: over ? 'failed' : 'waiting',
     share: 0,
-    error: over ? `It has ${megabytes(file.size)} MB; 15 MB is the most. Choose a smaller one.` : null,
+    error: over ? `It has ${sizeOf(file.size)}; 15 MB is the most. Choose a smaller one.` : null,
     again: false,
     photo: null,
     alt: '',
