@@ -36,6 +36,8 @@ function given() {
   }
 }
 
+const counted = (n: number, one: string): string => `${n} ${one}${n === 1 ? '' : 's'}`;
+
 async function main(): Promise<void> {
   const { values, positionals } = given();
   const { git, dita, shop, emails } = values;
@@ -49,9 +51,9 @@ async function main(): Promise<void> {
     const shopId = shop === undefined ? null : await shopBySlug(shop);
     if (git !== undefined) {
       const { commits, tip } = await writeHistory(resolve(git), { shopId, realAddresses: emails });
-      console.log(`${commits} commits, the last ${tip}`);
+      console.log(`${counted(commits, 'commit')}, the last ${tip}`);
     }
-    if (dita !== undefined) console.log(`${(await writeTasks(resolve(dita), shopId)).length} tasks`);
+    if (dita !== undefined) console.log(counted((await writeTasks(resolve(dita), shopId)).length, 'task'));
     if (git === undefined && dita === undefined) {
       const { written, unchanged } = await exportBook(positionals[0] ? resolve(positionals[0]) : config.contentDir);
       for (const name of written) console.log(`wrote ${name}`);

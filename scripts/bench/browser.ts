@@ -30,7 +30,9 @@ export async function scriptWeight(address: string, path: string, cookie: string
     if (response.request().resourceType() === 'script') bodies.push(response.body());
   });
   await page.goto(address + path, { waitUntil: 'networkidle' });
-  const inline = await page.$$eval('script:not([src], [type="application/ld+json"])', (all) => all.map((s) => s.textContent ?? ''));
+  const inline = await page.$$eval('script:not([src], [type="application/ld+json"])', (all) =>
+    all.map((s) => s.textContent ?? ''),
+  );
   const files = await Promise.all(bodies);
   await close();
   return [...files, ...inline.map((text) => Buffer.from(text))].reduce((sum, file) => sum + gzipSync(file).length, 0);
