@@ -45,6 +45,8 @@ test('a key is made on the profile, opens the feed signed out, and ends when it 
   expect(told).not.toMatch(/\d N·m/);
   const again = await reader.request.get(address, { headers: { 'if-none-match': etag ?? '' } });
   expect(again.status()).toBe(304);
+  expect((await reader.request.head(address)).status()).toBe(200);
+  expect((await reader.request.post(address)).status()).toBe(405);
 
   // Opened later, the page does not show it again.
   await page.goto('/profile');
