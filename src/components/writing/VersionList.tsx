@@ -55,7 +55,7 @@ export function VersionList({
                 <Moment at={at} />
               </Cell>
               <Cell label="By">{person.id === me ? 'You' : person.name}</Cell>
-              <Cell label="What changed" className="max-w-prose">
+              <Cell label="What changed" className="sm:w-1/2">
                 {became && <span className="font-semibold">{became}</span>}
                 {became && changed && '. '}
                 {changed}
