@@ -1,4 +1,4 @@
-import { useDeferredValue, useMemo, useState } from 'react';
+import { useDeferredValue, useEffect, useMemo, useState } from 'react';
 import { FormProvider, useForm, useWatch } from 'react-hook-form';
 import { useThreads } from '@/components/threads/useThreads';
 import type { Thread } from '@/domain/api/schemas/threads';
@@ -40,10 +40,25 @@ export function Session({ proposal, threads, source, base, current, engines, dra
   const [undo, setUndo] = useState<{ said: string; act: (() => void) | null } | null>(
     said ? { said, act: null } : null,
   );
+  useEffect(() => {
+    // It is said once: a page that loads again must not say it of something else.
+    if (said) history.replaceState(history.state, '', location.pathname + location.hash);
+  }, [said]);
+  const { place, choose } = usePlace(draft);
+  const undoing = useUndoing(draft, form.getValues, text === null, (shown, path) => {
+    form.reset(shown, { keepTouched: true });
+    // What was offered to be brought back may stand there again by now.
+    setUndo(null);
+    const there = placeOfChange(path, shown);
+    if (there) choose(there);
+  });
   const load = (next: Words) => {
     const read = readDraft(next.source, next.reason);
-    if (read) form.reset(read);
-    else form.setValue('reason', next.reason);
+    if (read) {
+      form.reset(read);
+      // Where the form showed nothing before, there is nothing in it that could be shown again.
+      if (first.text !== null && text !== null) undoing.restart(read);
+    } else form.setValue('reason', next.reason);
     setText(read ? null : next.source);
   };
   const latest = (): Words => ({ source: text ?? sourceOf(form.getValues()), reason: form.getValues('reason') });
@@ -61,14 +76,6 @@ export function Session({ proposal, threads, source, base, current, engines, dra
   const checked = useCheck(words.source, procedure);
   const sound = procedure !== null && !checked.problems.some((p) => !/^(steps|intro)/.test(p.path ?? ''));
   const changes = useChanges(words.source, baseProcedure, sound ? procedure : null);
-  const { place, choose } = usePlace(draft);
-  const undoing = useUndoing(draft, form.getValues, text === null, (shown, path) => {
-    form.reset(shown, { keepTouched: true });
-    // What was offered to be brought back may stand there again by now.
-    setUndo(null);
-    const there = placeOfChange(path, shown);
-    if (there) choose(there);
-  });
   const [tried, setTried] = useState(false);
   const { pending, refusal, setRefusal, propose, rebase } = useProposing(proposal.id, keeper);
 
@@ -157,11 +164,8 @@ export function Session({ proposal, threads, source, base, current, engines, dra
           onText={setText}
           onForm={() => {
             const read = readDraft(text ?? '', draft.reason);
-            if (read) {
-              load({ source: text ?? '', reason: draft.reason });
-              // Before, there was nothing in the form that could be shown again.
-              if (first.text !== null) undoing.restart(read);
-            } else void keeper.flush().then((kept) => kept && location.reload());
+            if (read) load({ source: text ?? '', reason: draft.reason });
+            else void keeper.flush().then((kept) => kept && location.reload());
           }}
           onTheirs={() => {
             const taken = keeper.takeTheirs();

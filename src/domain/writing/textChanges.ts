@@ -26,11 +26,10 @@ function linesApart(from: string, to: string): number {
  * the number of lines. Empty where they say the same.
  */
 export function textChanges(from: Words, to: Words): string[] {
+  const reason = from.reason === to.reason ? [] : ['reason changed'];
+  if (from.source === to.source) return reason;
   const [before, after] = [readDraft(from.source, from.reason), readDraft(to.source, to.reason)];
   if (before && after) return changeWords(draftChanges(before, after));
   const lines = linesApart(from.source, to.source);
-  return [
-    ...(from.source === to.source ? [] : [lines === 1 ? '1 line of the text' : `${lines} lines of the text`]),
-    ...(from.reason === to.reason ? [] : ['reason changed']),
-  ];
+  return [lines === 1 ? '1 line of the text' : `${lines} lines of the text`, ...reason];
 }

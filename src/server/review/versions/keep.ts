@@ -41,6 +41,13 @@ async function insert(made: Made, first: string, place: Pick<Kept, 'n' | 'at' | 
   return { ...place, kind, page, reason };
 }
 
+/** In the terms of the form also where a text was written by hand in another shape. */
+async function between(from: Words, to: Words): Promise<string[]> {
+  if (from.source === to.source) return textChanges(from, to);
+  const [before, after] = [await formable(from.source), await formable(to.source)];
+  return textChanges({ ...from, source: before }, { ...to, source: after });
+}
+
 /** Says anew what each version changed whose predecessor is another one than before. */
 async function tell(id: string, before: readonly Kept[], after: readonly Kept[]): Promise<void> {
   // Words that were set aside were never the draft's, so nothing followed from them.
@@ -56,11 +63,11 @@ async function tell(id: string, before: readonly Kept[], after: readonly Kept[])
     id,
     changed.flatMap(({ from, to }) => [from.n, to.n]),
   );
-  const words = async ({ n, reason }: Kept): Promise<Words> => ({ source: await formable(texts.get(n) ?? ''), reason });
+  const words = ({ n, reason }: Kept): Words => ({ source: texts.get(n) ?? '', reason });
   const { db } = await app();
   for (const { from, to } of changed)
     await db.models.DraftVersion.update(
-      { what: textChanges(await words(from), await words(to)) },
+      { what: await between(words(from), words(to)) },
       { where: { revisionId: id, n: to.n } },
     );
 }
