@@ -1,6 +1,7 @@
 import type { Link } from '@/domain/audit/chain';
 import type { Fault } from '@/domain/audit/fault';
 import { app, type App } from '../context';
+import { keepCheckpoint } from './checkpoint';
 import { followChain, named } from './walk';
 
 /** What is known of the trail of a book that is open. */
@@ -11,14 +12,20 @@ export interface Known {
   faults: Fault[];
   /** When all of it was last followed from its first entry; ISO 8601 in UTC. */
   wholeAt: string;
+  /** Whether the rows that it speaks of and its end were checked too, as at start. */
+  checked: boolean;
 }
 
 // By the open database: tests open several in one process.
 const held = new WeakMap<App['db'], Known>();
 const walking = new WeakMap<App['db'], Promise<Known>>();
+/** When the checkpoint was last moved on, by the wall clock. */
+const kept = new WeakMap<App['db'], number>();
+const CHECKPOINT_EVERY = 60_000;
 
-export async function remember(known: Known): Promise<void> {
-  held.set((await app()).db, known);
+/** What a full check found. */
+export async function remember(known: Omit<Known, 'checked'>): Promise<void> {
+  held.set((await app()).db, { ...known, checked: true });
 }
 
 /** What is known without looking; null before the first look. */
@@ -26,34 +33,58 @@ export async function lastKnown(): Promise<Known | null> {
   return held.get((await app()).db) ?? null;
 }
 
+/** Keeps what a look found, with what a full check that ended meanwhile found. */
+function settle(db: App['db'], before: Known | undefined, found: Known): Known {
+  const meanwhile = held.get(db);
+  const known =
+    meanwhile === undefined || meanwhile === before
+      ? found
+      : {
+          end: found.end.seq > meanwhile.end.seq ? found.end : meanwhile.end,
+          faults: unlike([...meanwhile.faults, ...found.faults]),
+          wholeAt: meanwhile.wholeAt,
+          checked: meanwhile.checked || found.checked,
+        };
+  held.set(db, known);
+  return known;
+}
+
+/** Follows all of the trail, from its first entry. */
+async function fromTheFirst(): Promise<Pick<Known, 'end' | 'faults' | 'wholeAt'>> {
+  const wholeAt = new Date().toISOString();
+  const { end, breaks } = await followChain();
+  return { end, faults: await named(breaks), wholeAt };
+}
+
 async function look(): Promise<Known> {
   const { db } = await app();
   const before = held.get(db);
-  if (!before) {
-    const at = new Date().toISOString();
-    const { end, breaks } = await followChain();
-    const known = { end, faults: await named(breaks), wholeAt: at };
-    held.set(db, known);
-    return known;
-  }
+  if (!before) return settle(db, before, { ...(await fromTheFirst()), checked: false });
   const { end: last } = before;
   const [row] = await db.read<{ hash: string }>('SELECT hash FROM auditEntries WHERE seq = :seq', { seq: last.seq });
   // The entry that all was followed up to is another now, or gone: everything before it is looked at again.
   if (last.seq > 0 && row?.hash !== last.hash) {
-    const { end, breaks } = await followChain();
-    const under = row ? await named([{ kind: 'changed', seq: last.seq }]) : [cutOff(end.seq, last.seq)];
-    const known = {
-      end,
-      faults: unlike([...before.faults, ...(await named(breaks)), ...under]),
-      wholeAt: new Date().toISOString(),
-    };
-    held.set(db, known);
-    return known;
+    const again = await fromTheFirst();
+    const under = row ? await named([{ kind: 'changed', seq: last.seq }]) : [cutOff(again.end.seq, last.seq)];
+    return settle(db, before, { ...before, ...again, faults: unlike([...before.faults, ...again.faults, ...under]) });
   }
   const { end, breaks } = await followChain(last);
-  const known = { ...before, end, faults: unlike([...before.faults, ...(await named(breaks))]) };
-  held.set(db, known);
+  const faults = breaks.length > 0 ? unlike([...before.faults, ...(await named(breaks))]) : before.faults;
+  const known = settle(db, before, { ...before, end, faults });
+  await moveCheckpoint(db, known);
   return known;
+}
+
+/** A checkpoint moves on only behind a full check that found nothing: it must never hide what it is there to show. */
+async function moveCheckpoint(db: App['db'], { checked, faults, end }: Known): Promise<void> {
+  if (!checked || faults.length > 0 || Date.now() - (kept.get(db) ?? 0) < CHECKPOINT_EVERY) return;
+  kept.set(db, Date.now());
+  try {
+    await keepCheckpoint(end);
+  } catch (error) {
+    // A page can be read from a disk that cannot be written.
+    console.warn('audit: the checkpoint could not be kept', error);
+  }
 }
 
 const cutOff = (end: number, seen: number): Fault => ({

@@ -1,11 +1,13 @@
 import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import sqlite3 from 'sqlite3';
-import { beforeEach, describe, expect, it } from 'vitest';
+import { beforeEach, describe, expect, it, vi } from 'vitest';
+import { checkAtStart } from '@/server/audit/atStart';
 import { checkBook } from '@/server/audit/check';
 import { knownTrail } from '@/server/audit/known';
 import { standingOf } from '@/server/audit/standing';
 import { app } from '@/server/context';
+import { readyWarnings } from '@/server/ready';
 import { overrideClamp } from '@/server/review/override';
 import { call } from '../api/support/call';
 import { signedIn } from '../api/support/network';
@@ -287,5 +289,40 @@ describe('what the history of a sheet says of it', () => {
     expect((await knownTrail()).faults.length).toBeGreaterThan(0);
     await raw(`DELETE FROM auditEntries WHERE seq = ${last}`);
     expect((await knownTrail()).faults).toContainEqual(expect.objectContaining({ id: 'end' }));
+  });
+});
+
+describe('at start', () => {
+  it('says nothing of a trail that holds, and of one that does not names what is wrong, and stops nobody', async () => {
+    const said = vi.spyOn(console, 'warn').mockImplementation(() => undefined);
+    await checkAtStart();
+    expect(said).not.toHaveBeenCalled();
+    expect(await readyWarnings()).toEqual([]);
+    await raw(`UPDATE revisions SET source = source || ' ' WHERE letter = 'B'`);
+    await checkAtStart();
+    expect(said.mock.calls.map(([line]) => String(line))).toEqual([
+      expect.stringMatching(/^audit: revisions [0-9a-f-]{36}: P-0142 revision B has another text/),
+      expect.stringContaining('npm run audit:check'),
+    ]);
+    expect(await readyWarnings()).toEqual(['audit: the trail does not hold; run npm run audit:check']);
+    expect((await call(who('pier.apprentice'), 'GET', '/procedures/P-0142')).status).toBe(200);
+    said.mockRestore();
+  });
+
+  it('moves the checkpoint on behind a check that found nothing, and leaves it where something was found', async () => {
+    const { config } = await app();
+    const kept = () =>
+      JSON.parse(readFileSync(join(config.dataDir, 'audit-checkpoint.json'), 'utf8')) as { entries: number };
+    const { entries } = await checkBook();
+    expect(
+      (await call(who('common.editor'), 'POST', '/procedures/P-0142/bring-back', { body: { reason: 'A bad batch.' } }))
+        .status,
+    ).toBe(200);
+    await knownTrail();
+    expect(kept().entries).toBe(entries + 1);
+    await raw(`DELETE FROM auditEntries WHERE seq = ${entries + 1}`);
+    expect((await knownTrail()).faults).toContainEqual(expect.objectContaining({ id: 'end' }));
+    await knownTrail();
+    expect(kept().entries).toBe(entries + 1);
   });
 });
