@@ -7,7 +7,7 @@ import { whoIs } from '@/server/accounts/whoIs';
 import { unreadBulletins } from '@/server/bulletins/read';
 import { verifyAudit } from '@/server/audit/verify';
 import { parsedText } from '@/server/book/parsed';
-import { readHistory } from '@/server/book/history';
+import { readRevisions } from '@/server/book/history';
 import { listProcedures } from '@/server/book/list';
 import { readSheet } from '@/server/book/sheet';
 import { within, type App } from '@/server/context';
@@ -52,7 +52,7 @@ test('the network is the one that is promised: three shops, each person once, in
 
 test('the valve cover reseal has its history, each revision with an author and a reviewer who are not the same', async () => {
   const apprentice = await actor('apprentice@northgate.example');
-  const history = await inBook(() => readHistory(apprentice, 'P-0142'));
+  const history = (await inBook(() => readRevisions(apprentice, 'P-0142', { limit: 50 }))).items;
   const byLetter = new Map(history.map((revision) => [revision.letter, revision]));
   expect([...byLetter.keys()].sort()).toEqual(['A', 'B', 'C']);
   expect(byLetter.get('C')).toMatchObject({

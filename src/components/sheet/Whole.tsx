@@ -35,12 +35,14 @@ export function Whole({ trail }: { trail: TrailWords }) {
         <p className="mt-1 font-semibold">{TELL_THE_STEWARD}</p>
       </div>
     );
+  const shown = `${counted(texts, 'text')} on this page`;
   return (
     <div className="px-4 py-4 sm:px-9">
       <p className="max-w-[110ch]">
-        <b className="font-semibold">This history is whole:</b> {counted(entries, 'entry', 'entries')} in the audit
-        trail, each follows from the one before it. {own} of them and {counted(texts, 'text')} on this page were checked
-        just now; the trail from its first entry on {dayOf(wholeAt)}, {timeOf(wholeAt)}.
+        <b className="font-semibold">This history is whole:</b>{' '}
+        {elsewhere
+          ? `${counted(own, 'entry', 'entries')} about it in the audit trail and ${shown} were checked just now.`
+          : `${counted(entries, 'entry', 'entries')} in the audit trail, each follows from the one before it. ${own} of them and ${shown} were checked just now; the trail from its first entry on ${dayOf(wholeAt)}, ${timeOf(wholeAt)}.`}
       </p>
       {elsewhere && (
         <Notice className="mt-3">

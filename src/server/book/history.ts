@@ -10,18 +10,10 @@ type Readable = Pick<BookRow, 'bookKind' | 'shopId'>;
 const FROM = `FROM procedures p JOIN revisions r ON r.procedureId = p.id AND r.letter IS NOT NULL WHERE p.number = :number`;
 const LATEST_FIRST = 'ORDER BY length(r.letter) DESC, r.letter DESC';
 
-/** The revisions that were ever published, latest first. Refuses 404 what is unknown or not readable. */
-export async function readHistory(actor: Actor, number: string): Promise<RevisionSummary[]> {
-  const { db } = await app();
-  const rows = await db.read<Readable & RevisionRow>(
-    `SELECT p.bookKind, p.shopId, ${REVISION_COLUMNS} ${FROM} ${LATEST_FIRST}`,
-    { number },
-  );
-  readable(actor, rows[0]);
-  return rows.map(revisionSummary);
-}
-
-/** The same some at a time; the cursor is the last letter of the page before. */
+/**
+ * The revisions that were ever published, latest first; the cursor is the last letter of the page before. Refuses 404 what
+ * is unknown or not readable.
+ */
 export async function readRevisions(
   actor: Actor,
   number: string,
@@ -39,7 +31,7 @@ export async function readRevisions(
   return { items, next: rows.length > limit ? (items.at(-1)?.letter ?? null) : null };
 }
 
-/** Every published letter with its day, latest first: enough to choose two by. Refuses 404 like `readHistory`. */
+/** Every published letter with its day, latest first: enough to choose two by. Refuses 404 likewise. */
 export async function readLetters(
   actor: Actor,
   number: string,
