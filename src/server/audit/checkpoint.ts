@@ -38,8 +38,9 @@ export async function keepCheckpoint({ seq, hash }: Link): Promise<void> {
     await writeFile(fresh, `${JSON.stringify(checkpoint)}\n`, { mode: 0o600 });
     await rename(fresh, path);
   } catch (error) {
-    await rm(fresh, { force: true });
-    throw error;
+    // The book can be read, and the trail checked, on a disk that cannot be written.
+    console.warn('audit: the checkpoint could not be kept', error);
+    await rm(fresh, { force: true }).catch(() => undefined);
   }
 }
 

@@ -79,12 +79,7 @@ async function look(): Promise<Known> {
 async function moveCheckpoint(db: App['db'], { checked, faults, end }: Known): Promise<void> {
   if (!checked || faults.length > 0 || Date.now() - (kept.get(db) ?? 0) < CHECKPOINT_EVERY) return;
   kept.set(db, Date.now());
-  try {
-    await keepCheckpoint(end);
-  } catch (error) {
-    // A page can be read from a disk that cannot be written.
-    console.warn('audit: the checkpoint could not be kept', error);
-  }
+  await keepCheckpoint(end);
 }
 
 const cutOff = (end: number, seen: number): Fault => ({
