@@ -27,19 +27,26 @@ export interface DraftBody {
 const MOST_STEPS = 200;
 const LONGEST_TITLE = 90;
 
-const EMPTY_HOLD = 'This hold point says nothing. Write what must be checked, and by whom.';
+export const EMPTY_HOLD = 'This hold point says nothing. Write what must be checked, and by whom.';
 
 function hold(node: MdxJsxFlowElement, c: Checking): RootContent[] {
   if (!cleanElement(node, c)) return [];
   const [only, ...more] = node.children;
   const start = node.position?.start;
-  if (!only) return report(c, start, EMPTY_HOLD) ?? [];
+  const held = (children: MdxJsxTextElement['children']): RootContent[] => {
+    const element: MdxJsxTextElement = { ...elementNode('mdxJsxTextElement', 'Hold', {}, node), children };
+    return [{ type: 'paragraph', children: [element], ...(node.position && { position: node.position }) }];
+  };
+  const empty = () => {
+    report(c, start, EMPTY_HOLD);
+    // It stays in the tree, so that whoever is just about to write it keeps it.
+    return held([]);
+  };
+  if (!only) return empty();
   if (more.length || only.type !== 'paragraph')
     return report(c, start, 'A hold point is one sentence or two, without lists, tables or blank lines.') ?? [];
   const children = tidyWords(words(only.children, c));
-  if (children.length === 0) return report(c, start, EMPTY_HOLD) ?? [];
-  const element: MdxJsxTextElement = { ...elementNode('mdxJsxTextElement', 'Hold', {}, node), children };
-  return [{ type: 'paragraph', children: [element], ...(node.position && { position: node.position }) }];
+  return children.length === 0 ? empty() : held(children);
 }
 
 function block(node: MdxJsxFlowElement, c: Checking): RootContent[] {

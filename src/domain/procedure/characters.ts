@@ -26,3 +26,7 @@ export const isOneLine = (text: string): boolean => !/[\t\n\r]/.test(text) && fo
 export const NOT_ONE_LINE = 'Use letters and signs of a single line only.';
 
 export const forbiddenSentence = (what: string) => `There is ${what} here. Delete it and type the place again.`;
+
+/** The text without what has no place in a sheet. */
+export const withoutForbidden = (text: string): string =>
+  FORBIDDEN.reduce((rest, { pattern }) => rest.replace(new RegExp(pattern.source, `${pattern.flags}g`), ''), text);

@@ -29,9 +29,8 @@ function trimmed(nodes: PhrasingContent[]): PhrasingContent[] {
 
 /** Breaks at the edges and doubled breaks say nothing. */
 function withoutIdleBreaks(nodes: PhrasingContent[]): PhrasingContent[] {
-  return nodes.filter(
-    (node, i) => node.type !== 'break' || (i > 0 && i < nodes.length - 1 && nodes[i - 1]?.type !== 'break'),
-  );
+  const single = nodes.filter((node, i) => node.type !== 'break' || nodes[i - 1]?.type !== 'break');
+  return single.filter((node, i) => node.type !== 'break' || (i > 0 && i < single.length - 1));
 }
 
 /** Soft line ends become spaces, runs of spaces one; edges are trimmed. */

@@ -1,5 +1,5 @@
 import { ENTRY_FIELDS } from '../procedure/fields';
-import { KEYED_LISTS, Torque, type Frontmatter } from '../procedure/schema';
+import { KEYED_LISTS, Limit, Torque, type Frontmatter } from '../procedure/schema';
 import type { Procedure } from '../procedure/types';
 import { boxesOf, fieldKind, type Draft, type Entry, type FieldKind, type ListName } from './draft';
 import { readNumber, readNumbers } from './numbers';
@@ -34,6 +34,12 @@ const entryOf = (list: ListName, entry: Entry) =>
 /** The torque that a row of the form stands for; null while it is not a whole one. */
 export function torqueOf(entry: Entry): Torque | null {
   const read = Torque.safeParse(entryOf('torques', entry));
+  return read.success ? read.data : null;
+}
+
+/** The same for a limit. */
+export function limitOf(entry: Entry): Limit | null {
+  const read = Limit.safeParse(entryOf('limits', entry));
   return read.success ? read.data : null;
 }
 
