@@ -58,7 +58,7 @@ test('words typed without the network survive a browser that dies', async ({ as 
   const { id } = desk;
   const before = (await readProposal(page, id)).version;
   await page.context().setOffline(true);
-  await desk.how.fill('Held words, typed in the pit.');
+  await desk.write('Held words, typed in the pit.');
   await expect(desk.keeping).toHaveAttribute('data-keeping', 'unreachable');
   // A page that is closed still sends its last words; one that dies does not.
   const died = page.waitForEvent('crash');
@@ -74,7 +74,7 @@ test('words typed without the network survive a browser that dies', async ({ as 
   await next.page.goto(`/proposals/${id}/edit`);
   await next.ready();
   await expect(next.middle.getByText('Words that were held on this device are back on the screen.')).toBeVisible();
-  await expect(next.how).toHaveValue('Held words, typed in the pit.');
+  await expect(next.how).toHaveText('Held words, typed in the pit.');
   await next.kept();
   await expect.poll(async () => (await readProposal(next.page, id)).source).toContain('Held words, typed in the pit.');
 });

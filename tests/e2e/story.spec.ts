@@ -46,7 +46,7 @@ test('a better way gets from one bench to every bench', async ({ as }) => {
 
     await desk.middle.getByRole('button', { name: 'Add a step after this one' }).click();
     await desk.stepTitle(9).fill(NEW_STEP);
-    await desk.how.fill(`Draw a strip of ${NEW_WORD} along both long sides. Where it catches, the lip is folded.`);
+    await desk.write(`Draw a strip of ${NEW_WORD} along both long sides. Where it catches, the lip is folded.`);
 
     await senior.getByRole('button', { name: 'Propose', exact: true }).click();
     await expect(desk.middle.getByText('Write why it is better: the editor decides by it.')).toBeVisible();
@@ -90,7 +90,7 @@ test('a better way gets from one bench to every bench', async ({ as }) => {
     await why.getByRole('button', { name: /^Step 8/ }).click();
     await expect(desk.stepTitle(8)).toHaveValue('Pull the cover down in two passes');
     await desk.choose(NEW_STEP);
-    await desk.how.fill(
+    await desk.write(
       `Draw a strip of ${NEW_WORD} along both long sides. It must slide freely from end to end before the last pass.`,
     );
     await desk.propose();

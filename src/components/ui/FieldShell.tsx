@@ -29,7 +29,18 @@ export function tie({ name, id = name, hint, error }: FieldWords) {
 }
 
 /** Label above, hint under it, the control, and the error right beside what it speaks of. */
-export function FieldShell({ children, ...words }: FieldWords & { children: ReactNode }) {
+export function FieldShell({
+  children,
+  labelled = 'control',
+  beside,
+  ...words
+}: FieldWords & {
+  children: ReactNode;
+  /** `group`: the control is not one that a label can be for, and names itself by the label's id, `<id>-label`. */
+  labelled?: 'control' | 'group';
+  /** At the other end of the label's line. */
+  beside?: ReactNode;
+}) {
   const { id } = tie(words);
   const hint = words.hint && (
     <p id={`${id}-hint`} className={classes('text-small text-ink-2', !words.hintBelow && '-mt-1')}>
@@ -38,9 +49,18 @@ export function FieldShell({ children, ...words }: FieldWords & { children: Reac
   );
   return (
     <div className={classes('flex min-w-0 flex-col gap-1.5', words.fieldClass)}>
-      <label htmlFor={id} className="font-medium">
-        {words.label}
-      </label>
+      {labelled === 'control' ? (
+        <label id={`${id}-label`} htmlFor={id} className="font-medium">
+          {words.label}
+        </label>
+      ) : (
+        <div className="flex items-end justify-between gap-4">
+          <span id={`${id}-label`} className="font-medium">
+            {words.label}
+          </span>
+          {beside}
+        </div>
+      )}
       {!words.hintBelow && hint}
       {children}
       {words.error && (

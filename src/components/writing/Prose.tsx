@@ -1,77 +1,110 @@
-import { useId, useLayoutEffect, useRef, type ReactNode, type RefObject } from 'react';
+import { useState, type ReactNode } from 'react';
 import { FieldShell, tie } from '@/components/ui/FieldShell';
-import { insertAt, inserted, type Piece } from '@/domain/writing/insert';
+import type { SourceProblem } from '@/domain/procedure/types';
+import type { Where } from '@/domain/writing/field/schema';
+import { useDraftForm } from './desk';
+import type { FieldHandle, LayoutHandle } from './fieldHandle';
+import { LayoutMenu } from './LayoutMenu';
+import { PlainProse } from './PlainProse';
+import { StillWords } from './StillWords';
 import { useBox } from './useBox';
+import { useFieldEditor } from './useFieldEditor';
 
-const TAG = /(<\/?[A-Z][A-Za-z]*(?:\s[^<>]*)?>)/;
+const LEAST = '9.5rem';
+const KEYS = 'Tab moves points of a list and goes through a table; Escape, then Tab leaves the field.';
 
-/** Puts a component where the caret of a text area stands, so that the browser's own undo takes it out again. */
-export function insertInto(area: HTMLTextAreaElement, piece: Piece): void {
-  const caret = { text: area.value, start: area.selectionStart, end: area.selectionEnd };
-  const insertion = insertAt(caret, piece);
-  area.focus();
-  // The old way of editing is the only one that joins the undo history; where it is gone, the value is set.
-  if (!document.execCommand('insertText', false, insertion.replacement)) {
-    const set = Object.getOwnPropertyDescriptor(HTMLTextAreaElement.prototype, 'value')?.set;
-    set?.call(area, inserted(caret, insertion));
-    area.dispatchEvent(new Event('input', { bubbles: true }));
-  }
-  area.setSelectionRange(insertion.start, insertion.end);
-}
+/** Why the words stand there as they are stored. */
+type Plain = { why: 'asked' } | { why: 'unreadable'; problem: SourceProblem };
 
 /**
- * Prose with components among the words. A copy of the text lies under the area with its components on a wash, which
- * also gives the area its height.
+ * The words of a step or of the introduction. Their values are chips; where they cannot be shown so, because they are half
+ * written as signs, they are text, and it is said why.
+ *
+ * @param onField what the buttons under the field act on; null while there is nothing to act on
  */
 export function Prose({
   path,
+  where,
   label,
   hint,
-  area,
-  least = '9.5rem',
+  onField,
 }: {
-  path: string;
-  label: ReactNode;
+  path: 'intro' | `steps.${number}.body`;
+  where: Where;
+  label: string;
   hint?: ReactNode;
-  area?: RefObject<HTMLTextAreaElement | null>;
-  least?: string;
+  onField: (handle: FieldHandle | null) => void;
 }) {
   const { id, value, set, onBlur, error } = useBox(path);
-  const own = useRef<HTMLTextAreaElement>(null);
-  const ref = area ?? own;
-  const under = useId();
+  const { getValues } = useDraftForm();
+  const { editor: Editor, failed } = useFieldEditor();
+  const [plain, setPlain] = useState<Plain | null>(null);
+  const [switched, setSwitched] = useState(false);
+  const [layout, setLayout] = useState<LayoutHandle | null>(null);
   const words = { label, hint, name: path, id, error };
-  useLayoutEffect(() => {
-    // A scroll bar of the area would break its lines elsewhere than the copy does.
-    if (ref.current) ref.current.scrollTop = 0;
-  }, [value, ref]);
+  const asText = plain !== null || failed;
+  const { 'aria-describedby': describedBy, 'aria-invalid': invalid } = tie(words);
   return (
-    <FieldShell {...words}>
-      <div className="prose-edit" style={{ minHeight: least }}>
-        <div id={under} aria-hidden="true" className="prose-edit-copy">
-          {value.split(TAG).map((piece, i) =>
-            i % 2 === 1 ? (
-              <mark key={i} className={/^<\/?(Hold|Figure|Worksheet)\b/.test(piece) ? 'tag tag-block' : 'tag'}>
-                {piece}
-              </mark>
-            ) : (
-              piece
-            ),
-          )}
-          {/* A line end at the very end takes a line of its own in an area, and none in a block. */}
-          {'\u200b'}
-        </div>
-        <textarea
-          {...tie(words)}
-          ref={ref}
+    <FieldShell
+      {...words}
+      labelled={asText ? 'control' : 'group'}
+      beside={layout && <LayoutMenu field={layout} onText={() => setPlain({ why: 'asked' })} />}
+    >
+      {asText ? (
+        <PlainProse words={words} value={value} set={set} onBlur={onBlur} onHandle={onField} least={LEAST} />
+      ) : Editor ? (
+        <Editor
+          where={where}
           value={value}
-          autoComplete="off"
-          spellCheck
-          className="prose-edit-area"
-          onChange={(event) => set(event.target.value)}
+          latest={() => getValues(path)}
+          set={set}
           onBlur={onBlur}
+          onHandle={(handle) => {
+            setLayout(handle);
+            onField(handle);
+          }}
+          onUnreadable={(problem) => setPlain({ why: 'unreadable', problem })}
+          focus={switched}
+          attributes={{
+            id,
+            role: 'textbox',
+            'aria-multiline': 'true',
+            'aria-labelledby': `${id}-label`,
+            'aria-describedby': [describedBy, `${id}-keys`].filter(Boolean).join(' '),
+            ...(invalid && { 'aria-invalid': 'true' }),
+            spellcheck: 'true',
+            class: 'field-box field-prose',
+            style: `min-height: ${LEAST}`,
+          }}
         />
-      </div>
+      ) : (
+        <StillWords id={id} value={value} least={LEAST} />
+      )}
+      {asText ? (
+        <p className="border-l-[8px] border-rule pl-2.5 leading-snug">
+          {failed
+            ? 'The field with the values among the words could not be loaded, so they stand here as they are stored. '
+            : plain?.why === 'unreadable'
+              ? `These words stand here as they are stored, because they cannot be read yet. Line ${plain.problem.line}: ${plain.problem.message} `
+              : 'These words stand here as they are stored. '}
+          {!failed && (
+            <button
+              type="button"
+              className="inline-flex min-h-[1.75rem] items-center underline underline-offset-[3px]"
+              onClick={() => {
+                setSwitched(true);
+                setPlain(null);
+              }}
+            >
+              {plain?.why === 'unreadable' ? 'Try again with the values as chips' : 'Show the values as chips'}
+            </button>
+          )}
+        </p>
+      ) : (
+        <p id={`${id}-keys`} className="sr-only">
+          {KEYS}
+        </p>
+      )}
     </FieldShell>
   );
 }

@@ -1,10 +1,11 @@
 import { useController } from 'react-hook-form';
-import { useRef } from 'react';
+import { useState } from 'react';
 import { Checkbox } from '@/components/ui/Checkbox';
 import { SKILLS, SYSTEMS } from '@/domain/procedure/schema';
 import { problemAt } from '@/domain/writing/problems';
 import { useDesk, useDraftForm } from './desk';
 import { ChoiceBox, LongBox, TextBox } from './fields';
+import type { FieldHandle } from './fieldHandle';
 import { InsertRow } from './InsertRow';
 import { fieldId } from './places';
 import { Prose } from './Prose';
@@ -57,7 +58,7 @@ function Critical() {
 
 /** What the sheet is: the words and facts of its head, and its introduction. */
 export function SheetFields() {
-  const area = useRef<HTMLTextAreaElement>(null);
+  const [field, setField] = useState<FieldHandle | null>(null);
   return (
     <div className="flex flex-col gap-5">
       <h2 className="text-lead">The sheet</h2>
@@ -78,11 +79,12 @@ export function SheetFields() {
       <div className="flex flex-col gap-2.5">
         <Prose
           path="intro"
+          where="intro"
           label="Introduction"
           hint="Before the first step: when this job is done, and why."
-          area={area}
+          onField={setField}
         />
-        <InsertRow area={area} />
+        <InsertRow field={field} />
       </div>
     </div>
   );

@@ -1,8 +1,9 @@
-import { useRef } from 'react';
+import { useState } from 'react';
 import { Button } from '@/components/ui/Button';
 import { Field } from '@/components/ui/Field';
 import { CautionsAhead } from './CautionsAhead';
 import { useDesk } from './desk';
+import type { FieldHandle } from './fieldHandle';
 import { InsertRow } from './InsertRow';
 import { Prose } from './Prose';
 import { RemarksHere } from './Returned';
@@ -33,16 +34,16 @@ function Title({ index }: { index: number }) {
   );
 }
 
-/** The fields of one step. They are new ones for another step, so that the browser's undo stays with its own words. */
+/** The fields of one step. They are new ones for another step, so that undo stays with its own words. */
 function StepFields({ index, body }: { index: number; body: string }) {
-  const area = useRef<HTMLTextAreaElement>(null);
+  const [field, setField] = useState<FieldHandle | null>(null);
   return (
     <>
       <Title index={index} />
       <CautionsAhead index={index} />
       <div className="flex flex-col gap-2.5">
-        <Prose path={`steps.${index}.body`} label="How" area={area} />
-        <InsertRow area={area} step={index} />
+        <Prose path={`steps.${index}.body`} where="step" label="How" onField={setField} />
+        <InsertRow field={field} step={index} />
       </div>
       <ValuesBehind body={body} />
     </>

@@ -1,4 +1,5 @@
 import { listed } from '@/domain/wording';
+import { PASS_WORDS } from '@/domain/writing/chipWords';
 import { boxesOf, type Entry } from '@/domain/writing/draft';
 import { keysIn, stepsUsing } from '@/domain/writing/uses';
 import { BoxCell, Cell } from './Cell';
@@ -8,7 +9,6 @@ import { RowProblems } from './RowProblems';
 
 const TORQUE_FIELDS = ['name', 'nm', 'tolerance', 'condition'];
 const LIMIT_FIELDS = ['name', 'min', 'nominal', 'max', 'unit'];
-const PASSES = ['first pass', 'second pass', 'third pass', 'fourth pass', 'fifth pass', 'sixth pass'];
 
 const column = (list: 'torques' | 'limits', field: string) => {
   const found = COLUMNS[list].find((one) => one.field === field);
@@ -73,7 +73,7 @@ function Torques({ keys }: { keys: readonly string[] }) {
             {boxesOf(entry['passes']).map((_, at) => (
               <tr key={at}>
                 <th scope="row" className={`${CELL} px-2.5 text-left font-normal text-ink-2`}>
-                  {PASSES[at]}
+                  {PASS_WORDS[at]}
                 </th>
                 <td className={`${CELL} max-sm:hidden`} />
                 <td className={CELL}>
@@ -83,7 +83,7 @@ function Torques({ keys }: { keys: readonly string[] }) {
                     entry={entry}
                     field="passes"
                     at={at}
-                    label={`${PASSES[at]}, N·m`}
+                    label={`${PASS_WORDS[at]}, N·m`}
                   />
                 </td>
                 <td colSpan={2} className={CELL} />

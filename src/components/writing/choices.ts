@@ -1,4 +1,5 @@
 import { READINGS, WORKSHEET_KINDS, worksheetTitle } from '@/domain/procedure/worksheets';
+import { PASS_WORDS, STAGE_WORDS } from '@/domain/writing/chipWords';
 import { boxesOf, entryName, type Draft, type ListName } from '@/domain/writing/draft';
 import type { Piece } from '@/domain/writing/insert';
 
@@ -13,8 +14,6 @@ export interface Choice {
 const sentence = (text: string): Piece => ({ text, stands: 'sentence' });
 const block = (text: string, select?: string): Piece => ({ text, stands: 'block', ...(select ? { select } : {}) });
 
-const PASSES = ['first pass', 'second pass', 'third pass', 'fourth pass', 'fifth pass', 'sixth pass'];
-
 const range = (min = '', max = '') =>
   min && max ? `${min} to ${max}` : min ? `${min} or more` : max ? `${max} or less` : '';
 
@@ -27,7 +26,7 @@ const torques = (draft: Draft): Choice[] =>
         ? [
             {
               key: `${key} ${i + 1}`,
-              name: `${name}, ${PASSES[i]}`,
+              name: `${name}, ${PASS_WORDS[i]}`,
               detail: `${nm} N·m`,
               piece: sentence(`<Torque of="${key}" pass="${i + 1}" />`),
             },
@@ -60,15 +59,15 @@ const timers = (draft: Draft): Choice[] => [
   ...draft.supplies.flatMap((supply) =>
     (
       [
-        ['skin-over', 'skinOver', 'skins over'],
-        ['cure', 'cure', 'cures'],
+        ['skin-over', 'skinOver'],
+        ['cure', 'cure'],
       ] as const
-    ).flatMap(([stage, field, words]): Choice[] =>
+    ).flatMap(([stage, field]): Choice[] =>
       supply[field]
         ? [
             {
               key: `${supply['key']} ${stage}`,
-              name: `${entryName('supplies', supply)}, ${words}`,
+              name: `${entryName('supplies', supply)}, ${STAGE_WORDS[stage]}`,
               detail: `${supply[field]} min`,
               piece: sentence(`<Timer of="${supply['key']}" stage="${stage}" />`),
             },
@@ -78,12 +77,21 @@ const timers = (draft: Draft): Choice[] => [
   ),
 ];
 
+interface Offer {
+  label: string;
+  /** The component that they stand for. */
+  component: string;
+  list: ListName;
+  choices: (draft: Draft) => Choice[];
+}
+
 /** What each button under the words offers: entries of the sheet by their names. */
-export const CHOICES: { label: string; list: ListName; choices: (draft: Draft) => Choice[] }[] = [
-  { label: 'Torque', list: 'torques', choices: torques },
-  { label: 'Limit', list: 'limits', choices: limits },
+export const CHOICES: readonly Offer[] = [
+  { label: 'Torque', component: 'Torque', list: 'torques', choices: torques },
+  { label: 'Limit', component: 'Limit', list: 'limits', choices: limits },
   {
     label: 'Part',
+    component: 'Part',
     list: 'parts',
     choices: (draft) =>
       draft.parts.map((part) => ({
@@ -93,9 +101,10 @@ export const CHOICES: { label: string; list: ListName; choices: (draft: Draft) =
         piece: sentence(`<Part of="${part['key']}" />`),
       })),
   },
-  { label: 'Timer', list: 'timers', choices: timers },
+  { label: 'Timer', component: 'Timer', list: 'timers', choices: timers },
   {
     label: 'Drawing',
+    component: 'Figure',
     list: 'figures',
     choices: (draft) =>
       draft.figures.map((figure) => ({
@@ -106,6 +115,9 @@ export const CHOICES: { label: string; list: ListName; choices: (draft: Draft) =
       })),
   },
 ];
+
+/** What can stand in the place of a component. */
+export const choicesFor = (component: string): Offer | undefined => CHOICES.find((one) => one.component === component);
 
 /** What goes in for an entry that was just made. */
 export const PIECE_OF: Partial<Record<ListName, (key: string) => Piece>> = {

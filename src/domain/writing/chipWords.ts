@@ -143,8 +143,8 @@ const sayers: Record<string, (given: Attributes, draft: Lists) => ChipWords> = {
     const [first] = limits;
     const names = limits.map(({ found }) => (found ? entryName('limits', found.entry) : ''));
     return {
-      name: kind === READINGS ? 'Readings' : title,
-      value: names.join('; '),
+      name: [kind === READINGS ? 'Readings' : title, names.join('; ')].filter(Boolean).join(': '),
+      value: '',
       missing: null,
       target: first?.found ? { list: 'limits', index: first.found.index, field: 'name' } : null,
     };
@@ -155,6 +155,9 @@ const sayers: Record<string, (given: Attributes, draft: Lists) => ChipWords> = {
 export const chipWords = (name: string, given: Attributes, draft: Lists): ChipWords =>
   sayers[name]?.(given, draft) ?? lost(`There is no component “${name}”`);
 
-/** The same on one line: "Cover bolt, first pass 6 N·m". */
+/** A value as long as this is not divided over two lines. */
+const WHOLE = 24;
+
+/** The same on one line: "Cover bolt, first pass 6 N·m". Fixed blanks hold a value together. */
 export const chipLine = ({ name, value, missing }: ChipWords): string =>
-  missing ?? [name, value].filter(Boolean).join(' ');
+  missing ?? [name, value.length <= WHOLE ? value.replace(/ /g, '\u00a0') : value].filter(Boolean).join(' ');

@@ -13,8 +13,26 @@ export class WritingDesk {
     return this.page.getByRole('region', { name: 'What is being written' });
   }
   stepTitle = (number: number): Locator => this.middle.getByLabel(`Step ${number}, what to do`);
+  /** The words of the step, once they can be written in. */
   get how(): Locator {
-    return this.middle.getByLabel('How', { exact: true });
+    return this.middle.getByRole('textbox', { name: 'How', exact: true });
+  }
+  chip = (words: string | RegExp): Locator => this.how.locator('.chip', { hasText: words });
+
+  /** Types `words` in the place of all that the step says. */
+  async write(words: string): Promise<void> {
+    await this.how.click();
+    await this.page.keyboard.press('ControlOrMeta+a');
+    await this.page.keyboard.type(words);
+  }
+
+  /** Pastes what another program put on the clipboard into the words, at the caret. */
+  async paste(data: Record<string, string>): Promise<void> {
+    await this.how.evaluate((field, given) => {
+      const clipboardData = new DataTransfer();
+      for (const [type, text] of Object.entries(given)) clipboardData.setData(type, text);
+      field.dispatchEvent(new ClipboardEvent('paste', { clipboardData, bubbles: true, cancelable: true }));
+    }, data);
   }
   get reason(): Locator {
     return this.middle.getByLabel('Why this is better, for the editor');
