@@ -229,6 +229,56 @@ test('words that are set from outside are taken over and not written back', asyn
   await expect(desk.how).toHaveText('Theirs Valve cover.');
 });
 
+test('letters that are composed are left alone until they are whole', async ({ as }) => {
+  const page = await as('senior');
+  const desk = await deskWith(page, 'Er <Torque of="cover-bolt" />.');
+  await desk.how.focus();
+  await page.keyboard.press('ControlOrMeta+Home');
+  for (const _ of 'Er') await page.keyboard.press('ArrowRight');
+  const devtools = await page.context().newCDPSession(page);
+  for (const text of [' h', ' ha', ' hä'])
+    await devtools.send('Input.imeSetComposition', { text, selectionStart: text.length, selectionEnd: text.length });
+  // A value that changes meanwhile is said anew, but not before the word is put in.
+  await page.evaluate(() => {
+    const box = document.getElementById('f-torques-0-nm') as HTMLInputElement;
+    Object.getOwnPropertyDescriptor(HTMLInputElement.prototype, 'value')!.set!.call(box, '11');
+    box.dispatchEvent(new Event('input', { bubbles: true }));
+  });
+  await page.waitForTimeout(300);
+  await expect(desk.how).toHaveText('Er hä Cover bolt 10 ±1 N·m.');
+  await devtools.send('Input.insertText', { text: ' hält' });
+  await expect(desk.how).toHaveText('Er hält Cover bolt 11 ±1 N·m.');
+  await expectStored(desk, 'Er hält <Torque of="cover-bolt" />.');
+});
+
+test('a picture that is pasted or dropped is told to have been left out', async ({ as }) => {
+  const page = await as('senior');
+  const desk = await deskWith(page, 'Words.');
+  await desk.how.click();
+  for (const type of ['paste', 'drop'])
+    await test.step(type, async () => {
+      const prevented = await desk.how.evaluate((field, name) => {
+        const data = new DataTransfer();
+        data.items.add(new File(['x'], 'bolts.png', { type: 'image/png' }));
+        const { left, top } = field.getBoundingClientRect();
+        const common = { bubbles: true, cancelable: true };
+        const event =
+          name === 'paste'
+            ? new ClipboardEvent('paste', { ...common, clipboardData: data })
+            : new DragEvent('drop', { ...common, dataTransfer: data, clientX: left + 20, clientY: top + 20 });
+        return !field.dispatchEvent(event);
+      }, type);
+      expect(prevented).toBe(true);
+      await expect(desk.middle.getByText('1 picture was left out: “bolts.png”.')).toBeVisible();
+      await desk.paste({ 'text/plain': ' ' });
+      await expect(desk.middle.getByText('left out')).toHaveCount(0);
+    });
+  await expect(desk.how).toHaveText('Words.');
+  await desk.paste({ 'text/plain': '<Step id="a" title="b">\n<Caution of="hot-oil" />\n\nNew.\n</Step>' });
+  await expect(desk.how).toContainText('New.');
+  await expect(desk.middle.getByText('1 caution was left out: “hot-oil”.')).toBeVisible();
+});
+
 test('it holds on a phone, and a screen reader is told what it is', async ({ as }) => {
   const page = await as('senior');
   const desk = await deskWith(

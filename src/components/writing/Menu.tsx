@@ -38,7 +38,7 @@ export function Menu({
         onClick={() => setOpen(!open)}
         className={
           quiet
-            ? 'min-h-[1.75rem] px-1 font-medium text-petrol underline underline-offset-[3px]'
+            ? '-my-2.5 min-h-touch px-1 font-medium text-petrol underline underline-offset-[3px]'
             : classes(
                 'min-h-[40px] rounded border border-rule px-3 font-medium hover:bg-wash',
                 open ? 'bg-wash' : 'bg-white',

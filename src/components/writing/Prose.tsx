@@ -39,7 +39,8 @@ export function Prose({
   const { getValues } = useDraftForm();
   const { editor: Editor, failed } = useFieldEditor();
   const [plain, setPlain] = useState<Plain | null>(null);
-  const [switched, setSwitched] = useState(false);
+  // Whether the caret was here, or was asked to come here, before there was a field to take it.
+  const [wanted, setWanted] = useState(false);
   const [layout, setLayout] = useState<LayoutHandle | null>(null);
   const words = { label, hint, name: path, id, error };
   const asText = plain !== null || failed;
@@ -64,7 +65,7 @@ export function Prose({
             onField(handle);
           }}
           onUnreadable={(problem) => setPlain({ why: 'unreadable', problem })}
-          focus={switched}
+          focus={wanted}
           attributes={{
             id,
             role: 'textbox',
@@ -78,7 +79,7 @@ export function Prose({
           }}
         />
       ) : (
-        <StillWords id={id} value={value} least={LEAST} />
+        <StillWords id={id} value={value} least={LEAST} onFocus={() => setWanted(true)} />
       )}
       {asText ? (
         <p className="border-l-[8px] border-rule pl-2.5 leading-snug">
@@ -92,7 +93,7 @@ export function Prose({
               type="button"
               className="inline-flex min-h-[1.75rem] items-center underline underline-offset-[3px]"
               onClick={() => {
-                setSwitched(true);
+                setWanted(true);
                 setPlain(null);
               }}
             >

@@ -143,7 +143,7 @@ const sayers: Record<string, (given: Attributes, draft: Lists) => ChipWords> = {
     const [first] = limits;
     const names = limits.map(({ found }) => (found ? entryName('limits', found.entry) : ''));
     return {
-      name: [kind === READINGS ? 'Readings' : title, names.join('; ')].filter(Boolean).join(': '),
+      name: [kind === READINGS ? 'readings' : title, names.join('; ')].filter(Boolean).join(' for '),
       value: '',
       missing: null,
       target: first?.found ? { list: 'limits', index: first.found.index, field: 'name' } : null,

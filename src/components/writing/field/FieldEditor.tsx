@@ -81,7 +81,12 @@ export default function FieldEditor(props: Props) {
       run: ({ run }) => made.run(run),
     });
     if (now.current.focus) made.view.focus();
+    // A label is only for the controls that the browser itself brings.
+    const label = document.getElementById(now.current.attributes['aria-labelledby'] ?? '');
+    const toWords = () => made.view.focus();
+    label?.addEventListener('click', toWords);
     return () => {
+      label?.removeEventListener('click', toWords);
       now.current.onHandle(null);
       field.current = null;
       made.destroy();

@@ -50,16 +50,14 @@ export function copiedText(slice: Slice, where: Where): string {
   return slice.content.textBetween(0, slice.content.size, '\n\n', '\n');
 }
 
-/** Takes a paste over; `told` is given what was left out of it, in sentences. */
-export function paste(
+/** Takes over what is pasted or dropped; `told` is given what was left out of it, in sentences. */
+export function bringIn(
   view: EditorView,
-  event: ClipboardEvent,
+  data: DataTransfer,
   slice: Slice,
   where: Where,
   told: (sentences: string[]) => void,
 ): boolean {
-  const data = event.clipboardData;
-  if (!data) return false;
   const { state } = view;
   const html = data.getData('text/html');
   const text = data.getData('text/plain');
@@ -76,7 +74,7 @@ export function paste(
     return true;
   }
   const left = nothingLeftOut();
-  let content = text ? fromPlain(text, state.schema, where) : null;
+  let content = text ? fromPlain(text, state.schema, where, left) : null;
   // Text with components says more than the page that it was copied from.
   if (html && !/<[A-Z][A-Za-z]+[\s/>]/.test(text)) {
     const read = fromHtml(treeOf(html), state.schema);

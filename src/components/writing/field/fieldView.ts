@@ -1,22 +1,27 @@
-import { closeHistory, history } from 'prosemirror-history';
-import { inputRules, wrappingInputRule } from 'prosemirror-inputrules';
-import { keymap } from 'prosemirror-keymap';
-import type { Node, Schema } from 'prosemirror-model';
-import { EditorState, NodeSelection, Plugin, TextSelection, type Command, type Transaction } from 'prosemirror-state';
-import { tableEditing } from 'prosemirror-tables';
+import { closeHistory } from 'prosemirror-history';
+import type { Node, Schema, Slice } from 'prosemirror-model';
+import {
+  EditorState,
+  NodeSelection,
+  Selection,
+  TextSelection,
+  type Command,
+  type Plugin,
+  type Transaction,
+} from 'prosemirror-state';
 import { EditorView } from 'prosemirror-view';
 import type { SourceProblem } from '@/domain/procedure/types';
 import type { Draft } from '@/domain/writing/draft';
 import { documentOf } from '@/domain/writing/field/fromTree';
 import { insertPiece, replaceChip } from '@/domain/writing/field/insertPiece';
 import { readWords } from '@/domain/writing/field/readWords';
-import { BLOCK_CHIPS, isChip, SCHEMAS, typeOf, type Where } from '@/domain/writing/field/schema';
+import { isChip, SCHEMAS, standsAlone, typeOf, type Where } from '@/domain/writing/field/schema';
 import { writeWords } from '@/domain/writing/field/writeWords';
 import type { Piece } from '@/domain/writing/insert';
 import { Chips, wordsIn } from './chipViews';
-import { copiedText, paste } from './clipboard';
+import { bringIn, copiedText } from './clipboard';
 import { formatsOf, type Format } from './formats';
-import { keysOf } from './keys';
+import { lineBehind, pluginsOf } from './plugins';
 
 /** What the field tells its surroundings. */
 export interface Told {
@@ -34,18 +39,12 @@ export interface Told {
   unreadable: (problem: SourceProblem) => void;
 }
 
-/** Nothing can be typed behind a table or a drawing that ends the words, so there is always a line. */
-const lineBehind = (doc: Node, tr: Transaction): Transaction | null => {
-  const last = doc.lastChild;
-  if (!last || last.type.name === 'paragraph' || last.type.name.endsWith('_list')) return null;
-  return tr.insert(doc.content.size, typeOf(doc.type.schema, 'paragraph').create()).setMeta('addToHistory', false);
-};
-
 /** One field of words on the screen: the view of a document that is read from a text and written back to it. */
 export class FieldView {
   readonly view: EditorView;
   readonly schema: Schema;
   private readonly chips: Chips;
+  private readonly plugins: Plugin[];
   private written: string;
   private waiting: (() => void)[] = [];
   private leaving = false;
@@ -61,6 +60,11 @@ export class FieldView {
     this.schema = SCHEMAS[where];
     this.written = text;
     this.chips = new Chips(draft);
+    this.plugins = pluginsOf(this.schema, {
+      openChip: this.openChip,
+      openLink: this.openLink,
+      leaving: () => this.leaving,
+    });
     this.view = new EditorView(place, {
       state: this.stateOf(doc),
       nodeViews: this.chips.nodeViews,
@@ -68,8 +72,9 @@ export class FieldView {
       clipboardTextSerializer: (slice) => copiedText(slice, where),
       handlePaste: (view, event, slice) => {
         this.apart();
-        return paste(view, event, slice, where, told.leftOut);
+        return event.clipboardData !== null && bringIn(view, event.clipboardData, slice, where, told.leftOut);
       },
+      handleDrop: (view, event, slice, moved) => this.dropped(view, event, slice, moved),
       handleClickOn: (view, _pos, node, at, _event, direct) => {
         if (!direct || !isChip(node)) return false;
         view.dispatch(view.state.tr.setSelection(NodeSelection.create(view.state.doc, at)));
@@ -98,34 +103,9 @@ export class FieldView {
   }
 
   private stateOf(doc: Node): EditorState {
-    const state = EditorState.create({ doc, plugins: this.plugins() });
+    const state = EditorState.create({ doc, plugins: this.plugins });
     const tr = lineBehind(doc, state.tr);
     return tr ? state.apply(tr) : state;
-  }
-
-  private plugins(): Plugin[] {
-    const { schema } = this;
-    const keys = keysOf(schema, { openChip: this.openChip, openLink: this.openLink, leaving: () => this.leaving });
-    return [
-      inputRules({
-        rules: [
-          wrappingInputRule(/^\s*[-*•]\s$/, typeOf(schema, 'bullet_list')),
-          wrappingInputRule(
-            /^(\d{1,4})[.)]\s$/,
-            typeOf(schema, 'ordered_list'),
-            (found) => ({ order: Number(found[1]) }),
-            (found, node) => node.childCount + (node.attrs['order'] as number) === Number(found[1]),
-          ),
-        ],
-      }),
-      keymap(keys),
-      history(),
-      tableEditing(),
-      new Plugin({
-        appendTransaction: (trs, _old, state) =>
-          trs.some((tr) => tr.docChanged) ? lineBehind(state.doc, state.tr) : null,
-      }),
-    ];
   }
 
   private apply(tr: Transaction): void {
@@ -145,7 +125,7 @@ export class FieldView {
     }
   }
 
-  private readonly openChip: Command = ({ selection }, dispatch) => {
+  readonly openChip: Command = ({ selection }, dispatch) => {
     if (!(selection instanceof NodeSelection) || !isChip(selection.node)) return false;
     if (dispatch) this.told.open(selection.from);
     return true;
@@ -157,10 +137,20 @@ export class FieldView {
     return true;
   };
 
-  /** Letters typed while a drawing is selected go below it: it is taken away on purpose only. */
+  /** What is dragged in from elsewhere is cleaned as what is pasted; a file must not take the place of the page. */
+  private dropped(view: EditorView, event: DragEvent, slice: Slice, moved: boolean): boolean {
+    const at = view.posAtCoords({ left: event.clientX, top: event.clientY });
+    if (moved || !event.dataTransfer || !at) return false;
+    view.dispatch(closeHistory(view.state.tr).setSelection(Selection.near(view.state.doc.resolve(at.pos))));
+    const taken = bringIn(view, event.dataTransfer, slice, this.where, this.told.leftOut);
+    if (taken) event.preventDefault();
+    return taken;
+  }
+
+  /** Letters typed while a drawing or a hold point is selected go below it: it is taken away on purpose only. */
   private typedOnBlock(view: EditorView, typed: string): boolean {
     const { selection } = view.state;
-    if (!(selection instanceof NodeSelection) || !BLOCK_CHIPS.includes(selection.node.type.name)) return false;
+    if (!(selection instanceof NodeSelection) || !standsAlone(selection.node)) return false;
     this.writeBeside(selection.from, 'below', typed);
     return true;
   }

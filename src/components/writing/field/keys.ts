@@ -77,11 +77,16 @@ const both =
   (state, dispatch, view) =>
     when(state) && then(state, dispatch, view);
 
+/** What keys do outside of the words themselves. */
+export interface KeyActs {
+  openChip: Command;
+  openLink: Command;
+  /** Escape was pressed, so that Tab leaves the field. */
+  leaving: () => boolean;
+}
+
 /** Keys of a field. Tab works in lists and tables; after Escape it leaves the field, as it does anywhere else. */
-export function keysOf(
-  schema: Schema,
-  acts: { openChip: Command; openLink: Command; leaving: () => boolean },
-): Record<string, Command> {
+export function keysOf(schema: Schema, acts: KeyActs): Record<string, Command> {
   const item = typeOf(schema, 'list_item');
   const unlessLeaving =
     (command: Command): Command =>

@@ -20,6 +20,9 @@ export const SENTENCE_CHIPS: readonly string[] = chipNames('sentence');
 export const BLOCK_CHIPS: readonly string[] = chipNames('block');
 export const isChip = (node: Node) => SENTENCE_CHIPS.includes(node.type.name) || BLOCK_CHIPS.includes(node.type.name);
 
+/** A chip or a hold point that is not among words. */
+export const standsAlone = (node: Node) => BLOCK_CHIPS.includes(node.type.name) || node.type.name === 'Hold';
+
 /** Attributes of a chip as they are written: those that it has, in their order. */
 export const givenOf = (node: Node): Attributes =>
   Object.fromEntries(

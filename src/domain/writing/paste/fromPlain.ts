@@ -4,9 +4,12 @@ import { linkFault } from '../../procedure/links';
 import { piecesOf } from '../field/fromTree';
 import { readWords } from '../field/readWords';
 import { markOf, typeOf, type Where } from '../field/schema';
+import { nothingLeftOut, type LeftOut } from './leftOut';
 
 const POINT = /^([ \t]*)(?:([-*•·])|(\d{1,4})[.)])[ \t]+(?=\S)/;
 const COMPONENT = /<[A-Z][A-Za-z]*[\s/>]/;
+const WHOLE_STEP = /^\s*<Step\b[^>]*>\n([^]*?)\n?<\/Step>\s*$/;
+const CAUTION = /<Caution of="([^"]*)" ?\/>\s*/g;
 
 interface Line {
   indent: number;
@@ -75,11 +78,15 @@ export const addressIn = (text: string): string | null =>
  * as they stand, and only lines that begin with a bullet or a number become lists. Lines of a passage between blank
  * lines belong together; a text without a blank line has a paragraph in each line.
  */
-export function fromPlain(text: string, schema: Schema, where: Where): Fragment {
+export function fromPlain(text: string, schema: Schema, where: Where, left: LeftOut = nothingLeftOut()): Fragment {
   const plain = text.replace(/\r\n?/g, '\n');
   if (COMPONENT.test(plain)) {
-    const read = readWords(plain.trim(), where);
-    if (read.ok) return piecesOf(read.nodes, schema);
+    const own = WHOLE_STEP.exec(plain)?.[1] ?? plain;
+    const read = readWords(own.replace(CAUTION, '').trim(), where);
+    if (read.ok) {
+      left.cautions.push(...[...own.matchAll(CAUTION)].map(([, key = '']) => key));
+      return piecesOf(read.nodes, schema);
+    }
   }
   const address = addressIn(plain);
   if (address) {

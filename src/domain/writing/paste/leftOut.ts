@@ -6,9 +6,11 @@ export interface LeftOut {
   links: string[];
   /** Words that were struck through. */
   struck: string[];
+  /** Keys of cautions, which stand ahead of the step and not among its words. */
+  cautions: string[];
 }
 
-export const nothingLeftOut = (): LeftOut => ({ pictures: [], links: [], struck: [] });
+export const nothingLeftOut = (): LeftOut => ({ pictures: [], links: [], struck: [], cautions: [] });
 
 const short = (words: string) => (words.length > 60 ? `${words.slice(0, 57)}…` : words);
 const named = (words: readonly string[]) => {
@@ -20,10 +22,11 @@ const named = (words: readonly string[]) => {
 const were = (n: number) => (n === 1 ? 'was' : 'were');
 
 /** What was left out, in whole sentences. */
-export function leftOutWords({ pictures, links, struck }: LeftOut): string[] {
+export function leftOutWords({ pictures, links, struck, cautions }: LeftOut): string[] {
   const p = pictures.length;
   const l = links.length;
   const s = struck.length;
+  const c = cautions.length;
   return [
     ...(p
       ? [
@@ -37,6 +40,11 @@ export function leftOutWords({ pictures, links, struck }: LeftOut): string[] {
       : []),
     ...(s
       ? [`${s} passage${s === 1 ? '' : 's'} that ${were(s)} struck through ${were(s)} left out${named(struck)}.`]
+      : []),
+    ...(c
+      ? [
+          `${c} caution${c === 1 ? '' : 's'} ${were(c)} left out${named(cautions)}. Put cautions ahead of the step with the button Caution.`,
+        ]
       : []),
   ];
 }
