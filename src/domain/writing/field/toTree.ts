@@ -66,5 +66,5 @@ function block(node: Node): RootContent[] {
   }
 }
 
-/** A field's document as tidied nodes of a sheet; paragraphs and quotations that say nothing are left out. */
-export const treeOf = (document: Node): RootContent[] => blocks(document);
+/** A passage of a field as tidied nodes of a sheet: none for a paragraph or a quotation that says nothing. */
+export const treeOf = (passage: Node): RootContent[] => block(passage);

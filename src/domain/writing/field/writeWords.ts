@@ -33,6 +33,14 @@ const spread: Change = (node) => {
 };
 /** A value alone on a line would tear its sentence apart, so its line break goes. */
 const onOneLine: Change = (node) => (node.type === 'break' ? [{ type: 'text', value: ' ' }] : [node]);
+/** Half an address, such as "www._a_", reads as one with its escapes in it; set as typed, its letters stand as they are. */
+const asTyped: Change = (node) =>
+  node.type === 'text'
+    ? node.value
+        .split(/(\S*(?:www\.|:\/\/|@)\S*)/i)
+        .filter(Boolean)
+        .map((value): Nodes => ({ type: /www\.|:\/\/|@/i.test(value) ? 'inlineCode' : 'text', value }))
+    : [node];
 const plain: Change = (node) =>
   node.type === 'emphasis' || node.type === 'strong' || node.type === 'link' ? node.children : [node];
 
@@ -41,7 +49,9 @@ const GIVEN_UP: readonly (readonly Change[])[] = [
   [spread],
   [onOneLine],
   [spread, onOneLine],
-  [spread, onOneLine, plain],
+  [asTyped],
+  [spread, onOneLine, asTyped],
+  [spread, onOneLine, asTyped, plain],
 ];
 
 const comesBack = (nodes: readonly RootContent[], text: string, where: Where): boolean => {
@@ -68,7 +78,19 @@ function settled(block: RootContent, where: Where): RootContent[] {
     const nodes = changes.reduce<RootContent[]>((rest, change) => changed(rest, change), [block]);
     if (comesBack(nodes, writeMarkdown(nodes), where)) return nodes;
   }
+  // What still cannot be read, the check names at the field.
   return [block];
+}
+
+/** A passage of a document never changes, so it is settled once, and a letter typed costs one passage. */
+const known = new WeakMap<Node, RootContent[]>();
+
+function settledOf(passage: Node, where: Where): RootContent[] {
+  const before = known.get(passage);
+  if (before) return before;
+  const made = treeOf(passage).flatMap((block) => settled(block, where));
+  known.set(passage, made);
+  return made;
 }
 
 /**
@@ -76,9 +98,7 @@ function settled(block: RootContent, where: Where): RootContent[] {
  * on the second line of a sentence: then the nearest that reads back is written, and no word or value is ever left out.
  */
 export function writeWords(document: Node, where: Where): string {
-  const tree = treeOf(document);
-  const text = writeMarkdown(tree);
-  if (comesBack(tree, text, where)) return text;
-  // What still cannot be read, the check names at the field.
-  return writeMarkdown(tree.flatMap((block) => settled(block, where)));
+  const tree: RootContent[] = [];
+  document.forEach((passage) => tree.push(...settledOf(passage, where)));
+  return writeMarkdown(tree);
 }
