@@ -71,7 +71,7 @@ function Problems({ problems }: { problems: readonly SourceProblem[] }) {
 
 function Check({ checked }: { checked: Checked }) {
   const { draft, asText } = useDesk();
-  const { problems, notices, checking, failed } = checked;
+  const { problems, notices, toFillIn, checking, failed } = checked;
   if (problems.length > 0)
     return (
       <div className="heavy-edge px-3.5 py-2.5">
@@ -82,9 +82,18 @@ function Check({ checked }: { checked: Checked }) {
   if (failed) return <p>{failed}</p>;
   return (
     <>
+      {toFillIn.length > 0 && (
+        <div className="heavy-edge mb-2.5 px-3.5 py-2.5">
+          <p className="mb-1.5 font-semibold">{toFillIn.length} to fill in before it can be proposed</p>
+          <Problems problems={toFillIn} />
+        </div>
+      )}
       <p>
         {asText ? 'Every value can be read.' : `${draft.steps.length} steps, every value can be read.`}{' '}
-        {notices.length === 0 && !checking && 'Cautions stand before their steps. Nothing missing.'}
+        {notices.length === 0 &&
+          toFillIn.length === 0 &&
+          !checking &&
+          'Cautions stand before their steps. Nothing missing.'}
       </p>
       {notices.length > 0 && (
         <div className="mt-2">

@@ -110,9 +110,10 @@ export function Session({ proposal, threads, source, base, current, engines, dra
   };
   const ask = () => {
     setTried(true);
-    const [fault] = checked.problems;
+    const [fault] = [...checked.problems, ...checked.toFillIn];
     if (fault) {
-      setRefusal({ detail: 'Something is to mend before it can be proposed.', errors: [] });
+      const what = checked.problems.length > 0 ? 'mend' : 'fill in';
+      setRefusal({ detail: `Something is to ${what} before it can be proposed.`, errors: [] });
       if (fault.path) goTo(fault.path);
     } else if (!form.getValues('reason').trim()) focusSoon(REASON_ID);
     else {

@@ -1,6 +1,7 @@
 import { useController } from 'react-hook-form';
 import { useState } from 'react';
 import { Checkbox } from '@/components/ui/Checkbox';
+import { ENGINE_TO_FILL_IN } from '@/domain/procedure/fillIn';
 import { SKILLS, SYSTEMS } from '@/domain/procedure/schema';
 import { problemAt } from '@/domain/writing/problems';
 import { useDesk, useDraftForm } from './desk';
@@ -18,7 +19,8 @@ function Engines() {
   const { engines, problems } = useDesk();
   const { control } = useDraftForm();
   const { field } = useController({ control, name: 'engines' });
-  const chosen = Array.isArray(field.value) ? field.value : [];
+  // What stands there for an engine until one is chosen is no engine, and goes with the first choice.
+  const chosen = (Array.isArray(field.value) ? field.value : []).filter((key) => key !== ENGINE_TO_FILL_IN);
   const known = engines.map(({ key }) => key);
   const all = [...engines, ...chosen.filter((key) => !known.includes(key)).map((key) => ({ key, name: key }))];
   const error = problemAt(problems, 'engines');

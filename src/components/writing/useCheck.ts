@@ -21,6 +21,8 @@ function useSettled<T>(value: T, ms: number): T {
 export interface Checked {
   problems: readonly SourceProblem[];
   notices: readonly SourceProblem[];
+  /** What a template, an import or the empty sheet left to the author, and is there still. */
+  toFillIn: readonly SourceProblem[];
   /** The last text that could be read, as the sheet shows it. */
   preview: CheckResult['preview'];
   /** The preview is of an earlier text, because this one cannot be read. */
@@ -62,6 +64,7 @@ export function useCheck(source: string, procedure: Procedure | null): Checked {
   return {
     problems,
     notices: data?.notices ?? [],
+    toFillIn: data?.toFillIn ?? [],
     preview,
     previewIsOld: problems.length > 0,
     checking: source !== settled || isFetching,

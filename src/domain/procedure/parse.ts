@@ -10,6 +10,7 @@ import { renderProcedure } from './render';
 import type { Frontmatter } from './schema';
 import { plainLines, splitLines } from './source';
 import { syntaxProblem } from './syntaxProblem';
+import { toFillIn } from './toFillIn';
 import type { Parsed, Procedure, SourceProblem } from './types';
 
 /** What one reading of a text finds: cleaned trees beside the procedure they are written out to. */
@@ -112,5 +113,6 @@ export function parseProcedure(source: string): Parsed {
     rendered: renderProcedure(settled),
     canonical,
     notices: inOrder(noticesOf(typed)),
+    toFillIn: inOrder(toFillIn(typed)),
   };
 }

@@ -60,5 +60,13 @@ export interface SourceProblem {
 }
 
 export type Parsed =
-  | { ok: true; procedure: Procedure; rendered: RenderedProcedure; canonical: string; notices: SourceProblem[] }
+  | {
+      ok: true;
+      procedure: Procedure;
+      rendered: RenderedProcedure;
+      canonical: string;
+      notices: SourceProblem[];
+      /** Places that a template or an import left to the author; while there are any it is not sent in. */
+      toFillIn: SourceProblem[];
+    }
   | { ok: false; errors: SourceProblem[] };

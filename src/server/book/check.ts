@@ -14,11 +14,12 @@ export function refuseOverlong(source: string): void {
 
 /** What a parsed text is answered with. */
 export function checkResult(parsed: Parsed, preview = false): CheckResult {
-  if (!parsed.ok) return { ok: false, errors: parsed.errors, notices: [], clamp: [] };
+  if (!parsed.ok) return { ok: false, errors: parsed.errors, notices: [], toFillIn: [], clamp: [] };
   return {
     ok: true,
     errors: [],
     notices: parsed.notices,
+    toFillIn: parsed.toFillIn,
     clamp: clampChecks(parsed.procedure.frontmatter.torques),
     ...(preview ? { preview: parsed.rendered } : {}),
   };

@@ -81,6 +81,22 @@ export function refuseUnreadable(parsed: Parsed): asserts parsed is Extract<Pars
   );
 }
 
+/** Refuses 422 a text that still holds what a template, an import or the empty sheet left to its author. */
+function refuseUnfilled({ toFillIn }: Extract<Parsed, { ok: true }>): void {
+  const [first, ...more] = toFillIn;
+  if (!first) return;
+  const others = more.length ? ` So are ${more.length} other ${more.length === 1 ? 'place' : 'places'}.` : '';
+  throw invalid(
+    `Line ${first.line}: ${first.message}${others}`,
+    toFillIn.map(({ line, column, message, path }) => ({
+      path: path ? `source.${path}` : 'source',
+      message,
+      line,
+      column,
+    })),
+  );
+}
+
 /** The text as it is proposed and published: in canonical form, weighed again, and with what it looks like. */
 export async function settleText(
   source: string,
@@ -88,6 +104,7 @@ export async function settleText(
 ): Promise<{ text: Weighed; rendered: RenderedProcedure }> {
   const typed = await parsedText(source);
   refuseUnreadable(typed);
+  refuseUnfilled(typed);
   const text = await weigh(typed.canonical, parentId);
   refuseUnreadable(text.parsed);
   return { text, rendered: text.parsed.rendered };

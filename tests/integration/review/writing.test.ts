@@ -73,7 +73,7 @@ describe('a new procedure', () => {
     const id = await beginProcedure(technician, shop('north'), 'Fit the fan');
     const { source, title, base } = await readProposal(technician, id);
     expect([title, base]).toEqual(['Fit the fan', null]);
-    expect(source).toBe(BLANK_PROCEDURE.replace('Fit the inspection cover', 'Fit the fan'));
+    expect(source).toBe(BLANK_PROCEDURE.replace('A new procedure', 'Fit the fan'));
   });
 });
 

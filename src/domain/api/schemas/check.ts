@@ -23,6 +23,11 @@ export const CheckResult = z.object({
   ok: z.boolean(),
   errors: z.array(SourceProblem),
   notices: z.array(SourceProblem),
+  toFillIn: z
+    .array(SourceProblem)
+    .describe(
+      'Places that a template, an import or the empty sheet left to the author; none may be left to send it in',
+    ),
   clamp: z
     .array(
       z.object({
