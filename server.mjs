@@ -25,12 +25,13 @@ const BODY_LIMIT = 1024 * 1024;
 /** How long a request may take to come in, in milliseconds. */
 const BODY_TIME = 30_000;
 /**
- * The two addresses that take photos. They read no further than their own limits, which are the same or smaller; a photo that is
- * sent from a bench with a poor network takes minutes. A length need not be given.
+ * The addresses that take photos and documents. They read no further than their own limits, which are the same or smaller; a
+ * photo that is sent from a bench with a poor network takes minutes. A length need not be given.
  */
 const UPLOADS = [
   { path: /^\/api\/v1\/photos\/?$/, limit: 15 * BODY_LIMIT + 64 * 1024, time: 300_000 },
   { path: /^\/procedures\/[^/]+\/flag\/?$/, limit: 64 * BODY_LIMIT, time: 600_000 },
+  { path: /^\/(api\/v1\/imports|procedures\/new)\/?$/, limit: 24 * BODY_LIMIT, time: 300_000 },
 ];
 /** What a request may carry, and for how long. */
 const boundsOf = ({ method, url = '', headers }) => {
@@ -94,7 +95,7 @@ const server = createServer((req, res) => {
       413,
       'Too large',
       upload
-        ? `Photos may have 15 MB each; this form carries more than ${Math.floor(limit / BODY_LIMIT)} MB.`
+        ? `What this form may carry is ${Math.floor(limit / BODY_LIMIT)} MB at most. Send smaller files.`
         : 'A request may carry 1 MB at most.',
     );
   // Whoever sends slower than that holds a place that somebody else could use.

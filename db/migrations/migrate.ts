@@ -13,6 +13,7 @@ import { bulletins } from './0009-bulletins';
 import { flags } from './0010-flags';
 import { draftVersions } from './0011-draft-versions';
 import { photos } from './0012-photos';
+import { origins } from './0013-origins';
 import { history } from './0014-history';
 import { feedKeys } from './0015-feed-keys';
 import type { Migration } from './migration';
@@ -31,6 +32,7 @@ const MIGRATIONS: readonly Migration[] = [
   flags,
   draftVersions,
   photos,
+  origins,
   history,
   feedKeys,
 ];

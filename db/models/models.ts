@@ -6,7 +6,7 @@ import { flag, id, optionalText, text, times } from './columns';
 import { FeedKey } from './feeds';
 import { Membership, Person, Shop, ShopRule } from './people';
 import { AuditEntry, IdempotencyKey, Setting } from './records';
-import { Agreement, ClampOverride, DraftVersion, Flag, Remark, Thread, ThreadMessage } from './review';
+import { Agreement, ClampOverride, DraftVersion, Flag, ProcedureOrigin, Remark, Thread, ThreadMessage } from './review';
 
 const key = { ...text, primaryKey: true };
 const integer = { type: DataTypes.INTEGER, allowNull: false };
@@ -102,6 +102,10 @@ export function defineModels(sequelize: Sequelize, now: () => string) {
         ...stamps,
       }),
       bind('Revision', 'revisions'),
+    ),
+    ProcedureOrigin: class extends ProcedureOrigin {}.init(
+      own({ procedureId: key, json, ...stamps }),
+      bind('ProcedureOrigin', 'origins'),
     ),
     Rendering: class extends Rendering {}.init(
       own({ hash: key, form: integer, json: text, ...stamps }),

@@ -1,6 +1,7 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import type { Suggestion } from '@/domain/review/suggestions';
 import type { ThreadKind } from '@/domain/review/threads';
+import type { Origin } from '@/domain/api/schemas/imports';
 import type { VersionKind } from '@/domain/writing/versions';
 
 /** A reviewer's yes to one exact text on one base. It counts while both are still those of the revision. */
@@ -124,6 +125,14 @@ export class DraftVersion extends Model<InferAttributes<DraftVersion>, InferCrea
   declare packed: Buffer;
   /** What differs from the version before it that is still kept, in words. */
   declare what: CreationOptional<string[]>;
+  declare createdAt: CreationOptional<string>;
+  declare updatedAt: CreationOptional<string>;
+}
+
+/** What a new procedure was begun from. Written with its first draft, never changed; it goes when the draft is thrown away. */
+export class ProcedureOrigin extends Model<InferAttributes<ProcedureOrigin>, InferCreationAttributes<ProcedureOrigin>> {
+  declare procedureId: string;
+  declare json: Origin;
   declare createdAt: CreationOptional<string>;
   declare updatedAt: CreationOptional<string>;
 }

@@ -27,6 +27,7 @@ export const proposal = (change: Partial<Proposal> = {}): Proposal => ({
   updatedAt: '2026-11-28T09:00:00.000Z',
   proposedAt: '2026-11-28T09:00:00.000Z',
   source: '',
+  origin: null,
   agreed: [],
   failing: [],
   remarks: [],

@@ -9,6 +9,7 @@ import * as check from './schemas/check';
 import * as common from './schemas/common';
 import * as compare from './schemas/compare';
 import * as history from './schemas/history';
+import * as imports from './schemas/imports';
 import * as me from './schemas/me';
 import * as merge from './schemas/merge';
 import * as photos from './schemas/photos';
@@ -44,6 +45,7 @@ function names(): Map<z.ZodTypeAny, string> {
     common,
     compare,
     history,
+    imports,
     me,
     merge,
     photos,
@@ -144,6 +146,14 @@ const withFile = (file: string, fields: object) => ({
   },
 });
 
+/** A form with a file: the file is the field of that name, in bytes. */
+function formOf({ form }: Operation) {
+  if (!form) return {};
+  const { properties, ...schema } = jsonSchema(form, { $refStrategy: 'none' });
+  const file = { type: 'string', format: 'binary' };
+  return { 'multipart/form-data': { schema: { ...schema, properties: { ...(properties as object), file } } } };
+}
+
 function describe(op: Operation, refOf: (schema: z.ZodTypeAny) => object) {
   const json = (schema: z.ZodTypeAny) => ({ 'application/json': { schema: refOf(schema) } });
   const success = {
@@ -169,7 +179,7 @@ function describe(op: Operation, refOf: (schema: z.ZodTypeAny) => object) {
       : {
           requestBody: {
             required: true,
-            content: op.file === null ? json(op.body) : withFile(op.file, refOf(op.body)),
+            content: op.file === null ? { ...json(op.body), ...formOf(op) } : withFile(op.file, refOf(op.body)),
           },
         }),
     responses: {

@@ -27,6 +27,8 @@ export interface Operation<
   body: Body;
   /** Name of the field that holds a file, for a call that takes `multipart/form-data`; null for JSON. */
   file: string | null;
+  /** What a form with a file carries, where the call takes one instead of JSON. The route reads it itself. */
+  form: z.ZodTypeAny | null;
   /** Status of success; 204 answers nothing. */
   status: 200 | 201 | 204;
   reply: Reply;
@@ -46,6 +48,7 @@ interface Given<P, Q, B, R> extends Pick<Operation, 'id' | 'method' | 'path' | '
   query?: Q;
   body?: B;
   file?: string;
+  form?: z.ZodTypeAny;
   status?: Operation['status'];
   reply?: R;
   tag?: Operation['tag'];
@@ -66,6 +69,7 @@ export function operation<
     ifMatch: 'ignored',
     refuses: [],
     file: null,
+    form: null,
     ...given,
     params: given.params ?? (Nothing as unknown as P),
     query: given.query ?? (Nothing as unknown as Q),

@@ -32,6 +32,8 @@ export interface ProposalSubject {
 export interface Subjects {
   readBook: { book: Book };
   propose: { book: Book };
+  /** Starting a new procedure of a book from a sheet of another or the same one. */
+  copySheet: { from: Book; to: Book };
   readProposal: ProposalSubject;
   editProposal: ProposalSubject;
   submit: ProposalSubject;
@@ -136,6 +138,17 @@ const RULES: { [A in Act]: (actor: Actor, subject: Subjects[A]) => Permission } 
   propose: (actor, { book }) => {
     if (!reads(actor, book)) return HIDDEN;
     return writes(actor, book) ? YES : no('A technician, senior technician, editor or owner proposes a change.');
+  },
+  // A shop's own text goes where its shop wants it, and never to another shop that one of its people works in too.
+  copySheet: (actor, { from, to }) => {
+    if (!reads(actor, from) || !reads(actor, to)) return HIDDEN;
+    if (!writes(actor, to)) return no('A technician, senior technician, editor or owner writes a new procedure.');
+    if (from.kind === 'common') return YES;
+    if (to.kind === 'shop')
+      return from.shopId === to.shopId ? YES : no("A shop's own sheet is not copied into another shop's book.");
+    return holds(actor, from.shopId, ['editor', 'owner'])
+      ? YES
+      : no("A shop's own sheet is copied into the common book, where every shop reads it, by its editor or owner.");
   },
   readProposal: (actor, p) => (readsProposal(actor, p) ? YES : HIDDEN),
   editProposal: asAuthor,

@@ -1,9 +1,8 @@
 import type { Worker } from 'node:worker_threads';
-import type { Parsed } from '@/domain/procedure/types';
 import { Refusal } from '../refusal';
 import { READY, startThread } from './parseThread';
 
-interface Options {
+export interface QueueOptions<Answer> {
   /** Program of the thread. */
   url: URL;
   /** Milliseconds of processor time a single text may take, once the thread runs, before the thread is ended. */
@@ -14,21 +13,18 @@ interface Options {
   startLimit: number;
   /** Texts that may wait for the thread. */
   places: number;
+  /** The answer to a text that took too long, and to one that the thread broke at. */
+  tooLong: Answer;
+  broke: Answer;
 }
 
-interface Waiting {
-  source: string;
-  answer: (parsed: Parsed) => void;
+interface Waiting<Question, Answer> {
+  question: Question;
+  answer: (answer: Answer) => void;
 }
-
-const TOO_LONG =
-  'This text takes too long to read. Look for very long tables, deep lists or brackets without end, and write it plainer.';
-const BROKE = 'This text could not be read. Write it plainer, or divide it into two procedures.';
 
 /** Share of `limit` that the whole process must have run before a text is held to be the cause. */
 const RAN = 0.75;
-
-const refused = (message: string): Parsed => ({ ok: false, errors: [{ line: 1, column: 1, message }] });
 
 const busy = () =>
   new Refusal(503, 'busy', 'Busy', 'Too many texts are being checked. Nothing was saved; try again in a moment.', {
@@ -36,26 +32,26 @@ const busy = () =>
   });
 
 /**
- * A parser in a thread of its own. Texts are taken one after the other; one that runs into `limit` ends the
+ * A reader of foreign texts in a thread of its own. They are taken one after the other; one that runs into `limit` ends the
  * thread and is refused in a sentence, and the next text gets a new thread.
  */
-export class ParseQueue {
-  readonly #options: Options;
-  readonly #waiting: Waiting[] = [];
-  #current: Waiting | null = null;
+export class ParseQueue<Question, Answer extends object> {
+  readonly #options: QueueOptions<Answer>;
+  readonly #waiting: Waiting<Question, Answer>[] = [];
+  #current: Waiting<Question, Answer> | null = null;
   #thread: Worker | null = null;
   #isReady = false;
   #timer: NodeJS.Timeout | undefined;
 
-  constructor(options: Options) {
+  constructor(options: QueueOptions<Answer>) {
     this.#options = options;
   }
 
-  /** The parsed text, or a refusal in its errors. Rejects with a 503 refusal when too many texts wait. */
-  parse(source: string): Promise<Parsed> {
+  /** What the thread makes of a text, or one of the two refusals. Rejects with a 503 refusal when too many texts wait. */
+  parse(question: Question): Promise<Answer> {
     if (this.#waiting.length >= this.#options.places) return Promise.reject(busy());
     return new Promise((answer) => {
-      this.#waiting.push({ source, answer });
+      this.#waiting.push({ question, answer });
       this.#next();
     });
   }
@@ -68,8 +64,8 @@ export class ParseQueue {
 
   /** Ends the thread. Texts that still wait are refused. */
   async close(): Promise<void> {
-    this.#waiting.splice(0).forEach(({ answer }) => answer(refused(BROKE)));
-    await this.#end(BROKE);
+    this.#waiting.splice(0).forEach(({ answer }) => answer(this.#options.broke));
+    await this.#end(this.#options.broke);
   }
 
   #next(): void {
@@ -79,19 +75,19 @@ export class ParseQueue {
     // While somebody waits for an answer the process must not end.
     thread.ref();
     if (this.#isReady) this.#ask();
-    else this.#timer = setTimeout(() => void this.#end(BROKE), this.#options.startLimit);
+    else this.#timer = setTimeout(() => void this.#end(this.#options.broke), this.#options.startLimit);
   }
 
   #start(): Worker {
     const thread = startThread(this.#options.url);
-    thread.on('message', (message: Parsed | typeof READY) => {
+    thread.on('message', (message: Answer | typeof READY) => {
       if (message === READY) {
         this.#isReady = true;
         this.#ask();
-      } else this.#finish(message);
+      } else this.#finish(message as Answer);
     });
-    thread.on('error', () => void this.#end(BROKE));
-    thread.on('exit', () => void this.#end(BROKE));
+    thread.on('error', () => void this.#end(this.#options.broke));
+    thread.on('exit', () => void this.#end(this.#options.broke));
     return thread;
   }
 
@@ -99,7 +95,7 @@ export class ParseQueue {
     clearTimeout(this.#timer);
     if (!this.#current) return;
     this.#watch(process.cpuUsage(), this.#options.patience);
-    this.#thread?.postMessage(this.#current.source);
+    this.#thread?.postMessage(this.#current.question);
   }
 
   /** On a machine that is busy with other work the clock says little about a text: a process that hardly ran gets longer. */
@@ -108,20 +104,20 @@ export class ParseQueue {
     this.#timer = setTimeout(() => {
       const { user, system } = process.cpuUsage(since);
       if ((user + system) / 1000 < limit * RAN && patience > limit) this.#watch(since, patience - limit);
-      else void this.#end(TOO_LONG);
+      else void this.#end(this.#options.tooLong);
     }, limit);
   }
 
-  #finish(parsed: Parsed): void {
+  #finish(answer: Answer): void {
     clearTimeout(this.#timer);
     const done = this.#current;
     this.#current = null;
     this.#thread?.unref();
-    done?.answer(parsed);
+    done?.answer(answer);
     this.#next();
   }
 
-  async #end(because: string): Promise<void> {
+  async #end(because: Answer): Promise<void> {
     const thread = this.#thread;
     this.#thread = null;
     this.#isReady = false;
@@ -129,7 +125,7 @@ export class ParseQueue {
     // A thread that is being ended may still report; nobody waits for it any more.
     thread?.on('error', () => undefined);
     const ended = thread?.terminate();
-    if (this.#current) this.#finish(refused(because));
+    if (this.#current) this.#finish(because);
     await ended;
   }
 }

@@ -7,15 +7,21 @@ const LIMIT = 1500;
 const PATIENCE = 12_000;
 
 // Kept on globalThis: a development server loads this module again after each change, but one thread is enough.
-const held = globalThis as { matchmarkParser?: ParseQueue };
+const held = globalThis as { matchmarkParser?: ParseQueue<string, Parsed> };
+
+const refused = (message: string): Parsed => ({ ok: false, errors: [{ line: 1, column: 1, message }] });
 
 const parser = () =>
-  (held.matchmarkParser ??= new ParseQueue({
+  (held.matchmarkParser ??= new ParseQueue<string, Parsed>({
     url: parseWorkerUrl,
     limit: LIMIT,
     patience: PATIENCE,
     startLimit: 20_000,
     places: 40,
+    tooLong: refused(
+      'This text takes too long to read. Look for very long tables, deep lists or brackets without end, and write it plainer.',
+    ),
+    broke: refused('This text could not be read. Write it plainer, or divide it into two procedures.'),
   }));
 
 /**

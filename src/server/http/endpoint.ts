@@ -10,7 +10,8 @@ import { comesFromUs } from './origin';
 import { alreadyHeld, expectedVersion } from './preconditions';
 import { problemResponse } from './problem';
 import { countCall } from './rateLimit';
-import { readBody, type SentBody } from './sentBody';
+import { NOTHING_SENT, readBody, type SentBody } from './sentBody';
+import { isMultipart } from './upload';
 import { fieldErrors } from './fieldErrors';
 
 /** What a route is given: everything checked against its operation. */
@@ -59,9 +60,11 @@ async function settle<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends 
   if (!params.success) throw notFound();
   const query = operation.query.safeParse(Object.fromEntries(url.searchParams));
   if (!query.success) throw invalid('The address asks for something that cannot be.', fieldErrors(query.error));
-  const sent = await readBody(operation, request);
+  // The route streams a form with a file itself, from `context.request`; `body` is then undefined.
+  const isForm = operation.form !== null && isMultipart(request);
+  const sent = isForm ? NOTHING_SENT : await readBody(operation, request);
   try {
-    return await settled(operation, act, context, { actor, params: params.data, query: query.data, sent });
+    return await settled(operation, act, context, { actor, params: params.data, query: query.data, sent, isForm });
   } finally {
     await sent.dispose();
   }
@@ -72,11 +75,11 @@ async function settled<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends
   operation: Operation<P, Q, B, R>,
   act: (call: Call<P, Q, B>) => Promise<Reply<R>>,
   context: APIContext,
-  { actor, sent, ...given }: { actor: Actor; params: unknown; query: unknown; sent: SentBody },
+  { actor, sent, isForm, ...given }: { actor: Actor; params: unknown; query: unknown; sent: SentBody; isForm: boolean },
 ): Promise<Outgoing> {
   const { request, url } = context;
   const { secret } = await app();
-  const body = operation.body.safeParse(sent.value);
+  const body = isForm ? { success: true as const, data: undefined } : operation.body.safeParse(sent.value);
   if (!body.success) throw invalid('Some fields cannot be accepted.', fieldErrors(body.error));
   const version = expectedVersion(request.headers);
   if (operation.ifMatch === 'required' && !request.headers.has('if-match'))
@@ -96,7 +99,7 @@ async function settled<P extends z.ZodTypeAny, Q extends z.ZodTypeAny, B extends
         holds: (tag) => alreadyHeld(request.headers, tag),
       }),
     );
-  const key = operation.method === 'get' ? null : idempotencyKey(request.headers);
+  const key = operation.method === 'get' || isForm ? null : idempotencyKey(request.headers);
   if (key === null) return answer();
   const { replayed, ...kept } = await once(
     actor.personId,

@@ -10,7 +10,7 @@ export async function readForm(request: Request): Promise<FormData> {
 }
 
 /** A browser sends every line end of a form as CRLF. */
-const lineEnds = (text: string): string => text.replace(/\r\n/g, '\n');
+export const lineEnds = (text: string): string => text.replace(/\r\n/g, '\n');
 
 /** What stands in a text field; empty where the form has none of that name. */
 export function textOf(form: FormData, name: string): string {

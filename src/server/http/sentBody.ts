@@ -17,6 +17,9 @@ export interface SentBody {
 
 const nothing = async () => undefined;
 
+/** Of a call whose route reads the body itself. */
+export const NOTHING_SENT: SentBody = { print: '', value: undefined, file: '', dispose: nothing };
+
 /** A form with one file. Refuses like `receive`, and 422 where the file is missing or empty. */
 async function readFileForm(request: Request, field: string): Promise<SentBody> {
   const { fields, files, dispose } = await receive(request, {
@@ -37,7 +40,7 @@ async function readFileForm(request: Request, field: string): Promise<SentBody> 
 
 /** Reads the body that an operation takes. */
 export async function readBody({ body, file }: Operation, request: Request): Promise<SentBody> {
-  if (body._def.typeName === 'ZodUndefined') return { print: '', value: undefined, file: '', dispose: nothing };
+  if (body._def.typeName === 'ZodUndefined') return NOTHING_SENT;
   if (file !== null) return readFileForm(request, file);
   const { text, value } = await readJson(request);
   return { print: text, value, file: '', dispose: nothing };

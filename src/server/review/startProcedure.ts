@@ -1,3 +1,4 @@
+import type { Origin } from '@/domain/api/schemas/imports';
 import type { Proposal } from '@/domain/api/schemas/proposals';
 import { may, type Actor, type Book } from '@/domain/people/may';
 import { refuseOverlong } from '../book/check';
@@ -5,6 +6,7 @@ import { app } from '../context';
 import { forbidden, notFound } from '../refusal';
 import { refuseUnreadable, weigh } from './draftText';
 import { makeDraft } from './makeDraft';
+import { keepOrigin, sheetToCopy } from './origin';
 import { readProposal } from './readProposal';
 
 export interface NewProcedure {
@@ -12,6 +14,8 @@ export interface NewProcedure {
   book: string;
   source: string;
   reason: string;
+  /** What it was begun from, where that is kept. */
+  origin?: Origin | undefined;
 }
 
 /** Numbers up to here are for procedures that a release ships, so that a later release never finds one taken. */
@@ -26,15 +30,25 @@ async function nextNumber(): Promise<string> {
   return `P-${String(Math.max(row?.highest ?? 0, RELEASED_UP_TO) + 1).padStart(4, '0')}`;
 }
 
-/**
- * Starts a draft of a new procedure under the next free number, unseen by others until it is sent in.
- * Refuses 404 a book that is unknown or not theirs, 403 without a role that proposes, 422 a text that
- * cannot be read (nothing is stored).
- */
-export async function startProcedure(actor: Actor, { book: name, source, reason }: NewProcedure): Promise<Proposal> {
+/** The book of that name, if this person may propose a new procedure for it: 404 an unknown one, 403 without the role. */
+export function bookToWriteFor(actor: Actor, name: string): Book {
   const book: Book = name === 'common' ? { kind: 'common' } : { kind: 'shop', shopId: name };
   const permission = may(actor, 'propose', { book });
   if (!permission.ok) throw permission.visible ? forbidden(permission.why) : notFound();
+  return book;
+}
+
+/**
+ * Starts a draft of a new procedure under the next free number, unseen by others until it is sent in.
+ * Refuses 404 a book that is unknown or not theirs, 403 without a role that proposes, 422 a text that
+ * cannot be read (nothing is stored); of a copy also as `sheetToCopy` does.
+ */
+export async function startProcedure(
+  actor: Actor,
+  { book: name, source, reason, origin }: NewProcedure,
+): Promise<Proposal> {
+  const book = bookToWriteFor(actor, name);
+  if (origin?.kind === 'copy') await sheetToCopy(actor, book, origin.number, origin.letter);
   refuseOverlong(source);
   const text = await weigh(source, null);
   refuseUnreadable(text.parsed);
@@ -43,6 +57,7 @@ export async function startProcedure(actor: Actor, { book: name, source, reason 
   const id = await db.write(async () => {
     const number = await nextNumber();
     const procedure = await db.models.Procedure.create({ number, bookKind: book.kind, shopId });
+    if (origin) await keepOrigin(procedure.id, origin);
     return makeDraft(actor, { procedureId: procedure.id, number, shopId, on: null, text, reason });
   });
   return readProposal(actor, id);

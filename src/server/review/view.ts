@@ -7,6 +7,7 @@ import { agreementsNeeded, isStale, standing, tally } from '@/domain/review/rule
 import { bookRef, personColumn, personRef } from '../book/columns';
 import { app } from '../context';
 import { evidenceOf } from '../photos/evidence';
+import { originOf } from './origin';
 import type { Listed, Loaded } from './proposals';
 import { trailOf } from './trail';
 
@@ -80,6 +81,7 @@ export async function proposalOf(actor: Actor, proposal: Loaded): Promise<Propos
     { id: proposal.id },
   );
   const personOf = (id: string) => personRef(people.find((p) => p.id === id)?.person ?? 'null');
+  const origin = await originOf(proposal);
   const { facts } = proposal;
   const { editors, standIns } = standing(facts);
   const stands = new Set([...editors, ...standIns]);
@@ -89,6 +91,7 @@ export async function proposalOf(actor: Actor, proposal: Loaded): Promise<Propos
     ...summaryOf(proposal),
     source: proposal.source,
     photos: await evidenceOf(actor, proposal),
+    origin,
     agreed: proposal.given.map((g) => ({
       person: personOf(g.personId),
       at: g.at,

@@ -1,18 +1,29 @@
 import { afterAll, afterEach, describe, expect, it } from 'vitest';
-import { ParseQueue } from '@/server/book/parseQueue';
+import type { Parsed } from '@/domain/procedure/types';
+import { ParseQueue, type QueueOptions } from '@/server/book/parseQueue';
 import { parseSafely, startParsing, stopParsing } from '@/server/book/parsing';
 import { changed, SAMPLE } from '../../unit/procedure/sample';
 
 const url = new URL('../../fixtures/threads/stuck.mjs', import.meta.url);
-const message = async (queue: ParseQueue, source: string) => {
+type Queue = ParseQueue<string, Parsed>;
+const refused = (message: string): Parsed => ({ ok: false, errors: [{ line: 1, column: 1, message }] });
+const answers = {
+  tooLong: refused('This text takes too long to read.'),
+  broke: refused('This text could not be read.'),
+};
+const message = async (queue: Queue, source: string) => {
   const parsed = await queue.parse(source);
   return parsed.ok ? 'ok' : parsed.errors[0]?.message;
 };
 
 describe('the parse thread', () => {
-  let queue: ParseQueue;
-  const open = (options: Partial<ConstructorParameters<typeof ParseQueue>[0]> = {}) =>
-    (queue = new ParseQueue({ url, limit: 150, patience: 3_000, startLimit: 10_000, places: 3, ...options }));
+  let queue: Queue;
+  const open = (options: Partial<QueueOptions<Parsed>> = {}) =>
+    (queue = new ParseQueue<string, Parsed>({
+      ...{ url, limit: 150, patience: 3_000, startLimit: 10_000, places: 3 },
+      ...answers,
+      ...options,
+    }));
   afterEach(() => queue.close());
 
   it('ends a text that takes too long, refuses it in a sentence, and reads the next one', async () => {

@@ -49,6 +49,12 @@ const TABLE: Row[] = [
   row('read the common book', 'YYYYYYY.', 'readBook', { book: common }),
   row("read the shop's own book", 'YYYYY...', 'readBook', { book: here }),
   row("read another shop's book", '........', 'readBook', { book: there }),
+  row('copy a common sheet into the common book', 'nYYYYYn.', 'copySheet', { from: common, to: common }),
+  row('copy a common sheet into the shop', 'nYYYY...', 'copySheet', { from: common, to: here }),
+  row("copy the shop's own sheet within the shop", 'nYYYY...', 'copySheet', { from: here, to: here }),
+  row("copy the shop's own sheet into the common book", 'nnnYY...', 'copySheet', { from: here, to: common }),
+  row("copy another shop's sheet", '........', 'copySheet', { from: there, to: here }),
+  row("copy the shop's own sheet into another shop", '........', 'copySheet', { from: here, to: there }),
   row('flag a common sheet', 'YYYYYYY.', 'flag', { book: common }),
   row('flag a sheet of the shop', 'YYYYY...', 'flag', { book: here }),
   row("flag another shop's sheet", '........', 'flag', { book: there }),
@@ -187,4 +193,10 @@ describe('who may do what', () => {
   ])('says why', (actor, act, subject, why) => {
     expect(may(actor, act, subject as Subjects[Act])).toEqual({ ok: false, visible: true, why });
   });
+});
+
+it("keeps a shop's own sheet out of another shop, also for somebody who is editor and owner of both", () => {
+  const both = person(inShop('editor'), inShop('owner'), inShop('editor', THERE), inShop('owner', THERE));
+  expect(may(both, 'copySheet', { from: here, to: there })).toMatchObject({ ok: false, visible: true });
+  expect(may(both, 'copySheet', { from: here, to: here })).toEqual({ ok: true });
 });

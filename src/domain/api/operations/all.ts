@@ -2,6 +2,7 @@ import * as book from './book';
 import * as bulletins from './bulletins';
 import * as flags from './flags';
 import * as history from './history';
+import * as imports from './imports';
 import * as me from './me';
 import * as photos from './photos';
 import * as proposals from './proposals';
@@ -19,6 +20,7 @@ export const OPERATIONS: readonly Operation[] = [
   bulletins,
   flags,
   history,
+  imports,
   proposals,
   threads,
   versions,

@@ -3,6 +3,7 @@ import { REVISION_STATES } from '../../revision/types';
 import { Id, ProcedureNumber, RevisionLetter, BookRef, PersonRef } from './common';
 import { CheckResult } from './check';
 import { Severity } from './compare';
+import { Origin } from './imports';
 import { Photo } from './photos';
 
 /** A text on its way: how it is started, saved and judged. The OpenAPI document is made from these schemas. */
@@ -13,6 +14,7 @@ export const StartProcedure = z.object({
   book: z.string().describe('"common" or a shop id'),
   source: z.string(),
   reason: Reason.default(''),
+  origin: Origin.optional().describe('What it was begun from; kept with the draft, and told to whoever reviews it'),
 });
 
 export const StartProposal = z.object({ base: RevisionLetter, source: z.string(), reason: Reason.default('') });
@@ -102,6 +104,7 @@ export type ProposalSummary = z.infer<typeof ProposalSummary>;
 export const Proposal = ProposalSummary.extend({
   source: z.string(),
   photos: z.array(Photo).describe('Evidence that belongs to the reason'),
+  origin: Origin.nullable().describe('What a new procedure was begun from; null where it was written from nothing'),
   agreed: z.array(Agreement),
   failing: z
     .array(FailingTorque)
