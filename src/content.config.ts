@@ -16,6 +16,12 @@ const procedures = defineCollection({
   schema: Frontmatter,
 });
 
+/** Bones of a new procedure for one kind of work; read as text when somebody starts from one. */
+const templates = defineCollection({
+  loader: glob({ pattern: '*.mdx', base: './content/templates' }),
+  schema: Frontmatter,
+});
+
 const engines = defineCollection({
   loader: glob({ pattern: '*.yaml', base: './content/engines' }),
   schema: Engine,
@@ -48,4 +54,4 @@ const calculators = defineCollection({
   schema: z.object({}).strict(),
 });
 
-export const collections = { procedures, engines, vocabulary, handbook, calculators };
+export const collections = { procedures, templates, engines, vocabulary, handbook, calculators };

@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { OriginNote } from '@/components/sheet/OriginNote';
 import { Button } from '@/components/ui/Button';
 import { ButtonLink } from '@/components/ui/ButtonLink';
 import { dayOf } from '@/components/ui/day';
@@ -156,6 +157,7 @@ export function ReviewHead({
             </p>
           </Notice>
         )}
+        {!proposal.publishedLetter && <OriginNote origin={proposal.origin} />}
         {fault && (
           <Notice title="This draft cannot be compared yet">
             <p>{fault}</p>

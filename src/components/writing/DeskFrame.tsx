@@ -1,3 +1,4 @@
+import { OriginNote } from '@/components/sheet/OriginNote';
 import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
 import type { Proposal } from '@/domain/api/schemas/proposals';
@@ -138,6 +139,9 @@ export function DeskFrame(props: Props) {
         )}
         {current && !choosing && (
           <StaleBase number={proposal.number} base={baseLetter} current={current} mine={mine} merging={merging} />
+        )}
+        {proposal.origin && (
+          <OriginNote origin={proposal.origin} className="border-x-0 border-t-0 border-l-[8px] px-5 sm:px-7" />
         )}
         <Returned />
         <ThreadsAhead />

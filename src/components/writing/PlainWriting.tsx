@@ -1,3 +1,4 @@
+import { OriginNote } from '@/components/sheet/OriginNote';
 import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
 import { TextArea } from '@/components/ui/TextArea';
@@ -46,6 +47,7 @@ export function PlainWriting({
           <a href={`/proposals/${proposal.id}/versions`}>Earlier versions</a>
         </p>
       </div>
+      <OriginNote origin={proposal.origin} className="border-b-0 border-r-0 px-5 py-4 sm:px-9" />
       {kept && !refused && <p className="px-5 py-3 font-semibold sm:px-9">Draft kept.</p>}
       {said && !kept && !refused && <p className="px-5 py-3 font-semibold sm:px-9">{said}</p>}
       {past && (

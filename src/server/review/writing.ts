@@ -1,13 +1,10 @@
 import type { Me } from '@/domain/api/schemas/me';
 import type { Proposal } from '@/domain/api/schemas/proposals';
 import { may, type Actor, type Book } from '@/domain/people/may';
-import { BLANK_PROCEDURE } from '@/domain/procedure/blank';
-import { readDraft, sourceOf } from '@/domain/writing/readDraft';
 import { readSheet } from '../book/sheet';
 import { app } from '../context';
 import { formable } from './formable';
 import { readProposal } from './readProposal';
-import { startProcedure } from './startProcedure';
 import { startProposal } from './startProposal';
 
 /** A published text that a draft is set against. */
@@ -76,11 +73,4 @@ export function booksFor(actor: Actor, person: Me): { book: string; name: string
       allowed({ kind: 'shop', shopId }) ? [{ book: shopId, name: `${name}, for this shop only` }] : [],
     ),
   ];
-}
-
-/** Begins a new procedure from the blank, under its own title. Returns the draft's id; refuses as `startProcedure` does. */
-export async function beginProcedure(actor: Actor, book: string, title: string): Promise<string> {
-  const blank = readDraft(BLANK_PROCEDURE);
-  const source = blank ? sourceOf({ ...blank, title: title.trim() || blank.title }) : BLANK_PROCEDURE;
-  return (await startProcedure(actor, { book, source, reason: '' })).id;
 }

@@ -8,7 +8,8 @@ import { readProposal } from '@/server/review/readProposal';
 import { returnToAuthor } from '@/server/review/giveBack';
 import { saveProposal } from '@/server/review/saveProposal';
 import { submit } from '@/server/review/submit';
-import { beginProcedure, booksFor, openDraft, readWriting } from '@/server/review/writing';
+import { beginProcedure } from '@/server/review/beginProcedure';
+import { booksFor, openDraft, readWriting } from '@/server/review/writing';
 import { signedIn } from '../api/support/network';
 import { text } from '../api/support/text';
 import { useNetwork } from '../api/support/useNetwork';
@@ -70,7 +71,7 @@ describe('a new procedure', () => {
 
   it('begins from the blank under its own title', async () => {
     const technician = await actor('north.technician');
-    const id = await beginProcedure(technician, shop('north'), 'Fit the fan');
+    const id = await beginProcedure(technician, shop('north'), 'Fit the fan', { from: 'empty' });
     const { source, title, base } = await readProposal(technician, id);
     expect([title, base]).toEqual(['Fit the fan', null]);
     expect(source).toBe(BLANK_PROCEDURE.replace('A new procedure', 'Fit the fan'));
