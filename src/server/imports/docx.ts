@@ -1,10 +1,11 @@
 import mammoth from 'mammoth';
 import { importHtml, type Imported } from '@/domain/writing/import/importHowTo';
-import { scanPart } from '@/domain/writing/import/ooxml';
+import { scanPart, type PartOfDocument } from '@/domain/writing/import/ooxml';
 import { BadZip, readZip } from './zip';
 
 /** What the converter and the count of words read: no pictures, no macros, no fonts. */
-const WANTED = /^(\[Content_Types\]\.xml|_rels\/.*\.rels|docProps\/.*\.xml|word\/[^/]*\.xml|word\/_rels\/.*\.rels)$/i;
+const WANTED =
+  /^(\[Content_Types\]\.xml|_rels\/.*\.rels|docProps\/.*\.xml|word\/[^/]*\.xml|word\/diagrams\/data\d*\.xml|word\/charts\/chart\d*\.xml|word\/_rels\/.*\.rels)$/i;
 const BOUNDS = { entries: 2000, bytes: 16 * 1024 * 1024 };
 
 const STYLES = ["p[style-name='Title'] => h1:fresh", 'comment-reference => sup', 'strike => s'];
@@ -12,11 +13,13 @@ const STYLES = ["p[style-name='Title'] => h1:fresh", 'comment-reference => sup',
 const no = (message: string): Imported => ({ ok: false, message });
 
 const BODY = /^word\/document\d*\.xml$/i;
-const PARTS: [RegExp, 'body' | 'header' | 'footer' | 'note'][] = [
+const PARTS: [RegExp, PartOfDocument][] = [
   [BODY, 'body'],
   [/^word\/(footnotes|endnotes|comments)\.xml$/i, 'note'],
   [/^word\/header\d*\.xml$/i, 'header'],
   [/^word\/footer\d*\.xml$/i, 'footer'],
+  [/^word\/diagrams\/data\d*\.xml$/i, 'diagram'],
+  [/^word\/charts\/chart\d*\.xml$/i, 'chart'],
 ];
 
 /** `options.file` of the converter: it takes the unpacked parts, and so never unpacks anything itself. */

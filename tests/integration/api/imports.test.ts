@@ -110,6 +110,11 @@ describe('POST /imports', () => {
     });
     expect(started).toMatchObject({ status: 201, body: { title: 'Fit the fan', state: 'draft', origin } });
     expect((await readProposal(await actor('north.senior'), started.body.id)).origin).toEqual(origin);
+    const sent = await call(who('north.senior'), 'POST', `/proposals/${started.body.id}/submit`);
+    expect(sent).toMatchObject({
+      status: 422,
+      body: { detail: expect.stringMatching(/^Line \d+: Still to fill in: /) as string },
+    });
     const gone = await call(who('north.senior'), 'DELETE', `/proposals/${started.body.id}`);
     expect(gone.status).toBe(204);
   });

@@ -1,4 +1,5 @@
 import fc from 'fast-check';
+import JSZip from 'jszip';
 import { describe, expect, it } from 'vitest';
 import type { ImportedSheet } from '@/domain/api/schemas/imports';
 import { parseProcedure } from '@/domain/procedure/parse';
@@ -112,6 +113,44 @@ describe('a how-to from a word processor', () => {
     const kept = readable(await read(file)).replace(/10²/g, '102');
     expect(lost(await docxWords(file), kept)).toEqual([]);
   });
+});
+
+it('takes numbers that were typed by hand for the points of a list', async () => {
+  const imported = await read(
+    await d.docx([
+      d.heading(1, 'Fit it'),
+      d.para('1. Open it.'),
+      d.para('WARNING: The lid can fall. Hold it.'),
+      d.para('2) Lift the lid'),
+      d.para('with both hands'),
+      d.para('3. Close it'),
+    ]),
+  );
+  expect(draftOf(imported).steps.map(({ title, cautions, body }) => [title, cautions.join(), body])).toEqual([
+    ['Open it', '', ''],
+    ['Lift the lid', 'the-lid', 'with both hands'],
+    ['Close it', '', ''],
+  ]);
+  expect(imported.leftOut.map(({ what, quote }) => [what, quote])).toEqual([
+    ['Number typed by hand', '1'],
+    ['Number typed by hand', '2'],
+    ['Number typed by hand', '3'],
+  ]);
+  // One number alone, or one that does not count up, is a number.
+  const other = await read(await d.docx([d.heading(1, 'Fit it'), d.para('7. September was dry.'), d.para('2. Words')]));
+  expect(draftOf(other).steps[0]?.body).toBe('7\\. September was dry.\n\n2\\. Words');
+});
+
+it('tells the words of diagrams and charts, which the text does not hold', async () => {
+  const zip = await JSZip.loadAsync(await d.docx([d.heading(1, 'Fit it'), d.para('Words')]));
+  const a = 'xmlns:a="http://schemas.openxmlformats.org/drawingml/2006/main"';
+  zip.file('word/diagrams/data1.xml', `<x ${a}><a:p><a:r><a:t>Open &amp; close</a:t></a:r></a:p></x>`);
+  zip.file('word/charts/chart1.xml', '<x xmlns:c="c"><c:pt><c:v>Flow</c:v></c:pt><c:pt><c:v>12</c:v></c:pt></x>');
+  const { leftOut } = await read(await zip.generateAsync({ type: 'nodebuffer' }));
+  expect(leftOut.map(({ what, quote }) => [what, quote])).toEqual([
+    ['Diagram', 'Open & close'],
+    ['Chart', 'Flow 12'],
+  ]);
 });
 
 describe('any document', () => {

@@ -129,6 +129,7 @@ const MERGED = [
   'HTML',
   'Unseen characters',
   'Mark of a footnote',
+  'Number typed by hand',
   'Tracked change: words put in',
   'Tracked change: words taken out',
 ];

@@ -31,10 +31,19 @@ const WATCHED: Record<string, { what: string; became: string | null }> = {
   'm:oMath': { what: 'Formula', became: null },
   'w:txbxContent': { what: 'Text box', became: 'words where it was anchored' },
 };
-const HOLDS_WORDS = new Set(['w:t', 'w:delText', 'm:t']);
+const HOLDS_WORDS = new Set(['w:t', 'w:delText', 'm:t', 'a:t', 'c:v']);
 
-/** A part's name in words, for what stands in headers and the like. */
-export function scanPart(xml: string, place: 'body' | 'header' | 'footer' | 'note'): Scanned {
+/** Parts that never come into the text, by what they are called there. */
+const APART = {
+  header: { what: 'Head of the pages', where: 'every page' },
+  footer: { what: 'Foot of the pages', where: 'every page' },
+  diagram: { what: 'Diagram', where: 'the document' },
+  chart: { what: 'Chart', where: 'the document' },
+} as const;
+export type PartOfDocument = 'body' | 'note' | keyof typeof APART;
+
+/** Reads one part. */
+export function scanPart(xml: string, place: PartOfDocument): Scanned {
   const leftOut: LeftOut[] = [];
   let words = '';
   let paragraph = '';
@@ -78,7 +87,7 @@ export function scanPart(xml: string, place: 'body' | 'header' | 'footer' | 'not
     if (HOLDS_WORDS.has(name)) reading = !isEnd && alone !== '/';
     else if (name === 'w:vertAlign') raised = /"(super|sub)script"/.test(attributes);
     else if (name === 'w:r' && isEnd) raised = false;
-    else if (['w:tab', 'w:br', 'w:cr', 'w:ptab'].includes(name)) add(' ');
+    else if (['w:tab', 'w:br', 'w:cr', 'w:ptab', 'a:p', 'a:br', 'c:pt'].includes(name)) add(' ');
     else if (name === 'w:noBreakHyphen') add('-');
     else if (name === 'w:p' && isEnd) endParagraph();
     else if (name === 'mc:AlternateContent' && !alone) {
@@ -107,6 +116,5 @@ export function scanPart(xml: string, place: 'body' | 'header' | 'footer' | 'not
   endParagraph();
   if (place === 'body' || place === 'note') return { words, leftOut };
   const quote = tidy(words);
-  const what = place === 'header' ? 'Head of the pages' : 'Foot of the pages';
-  return { words, leftOut: quote ? [{ what, where: 'every page', quote, became: null }] : [] };
+  return { words, leftOut: quote ? [{ ...APART[place], quote, became: null }] : [] };
 }

@@ -10,6 +10,7 @@ import { paragraphOf, textNode, tidy, wordsOf } from './nodes';
 import { LONGEST_TITLE, outline } from './outline';
 import { plainEntries } from './plainLists';
 import { boldLine, leave, prose, words, type Taking } from './prose';
+import { typedNumbers } from './typedNumbers';
 
 /** A how-to as a sheet, before its prose is written out; nothing of it is checked yet. */
 export interface DraftSheet {
@@ -75,7 +76,7 @@ export function sheetOf(root: Root): DraftSheet {
   const leftOut: LeftOut[] = [];
   const definitions = definitionsIn(root);
   const at = (where: string): Taking => ({ leftOut, where, definitions });
-  const found = outline(joinSignals(root.children));
+  const found = outline(typedNumbers(joinSignals(root.children)));
   const titleLine = line(found.title, at('the title'));
   const title = titleLine && titleLine.length <= LONGEST_TITLE ? titleLine : TITLE_TO_FILL_IN;
 
