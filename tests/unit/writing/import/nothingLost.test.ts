@@ -45,9 +45,7 @@ const paragraph = fc.oneof(
 );
 const list = fc
   .tuple(fc.constantFrom('-', '1.'), fc.array(paragraph, { minLength: 1, maxLength: 4 }))
-  .map(([mark, items]) =>
-    items.map((item) => `${mark} ${item.replace(/\n+/g, ' ')}\n\n   - inner`).join('\n'),
-  );
+  .map(([mark, items]) => items.map((item) => `${mark} ${item.replace(/\n+/g, ' ')}\n\n   - inner`).join('\n'));
 const table = fc
   .array(fc.array(words(2), { minLength: 2, maxLength: 2 }), { minLength: 1, maxLength: 3 })
   .map((rows) => `| a | b |\n| - | - |\n${rows.map((cells) => `| ${cells.join(' | ')} |`).join('\n')}`);
