@@ -139,7 +139,7 @@ describe('whatever is done in the field', () => {
       { numRuns: 300 },
     );
     expect(longest).toBeGreaterThan(5);
-  });
+  }, 120_000);
 
   it('writes the nearest that reads back where no text says what stands in the field', () => {
     const paragraph = (...content: (string | Node)[]) =>

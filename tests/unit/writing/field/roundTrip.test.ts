@@ -63,7 +63,7 @@ describe('words, field and words again', () => {
       { numRuns: 100 },
     );
     expect(tried).toBeGreaterThan(30);
-  });
+  }, 120_000);
 
   it.each([
     '*a*__b__',
