@@ -194,9 +194,9 @@ test('a flag is raised with photos where no script runs', async ({ as }) => {
   const apprentice = await as('apprentice', { javaScriptEnabled: false, allow: [/status of 422/] });
   await apprentice.goto('/procedures/P-0139/flag');
   await apprentice.getByLabel('In your words').fill('The drawing shows the other side.');
-  await apprentice.getByLabel('Photo 1').setInputFiles(file('a.jpg', await jpegOf()));
+  await apprentice.getByLabel('Photo 1', { exact: true }).setInputFiles(file('a.jpg', await jpegOf()));
   await apprentice.getByLabel('What photo 1 shows').fill('The side as it is');
-  await apprentice.getByLabel('Photo 2').setInputFiles(file('b.jpg', Buffer.from('No photo.')));
+  await apprentice.getByLabel('Photo 2', { exact: true }).setInputFiles(file('b.jpg', Buffer.from('No photo.')));
   await apprentice.getByRole('button', { name: 'Raise the flag' }).click();
   await expect(apprentice.locator('#file-0-error')).toContainText('This is no photo that can be read here.');
   await expect(apprentice.getByLabel('In your words')).toHaveValue('The drawing shows the other side.');

@@ -42,3 +42,14 @@ export const statusOf = (answer: Promise<Response>): Promise<number> =>
     ({ status }) => status,
     (error: { status?: number }) => error.status ?? 500,
   );
+
+/** Removes a photo that was sent. */
+export const remove = (as: Member, id: string, reason = 'It shows a customer.') =>
+  call(as, 'POST', `/photos/${id}/remove`, { body: { reason } });
+
+/** Asks about a proposal as a whole, with photos. */
+export const ask = (as: Member, proposal: string, photos: unknown[], words = 'Is this the corner?') =>
+  call(as, 'POST', `/proposals/${proposal}/threads`, { body: { kind: 'question', anchor: null, text: words, photos } });
+
+/** That many minutes from now, ISO 8601 in UTC. */
+export const minutes = (n: number) => new Date(Date.now() + n * 60_000).toISOString();
