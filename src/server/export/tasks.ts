@@ -5,7 +5,7 @@ import { ditaTask } from '@/domain/export/dita/task';
 import type { Places } from '@/domain/export/dita/prose';
 import { fileName } from '@/domain/export/slug';
 import type { Actor } from '@/domain/people/may';
-import { readHistory } from '../book/history';
+import { readLetters } from '../book/history';
 import { readSheet } from '../book/sheet';
 import { readTrade } from '../book/trade';
 import { app } from '../context';
@@ -45,8 +45,8 @@ export async function readTask(actor: Actor, number: string, here: string): Prom
   const { config } = await app();
   const origin = config.origin ?? here;
   const sheet = await readSheet(actor, number);
-  const history = await readHistory(actor, number);
-  const text = await taskOf(sheet, history.at(-1)?.publishedAt ?? sheet.revision.publishedAt, {
+  const letters = await readLetters(actor, number);
+  const text = await taskOf(sheet, letters.at(-1)?.publishedAt ?? sheet.revision.publishedAt, {
     link: (url) => ({ href: new URL(url, origin).href, scope: 'external' }),
     figure: (file) => ({ href: `${origin}/figures/${file}`, scope: 'external' }),
   });
