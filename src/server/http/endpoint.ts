@@ -11,7 +11,7 @@ import { alreadyHeld, expectedVersion } from './preconditions';
 import { problemResponse } from './problem';
 import { countCall } from './rateLimit';
 import { NOTHING_SENT, readBody, type SentBody } from './sentBody';
-import { isMultipart } from './upload';
+import { isMultipart } from './multipart';
 import { fieldErrors } from './fieldErrors';
 
 /** What a route is given: everything checked against its operation. */

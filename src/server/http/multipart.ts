@@ -14,6 +14,8 @@ import { malformed, Refusal, tooLarge } from '../refusal';
 export interface SentFile {
   /** Name of its field. */
   field: string;
+  /** What its sender called it; a claim. */
+  name: string;
   path: string;
   bytes: number;
   /** Hex. */
@@ -31,9 +33,13 @@ export interface Sent {
 }
 
 export interface Limits {
+  /** What the files are called in a refusal. */
+  what: 'photo' | 'file';
   files: number;
   /** Of one file. */
   fileBytes: number;
+  /** Of one text field. */
+  fieldBytes?: number;
   /** Of the whole body. */
   bodyBytes: number;
   /** A file that is too large ends the reading with 413, or is marked and the rest is still read. */
@@ -46,26 +52,28 @@ export const FIELD_BYTES = 64 * 1024;
 export const isMultipart = (request: Request): boolean =>
   /^multipart\/form-data\s*;/i.test(request.headers.get('content-type') ?? '');
 
+/** "A photo may have 15 MB at most. Send a smaller one." */
+export const overWords = (what: Limits['what'], fileBytes: number) =>
+  `A ${what} may have ${megabytes(fileBytes)} MB at most. Send a smaller one.`;
 const megabytes = (bytes: number) => Math.floor(bytes / (1024 * 1024));
 /** The rest of the body is not read, so the connection cannot be used for another request. */
-const over = (limit: number) =>
-  new Refusal(413, 'too-large', 'Too large', `A photo may have ${megabytes(limit)} MB at most. Send a smaller one.`, {
-    headers: { connection: 'close' },
-  });
+const over = ({ what, fileBytes }: Limits) =>
+  new Refusal(413, 'too-large', 'Too large', overWords(what, fileBytes), { headers: { connection: 'close' } });
 
 /** Where files lie while they are looked at; emptied at each start. */
 export const uploadFolder = async (): Promise<string> => join((await app()).config.dataDir, 'uploads');
 
-function parserOf(request: Request, { files, fileBytes }: Limits): busboy.Busboy {
+function parserOf(request: Request, { files, fileBytes, fieldBytes = FIELD_BYTES }: Limits): busboy.Busboy {
   try {
     return busboy({
       headers: { 'content-type': request.headers.get('content-type') ?? '' },
+      defParamCharset: 'utf8',
       // One byte more than allowed tells one that is too large from one that is just right.
       limits: {
         files,
         fileSize: fileBytes + 1,
         fields: 40,
-        fieldSize: FIELD_BYTES,
+        fieldSize: fieldBytes,
         parts: files + 40,
         headerPairs: 20,
       },
@@ -76,14 +84,19 @@ function parserOf(request: Request, { files, fileBytes }: Limits): busboy.Busboy
 }
 
 /** Writes one file to disk as it comes in, and hashes it on the way. */
-async function writeOut(field: string, stream: Readable, folder: string, limits: Limits): Promise<SentFile | null> {
+async function writeOut(
+  { field, name }: Pick<SentFile, 'field' | 'name'>,
+  stream: Readable,
+  folder: string,
+  limits: Limits,
+): Promise<SentFile | null> {
   const path = join(folder, randomUUID());
   const hash = createHash('sha256');
   let bytes = 0;
   const tap = new Transform({
     transform(chunk: Buffer, _encoding, done) {
       bytes += chunk.length;
-      if (bytes > limits.fileBytes && limits.overlong === 'refuse') return done(over(limits.fileBytes));
+      if (bytes > limits.fileBytes && limits.overlong === 'refuse') return done(over(limits));
       hash.update(chunk);
       done(null, chunk);
     },
@@ -96,7 +109,7 @@ async function writeOut(field: string, stream: Readable, folder: string, limits:
       throw storeFails(error);
     throw error;
   }
-  return { field, path, bytes, sha256: hash.digest('hex'), overlong: bytes > limits.fileBytes };
+  return { field, name, path, bytes, sha256: hash.digest('hex'), overlong: bytes > limits.fileBytes };
 }
 
 /**
@@ -107,9 +120,14 @@ async function writeOut(field: string, stream: Readable, folder: string, limits:
  */
 export async function receive(request: Request, limits: Limits): Promise<Sent> {
   if (!isMultipart(request))
-    throw new Refusal(415, 'not-multipart', 'Not a form with a file', 'Send the photo as multipart/form-data.');
-  if (Number(request.headers.get('content-length') ?? 0) > limits.bodyBytes) throw over(limits.fileBytes);
-  if (!request.body) throw malformed('The body is empty; this call needs a form with a photo.');
+    throw new Refusal(
+      415,
+      'not-multipart',
+      'Not a form with a file',
+      `Send the ${limits.what} as multipart/form-data.`,
+    );
+  if (Number(request.headers.get('content-length') ?? 0) > limits.bodyBytes) throw over(limits);
+  if (!request.body) throw malformed(`The body is empty; this call needs a form with a ${limits.what}.`);
   const parser = parserOf(request, limits);
   const folder = await uploadFolder();
   await mkdir(folder, { recursive: true, mode: 0o700 }).catch((error: unknown) => Promise.reject(storeFails(error)));
@@ -126,7 +144,7 @@ export async function receive(request: Request, limits: Limits): Promise<Sent> {
       let bytes = 0;
       source.on('data', (chunk: Buffer) => {
         bytes += chunk.length;
-        if (bytes > limits.bodyBytes) reject(over(limits.fileBytes));
+        if (bytes > limits.bodyBytes) reject(over(limits));
       });
       parser.on('field', (name, value, { valueTruncated }) => {
         if (valueTruncated) reject(tooLarge('A field of the form is too long.'));
@@ -134,12 +152,18 @@ export async function receive(request: Request, limits: Limits): Promise<Sent> {
       });
       parser.on('file', (name, stream, { filename }) => {
         if (!filename) return void stream.resume();
-        const written = writeOut(name, stream, folder, limits);
+        const written = writeOut({ field: name, name: filename.slice(0, 200) }, stream, folder, limits);
         written.catch(reject);
         writing.push(written);
       });
       for (const limit of ['filesLimit', 'fieldsLimit', 'partsLimit'] as const)
-        parser.on(limit, () => reject(tooLarge(`The form has too many parts; ${limits.files} photos fit in one.`)));
+        parser.on(limit, () =>
+          reject(
+            tooLarge(
+              `The form has too many parts; ${limits.files} ${limits.what}${limits.files === 1 ? ' fits' : 's fit'} in one.`,
+            ),
+          ),
+        );
       parser.on('close', resolve);
       parser.on('error', () => reject(malformed('The form is cut off or damaged. Send it again.')));
       source.on('error', () => reject(malformed('The connection broke off before all of it had come. Send it again.')));

@@ -23,6 +23,7 @@ export const NOTHING_SENT: SentBody = { print: '', value: undefined, file: '', d
 /** A form with one file. Refuses like `receive`, and 422 where the file is missing or empty. */
 async function readFileForm(request: Request, field: string): Promise<SentBody> {
   const { fields, files, dispose } = await receive(request, {
+    what: 'photo',
     files: 1,
     fileBytes: LARGEST_FILE,
     bodyBytes: LARGEST_FILE + FIELD_BYTES,

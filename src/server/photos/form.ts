@@ -70,6 +70,7 @@ export async function readPhotoForm(actor: Actor, request: Request): Promise<Pho
     return { form, photos: await broughtBack(actor, form), open: [] };
   }
   const sent = await receive(request, {
+    what: 'photo',
     files: FORM_PHOTOS,
     fileBytes: LARGEST_FILE,
     bodyBytes: FORM_BYTES,

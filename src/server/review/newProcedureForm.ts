@@ -3,7 +3,8 @@ import { LeftOut, type ImportedSheet } from '@/domain/api/schemas/imports';
 import type { Actor } from '@/domain/people/may';
 import { importText, importUpload, MOST_FILE } from '../imports/importHowTo';
 import { readForm, textsOf } from '../http/form';
-import { isMultipart, OverLimit, readUpload, type Upload } from '../http/upload';
+import { isMultipart } from '../http/multipart';
+import { OverLimit, readUpload, type Upload } from '../http/upload';
 import { malformed, Refusal } from '../refusal';
 import { beginProcedure, type Beginning } from './beginProcedure';
 

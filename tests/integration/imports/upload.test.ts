@@ -1,14 +1,17 @@
-import { mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
+import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { afterAll, expect, it } from 'vitest';
+import { beforeEach, expect, it } from 'vitest';
+import { app } from '@/server/context';
 import { OverLimit, readUpload } from '@/server/http/upload';
+import { openTestBook } from '../../setup/database';
 
-// A folder of its own for temporary files, since other tests upload at the same time.
-const own = mkdtempSync(join(tmpdir(), 'matchmark-test-'));
-process.env['TMPDIR'] = own;
-afterAll(() => rmSync(own, { recursive: true }));
-const kept = () => readdirSync(own);
+beforeEach(async () => void (await openTestBook()));
+
+/** What lies in the folder for files that are looked at. */
+async function kept(): Promise<string[]> {
+  const folder = join((await app()).config.dataDir, 'uploads');
+  return existsSync(folder) ? readdirSync(folder) : [];
+}
 
 function sent(fields: Record<string, string | File>): Request {
   const body = new FormData();
@@ -24,10 +27,10 @@ it('streams the file to the disk, gives the fields, and takes the file away agai
     10_000,
   );
   expect(upload.fields).toEqual({ book: 'common', text: 'a\nb' });
-  expect(upload.file).toMatchObject({ name: 'Züge.docx', size: 5000 });
+  expect(upload.file).toMatchObject({ name: 'Züge.docx', bytes: 5000 });
   expect(readFileSync(upload.file!.path, 'utf8')).toBe('A'.repeat(5000));
   await upload.discard();
-  expect(kept()).toEqual([]);
+  expect(await kept()).toEqual([]);
 });
 
 it('takes a form without a file, or with one under another name', async () => {
@@ -50,9 +53,9 @@ it('refuses a larger file with its fields, those behind it too, and leaves nothi
   expect(refused).toBeInstanceOf(OverLimit);
   expect(refused).toMatchObject({ status: 413, fields: { a: '1', b: '2' } });
   await expect(readUpload(sent({ a: 'x'.repeat(300_000) }), 'file', 100)).rejects.toMatchObject({ status: 413 });
-  const many = Object.fromEntries(Array.from({ length: 40 }, (_, i) => [`f${i}`, 'x']));
+  const many = Object.fromEntries(Array.from({ length: 60 }, (_, i) => [`f${i}`, 'x']));
   await expect(readUpload(sent(many), 'file', 100)).rejects.toMatchObject({ status: 413 });
-  expect(kept()).toEqual([]);
+  expect(await kept()).toEqual([]);
 });
 
 it('stops reading a form that never ends', async () => {
@@ -68,20 +71,19 @@ it('stops reading a form that never ends', async () => {
   const request = new Request('http://book.test/', { method: 'POST', headers, body, duplex: 'half' } as RequestInit);
   await expect(readUpload(request, 'file', 50_000)).rejects.toMatchObject({ status: 413 });
   expect(asked).toBeLessThan(100);
-  expect(kept()).toEqual([]);
+  expect(await kept()).toEqual([]);
 });
 
 it('refuses what is no form, or breaks off', async () => {
   const of = (type: string, body: string) =>
     new Request('http://book.test/', { method: 'POST', headers: { 'content-type': type }, body });
-  for (const request of [
-    of('multipart/form-data', 'x'),
-    of(
-      'multipart/form-data; boundary=b',
-      '--b\r\ncontent-disposition: form-data; name="file"; filename="a"\r\n\r\nhalf',
-    ),
-    of('text/plain', 'x'),
-  ])
-    await expect(readUpload(request, 'file', 100)).rejects.toMatchObject({ status: 400 });
-  expect(kept()).toEqual([]);
+  const broken = '--b\r\ncontent-disposition: form-data; name="file"; filename="a"\r\n\r\nhalf';
+  for (const [request, status] of [
+    [of('multipart/form-data', 'x'), 415],
+    [of('text/plain', 'x'), 415],
+    [of('multipart/form-data; x=1', 'x'), 400],
+    [of('multipart/form-data; boundary=b', broken), 400],
+  ] as const)
+    await expect(readUpload(request, 'file', 100)).rejects.toMatchObject({ status });
+  expect(await kept()).toEqual([]);
 });
