@@ -1,6 +1,6 @@
-import AxeBuilder from '@axe-core/playwright';
 import type { Page } from '@playwright/test';
 import type { DraftVersion } from '@/domain/api/schemas/versions';
+import { expectSound } from './support/axe';
 import { call, draft, readProposal } from './support/api';
 import { expect, expectNoSidewaysScroll, signIn, test } from './support/book';
 import { PEOPLE } from './support/people';
@@ -9,25 +9,11 @@ import { WritingDesk } from './support/writing';
 
 const STALE = [/status of 409/];
 const NO_NETWORK = [/ERR_INTERNET_DISCONNECTED/, /ERR_CONNECTION_(REFUSED|RESET)/, /ERR_EMPTY_RESPONSE/];
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
 
 const longer = (source: string) =>
   source.replace(/^minutes: (\d+)/m, (_, minutes: string) => `minutes: ${Number(minutes) + 5}`);
 const versions = async (page: Page, id: string): Promise<DraftVersion[]> =>
   ((await (await call(page, 'GET', `/proposals/${id}/versions`)).json()) as { items: DraftVersion[] }).items;
-
-async function expectAccessible(page: Page): Promise<void> {
-  for (const width of [1360, 390]) {
-    await page.setViewportSize({ width, height: 900 });
-    const { violations } = await new AxeBuilder({ page }).setLegacyMode().withTags(TAGS).analyze();
-    expect(
-      violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html.slice(0, 160)).join(' | ')}`),
-    ).toEqual([]);
-    await expectNoSidewaysScroll(page, width);
-  }
-  await expectNoSidewaysScroll(page, 320);
-  await page.setViewportSize({ width: 1360, height: 900 });
-}
 
 /** A desk on a new draft of the sheet. */
 async function deskOn(page: Page, number: string, reason = 'Timed again.'): Promise<WritingDesk> {
@@ -55,14 +41,14 @@ test.describe('earlier versions', () => {
     await expect(rows).toHaveCount(3);
     await expect(rows.nth(1)).toContainText(/as it stands now.*You.*Step 1 changed/);
     await expect(rows.nth(2)).toContainText(/Begun on revision [A-Z]/);
-    await expectAccessible(page);
+    await expectSound(page);
 
     await rows.nth(2).getByRole('link').click();
     await expect(page.getByRole('heading', { level: 1 })).toContainText('Version 1 of');
     const now = page.getByRole('region', { name: 'Version 1' });
     await expect(now.getByText(before).first()).toBeVisible();
     await expect(page.getByRole('region', { name: 'Draft now' }).getByText('Lay everything out first')).toBeVisible();
-    await expectAccessible(page);
+    await expectSound(page);
     await page.getByRole('button', { name: 'Go back to this version' }).click();
     await desk.ready();
     await expect(desk.middle.getByText(/^The draft is back at version 1\./)).toBeVisible();
@@ -108,7 +94,7 @@ test.describe('earlier versions', () => {
     await page.goto(`/proposals/${id}/versions/1`);
     await page.getByText('Show both texts').click();
     await expect(page.getByLabel('The draft now')).toHaveValue('Not a sheet');
-    await expectAccessible(page);
+    await expectSound(page);
     const other = await as('senior', { allow: [/status of 404/] });
     for (const path of ['', '/1', '/99', '/x'])
       expect((await other.goto(`/proposals/${id}/versions${path}`))?.status()).toBe(404);
@@ -160,7 +146,7 @@ test.describe('undo and redo', () => {
     await desk.kept();
     // Everything is back, and so it is on the server.
     await expect.poll(async () => (await versions(page, desk.id)).map(({ current }) => current)).toContain(true);
-    await expectAccessible(page);
+    await expectSound(page);
   });
 
   test('take a new step, its title and a value back one by one', async ({ as }) => {

@@ -38,7 +38,7 @@ test('reading on a phone: filters, sheet, units, history', async ({ as }) => {
     expect((await control.boundingBox())?.height).toBeGreaterThanOrEqual(43);
 
   await page.goto('/procedures/P-0142/revisions');
-  await expect(page.getByRole('table', { name: 'Revisions of P-0142' })).toBeVisible();
+  await expect(page.getByRole('list', { name: 'What happened to P-0142, latest first' })).toBeVisible();
   await expectFits(page);
 });
 

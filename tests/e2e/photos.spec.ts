@@ -1,25 +1,9 @@
-import AxeBuilder from '@axe-core/playwright';
-import type { Locator, Page } from '@playwright/test';
+import type { Locator } from '@playwright/test';
 import { grain, jpegOf } from '../factories/pictures';
+import { expectSound } from './support/axe';
 import { propose, readProposal } from './support/api';
 import { alive, expect, expectNoSidewaysScroll, test } from './support/book';
 import { WritingDesk } from './support/writing';
-
-async function expectSound(page: Page): Promise<void> {
-  for (const width of [1360, 390]) {
-    await page.setViewportSize({ width, height: 900 });
-    const { violations } = await new AxeBuilder({ page })
-      .withTags(['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa'])
-      .analyze();
-    expect(
-      violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html ?? ''}`),
-      `axe at ${width} px`,
-    ).toEqual([]);
-  }
-  await expectNoSidewaysScroll(page, 390);
-  await expectNoSidewaysScroll(page, 320);
-  await page.setViewportSize({ width: 1360, height: 900 });
-}
 
 const file = (name: string, buffer: Buffer) => ({ name, mimeType: 'image/jpeg', buffer });
 const choose = (within: Locator, ...files: ReturnType<typeof file>[]) =>

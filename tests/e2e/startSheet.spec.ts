@@ -1,17 +1,15 @@
-import AxeBuilder from '@axe-core/playwright';
 import type { Page } from '@playwright/test';
 import * as d from '../factories/documents';
+import { expectNoFaults } from './support/axe';
 import { alive, expect, expectNoSidewaysScroll, test } from './support/book';
 import { WritingDesk } from './support/writing';
 
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
 const HOW_TO =
   '# Renew the pump drive\n\nWhen it squeals.\n\n## Open it\n\nWarning: Hot oil can burn skin. Let it cool.\n\nTake the lid off, ~~slowly~~.\n\n## Close it\n\nTighten to 10 N·m.\n\n![A lid](lid.png)\n';
 
 /** Nothing that axe finds wrong, and nothing that sticks out at 390 px. */
 async function sound(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-  expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`)).toEqual([]);
+  await expectNoFaults(page);
   const { width = 1360, height = 900 } = page.viewportSize() ?? {};
   await expectNoSidewaysScroll(page, 390);
   await page.setViewportSize({ width, height });

@@ -1,23 +1,7 @@
-import AxeBuilder from '@axe-core/playwright';
-import type { Page } from '@playwright/test';
+import { expectSound } from './support/axe';
 import { call, propose, readProposal } from './support/api';
-import { alive, expect, expectNoSidewaysScroll, test } from './support/book';
+import { alive, expect, test } from './support/book';
 import { WritingDesk } from './support/writing';
-
-async function expectSound(page: Page): Promise<void> {
-  for (const width of [1360, 390]) {
-    await page.setViewportSize({ width, height: 900 });
-    const { violations } = await new AxeBuilder({ page })
-      .withTags(['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa'])
-      .analyze();
-    expect(
-      violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html ?? ''}`),
-      `axe at ${width} px`,
-    ).toEqual([]);
-  }
-  await expectNoSidewaysScroll(page, 320);
-  await page.setViewportSize({ width: 1360, height: 900 });
-}
 
 const change = (source: string) => source.replace(/nm: (\d+)/, (_, nm: string) => `nm: ${Number(nm) + 1}`);
 
