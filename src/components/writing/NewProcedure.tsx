@@ -2,7 +2,8 @@ import type { ReactNode } from 'react';
 import { Button } from '@/components/ui/Button';
 import { Field } from '@/components/ui/Field';
 import { TextArea } from '@/components/ui/TextArea';
-import { TemplateChoice, type TemplateToChoose } from './TemplateChoice';
+import type { TemplateToChoose } from '@/domain/writing/templates';
+import { TemplateChoice } from './TemplateChoice';
 import { Choice, FieldError, Way } from './Way';
 
 /** What was typed, as it came or as the address says. */

@@ -1,15 +1,7 @@
 import { counted } from '@/components/sheet/words';
 import { SYSTEMS, type System } from '@/domain/procedure/systems';
+import type { TemplateToChoose } from '@/domain/writing/templates';
 import { Choice, FieldError } from './Way';
-
-export interface TemplateToChoose {
-  name: string;
-  title: string;
-  system: System;
-  steps: number;
-  cautions: number;
-  holds: number;
-}
 
 /** The templates under the systems that they are for, in the order of the systems. */
 export function TemplateChoice({

@@ -1,18 +1,12 @@
 import { readdir, readFile } from 'node:fs/promises';
 import { basename, join } from 'node:path';
-import { SYSTEMS, type System } from '@/domain/procedure/systems';
+import { SYSTEMS } from '@/domain/procedure/systems';
+import type { TemplateToChoose } from '@/domain/writing/templates';
 import { parsedText } from '../book/parsed';
 import { app } from '../context';
 
 /** The bones of a procedure for one kind of work, from `content/templates`. */
-export interface Template {
-  /** Name of its file. */
-  name: string;
-  title: string;
-  system: System;
-  steps: number;
-  cautions: number;
-  holds: number;
+export interface Template extends TemplateToChoose {
   /** Canonical text, markers and all. */
   source: string;
 }
