@@ -14,9 +14,9 @@ test("the author's day: a flag becomes a draft, is written with chips, undone, k
 }) => {
   test.setTimeout(150_000);
   const apprentice = await as('apprentice');
-  const raised = await call(apprentice, 'POST', '/procedures/P-0142/flags', {
+  const raised = await call(apprentice, 'POST', '/procedures/P-0108/flags', {
     kind: 'unclear',
-    step: 'draw-down',
+    step: 'draw-up',
     text: 'How far is the first pass?',
   });
   expect(raised.status(), await raised.text()).toBe(201);
@@ -29,19 +29,19 @@ test("the author's day: a flag becomes a draft, is written with chips, undone, k
   await desk.ready();
   await expect(desk.reason).toHaveValue(/How far is the first pass\?/);
 
-  await desk.choose('Pull the cover down in two passes');
+  await desk.choose('Draw the pan up in order');
   await desk.how.click();
   await page.keyboard.press('ControlOrMeta+End');
   await page.keyboard.type(' Begin with ');
   await desk.middle.getByRole('button', { name: 'Torque', exact: true }).click();
-  await desk.middle.getByRole('button', { name: /^Cover bolt, first pass/ }).click();
-  await expect(desk.chip('Cover bolt, first pass')).not.toHaveCount(0);
+  await desk.middle.getByRole('button', { name: /^Pan bolt, first pass/ }).click();
+  await expect(desk.chip('Pan bolt, first pass')).not.toHaveCount(0);
   await desk.kept();
 
   // What the desk did as a whole can be taken back from its head.
   await desk.middle.getByRole('button', { name: 'Delete the step' }).click();
   await page.getByRole('button', { name: /^Undo: step .* deleted/ }).click();
-  await expect(desk.stepTitle(8)).toHaveValue('Pull the cover down in two passes');
+  await expect(desk.middle.getByLabel(/^Step \d+, what to do$/)).toHaveValue('Draw the pan up in order');
   await desk.kept();
 
   await page.getByLabel('Add photos').setInputFiles({ name: 'first.png', mimeType: 'image/png', buffer: PIXEL });
@@ -49,7 +49,7 @@ test("the author's day: a flag becomes a draft, is written with chips, undone, k
   await page.getByRole('button', { name: 'Add the photo to the reason' }).click();
   await desk.propose();
   const { source, photos, reason } = await readProposal(page, desk.id);
-  expect(source).toContain('Begin with <Torque of="cover-bolt" pass="1" />');
+  expect(source).toContain('Begin with <Torque of="pan-bolt" pass="1" />');
   expect(photos.map(({ alt }) => alt)).toEqual(['The gap after the first pass']);
   expect(reason).toContain('How far is the first pass?');
 });

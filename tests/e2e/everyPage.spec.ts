@@ -205,6 +205,8 @@ const SCENES: Scene[] = [
     name: 'writing as text',
     who: 'pierEditor',
     open: writing('P-0118', '', async (desk) => {
+      // The field comes in after the page and moves what stands below it.
+      await expect(desk.how).toBeVisible();
       await desk.middle.getByRole('button', { name: 'Edit the whole sheet as text' }).click();
       await expect(desk.middle.getByLabel('The whole text')).toBeVisible();
     }),

@@ -23,8 +23,14 @@ async function take(page: Page, key = 'Enter'): Promise<void> {
 /** Puts the caret at the end of the first line that begins so. */
 async function caretAfter(page: Page, line: RegExp): Promise<void> {
   // Only the lines near what is on the screen are there.
-  await page.locator('.cm-gutters').scrollIntoViewIfNeeded();
-  await page.locator('.cm-line').filter({ hasText: line }).first().click();
+  const wanted = page.locator('.cm-line').filter({ hasText: line }).first();
+  const scroller = page.locator('.cm-scroller');
+  await scroller.evaluate((box) => (box.scrollTop = 0));
+  for (let screens = 0; (await wanted.count()) === 0 && screens < 60; screens += 1) {
+    await scroller.evaluate((box) => box.scrollBy(0, box.clientHeight / 2));
+    await page.evaluate(() => new Promise(requestAnimationFrame));
+  }
+  await wanted.click();
   await page.keyboard.press('End');
 }
 

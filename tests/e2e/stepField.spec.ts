@@ -34,7 +34,7 @@ async function stored(desk: WritingDesk): Promise<string> {
 const expectStored = (desk: WritingDesk, body: string) => expect.poll(() => stored(desk)).toBe(body);
 
 test('a torque is put in among typed words, follows its value, is deleted and brought back', async ({ as }) => {
-  const page = await as('senior');
+  const page = await as('pierEditor');
   const desk = await deskWith(page, 'Old words.');
   await desk.write('Tighten to');
   await desk.middle.getByRole('button', { name: 'Torque', exact: true }).click();
@@ -60,7 +60,7 @@ test('a torque is put in among typed words, follows its value, is deleted and br
 });
 
 test('a chip is whole under the keys, and keys alone do all that can be done with it', async ({ as }) => {
-  const page = await as('senior');
+  const page = await as('pierEditor');
   const desk = await deskWith(page, 'To <Torque of="cover-bolt" /> now.\n\nThen <Part of="nothing-here" />.');
   await expect(desk.chip('There is no part “nothing-here”')).toBeVisible();
   await desk.how.focus();
@@ -119,7 +119,7 @@ test('a chip is whole under the keys, and keys alone do all that can be done wit
 });
 
 test('what comes from a word processor comes in clean, and what is left out is told', async ({ as }) => {
-  const page = await as('senior');
+  const page = await as('pierEditor');
   const desk = await deskWith(page, 'First <Torque of="cover-bolt" />.');
   await desk.how.click();
   await page.keyboard.press('ControlOrMeta+End');
@@ -155,7 +155,7 @@ test('what comes from a word processor comes in clean, and what is left out is t
 });
 
 test('tables, drawings, hold points and links are made without a sign being typed', async ({ as }) => {
-  const page = await as('senior');
+  const page = await as('pierEditor');
   const desk = await deskWith(page, '');
   const layout = async (name: string) => {
     await desk.middle.getByRole('button', { name: 'Layout' }).click();
@@ -198,7 +198,7 @@ test('tables, drawings, hold points and links are made without a sign being type
 });
 
 test('words that cannot be read are text, and chips again once they can', async ({ as }) => {
-  const page = await as('senior');
+  const page = await as('pierEditor');
   const desk = await deskWith(page, 'Tighten to <Torque of="cover-bolt" /> now.\n\n# A heading');
   await expect(desk.middle.getByText('because they cannot be read yet. Line 3: Headings are not used')).toBeVisible();
   await expect(desk.how).toHaveValue('Tighten to <Torque of="cover-bolt" /> now.\n\n# A heading');
@@ -211,7 +211,7 @@ test('words that cannot be read are text, and chips again once they can', async 
 });
 
 test('words that are set from outside are taken over and not written back', async ({ as }) => {
-  const page = await as('senior', { allow: [/409 \(Conflict\)/] });
+  const page = await as('pierEditor', { allow: [/409 \(Conflict\)/] });
   const desk = await deskWith(page, 'Mine.');
   const { version, source } = await readProposal(page, desk.id);
   const theirs = source.replace('\nMine.\n', '\nTheirs <Part of="cover" />.\n');
@@ -228,7 +228,7 @@ test('words that are set from outside are taken over and not written back', asyn
 });
 
 test('letters that are composed are left alone until they are whole', async ({ as }) => {
-  const page = await as('senior');
+  const page = await as('pierEditor');
   const desk = await deskWith(page, 'Er <Torque of="cover-bolt" />.');
   await desk.how.focus();
   await page.keyboard.press('ControlOrMeta+Home');
@@ -250,7 +250,7 @@ test('letters that are composed are left alone until they are whole', async ({ a
 });
 
 test('a picture that is pasted or dropped is told to have been left out', async ({ as }) => {
-  const page = await as('senior');
+  const page = await as('pierEditor');
   const desk = await deskWith(page, 'Words.');
   await desk.how.click();
   for (const type of ['paste', 'drop'])
@@ -278,7 +278,7 @@ test('a picture that is pasted or dropped is told to have been left out', async 
 });
 
 test('it holds on a phone, and a screen reader is told what it is', async ({ as }) => {
-  const page = await as('senior');
+  const page = await as('pierEditor');
   const desk = await deskWith(
     page,
     'Good: <Limit of="gasket-proud" />, <Torque of="cover-bolt" />.\n\n| A | B |\n| - | - |\n| <Part of="cover-gasket" /> | c |\n\n<Hold>Look.</Hold>',

@@ -20,6 +20,7 @@ import { Returned } from './Returned';
 import { StaleBase } from './StaleBase';
 import { TextMode } from './TextMode';
 import type { Checked } from './useCheck';
+import { useStartOf } from './useStartOf';
 import type { Merging } from './useMerging';
 import type { DeskUndo } from './useUndoing';
 import type { Refusal } from './useProposing';
@@ -102,6 +103,7 @@ export function DeskFrame(props: Props) {
   const { proposal, current, state, checked, changes, text, mine, merging } = props;
   const { draft, place, choose, tried, baseLetter } = useDesk();
   const lastStep = draft.steps[0];
+  useStartOf(MIDDLE, text === null);
   const title = text === null ? draft.title.trim() || 'Untitled' : proposal.title;
   const seeing = place === 'changes';
   const choosing = current !== null && merging.shown && (merging.merged?.conflicts.length ?? 0) > 0;

@@ -55,7 +55,7 @@ export function Evidence({ proposalId, photos: first }: { proposalId: string; ph
         <h3 id="evidence" className="font-sans text-base font-medium">
           Photos that show it
         </h3>
-        <p className="text-small text-ink-2">They stand under the reason. May be left out.</p>
+        <p className="text-small text-ink-2">They stand under the reason; none is needed.</p>
       </div>
       <PhotoStrip photos={photos} onTakeOff={takeOff} />
       <PhotoPicker picks={picks} />
