@@ -21,6 +21,7 @@ export const BOUNDS = {
   pipes: 1_500,
   headNesting: 12,
   headSeparators: 6_000,
+  headFields: 4_000,
   treeDepth: 24,
   componentDepth: 6,
   nodes: 20_000,
@@ -60,20 +61,25 @@ export function sizeProblem(source: string): SourceProblem | null {
   return null;
 }
 
-function headProblem({ lines, headLines }: SourceLines): SourceProblem | null {
+/** The first reason why a front matter is too tangled to read, or null. */
+export function headProblem({ lines, headLines }: SourceLines): SourceProblem | null {
   let depth = 0;
   let separators = 0;
+  let fields = 0;
   for (let i = 0; i < headLines; i += 1) {
     const line = lines[i] ?? '';
     for (const c of line) {
       if (c === '[' || c === '{') depth += 1;
       else if (c === ']' || c === '}') depth = Math.max(0, depth - 1);
       else if (c === ',') separators += 1;
+      else if (c === ':') fields += 1;
     }
     const at = { line: i + 1, column: 1 };
     if (depth > BOUNDS.headNesting || indentOf(line) > BOUNDS.indent)
       return problem(at, 'The front matter is nested too deeply here. Write plain lists as the blank procedure does.');
-    if (separators > BOUNDS.headSeparators) return problem(at, 'The front matter holds too many values from here on.');
+    // A reader of YAML compares each name with all before it.
+    if (separators > BOUNDS.headSeparators || fields > BOUNDS.headFields)
+      return problem(at, 'The front matter holds too many values from here on.');
   }
   return null;
 }

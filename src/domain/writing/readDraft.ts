@@ -1,4 +1,5 @@
 import { parse } from 'yaml';
+import { headProblem, sizeProblem } from '../procedure/bounds';
 import { toSource } from '../procedure/canonical';
 import { ENTRY_FIELDS } from '../procedure/fields';
 import { KEYED_LISTS } from '../procedure/schema';
@@ -91,6 +92,7 @@ export function readDraft(source: string, reason = ''): Draft | null {
   const text = plainLines(source);
   const { lines, headLines } = splitLines(text);
   if (headLines === 0) return null;
+  if (sizeProblem(text) ?? headProblem({ lines, headLines })) return null;
   const given = head(lines.slice(1, headLines - 1).join('\n'));
   if (!given) return null;
   const draft: Draft = {

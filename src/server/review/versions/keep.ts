@@ -3,7 +3,6 @@ import { sittingOf, thinnedOut, type Version, type VersionKind } from '@/domain/
 import { hashOf } from '../../book/parsed';
 import { now } from '../../clock';
 import { app } from '../../context';
-import { formable } from '../formable';
 import type { Loaded } from '../proposals';
 import { pack } from './packed';
 import { versionTexts } from './rows';
@@ -41,13 +40,6 @@ async function insert(made: Made, first: string, place: Pick<Kept, 'n' | 'at' | 
   return { ...place, kind, page, reason };
 }
 
-/** In the terms of the form also where a text was written by hand in another shape. */
-async function between(from: Words, to: Words): Promise<string[]> {
-  if (from.source === to.source) return textChanges(from, to);
-  const [before, after] = [await formable(from.source), await formable(to.source)];
-  return textChanges({ ...from, source: before }, { ...to, source: after });
-}
-
 /** Says anew what each version changed whose predecessor is another one than before. */
 async function tell(id: string, before: readonly Kept[], after: readonly Kept[]): Promise<void> {
   // Words that were set aside were never the draft's, so nothing followed from them.
@@ -67,7 +59,7 @@ async function tell(id: string, before: readonly Kept[], after: readonly Kept[])
   const { db } = await app();
   for (const { from, to } of changed)
     await db.models.DraftVersion.update(
-      { what: await between(words(from), words(to)) },
+      { what: textChanges(words(from), words(to)) },
       { where: { revisionId: id, n: to.n } },
     );
 }
