@@ -60,6 +60,14 @@ const megabytes = (bytes: number) => Math.floor(bytes / (1024 * 1024));
 const over = ({ what, fileBytes }: Limits) =>
   new Refusal(413, 'too-large', 'Too large', overWords(what, fileBytes), { headers: { connection: 'close' } });
 
+/** So many forms with files come in at once; each may hold its bytes on the disk for minutes. */
+const MOST_OPEN = 24;
+let open = 0;
+const busy = () =>
+  new Refusal(503, 'busy', 'Busy', 'Many files are coming in just now. Nothing was kept; try again in a minute.', {
+    headers: { 'Retry-After': '30', connection: 'close' },
+  });
+
 /** Where files lie while they are looked at; emptied at each start. */
 export const uploadFolder = async (): Promise<string> => join((await app()).config.dataDir, 'uploads');
 
@@ -119,6 +127,16 @@ async function writeOut(
  * Refuses 413 over a limit, 415 another content type, 400 what is cut off or malformed, 503 where the disk is full.
  */
 export async function receive(request: Request, limits: Limits): Promise<Sent> {
+  if (open >= MOST_OPEN) throw busy();
+  open += 1;
+  try {
+    return await receiveNow(request, limits);
+  } finally {
+    open -= 1;
+  }
+}
+
+async function receiveNow(request: Request, limits: Limits): Promise<Sent> {
   if (!isMultipart(request))
     throw new Refusal(
       415,

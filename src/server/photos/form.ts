@@ -69,6 +69,7 @@ export async function readPhotoForm(actor: Actor, request: Request): Promise<Pho
     const form = await readForm(request);
     return { form, photos: await broughtBack(actor, form), open: [] };
   }
+  await countCall(actor.personId, 'photos');
   const sent = await receive(request, {
     what: 'photo',
     files: FORM_PHOTOS,

@@ -2,6 +2,7 @@ import type { Origin } from '@/domain/api/schemas/imports';
 import type { Actor } from '@/domain/people/may';
 import { BLANK_PROCEDURE } from '@/domain/procedure/blank';
 import { readDraft, sourceOf } from '@/domain/writing/readDraft';
+import { refuseOverlong } from '../book/check';
 import { invalid } from '../refusal';
 import { sheetToCopy } from './origin';
 import { bookToWriteFor, startProcedure } from './startProcedure';
@@ -46,11 +47,15 @@ export async function beginProcedure(actor: Actor, book: string, title: string, 
       return start(template.source, '');
     }
     case 'copy': {
-      const { number, revision, source } = await sheetToCopy(actor, to, beginning.number);
+      const { number, revision, source, book } = await sheetToCopy(actor, to, beginning.number);
       const { letter } = revision;
-      return start(source, `Copied from ${number} revision ${letter}.`, { kind: 'copy', number, letter });
+      // A shop's own number means nothing to others, and is none of their business.
+      const what =
+        book.kind === 'shop' && to.kind === 'common' ? `a sheet of ${book.name}` : `${number} revision ${letter}`;
+      return start(source, `Copied from ${what}.`, { kind: 'copy', number, letter });
     }
     case 'import':
+      refuseOverlong(beginning.source + JSON.stringify(beginning.origin.leftOut));
       return start(beginning.source, importReason(beginning.origin), beginning.origin);
   }
 }

@@ -1,10 +1,11 @@
 import { z } from 'zod';
 import { LeftOut, type ImportedSheet } from '@/domain/api/schemas/imports';
 import type { Actor } from '@/domain/people/may';
-import { importText, importUpload, MOST_FILE } from '../imports/importHowTo';
+import { importText, importUpload, MOST_FILE, refuseWhoNeverWrites } from '../imports/importHowTo';
 import { readForm, textsOf } from '../http/form';
 import { isMultipart } from '../http/multipart';
 import { OverLimit, readUpload, type Upload } from '../http/upload';
+import { countCall } from '../http/rateLimit';
 import { malformed, Refusal } from '../refusal';
 import { beginProcedure, type Beginning } from './beginProcedure';
 
@@ -137,6 +138,8 @@ export async function actOnNewProcedure(actor: Actor, request: Request): Promise
   let upload: Upload | null = null;
   let typed = typedNew({});
   try {
+    refuseWhoNeverWrites(actor);
+    await countCall(actor.personId, 'changing');
     upload = isMultipart(request) ? await readUpload(request, 'file', MOST_FILE) : null;
     const fields = upload ? upload.fields : textsOf(await readForm(request));
     if (fields['act'] === 'start-read') return await startRead(actor, fields);

@@ -81,7 +81,7 @@ export async function proposalOf(actor: Actor, proposal: Loaded): Promise<Propos
     { id: proposal.id },
   );
   const personOf = (id: string) => personRef(people.find((p) => p.id === id)?.person ?? 'null');
-  const origin = await originOf(proposal);
+  const origin = await originOf(actor, proposal);
   const { facts } = proposal;
   const { editors, standIns } = standing(facts);
   const stands = new Set([...editors, ...standIns]);
