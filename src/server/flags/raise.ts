@@ -5,7 +5,7 @@ import { appendAudit } from '../audit/append';
 import { bookOf, type BookRow } from '../book/columns';
 import { readable } from '../book/locate';
 import { app } from '../context';
-import { attachPhotos } from '../photos/attach';
+import { attachPhotos, unsentOf } from '../photos/attach';
 import { forbidden, invalid, type RefusalError } from '../refusal';
 import { loadFlag } from './rows';
 import { shownFlag, type ShownFlag } from './shown';
@@ -62,7 +62,12 @@ export async function raiseFlag(actor: Actor, number: string, doubt: Doubt): Pro
       state: 'open' as const,
     };
     const twin = await db.models.Flag.findOne({ where: same });
-    if (twin) return twin.id;
+    if (twin) {
+      // Raised again to show it: photos that were not sent yet go to the one that stands.
+      const unsent = await unsentOf(actor, doubt.photos ?? []);
+      await attachPhotos(actor, { type: 'flag', id: twin.id }, unsent);
+      return twin.id;
+    }
     const flag = await db.models.Flag.create({ ...same, revisionId, kind: doubt.kind as keyof typeof FLAG_KINDS });
     const sent = await attachPhotos(actor, { type: 'flag', id: flag.id }, doubt.photos ?? []);
     await appendAudit({

@@ -32,6 +32,17 @@ async function chosen(actor: Actor, choices: readonly PhotoChoice[]): Promise<Wa
   });
 }
 
+/** Those of the chosen photos that were not sent with anything yet. */
+export async function unsentOf(actor: Actor, choices: readonly PhotoChoice[]): Promise<PhotoChoice[]> {
+  const { db } = await app();
+  const idOf = (choice: PhotoChoice) => (typeof choice === 'string' ? choice : choice.id);
+  const sent = await db.read<{ id: string }>(
+    'SELECT id FROM attachments WHERE uploaderId = :me AND subjectId IS NOT NULL AND id IN (:ids)',
+    { me: actor.personId, ids: ['', ...choices.map(idOf)] },
+  );
+  return choices.filter((choice) => !sent.some(({ id }) => id === idOf(choice)));
+}
+
 /**
  * Sends uploaded photos with a message, a flag or a reason. Call it inside the `write` that stores that, so that both are kept or
  * neither. Returns what the audit trail notes of them. Refuses 422 with the path of the photo.

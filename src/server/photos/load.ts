@@ -72,5 +72,9 @@ export async function photosOf(
           { type, ids },
         );
   return (subjectId) =>
-    rows.filter((row) => row.subjectId === subjectId).map((row) => view(actor, row, hanging(subjectId)));
+    rows
+      .filter((row) => row.subjectId === subjectId)
+      // What was put to a reason and not sent in yet is its author's alone.
+      .filter((row) => row.uploaderId === actor.personId || !factsOf(row, hanging(subjectId)).unsent)
+      .map((row) => view(actor, row, hanging(subjectId)));
 }
