@@ -43,12 +43,6 @@ export const history: Migration = {
         message,
       ),
     ),
-    trigger(
-      'auditEntries_without_a_gap',
-      `AFTER INSERT ON auditEntries
-        WHEN NEW.seq <> 1 + ifnull((SELECT max(seq) FROM auditEntries WHERE seq < NEW.seq), 0)`,
-      'An audit entry takes the number after the last',
-    ),
     // What changed between two texts, in words; worked out from the texts and thrown away without loss.
     `CREATE TABLE textChanges (
       fromHash TEXT NOT NULL,
@@ -67,7 +61,6 @@ export const history: Migration = {
   down: [
     'DROP TABLE textOrigins',
     'DROP TABLE textChanges',
-    'DROP TRIGGER auditEntries_without_a_gap',
     ...Object.keys(NEVER_REPLACED).map((table) => `DROP TRIGGER ${table}_never_replaced`),
     'DROP INDEX readAndSigned_by_bulletin',
     'DROP INDEX auditEntries_by_shop',

@@ -115,7 +115,13 @@ test('the steward reads the whole trail, an owner their own shop’s, and nobody
   await expect(steward.getByText(/^The trail is whole: \d+ entries/)).toBeVisible();
   const table = steward.getByRole('table', { name: 'The audit trail, latest first' });
   await expect(table.locator('tbody tr')).toHaveCount(50);
-  await steward.getByRole('link', { name: 'Older' }).click();
+  // To the very first entry, however much was done before.
+  const older = steward.getByRole('link', { name: 'Older' });
+  while ((await older.count()) > 0) {
+    const first = await table.locator('tbody tr').first().textContent();
+    await older.click();
+    await expect(table.locator('tbody tr').first()).not.toHaveText(first ?? '');
+  }
   await expect(table.locator('tbody tr').last()).toContainText('Published a revision');
   await steward.getByRole('link', { name: 'Sawmill Lane Marine' }).click();
   await expect(table.locator('tbody tr').first()).toContainText('Sawmill Lane Marine');

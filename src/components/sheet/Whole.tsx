@@ -16,13 +16,19 @@ export interface TrailWords {
   faults: readonly Fault[];
   /** Something else in the trail is wrong. */
   elsewhere: boolean;
+  /** Entries are gone, and nobody can say what they were about. */
+  unplaced: boolean;
 }
 
 const timeOf = (iso: string) => `${iso.slice(11, 16)} UTC`;
 
-/** Says that a history is whole, or plainly what is wrong with it and what to do. */
-export function Whole({ trail }: { trail: TrailWords }) {
-  const { entries, wholeAt, own, texts, faults, elsewhere } = trail;
+/**
+ * Says that a history is whole, or plainly what is wrong with it and what to do.
+ *
+ * @param part true where the page shows only a part of the history: no more is claimed than was looked at
+ */
+export function Whole({ trail, part }: { trail: TrailWords; part: boolean }) {
+  const { entries, wholeAt, own, texts, faults, elsewhere, unplaced } = trail;
   if (faults.length > 0)
     return (
       <div className="border-l-[14px] border-ink bg-white px-5 py-4 sm:px-8" role="alert">
@@ -39,14 +45,16 @@ export function Whole({ trail }: { trail: TrailWords }) {
   return (
     <div className="px-4 py-4 sm:px-9">
       <p className="max-w-[110ch]">
-        <b className="font-semibold">This history is whole:</b>{' '}
+        <b className="font-semibold">{part || unplaced ? 'What is shown here holds:' : 'This history is whole:'}</b>{' '}
         {elsewhere
           ? `${counted(own, 'entry', 'entries')} about it in the audit trail and ${shown} were checked just now.`
           : `${counted(entries, 'entry', 'entries')} in the audit trail, each follows from the one before it. ${own} of them and ${shown} were checked just now; the trail from its first entry on ${dayOf(wholeAt)}, ${timeOf(wholeAt)}.`}
       </p>
       {elsewhere && (
         <Notice className="mt-3">
-          The trail does not hold in another place, which is not about this sheet. The network’s steward sees it.
+          {unplaced
+            ? `Entries of the trail are gone, and nobody can say whether they were about this sheet. ${TELL_THE_STEWARD}`
+            : 'The trail does not hold in another place, which is not about this sheet. The network’s steward sees it.'}
         </Notice>
       )}
     </div>

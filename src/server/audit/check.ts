@@ -1,7 +1,7 @@
 import type { Link } from '@/domain/audit/chain';
 import type { Fault } from '@/domain/audit/fault';
 import { now } from '../clock';
-import { keepCheckpoint, readCheckpoint, tailFaults, type Checkpoint } from './checkpoint';
+import { keepCheckpoint, readCheckpoint, tailFaults, type Checkpoint, numbersGiven } from './checkpoint';
 import { remember, unlike } from './known';
 import { spokenFaults, unspokenFaults } from './records/all';
 import { allTextFaults } from './records/texts';
@@ -34,13 +34,16 @@ export async function checkBook({ expected, forgetCheckpoint = false }: CheckOpt
   const from = performance.now();
   const wholeAt = now();
   const faults: Fault[] = [];
+  // Asked first: what is added while the trail is followed must not look as if it had been cut off.
+  const given = await numbersGiven();
+  const seen = forgetCheckpoint ? null : await readCheckpoint();
   const { end, entries, breaks } = await followChain(undefined, async (rows) => {
     const [first, last] = [rows[0]?.seq ?? 0, rows.at(-1)?.seq ?? 0];
     faults.push(...(await spokenFaults('e.seq BETWEEN :first AND :last', { first, last })));
   });
   faults.unshift(...(await named(breaks)));
-  faults.push(...(await tailFaults(end, forgetCheckpoint ? null : await readCheckpoint())));
-  if (expected) faults.push(...(await tailFaults(end, expected)));
+  faults.push(...(await tailFaults(end, { given, expected: seen })));
+  if (expected) faults.push(...(await tailFaults(end, { given: 0, expected })));
   faults.push(...(await unspokenFaults('1', {})));
   const texts = await allTextFaults();
   const found = unlike([...faults, ...texts.faults]);

@@ -53,13 +53,22 @@ const trailFault = (differs: string, at: string | null = null): Fault => ({
   differs: [differs],
 });
 
+/** The last number that the database gave to an entry; ask for it before the trail is followed, which goes on meanwhile. */
+export async function numbersGiven(): Promise<number> {
+  const { db } = await app();
+  const [row] = await db.read<{ seq: number }>(`SELECT seq FROM sqlite_sequence WHERE name = 'auditEntries'`);
+  return row?.seq ?? 0;
+}
+
 /** What shows that the end of the trail was cut off or written anew. `expected` is what was seen of it before. */
-export async function tailFaults(end: Link, expected: Pick<Checkpoint, 'entries' | 'hash'> | null): Promise<Fault[]> {
+export async function tailFaults(
+  end: Link,
+  { given, expected }: { given: number; expected: Pick<Checkpoint, 'entries' | 'hash'> | null },
+): Promise<Fault[]> {
   const { db } = await app();
   const faults: Fault[] = [];
-  const [given] = await db.read<{ seq: number }>(`SELECT seq FROM sqlite_sequence WHERE name = 'auditEntries'`);
-  if (given && given.seq > end.seq)
-    faults.push(trailFault(`ends at entry ${end.seq}, but numbers up to ${given.seq} were given: its end was cut off`));
+  if (given > end.seq)
+    faults.push(trailFault(`ends at entry ${end.seq}, but numbers up to ${given} were given: its end was cut off`));
   if (!expected || expected.entries === 0) return faults;
   const { entries, hash } = expected;
   if (entries > end.seq)

@@ -19,6 +19,8 @@ export interface TrailStanding {
   faults: Fault[];
   /** Something else in the trail is wrong. */
   elsewhere: boolean;
+  /** Something is gone of which nobody can say what it was about. */
+  unplaced: boolean;
 }
 
 /** Entries about a few subjects, each with the hash of the one before it as that stands now. */
@@ -55,5 +57,12 @@ export async function standingOf(
     ...(await textFaultsOf(revisionIds)),
   ];
   const faults = unlike([...known.filter(about), ...own]);
-  return { entries: end.seq, wholeAt, own: entries.length, faults, elsewhere: known.some((fault) => !about(fault)) };
+  return {
+    entries: end.seq,
+    wholeAt,
+    own: entries.length,
+    faults,
+    elsewhere: known.some((fault) => !about(fault)),
+    unplaced: known.some(({ number }) => number === null),
+  };
 }

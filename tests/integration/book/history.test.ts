@@ -148,7 +148,7 @@ describe('the history of a sheet', () => {
 describe('a history that does not hold', () => {
   const shown = async () => {
     const { trail } = await history(who('north.apprentice'));
-    return renderToStaticMarkup(createElement(Whole, { trail }));
+    return renderToStaticMarkup(createElement(Whole, { trail, part: false }));
   };
   const tamper = async (...statements: string[]) => {
     const { db } = await app();

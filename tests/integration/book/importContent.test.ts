@@ -11,6 +11,7 @@ import { agree } from '@/server/review/agree';
 import { overrideClamp } from '@/server/review/override';
 import { publish } from '@/server/review/publish';
 import { readProposal } from '@/server/review/readProposal';
+import { checkBook } from '@/server/audit/check';
 import { readDesk } from '@/server/review/readDesk';
 import { startProposal } from '@/server/review/startProposal';
 import { submit } from '@/server/review/submit';
@@ -120,6 +121,9 @@ describe('importContent', () => {
     await agree(await actor('common.editor'), first!.id);
     await publish(await actor('common.editor2'), first!.id);
     expect((await current()).revision.letter).toBe('C');
+    // An editor published what a release wrote: the trail says so, and nothing of it is a fault.
+    const { faults } = await checkBook();
+    expect(faults.filter(({ id }) => id === first!.id)).toEqual([]);
     expect((await current()).frontmatter.torques[0]?.nm).toBe(13);
   });
 

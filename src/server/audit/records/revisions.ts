@@ -40,11 +40,10 @@ export const published = recordCheck<Published>({
       'day of publication': [row.publishedAt, told['publishedAt']],
     }),
     ...otherPerson({ id: row.authorId, name: row.author }, { id: row.toldAuthorId, name: row.toldAuthor }),
-    ...(row.authorKind === 'release'
-      ? otherPerson({ id: row.authorId, name: row.author }, { id: row.actorId, name: row.actor })
-      : row.agreed
-        ? []
-        : [`has no agreement of ${row.actor}, who published it`]),
+    // A release publishes its own text where the book has not diverged; else an editor does, who has agreed.
+    ...(row.agreed || (row.authorKind === 'release' && row.actorId === row.authorId)
+      ? []
+      : [`has no agreement of ${row.actor}, who published it`]),
   ],
   unspoken: (rows) => `SELECT r.id, p.number, r.letter FROM revisions r JOIN procedures p ON p.id = r.procedureId
     WHERE r.state IN ('published', 'superseded') AND ${rows} AND NOT EXISTS (SELECT 1 FROM auditEntries e
