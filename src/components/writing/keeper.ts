@@ -220,7 +220,9 @@ export class Keeper {
       const { source, reason, version } = this.state.theirs;
       this.version = version;
       this.kept = { source, reason };
-      this.become({ kind: 'waiting' });
+      // Typed on until they said the same: there is nothing left to save.
+      if (this.pending()) this.become({ kind: 'waiting' });
+      else this.settle();
     }
     return this.flush();
   }

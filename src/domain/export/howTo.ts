@@ -1,6 +1,7 @@
 import type { HowTo, HowToStep, WithContext } from 'schema-dts';
 import type { Caution, Frontmatter } from '../procedure/schema';
 import type { RenderedProcedure, RenderedStep } from '../procedure/types';
+import { stepRows } from './dita/valueRows';
 
 export interface HowToFacts {
   number: string;
@@ -19,12 +20,16 @@ const cautionWords = ({ signal, hazard, harm, avoid }: Caution): string => `${si
 const cautions = (keys: readonly string[], f: Frontmatter): string[] =>
   f.cautions.filter(({ key }) => keys.includes(key)).map(cautionWords);
 
+/** "Cover bolt: 10 ±1 N·m (89 ±9 lbf·in). M6, dry, 11 places. Demonstration values": no number without its state and origin. */
+const values = (one: RenderedStep, f: Frontmatter): string[] =>
+  stepRows(one.references, f).map(([name, to, state, origin]) => `${name}: ${to}. ${state} ${origin}`);
+
 // Cautions stand first in the words of the step: a program may show nothing else of it.
 const step = (one: RenderedStep, f: Frontmatter, page: string): HowToStep => ({
   '@type': 'HowToStep',
   position: one.number,
   name: one.title,
-  text: [...cautions(one.cautions, f), one.text, ...one.holds.map((hold) => `Hold point. ${hold}`)]
+  text: [...cautions(one.cautions, f), one.text, ...values(one, f), ...one.holds.map((hold) => `Hold point. ${hold}`)]
     .filter(Boolean)
     .join('\n'),
   url: `${page}#step-${one.id}`,

@@ -31,7 +31,8 @@ function editOf(before: Step | undefined, after: Step | undefined): string[] {
   return before.cautions.join(' ') === after.cautions.join(' ') ? [] : ['other cautions'];
 }
 
-function stepLine(step: StepChange, before: Step | undefined, after: Step | undefined): ChangeLine[] {
+/** What became of a step; nothing where only a value that it points at is another one, for that is told by itself. */
+export function stepLine(step: StepChange, before: Step | undefined, after: Step | undefined): ChangeLine[] {
   const name = `Step “${titleOf(step)}”`;
   const effect = step.effects.join('. ') || null;
   if (step.kind === 'added' || step.kind === 'removed') return [{ what: `${name}, ${step.kind}`, effect }];

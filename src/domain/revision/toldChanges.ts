@@ -1,8 +1,7 @@
 import type { Procedure } from '../procedure/types';
-import { stepWords } from './stepWords';
 import { valueWords } from './valueWords';
+import { stepLine } from './changeWords';
 import { differences } from './compare';
-import type { StepDifference } from './compareSteps';
 import { inOrder, SHEET_IS_CRITICAL } from './critical';
 
 /** As many changes as somebody reads before signing; the comparison shows them all. */
@@ -19,16 +18,12 @@ const listed = (words: readonly string[]) =>
 export function toldChanges(from: Procedure, to: Procedure): string[] {
   const { values, steps, reasons } = differences(from, to);
   const stepOf = (procedure: Procedure, id: string) => procedure.steps.find((step) => step.id === id);
-  const stepTold = ({ change }: StepDifference) =>
-    change.kind === 'same'
-      ? `step “${change.title}”, moved`
-      : stepWords(stepOf(from, change.id), stepOf(to, change.id));
   const others = [
     ...values.filter(({ reason }) => !reason).map(({ change }) => valueWords(change)),
-    ...steps
-      .filter(({ change, reasons }) => reasons.length === 0 && (change.kind !== 'same' || change.moved))
-      .map(stepTold),
-    ...(from.intro === to.intro ? [] : ['the words of the introduction']),
+    ...steps.flatMap(({ change }) =>
+      stepLine(change, stepOf(from, change.id), stepOf(to, change.id)).map(({ what }) => what),
+    ),
+    ...(from.intro === to.intro ? [] : ['The introduction, reworded']),
   ];
   return inOrder(reasons).map((words) => {
     if (words === SHEET_IS_CRITICAL) return others.length > 0 ? `${words}, and this changes: ${listed(others)}` : words;

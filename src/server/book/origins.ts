@@ -71,7 +71,20 @@ async function chainOrigins(procedureId: string): Promise<Origins> {
   return origins ?? {};
 }
 
-const groupsOf = new LRUCache<string, { groups: OriginGroup[] }>({ max: 100 });
+const groupsOf = new LRUCache<string, Promise<{ groups: OriginGroup[] }>>({ max: 100 });
+
+/** Worked out once, however many ask meanwhile; a long chain takes seconds the first time. */
+function groups(id: string, hash: string, procedureId: string): Promise<{ groups: OriginGroup[] }> {
+  const key = `${id} ${hash}`;
+  const known = groupsOf.get(key);
+  if (known) return known;
+  const made = (async () => ({
+    groups: originGroups(await acceptedProcedure(await sourceOf(id)), await chainOrigins(procedureId)),
+  }))();
+  groupsOf.set(key, made);
+  made.catch(() => groupsOf.delete(key));
+  return made;
+}
 
 /**
  * Since which revision each step and value of the current sheet reads as it does, and what is known of those revisions.
@@ -85,13 +98,7 @@ export async function readOrigins(actor: Actor, number: string): Promise<Origins
     { number },
   );
   const { procedureId, title, letter, id, hash } = readable(actor, found);
-  const key = `${id} ${hash}`;
-  let known = groupsOf.get(key);
-  if (!known) {
-    const text = await acceptedProcedure(await sourceOf(id));
-    known = { groups: originGroups(text, await chainOrigins(procedureId)) };
-    groupsOf.set(key, known);
-  }
+  const known = await groups(id, hash, procedureId);
   const letters = [...new Set(known.groups.flatMap(({ origins }) => origins.map((origin) => origin.letter)))];
   const revisions = await db.read<RevisionRow>(
     `SELECT ${REVISION_COLUMNS} FROM revisions r JOIN procedures p ON p.id = r.procedureId

@@ -48,7 +48,7 @@ it('on a sheet that is marked critical says whatever changes', () => {
   };
   expect(base.frontmatter.minutes).toBe(70);
   expect(toldChanges(marked, to).at(-1)).toBe(
-    `the sheet is marked critical, and this changes: Bench time, 1 h 10 min to 1 h 15 min; the words of step “${first!.title}”`,
+    `the sheet is marked critical, and this changes: Bench time, 1 h 10 min to 1 h 15 min; Step “${first!.title}”, reworded`,
   );
 });
 
