@@ -10,7 +10,9 @@ import { addressIn, fromPlain } from '@/domain/writing/paste/fromPlain';
 import { leftOutWords, nothingLeftOut } from '@/domain/writing/paste/leftOut';
 import { OWN } from './chipViews';
 
-const READ = ['style', 'href', 'alt', 'start', 'colspan'];
+const READ = ['style', 'href', 'alt', 'start', 'colspan', 'rowspan'];
+/** Names that a tree writes in another way than a page. */
+const NAMED: Readonly<Record<string, string>> = { colspan: 'colSpan', rowspan: 'rowSpan' };
 
 function contentOf(node: globalThis.Node): ElementContent[] {
   return [...node.childNodes].flatMap((child): ElementContent[] => {
@@ -19,7 +21,7 @@ function contentOf(node: globalThis.Node): ElementContent[] {
     const properties: Properties = {};
     for (const name of READ) {
       const value = child.getAttribute(name);
-      if (value !== null) properties[name === 'colspan' ? 'colSpan' : name] = value;
+      if (value !== null) properties[NAMED[name] ?? name] = value;
     }
     return [{ type: 'element', tagName: child.localName.toLowerCase(), properties, children: contentOf(child) }];
   });

@@ -63,6 +63,15 @@ function withoutWords(nodes: readonly PhrasingContent[], length: number): Phrasi
   return [...cut.filter((node) => wordsOf(node) === ''), ...rest];
 }
 
+/** Whether a paragraph opens with a signal word, so that its first sentence says no work. */
+export const opensWithSignal = (paragraph: Paragraph): boolean => signalsIn(paragraph)[0]?.start === 0;
+
+/** Words without the blanks in front, which would hide a signal word behind them. */
+export const withoutBlanks = (nodes: PhrasingContent[]): PhrasingContent[] => {
+  const blanks = /^\s*/.exec(wordsOf(nodes))?.[0].length ?? 0;
+  return blanks ? withoutWords(nodes, blanks) : nodes;
+};
+
 /** Leading blanks and the sign between a bold signal word and its words. */
 function withoutLead(nodes: PhrasingContent[]): PhrasingContent[] {
   const lead = /^[\s:!.–—-]*/.exec(wordsOf(nodes))?.[0].length ?? 0;

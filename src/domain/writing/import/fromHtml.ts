@@ -3,6 +3,7 @@ import type { Root, RootContent } from 'mdast';
 import rehypeParse from 'rehype-parse';
 import rehypeRemark, { type Options } from 'rehype-remark';
 import { unified } from 'unified';
+import { gridOf } from '../paste/grid';
 import { foreignNode, paragraphOf, tidy } from './nodes';
 import { offLine } from './offLine';
 
@@ -73,17 +74,12 @@ const tableHandler: Handle = (state, node: Element) => {
   }
   if (cells.some((cell) => cell.children.some((c) => c.type === 'element' && ['ul', 'ol'].includes(c.tagName))))
     told.push(paragraphOf(foreignNode('List inside a cell', '', 'words in one line')));
-  const rows = rowsIn(node).map((row) => ({
+  const rows = gridOf(rowsIn(node).map(cellsOf)).map((row) => ({
     type: 'tableRow',
-    children: cellsOf(row).flatMap((cell) => {
-      const inside = state.all({ ...cell, children: cell.children.flatMap(inOneLine) });
-      const one = { type: 'tableCell', children: inside };
-      const empty = Array.from({ length: Math.min(19, Number(cell.properties['colSpan'] ?? 1) - 1) }, () => ({
-        type: 'tableCell',
-        children: [],
-      }));
-      return [one, ...empty];
-    }),
+    children: row.map((cell) => ({
+      type: 'tableCell',
+      children: cell ? state.all({ ...cell, children: cell.children.flatMap(inOneLine) }) : [],
+    })),
   }));
   return [...told, { type: 'table', align: [], children: rows }] as RootContent[];
 };

@@ -1,5 +1,5 @@
 import type { Heading, ListItem, PhrasingContent, RootContent } from 'mdast';
-import { isCaution } from './cautions';
+import { isCaution, opensWithSignal, signalAlone, withoutBlanks } from './cautions';
 import { sentencesOf } from './cautionWords';
 import { foreignNode, paragraphOf, splitAt, tidy, wordsOf } from './nodes';
 
@@ -8,7 +8,11 @@ export type ListKind = 'parts' | 'tools' | 'supplies';
 export interface OutlinedStep {
   /** Words of its title; empty where there were none short enough. */
   title: PhrasingContent[];
+  /** Cautions that stand ahead of its title, and so guard this step alone. */
+  before: RootContent[];
   blocks: RootContent[];
+  /** How many of its blocks stood inside its own numbered point; what was put behind them did not. */
+  own: number;
 }
 
 export interface Outline {
@@ -33,19 +37,25 @@ const said = (heading: Heading) => tidy(wordsOf(heading));
 const listKind = (heading: Heading) => LISTS.find(([pattern]) => pattern.test(said(heading)))?.[1] ?? null;
 
 /** A point of a numbered list as a step: its first sentence is the title where it is short enough. */
-function stepOfItem({ children }: ListItem): OutlinedStep {
+const stepOfItem = ({ children }: ListItem): OutlinedStep => stepOfBlocks(children);
+
+function stepOfBlocks(children: readonly RootContent[]): OutlinedStep {
   const [first, ...others] = children;
-  if (first?.type !== 'paragraph') return { title: [], blocks: children };
+  const untitled = { title: [], before: [], blocks: [...children], own: children.length };
+  if (first?.type !== 'paragraph') return untitled;
   const text = wordsOf(first.children);
-  const [sentence = ''] = sentencesOf(text);
-  if (sentence.length > LONGEST_TITLE || !/[\p{L}\p{N}]/u.test(sentence)) return { title: [], blocks: children };
-  const end = text.trimStart().length - text.length;
-  const length = lengthOf(text, sentence) - end;
-  const [title, rest] = splitAt(first.children, length);
-  return {
-    title,
-    blocks: [...(tidy(wordsOf(rest)) ? [paragraphOf(...rest)] : rest.length ? [paragraphOf(...rest)] : []), ...others],
-  };
+  const [sentence = '', second = ''] = sentencesOf(text);
+  const guards = opensWithSignal(first);
+  if (!guards && (sentence.length > LONGEST_TITLE || !/[\p{L}\p{N}]/u.test(sentence))) return untitled;
+  // "WARNING. Hot oil can burn." says its hazard only in the second sentence.
+  const opening = guards && signalAlone(sentence) ? `${sentence} ${second}` : sentence;
+  const [cut, behind] = splitAt(first.children, lengthOf(text, opening));
+  const rest = withoutBlanks(behind);
+  const left = [...(rest.length ? [paragraphOf(...rest)] : []), ...others];
+  if (!guards) return { title: cut, before: [], blocks: left, own: left.length };
+  // A caution is no title: the work is what follows it.
+  const work = stepOfBlocks(left);
+  return { ...work, before: [paragraphOf(...cut), ...work.before] };
 }
 
 /** How far a tidied sentence reaches in the text that it was taken from. */
@@ -58,9 +68,8 @@ function lengthOf(text: string, sentence: string): number {
 
 function stepOfHeading(heading: Heading): OutlinedStep {
   const text = said(heading);
-  if (text === '') return { title: [], blocks: heading.children.length ? [paragraphOf(...heading.children)] : [] };
-  if (text.length <= LONGEST_TITLE) return { title: heading.children, blocks: [] };
-  return { title: [], blocks: [paragraphOf(...heading.children)] };
+  if (text !== '' && text.length <= LONGEST_TITLE) return { title: heading.children, before: [], blocks: [], own: 0 };
+  return { title: [], before: [], blocks: heading.children.length ? [paragraphOf(...heading.children)] : [], own: 0 };
 }
 
 /**
@@ -124,12 +133,16 @@ const numbersFollow = (blocks: readonly RootContent[]): boolean => {
   return blocks.slice(0, end < 0 ? undefined : end).some((node) => node.type === 'list' && node.ordered === true);
 };
 
-/** A caution between two numbered points stands before the second. */
+/** A caution between two numbered points stands before the second; one inside a point guards that point too and stays. */
 function moveTrailing(steps: OutlinedStep[]): void {
-  steps.slice(0, -1).forEach(({ blocks }, i) => {
+  steps.slice(0, -1).forEach(({ blocks, own }, i) => {
     const next = steps[i + 1];
-    for (let last = blocks.at(-1); last?.type === 'paragraph' && isCaution(last); last = blocks.at(-1)) {
-      next?.blocks.unshift(last);
+    for (
+      let last = blocks.at(-1);
+      blocks.length > own && last?.type === 'paragraph' && isCaution(last);
+      last = blocks.at(-1)
+    ) {
+      next?.before.unshift(last);
       blocks.pop();
     }
   });

@@ -87,7 +87,7 @@ export function sheetOf(root: Root): DraftSheet {
     if (entries) Object.assign(lists, { [list.kind]: entries[list.kind] });
     else found.intro.push(boldLine(list.heading.children), ...list.blocks);
   }
-  if (found.steps.length === 0) found.steps.push({ title: [], blocks: found.intro.splice(0) });
+  if (found.steps.length === 0) found.steps.push({ title: [], before: [], blocks: found.intro.splice(0), own: 0 });
 
   const cautions = new Cautions();
   const before = takeCautions(found.intro);
@@ -95,20 +95,25 @@ export function sheetOf(root: Root): DraftSheet {
   /** Cautions that stand before the next step, with the place that they came from. */
   let ahead = before.cautions.map((caution) => ({ caution, from: introAt }));
   const ids: string[] = [];
-  const steps = found.steps.map(({ title: named, blocks }, i) => {
+  const steps = found.steps.map(({ title: named, before: guards, blocks, own }, i) => {
     const text = line(named, at(`step ${i + 1}`));
     const stepTitle = text && text.length <= LONGEST_TITLE ? text.replace(/(?<=[^.])\.$/, '') : STEP_TO_FILL_IN;
     const c = at(`step ${i + 1}${stepTitle === STEP_TO_FILL_IN ? '' : `: ${stepTitle}`}`);
+    const guarding = takeCautions(guards);
     const taken = takeCautions(blocks);
-    const children = prose(taken.blocks, c);
-    const keys = [...ahead, ...taken.cautions.map((caution) => ({ caution, from: c }))].map(({ caution, from }) =>
-      cautions.take(caution, from),
+    const children = prose([...guarding.blocks, ...taken.blocks], c);
+    const keys = [...ahead, ...[...guarding.cautions, ...taken.cautions].map((caution) => ({ caution, from: c }))].map(
+      ({ caution, from }) => cautions.take(caution, from),
     );
     // One at the end of a step may guard what comes next, and nobody can tell: it stands before both.
-    const last = children.length > 0 && i < found.steps.length - 1;
-    ahead = last
-      ? taken.cautions.filter(({ trailing }) => trailing).map((caution) => ({ caution, from: { ...c, leftOut: [] } }))
-      : [];
+    // The title of a numbered point is its work; a point without any work can only guard the next one.
+    const worked = children.length > 0 || (own > 0 && text !== '');
+    const none = children.length === 0 && text === '';
+    const open = [...(none ? guarding.cautions : []), ...(worked || none ? taken.cautions : [])];
+    ahead =
+      i < found.steps.length - 1
+        ? open.filter(({ trailing }) => trailing).map((caution) => ({ caution, from: { ...c, leftOut: [] } }))
+        : [];
     const id = freeSlug(
       stepTitle === STEP_TO_FILL_IN ? wordsOf(children as Nodes[]).slice(0, 40) : stepTitle,
       ids,

@@ -1,7 +1,8 @@
 import type { Element, ElementContent, Root } from 'hast';
 import { Fragment, type Node, type Schema } from 'prosemirror-model';
 import { typeOf } from '../field/schema';
-import { leavesOf, nodesOf, PLAIN, settingIn, type Leaf, type Setting } from './leaves';
+import { gridOf } from './grid';
+import { gapsClosed, leavesOf, nodesOf, PLAIN, settingIn, type Leaf, type Setting } from './leaves';
 import { nothingLeftOut, type LeftOut } from './leftOut';
 import { isElement, isHidden, isStruck, plainOf } from './style';
 import { withRealLists } from './wordLists';
@@ -17,7 +18,8 @@ class Reader {
   readonly left: LeftOut = nothingLeftOut();
   constructor(private readonly schema: Schema) {}
 
-  private paragraphs(leaves: readonly Leaf[]): Node[] {
+  private paragraphs(given: readonly Leaf[]): Node[] {
+    const leaves = gapsClosed(given);
     // Two line breaks in a row are how web pages divide paragraphs.
     const parts: Leaf[][] = [[]];
     leaves.forEach((leaf, i) => {
@@ -33,7 +35,11 @@ class Reader {
   private list(node: Element, setting: Setting): Node[] {
     const items: Node[][] = [];
     for (const child of node.children) {
-      if (!isElement(child)) continue;
+      if (!isElement(child)) {
+        const loose = child.type === 'text' ? child.value.trim() : '';
+        if (loose) this.left.loose.push(loose);
+        continue;
+      }
       const blocks = this.blocks(child.tagName === 'li' ? child.children : [child], settingIn(child, setting));
       // Some write an inner list beside its point and not in it.
       const last = items.at(-1);
@@ -76,23 +82,28 @@ class Reader {
     const rows = rowsIn(node.children).map((row) =>
       row.children.filter((cell): cell is Element => isElement(cell) && /^t[dh]$/.test(cell.tagName)),
     );
-    const columns = Math.max(0, ...rows.map((row) => row.reduce((sum, cell) => sum + this.span(cell), 0)));
+    const grid = gridOf(rows);
+    const columns = Math.max(0, ...grid.map((row) => row.length));
+    // Often the condition of every number below it.
+    const captions = node.children.filter((child) => isElement(child) && child.tagName === 'caption');
+    const caption = this.blocks(captions, setting);
     // A frame round a whole page, not a table.
-    if (columns < 2) return rows.flat().flatMap((cell) => this.blocks(cell.children, setting));
+    if (columns < 2) return [...caption, ...rows.flat().flatMap((cell) => this.blocks(cell.children, setting))];
     const type = (r: number) => typeOf(this.schema, r === 0 ? 'table_header' : 'table_cell');
-    const made = rows.map((row, r) => {
-      const cells = row.flatMap((cell) => [
-        type(r).create(null, this.cellNodes(cell, r === 0 ? { ...PLAIN, settled: true } : setting)),
-        ...Array.from({ length: this.span(cell) - 1 }, () => type(r).create()),
-      ]);
+    // A cell that stands in several rows is read once, so that what it cannot hold is told once.
+    const read = new Map<Element, Node[]>();
+    const nodesIn = (cell: Element, r: number): Node[] => {
+      const nodes = read.get(cell) ?? this.cellNodes(cell, r === 0 ? { ...PLAIN, settled: true } : setting);
+      read.set(cell, nodes);
+      return nodes;
+    };
+    const made = grid.map((row, r) => {
+      const cells = row.map((cell) => type(r).create(null, cell ? nodesIn(cell, r) : []));
       while (cells.length < columns) cells.push(type(r).create());
       return typeOf(this.schema, 'table_row').create(null, cells);
     });
-    return [typeOf(this.schema, 'table').create(null, made)];
+    return [...caption, typeOf(this.schema, 'table').create(null, made)];
   }
-
-  private readonly span = (cell: Element): number =>
-    Math.min(20, Math.max(1, Math.trunc(Number(cell.properties['colSpan'] ?? 1)) || 1));
 
   private block(node: Element, given: Setting): Node[] {
     if (isHidden(node)) return [];

@@ -4,7 +4,7 @@ import { withoutForbidden } from '../../procedure/characters';
 import { linkFault } from '../../procedure/links';
 import { markOf, typeOf } from '../field/schema';
 import type { LeftOut } from './leftOut';
-import { attributeOf, boldOf, isHidden, isStruck, italicOf, plainOf } from './style';
+import { attributeOf, boldOf, isHidden, isStruck, italicOf, plainOf, shiftOf } from './style';
 
 /** What a stretch of pasted words is set as. */
 export interface Setting {
@@ -26,20 +26,61 @@ export const settingIn = (node: Element, setting: Setting): Setting => ({
 });
 
 /** Words, or a line break, on the way into a field. */
-export type Leaf = { text: string; setting: Setting } | 'break';
+type Kept = { text: string; setting: Setting } | 'break';
+/** Also the place of something that was left out, which must not join the figures on its two sides. */
+export type Leaf = Kept | 'gap';
 
 /** Elements that bring no words: programs, forms, and what a word processor keeps for itself. */
 const SILENT =
   /^(script|style|head|meta|link|title|template|noscript|svg|math|iframe|object|embed|canvas|select|textarea|input|button|xml|o:p|[vw]:.*)$/;
+/** Those of them that a reader saw between the words. */
+const SEEN = /^(svg|math|iframe|object|embed|canvas|select|textarea|input|button)$/;
 const SET_AS_CODE = ['code', 'kbd', 'samp', 'tt'];
 
 const RAISED = '⁰¹²³⁴⁵⁶⁷⁸⁹⁺⁻';
 const LOWERED = '₀₁₂₃₄₅₆₇₈₉₊₋';
-/** "10²" must not come in as "102". Other raised or lowered words stand as they are. */
-const shifted = (text: string, signs: string) =>
-  /^[\d+\-−\s]+$/.test(text)
-    ? text.replace(/[\d+\-−]/g, (sign) => [...signs]['0123456789+-'.indexOf(sign.replace('−', '-'))] ?? sign)
-    : text;
+const withSigns = (text: string, signs: string) =>
+  text.replace(/[\d+\-−]/g, (sign) => [...signs]['0123456789+-'.indexOf(sign.replace('−', '-'))] ?? sign);
+
+/**
+ * "10²" must not come in as "102". Where there is no sign for all of it, as in 10 to the power of 2.5, a "^" or a blank
+ * keeps the figures apart; words without figures, and marks of notes in brackets, stand as they are.
+ */
+function shifted(leaves: readonly Leaf[], shift: 'sup' | 'sub', setting: Setting): Leaf[] {
+  const whole = leaves.map((leaf) => (typeof leaf === 'string' ? ' ' : leaf.text)).join('');
+  if (/^[\d+\-−\s]+$/.test(whole)) {
+    const signs = shift === 'sup' ? RAISED : LOWERED;
+    return leaves.map((leaf) => (typeof leaf === 'string' ? leaf : { ...leaf, text: withSigns(leaf.text, signs) }));
+  }
+  if (!/\d/.test(whole) || /^\s*\[[^\]]*\]\s*$/.test(whole)) return [...leaves];
+  return [{ text: shift === 'sup' ? '^' : ' ', setting }, ...leaves, 'gap'];
+}
+
+const FIGURE_FIRST = /^\p{N}/u;
+const FIGURE_LAST = /\p{N}$/u;
+/** Puts a blank where something was left out between two figures, and nothing where it was not. */
+export function gapsClosed(leaves: readonly Leaf[]): Kept[] {
+  const out: Kept[] = [];
+  let gap = false;
+  for (const leaf of leaves) {
+    if (leaf === 'gap') {
+      gap = true;
+      continue;
+    }
+    const last = out.at(-1);
+    const joins =
+      gap &&
+      leaf !== 'break' &&
+      last &&
+      last !== 'break' &&
+      FIGURE_LAST.test(last.text) &&
+      FIGURE_FIRST.test(leaf.text);
+    if (joins) out.push({ text: ' ', setting: PLAIN });
+    out.push(leaf);
+    gap = false;
+  }
+  return out;
+}
 
 /** Words of inline elements in reading order; pictures, links that may not stand and struck words go to `left`. */
 export function leavesOf(nodes: readonly ElementContent[], setting: Setting, left: LeftOut): Leaf[] {
@@ -48,17 +89,19 @@ export function leavesOf(nodes: readonly ElementContent[], setting: Setting, lef
       const text = withoutForbidden(node.value.replace(/[\u200b\u00ad]/g, ''));
       return text ? [{ text, setting }] : [];
     }
-    if (node.type !== 'element' || SILENT.test(node.tagName) || isHidden(node)) return [];
+    if (node.type !== 'element' || isHidden(node)) return [];
     const { tagName } = node;
+    if (tagName === 'math') left.formulas.push(plainOf(node.children).replace(/\s+/g, ' ').trim());
+    if (SILENT.test(tagName)) return SEEN.test(tagName) ? ['gap'] : [];
     if (tagName === 'br') return ['break'];
     if (tagName === 'img' || tagName === 'picture' || tagName === 'video') {
       left.pictures.push(attributeOf(node, 'alt').trim());
-      return [];
+      return ['gap'];
     }
     if (isStruck(node)) {
       const words = plainOf(node.children).trim();
       if (words) left.struck.push(words);
-      return [];
+      return words ? ['gap'] : [];
     }
     const inside = settingIn(node, setting);
     if (SET_AS_CODE.includes(tagName)) inside.code = true;
@@ -68,16 +111,14 @@ export function leavesOf(nodes: readonly ElementContent[], setting: Setting, lef
       else if (href && !href.startsWith('#')) left.links.push(plainOf(node.children).trim());
     }
     const leaves = leavesOf(node.children, inside, left);
-    if (tagName !== 'sup' && tagName !== 'sub') return leaves;
-    return leaves.map((leaf) =>
-      leaf === 'break' ? leaf : { ...leaf, text: shifted(leaf.text, tagName === 'sup' ? RAISED : LOWERED) },
-    );
+    const shift = shiftOf(node);
+    return shift ? shifted(leaves, shift, inside) : leaves;
   });
 }
 
 /** Runs of blanks become one; a fixed blank stays between two signs, where it holds a number and its unit together. */
-function tidied(leaves: readonly Leaf[]): Leaf[] {
-  const out: Leaf[] = [];
+function tidied(leaves: readonly Kept[]): Kept[] {
+  const out: Kept[] = [];
   let after = ' ';
   for (const leaf of leaves) {
     if (leaf === 'break') {
@@ -96,8 +137,9 @@ function tidied(leaves: readonly Leaf[]): Leaf[] {
 
 /** Pasted words as a field's nodes: trimmed, without a break at an edge. */
 export function nodesOf(given: readonly Leaf[], schema: Schema, breaks = true): Node[] {
+  const closed = gapsClosed(given);
   const leaves = tidied(
-    breaks ? given : given.map((leaf) => (leaf === 'break' ? { text: ' ', setting: PLAIN } : leaf)),
+    breaks ? closed : closed.map((leaf) => (leaf === 'break' ? { text: ' ', setting: PLAIN } : leaf)),
   );
   while (leaves[0] === 'break') leaves.shift();
   while (leaves.at(-1) === 'break') leaves.pop();

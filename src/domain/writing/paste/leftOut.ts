@@ -6,11 +6,22 @@ export interface LeftOut {
   links: string[];
   /** Words that were struck through. */
   struck: string[];
+  /** Letters and figures of formulas. */
+  formulas: string[];
+  /** Words that stood between the points of a list and in none of them. */
+  loose: string[];
   /** Keys of cautions, which stand ahead of the step and not among its words. */
   cautions: string[];
 }
 
-export const nothingLeftOut = (): LeftOut => ({ pictures: [], links: [], struck: [], cautions: [] });
+export const nothingLeftOut = (): LeftOut => ({
+  pictures: [],
+  links: [],
+  struck: [],
+  formulas: [],
+  loose: [],
+  cautions: [],
+});
 
 const short = (words: string) => (words.length > 60 ? `${words.slice(0, 57)}…` : words);
 const named = (words: readonly string[]) => {
@@ -22,10 +33,12 @@ const named = (words: readonly string[]) => {
 const were = (n: number) => (n === 1 ? 'was' : 'were');
 
 /** What was left out, in whole sentences. */
-export function leftOutWords({ pictures, links, struck, cautions }: LeftOut): string[] {
+export function leftOutWords({ pictures, links, struck, formulas, loose, cautions }: LeftOut): string[] {
   const p = pictures.length;
   const l = links.length;
   const s = struck.length;
+  const f = formulas.length;
+  const o = loose.length;
   const c = cautions.length;
   return [
     ...(p
@@ -41,6 +54,8 @@ export function leftOutWords({ pictures, links, struck, cautions }: LeftOut): st
     ...(s
       ? [`${s} passage${s === 1 ? '' : 's'} that ${were(s)} struck through ${were(s)} left out${named(struck)}.`]
       : []),
+    ...(f ? [`${f} formula${f === 1 ? '' : 's'} ${were(f)} left out${named(formulas)}. Write it in one line.`] : []),
+    ...(o ? [`${o} passage${o === 1 ? '' : 's'} between points of a list ${were(o)} left out${named(loose)}.`] : []),
     ...(c
       ? [
           `${c} caution${c === 1 ? '' : 's'} ${were(c)} left out${named(cautions)}. Put cautions ahead of the step with the button Caution.`,

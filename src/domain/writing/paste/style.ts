@@ -49,6 +49,13 @@ export function italicOf(element: Element): boolean | null {
   return element.tagName === 'i' || element.tagName === 'em' ? true : null;
 }
 
+/** Whether words are raised or lowered; online documents say it by style alone. */
+export function shiftOf(element: Element): 'sup' | 'sub' | null {
+  const align = styleOf(element)['vertical-align'];
+  if (align === 'super' || element.tagName === 'sup') return 'sup';
+  return align === 'sub' || element.tagName === 'sub' ? 'sub' : null;
+}
+
 /** Words that their author took away again and that must not come in as if they held. */
 export const isStruck = (element: Element): boolean =>
   ['s', 'del', 'strike'].includes(element.tagName) ||

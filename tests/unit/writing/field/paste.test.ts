@@ -94,6 +94,46 @@ describe('what a word processor puts on the clipboard', () => {
   });
 });
 
+describe('numbers that are pasted', () => {
+  it.each([
+    ['10<span style="vertical-align:super">2</span> mm', '10² mm'],
+    ['O<span style="vertical-align: sub">2</span>', 'O₂'],
+    ['10<sup>2.5</sup>', '10^2.5'],
+    ['10<sup><b>2</b>.5</sup>3', '10^**2**.5 3'],
+    ['A1<sub>2.5</sub>', 'A1 2.5'],
+    ['the 1<sup>st</sup> of 3<sup>[2]</sup>', 'the 1st of 3[2]'],
+    ['1<s>0</s>2', '1 2'],
+    ['1<img alt="to">2', '1 2'],
+    ['a<s>b</s>c', 'ac'],
+  ])('%s', (html, words) => expect(pasted(`<p>${html}</p>`).lines.join('|').replaceAll('\\', '')).toBe(words));
+
+  it('keep the caption of their table, and their row and column where cells span rows', () => {
+    const { lines } = pasted(
+      '<table><caption>Engine cold</caption><tr><th>Valve<th>Side<th>Gap</tr>' +
+        '<tr><td rowspan=2>Inlet<td>left<td>0.20</tr><tr><td>right<td>0.25</tr><tr><td>Outlet<td>left<td>0.30</tr></table>',
+    );
+    expect(lines).toEqual([
+      'Engine cold',
+      '',
+      '| Valve | Side | Gap |',
+      '| - | - | - |',
+      '| Inlet | left | 0.20 |',
+      '| Inlet | right | 0.25 |',
+      '| Outlet | left | 0.30 |',
+    ]);
+  });
+
+  it('are told where they stood in a formula or between the points of a list', () => {
+    expect(pasted('<p>So <math><mi>p</mi><mo>=</mo><mn>2</mn></math></p><ul>at 20 bar<li>a</li></ul>')).toEqual({
+      lines: ['So', '', '- a'],
+      left: [
+        '1 formula was left out: “p=2”. Write it in one line.',
+        '1 passage between points of a list was left out: “at 20 bar”.',
+      ],
+    });
+  });
+});
+
 describe('plain words', () => {
   it.each([
     ['One.\nTwo.', ['One.', '', 'Two.']],

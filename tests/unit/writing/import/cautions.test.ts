@@ -75,6 +75,25 @@ describe('cautions in a how-to', () => {
     expect(source).toContain('hazard: The edge');
   });
 
+  it.each(['WARNING:', '**WARNING:**'])('are found behind the title of a numbered point: %s', (signal) => {
+    const text = `# T\n\n1. Drain the fuel. ${signal} Petrol can burn. Keep flames away.\n2. Go on\n`;
+    expect(brief(text)).toEqual([['WARNING', 'Petrol', 'can burn', 'Keep flames away.', '1,2']]);
+    expect(read(text).steps.map(({ title }) => title)).toEqual(['Drain the fuel', 'Go on']);
+  });
+
+  it.each(['WARNING:', '**WARNING**', 'WARNING.'])('are no title of a numbered point: %s', (signal) => {
+    const text = `# T\n\n1. ${signal} Hot oil can burn. Drain the sump.\n2. Go on\n`;
+    expect(brief(text)).toEqual([['WARNING', 'Hot oil', 'can burn', AVOID, '1']]);
+    expect(read(text).steps.map(({ title }) => title)).toEqual(['Drain the sump', 'Go on']);
+  });
+
+  it('guard their own numbered point and the next where they stand inside it', () => {
+    const text = '# T\n\n1. Drain the fuel\n\n   WARNING: Petrol can burn. Wait.\n\n2. Go on\n\n3. End\n';
+    expect(brief(text)).toEqual([['WARNING', 'Petrol', 'can burn', 'Wait.', '1,2']]);
+    expect(brief('# T\n\n1. First\n\nWARNING: Oil can burn. Wait.\n\n2. Second\n\n3. Third\n')[0]?.at(-1)).toBe('2');
+    expect(brief('# T\n\n1. WARNING: Hot oil can burn.\n2. Drain it\n3. End\n')[0]?.at(-1)).toBe('1,2');
+  });
+
   it('are not made of other sentences', () => {
     for (const words of [
       'Danger zones are marked.',
