@@ -88,7 +88,7 @@ async function publishFromRelease(
     procedureId,
     shopId: null,
     revisionId: revision.id,
-    told: text.told,
+    told: text.told(),
     supersedes: current?.letter ?? null,
     byId: authorId,
   });

@@ -25,8 +25,8 @@ export interface Weighed extends TextColumns {
   parsed: Parsed;
   /** Says the same as its base. */
   identical: boolean;
-  /** What of it those must be told who have worked from its base. */
-  told: string[];
+  /** What of it those must be told who have worked from its base; worked out when it is asked for, which a save never does. */
+  told: () => string[];
 }
 
 const NOTHING_YET: Severity = { level: 'ordinary', because: [] };
@@ -45,7 +45,7 @@ export async function weigh(source: string, parentId: string | null): Promise<We
       failingTorques: [],
       severity: NOTHING_YET,
       identical: false,
-      told: [],
+      told: () => [],
     };
   const ancestry = await ancestryOf(parentId);
   const base = ancestry[0]?.procedure ?? null;
@@ -59,7 +59,7 @@ export async function weigh(source: string, parentId: string | null): Promise<We
     failingTorques: failingTorques(base?.frontmatter ?? null, parsed.procedure.frontmatter),
     severity,
     identical: identical && parentId !== null,
-    told: base && criticalReasons.length > 0 ? toldChanges(base, parsed.procedure) : [],
+    told: () => (base && criticalReasons.length > 0 ? toldChanges(base, parsed.procedure) : []),
   };
 }
 

@@ -23,7 +23,7 @@ export async function publish(actor: Actor, id: string, version: number | null =
   // Asked before the text is: a draft that nobody may publish yet need not be readable.
   guard({ act: 'publish' }, actor, before, version);
   const rendered = await readRendering(before);
-  const { told } = await weigh(before.source, before.parentId);
+  const told = (await weigh(before.source, before.parentId)).told();
   const { db } = await app();
   await db.write(async () => {
     const proposal = await readableProposal(actor, id);
