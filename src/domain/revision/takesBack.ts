@@ -1,5 +1,4 @@
 import type { Procedure, Step } from '../procedure/types';
-import { stepWords } from './stepWords';
 import { compareValues } from './compareValues';
 import type { ValueChange } from './types';
 import { valueWords } from './valueWords';
@@ -23,6 +22,12 @@ const touched = (differing: readonly ValueChange[], { path, list, key }: ValueCh
 
 /** A step as it is stored: values that it only points at are told by themselves. */
 const rawStep = (step: Step | undefined) => step && JSON.stringify([step.title, step.cautions, step.body]);
+
+/** What became of a step; undefined where it was not there before, or is no longer. */
+function stepWords(before: Step | undefined, revised: Step | undefined): string {
+  const step = `step “${(revised ?? before)?.title ?? ''}”`;
+  return before && revised ? `the words of ${step}` : `${step}, ${revised ? 'added' : 'removed'}`;
+}
 
 /**
  * What one earlier revision changed, the base still has, and a proposal sets back to what it was before that revision:

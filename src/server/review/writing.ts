@@ -1,9 +1,10 @@
 import type { Me } from '@/domain/api/schemas/me';
 import type { Proposal } from '@/domain/api/schemas/proposals';
 import { may, type Actor, type Book } from '@/domain/people/may';
+import { readDraft } from '@/domain/writing/readDraft';
+import { parsedText } from '../book/parsed';
 import { readSheet } from '../book/sheet';
 import { app } from '../context';
-import { formable } from './formable';
 import { readProposal } from './readProposal';
 import { startProposal } from './startProposal';
 
@@ -21,6 +22,13 @@ export interface Writing {
   base: Standing | null;
   /** What is published now, where that is no longer the base. */
   current: Standing | null;
+}
+
+/** A text as the form takes it: as it was typed, or in canonical form where only that fits the form. */
+async function formable(source: string): Promise<string> {
+  if (readDraft(source)) return source;
+  const parsed = await parsedText(source);
+  return parsed.ok ? parsed.canonical : source;
 }
 
 /** All that the author needs to go on writing. Refuses 404 like `readProposal`; whether they may edit stands in `proposal.may`. */
