@@ -28,12 +28,16 @@ export interface Hanging {
   draft?: { proposedAt: string | null };
 }
 
-const factsOf = (row: Row, { book, draft }: Hanging): SentPhoto => ({
-  book,
+/** Put to a reason since it was last sent in: nobody but its uploader may see it. */
+export const isUnsent = (attachedAt: string, { draft }: Pick<Hanging, 'draft'>): boolean =>
+  draft !== undefined && (draft.proposedAt === null || attachedAt > draft.proposedAt);
+
+const factsOf = (row: Row, hanging: Hanging): SentPhoto => ({
+  book: hanging.book,
   uploaderId: row.uploaderId,
   attachedAt: row.attachedAt,
   removed: row.removedAt !== null,
-  unsent: draft !== undefined && (draft.proposedAt === null || row.attachedAt > draft.proposedAt),
+  unsent: isUnsent(row.attachedAt, hanging),
 });
 
 function view(actor: Actor, row: Row, hanging: Hanging): Photo {
@@ -53,7 +57,7 @@ function view(actor: Actor, row: Row, hanging: Hanging): Photo {
 
 /**
  * The photos of several things of one kind, by the id of each, in the order in which they were sent. Nobody is asked whether they
- * may see them: who sees the thing sees its photos.
+ * may see them: who sees the thing sees its photos, but for those that were not sent yet.
  */
 export async function photosOf(
   actor: Actor,
@@ -75,6 +79,6 @@ export async function photosOf(
     rows
       .filter((row) => row.subjectId === subjectId)
       // What was put to a reason and not sent in yet is its author's alone.
-      .filter((row) => row.uploaderId === actor.personId || !factsOf(row, hanging(subjectId)).unsent)
+      .filter((row) => row.uploaderId === actor.personId || !isUnsent(row.attachedAt, hanging(subjectId)))
       .map((row) => view(actor, row, hanging(subjectId)));
 }

@@ -7,7 +7,7 @@ import { app } from '../context';
 import { loadFlag } from '../flags/rows';
 import { notFound } from '../refusal';
 import { loadProposal, type Loaded } from '../review/proposals';
-import { photosOf, type Hanging } from './load';
+import { isUnsent, photosOf, type Hanging } from './load';
 
 /** A photo that somebody may see, with what it hangs on. */
 export interface Seen {
@@ -38,6 +38,7 @@ interface Row {
   revisionId: string | null;
   bytes: number;
   hash: string;
+  attachedAt: string | null;
   removedAt: string | null;
 }
 
@@ -90,14 +91,16 @@ async function on(actor: Actor, row: Row): Promise<Seen['on']> {
 export async function seenPhoto(actor: Actor, id: string): Promise<Seen> {
   const { db } = await app();
   const [row] = await db.read<Row>(
-    `SELECT t.id, t.uploaderId, t.subjectType, t.subjectId, t.bytes, t.hash, t.removedAt, m.threadId, h.revisionId
+    `SELECT t.id, t.uploaderId, t.subjectType, t.subjectId, t.bytes, t.hash, t.attachedAt, t.removedAt, m.threadId, h.revisionId
      FROM attachments t LEFT JOIN threadMessages m ON t.subjectType = 'message' AND m.id = t.subjectId
        LEFT JOIN threads h ON h.id = m.threadId WHERE t.id = :id`,
     { id },
   );
   if (!row) throw notFound();
   const { bytes, hash, uploaderId } = row;
-  return { id: row.id, bytes, hash, uploaderId, on: await on(actor, row), removed: row.removedAt !== null };
+  const thing = await on(actor, row);
+  if (thing && uploaderId !== actor.personId && isUnsent(row.attachedAt ?? '', thing.hanging)) throw notFound();
+  return { id: row.id, bytes, hash, uploaderId, on: thing, removed: row.removedAt !== null };
 }
 
 /** A photo that was sent, as pages and API show it. Refuses 404 also one that was not sent. */
